@@ -1,0 +1,80 @@
+using System;
+using System.CommandLine;
+using System.Threading.Tasks;
+using ProbeCal.Host.Commands;
+using ProbeCal.Station.Entry;
+
+namespace ProbeCal.Host;
+
+/// <summary>
+/// The <c>probecal</c> program: parse, call one entry point of Station, print. Results go to standard output, everything
+/// else to standard error. Exit code 0 done, 1 the work failed, 2 the input is wrong.
+/// </summary>
+internal static class Program
+{
+    private static Task<int> Main(string[] args)
+    {
+        return RunAsync(args, Terminal.OfProcess());
+    }
+
+    /// <summary>Runs one command line against a given terminal and clock: what the tests call.</summary>
+    internal static async Task<int> RunAsync(string[] args, Terminal terminal)
+    {
+        RootCommand root = new("ProbeCal: what the water holds at equilibrium, the probe calibrated in it, and corrected readings sent home.")
+        {
+            EquilibriumCommand.Create(terminal),
+            CalibrateCommand.Create(terminal),
+            CalibrationsCommand.Create(terminal),
+            StationCommand.Create(terminal),
+            SimulateCommand.Create(terminal),
+            DemoCommand.Create(terminal),
+        };
+        ParseResult parsed = root.Parse(args);
+        if (parsed.Errors.Count != 0)
+        {
+            terminal.Error.WriteLine("probecal: " + parsed.Errors[0].Message + " ('" + CommandPath(parsed) + " --help' lists what it takes)");
+            return ExitCode.InputWrong;
+        }
+
+        InvocationConfiguration configuration = new()
+        {
+            Output = terminal.Output,
+            Error = terminal.Error,
+            EnableDefaultExceptionHandler = false,
+            ProcessTerminationTimeout = TimeSpan.FromSeconds(10),
+        };
+        try
+        {
+            return await parsed.InvokeAsync(configuration, terminal.Stop).ConfigureAwait(false);
+        }
+        catch (InputException wrong)
+        {
+            terminal.Error.WriteLine("probecal: " + wrong.Message);
+            return ExitCode.InputWrong;
+        }
+        catch (WorkFailedException failed)
+        {
+            terminal.Error.WriteLine("probecal: " + failed.Message);
+            return ExitCode.WorkFailed;
+        }
+        catch (OperationCanceledException)
+        {
+            terminal.Error.WriteLine("probecal: stopped before the work was finished");
+            return ExitCode.WorkFailed;
+        }
+    }
+
+    private static string CommandPath(ParseResult parsed)
+    {
+        string name = parsed.CommandResult.Command.Name;
+        return parsed.CommandResult.Command is RootCommand ? "probecal" : "probecal " + name;
+    }
+}
+
+/// <summary>The exit codes, as others may rely on them.</summary>
+internal static class ExitCode
+{
+    internal const int Done = 0;
+    internal const int WorkFailed = 1;
+    internal const int InputWrong = 2;
+}

@@ -1,0 +1,40 @@
+using System;
+using System.IO;
+using System.Threading;
+
+namespace ProbeCal.Host;
+
+/// <summary>
+/// Where a command reads, writes and takes the time. Tests hand in their own; the process has one made of its standard
+/// streams and the system clock, the only place in the project that touches either.
+/// </summary>
+internal sealed class Terminal
+{
+    internal required TextReader Input { get; init; }
+
+    /// <summary>Results only.</summary>
+    internal required TextWriter Output { get; init; }
+
+    /// <summary>Progress, logs and errors.</summary>
+    internal required TextWriter Error { get; init; }
+
+    internal required TimeProvider Time { get; init; }
+
+    /// <summary>True when a person can answer a question here.</summary>
+    internal bool IsInteractive { get; init; }
+
+    /// <summary>Cancelled when a test wants the command to stop; Ctrl-C and SIGTERM come on top.</summary>
+    internal CancellationToken Stop { get; init; }
+
+    internal static Terminal OfProcess()
+    {
+        return new Terminal
+        {
+            Input = Console.In,
+            Output = Console.Out,
+            Error = Console.Error,
+            Time = TimeProvider.System,
+            IsInteractive = !Console.IsInputRedirected && !Console.IsOutputRedirected,
+        };
+    }
+}
