@@ -1,0 +1,122 @@
+using System;
+using System.Collections.Generic;
+using System.Diagnostics;
+using System.IO;
+using System.Linq;
+using System.Text;
+using System.Text.Json;
+using System.Xml.Linq;
+using Xunit;
+
+namespace ProbeCal.Nano.Tests;
+
+/// <summary>Core's portable files on disk, the compile gate and the device project name the same files.</summary>
+public class FileListTests
+{
+    private static readonly string[] DesktopOnlyRooms = ["Batch", "Catalogue", "Throwing"];
+    private static readonly string CoreFolder = Path.Combine(DeviceAssembly.Root, "src", "ProbeCal.Core");
+    private static readonly string NanoFolder = Path.Combine(DeviceAssembly.Root, "src", "ProbeCal.Nano");
+    private static readonly string DeviceProject = Path.Combine(NanoFolder, "ProbeCal.Nano.nfproj");
+
+    [Fact]
+    public void The_compile_gate_compiles_exactly_the_portable_files()
+    {
+        Assert.Equal(OnDisk(), CompiledByTheGate());
+    }
+
+    [Fact]
+    public void The_device_project_lists_exactly_the_portable_files()
+    {
+        List<string> onDisk = OnDisk();
+        if (DeviceAssembly.UpdateRequested)
+        {
+            WriteDeviceProject(onDisk);
+        }
+        List<string> listed = ListedForTheDevice();
+        if (!onDisk.SequenceEqual(listed))
+        {
+            Assert.Fail("src/ProbeCal.Nano/ProbeCal.Nano.nfproj is behind Core (" +
+                string.Join(", ", onDisk.Except(listed).Select(f => "+" + f).Concat(listed.Except(onDisk).Select(f => "-" + f))) +
+                "). Run these tests once with PROBECAL_UPDATE=1, or paste into the group labelled Core:\n" + Items(onDisk));
+        }
+    }
+
+    [Fact]
+    public void Every_item_of_the_device_project_has_a_link_with_the_place_it_has_in_Core()
+    {
+        foreach (XElement item in CoreItems())
+        {
+            string include = item.Attribute("Include")!.Value;
+            XNamespace ns = item.Name.Namespace;
+            Assert.Equal(@"..\ProbeCal.Core\" + item.Element(ns + "Link")?.Value, include);
+        }
+    }
+
+    private static List<string> OnDisk()
+    {
+        return Directory.EnumerateFiles(CoreFolder, "*.cs", SearchOption.AllDirectories)
+            .Select(path => Path.GetRelativePath(CoreFolder, path).Replace('\\', '/'))
+            .Where(path => !path.StartsWith("bin/", StringComparison.Ordinal) && !path.StartsWith("obj/", StringComparison.Ordinal))
+            .Where(path => !DesktopOnlyRooms.Contains(path.Split('/')[0]))
+            .Order(StringComparer.Ordinal).ToList();
+    }
+
+    private static List<string> CompiledByTheGate()
+    {
+        string dotnet = Environment.GetEnvironmentVariable("DOTNET_HOST_PATH") ?? "dotnet";
+        var start = new ProcessStartInfo(dotnet)
+        {
+            WorkingDirectory = NanoFolder,
+            RedirectStandardOutput = true,
+            UseShellExecute = false,
+        };
+        foreach (string argument in new[] { "msbuild", "ProbeCal.Nano.csproj", "-getItem:Compile", "-nologo" })
+        {
+            start.ArgumentList.Add(argument);
+        }
+        using Process process = Process.Start(start)!;
+        string json = process.StandardOutput.ReadToEnd();
+        process.WaitForExit();
+        Assert.True(process.ExitCode == 0, json);
+        using JsonDocument document = JsonDocument.Parse(json);
+        return document.RootElement.GetProperty("Items").GetProperty("Compile").EnumerateArray()
+            .Select(item => Path.GetRelativePath(CoreFolder, item.GetProperty("FullPath").GetString()!).Replace('\\', '/'))
+            .Order(StringComparer.Ordinal).ToList();
+    }
+
+    private static List<XElement> CoreItems()
+    {
+        XDocument project = XDocument.Load(DeviceProject);
+        XNamespace ns = project.Root!.Name.Namespace;
+        return project.Descendants(ns + "Compile").ToList();
+    }
+
+    private static List<string> ListedForTheDevice()
+    {
+        return CoreItems().Select(item => item.Attribute("Include")!.Value.Replace('\\', '/'))
+            .Select(path => path.StartsWith("../ProbeCal.Core/", StringComparison.Ordinal) ? path["../ProbeCal.Core/".Length..] : path)
+            .ToList();
+    }
+
+    private static string Items(IEnumerable<string> files)
+    {
+        var text = new StringBuilder();
+        foreach (string file in files)
+        {
+            string path = file.Replace('/', '\\');
+            text.Append("    <Compile Include=\"..\\ProbeCal.Core\\").Append(path).Append("\">\n      <Link>")
+                .Append(path).Append("</Link>\n    </Compile>\n");
+        }
+        return text.ToString();
+    }
+
+    private static void WriteDeviceProject(IEnumerable<string> files)
+    {
+        const string Start = "  <ItemGroup Label=\"Core\">\n";
+        const string End = "  </ItemGroup>";
+        string text = File.ReadAllText(DeviceProject);
+        int start = text.IndexOf(Start, StringComparison.Ordinal) + Start.Length;
+        int end = text.IndexOf(End, start, StringComparison.Ordinal);
+        File.WriteAllText(DeviceProject, text[..start] + Items(files) + text[end..]);
+    }
+}
