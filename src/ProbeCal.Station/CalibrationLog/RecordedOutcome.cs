@@ -1,0 +1,95 @@
+namespace ProbeCal.Station.CalibrationLog;
+
+/// <summary>A limit that was applied, with its source, what was found and how it came out.</summary>
+public sealed record RecordedLimit
+{
+    /// <summary>What was judged: <c>as-left</c>, <c>zero</c>, <c>as-found</c>, <c>slope</c> ….</summary>
+    public required string Check { get; init; }
+
+    /// <summary>The limit in words with its unit: <c>0.2 mg/L or 2 %</c>.</summary>
+    public required string Limit { get; init; }
+
+    /// <summary>Which part of the limit applied, when it has several.</summary>
+    public string? Applied { get; init; }
+
+    /// <summary>Where the limit comes from.</summary>
+    public required string Source { get; init; }
+
+    /// <summary>What was found, in the unit of the limit; none when it could not be judged.</summary>
+    public double? Found { get; init; }
+
+    /// <summary>Unit of <see cref="Found"/>.</summary>
+    public required string Unit { get; init; }
+
+    /// <summary><c>pass</c>, <c>fail</c>, <c>not-judged</c>.</summary>
+    public required string Verdict { get; init; }
+
+    /// <summary>True when the verdict decides about the whole; false when it only informs.</summary>
+    public required bool Decides { get; init; }
+}
+
+/// <summary>What a guard saw, and why the person went on all the same, where they did.</summary>
+public sealed record RecordedFinding
+{
+    /// <summary>The guard, for example <c>pressure-near-sea-level-value</c>.</summary>
+    public required string Guard { get; init; }
+
+    /// <summary><c>note</c>, <c>overridden</c> or <c>refused</c>.</summary>
+    public required string Severity { get; init; }
+
+    /// <summary>What it saw, in one sentence.</summary>
+    public required string Saw { get; init; }
+
+    /// <summary>The error this could cause in a reading at the calibration's conditions, mg/L; none when it cannot be said.</summary>
+    public double? PossibleErrorMilligramsPerLitre { get; init; }
+
+    /// <summary>The reason the person gave for going on; none for a note.</summary>
+    public string? Reason { get; init; }
+}
+
+/// <summary>One line of the uncertainty budget.</summary>
+public sealed record RecordedContribution
+{
+    /// <summary>What contributes.</summary>
+    public required string Input { get; init; }
+
+    /// <summary>Standard uncertainty of the input, in <see cref="Unit"/>.</summary>
+    public required double StandardUncertainty { get; init; }
+
+    /// <summary>Unit of the input.</summary>
+    public required string Unit { get; init; }
+
+    /// <summary>Contribution to the slope, % of the slope (k = 1).</summary>
+    public required double SlopePercent { get; init; }
+
+    /// <summary>Where the input's uncertainty comes from.</summary>
+    public required string Source { get; init; }
+}
+
+/// <summary>Slope and zero as left, and the verdict.</summary>
+public sealed record RecordedResult
+{
+    /// <summary>Slope: signal per hPa of oxygen at the reference temperature of the coefficient.</summary>
+    public required double Slope { get; init; }
+
+    /// <summary>Standard uncertainty of <see cref="Slope"/>, all contributions.</summary>
+    public required double SlopeStandardUncertainty { get; init; }
+
+    /// <summary>Zero signal: what the probe gives in oxygen-free water.</summary>
+    public required double Zero { get; init; }
+
+    /// <summary>Standard uncertainty of <see cref="Zero"/>.</summary>
+    public required double ZeroStandardUncertainty { get; init; }
+
+    /// <summary>Where the zero comes from: <c>measured</c>, <c>entered</c>, <c>previous:ID</c> or <c>assumed</c>.</summary>
+    public required string ZeroSource { get; init; }
+
+    /// <summary>True when every limit that decides was kept.</summary>
+    public required bool Pass { get; init; }
+
+    /// <summary>Why it failed, one sentence each; empty when it passed.</summary>
+    public required string[] Reasons { get; init; }
+
+    /// <summary>How the limits were applied.</summary>
+    public required string DecisionRule { get; init; }
+}

@@ -1,0 +1,101 @@
+using System;
+
+namespace ProbeCal.Station.CalibrationLog;
+
+/// <summary>The probe as it stood at the calibration.</summary>
+public sealed record RecordedProbe
+{
+    /// <summary>The probe's own id, as the readings carry it.</summary>
+    public required string Id { get; init; }
+
+    /// <summary>Response model: <c>amperometric</c> or <c>meter-display</c>.</summary>
+    public required string Model { get; init; }
+
+    /// <summary>Unit of the raw signal, for people; empty when nobody stated one.</summary>
+    public required string SignalUnit { get; init; }
+
+    /// <summary>Temperature coefficient of the membrane; none when the probe delivers a compensated value.</summary>
+    public RecordedTemperatureCoefficient? TemperatureCoefficient { get; init; }
+
+    /// <summary>What is set in a meter that shows only mg/L or %; none for a raw signal.</summary>
+    public RecordedMeterSettings? MeterSettings { get; init; }
+
+    /// <summary>Smallest step of the signal (converter resolution) in <see cref="SignalUnit"/>; none when not stated.</summary>
+    public double? SignalResolution { get; init; }
+
+    /// <summary>Lowest signal the input can show; none when not stated.</summary>
+    public double? SignalLow { get; init; }
+
+    /// <summary>Highest signal the input can show; none when not stated.</summary>
+    public double? SignalHigh { get; init; }
+
+    /// <summary>The membrane on it; none when not stated.</summary>
+    public RecordedMembrane? Membrane { get; init; }
+
+    /// <summary>The thermometer that gave the temperature.</summary>
+    public required RecordedThermometer Thermometer { get; init; }
+}
+
+/// <summary>How the signal follows temperature at one partial pressure.</summary>
+public sealed record RecordedTemperatureCoefficient
+{
+    /// <summary>Form: <c>exponential</c>, <c>compound</c>, <c>linear</c> or <c>arrhenius</c>.</summary>
+    public required string Form { get; init; }
+
+    /// <summary>The coefficient in <see cref="Unit"/>.</summary>
+    public required double Value { get; init; }
+
+    /// <summary><c>1/K</c>, or <c>J/mol</c> for the Arrhenius form.</summary>
+    public required string Unit { get; init; }
+
+    /// <summary>Standard uncertainty of the coefficient in <see cref="Unit"/>; 0 when not stated, and the record says so.</summary>
+    public required double StandardUncertainty { get; init; }
+
+    /// <summary>Reference temperature at which the factor is 1, °C.</summary>
+    public required double ReferenceCelsius { get; init; }
+
+    /// <summary>Lower end of the fitted range, °C.</summary>
+    public required double FittedLowCelsius { get; init; }
+
+    /// <summary>Upper end of the fitted range, °C.</summary>
+    public required double FittedHighCelsius { get; init; }
+}
+
+/// <summary>What a meter computes with before it shows mg/L or %.</summary>
+public sealed record RecordedMeterSettings
+{
+    /// <summary>What it shows: <c>mg/L</c>, <c>%local</c> or <c>%1atm</c>.</summary>
+    public required string Shows { get; init; }
+
+    /// <summary>Salinity set in the meter.</summary>
+    public required double Salinity { get; init; }
+
+    /// <summary>Pressure set in the meter or measured by it, hPa.</summary>
+    public required double PressureHectopascal { get; init; }
+
+    /// <summary>Last digit of the display, in the shown unit.</summary>
+    public required double Resolution { get; init; }
+}
+
+/// <summary>The membrane or cap of the probe.</summary>
+public sealed record RecordedMembrane
+{
+    /// <summary>Its id or lot.</summary>
+    public required string Id { get; init; }
+
+    /// <summary>Day it was put on; none when not stated.</summary>
+    public DateOnly? InstalledOn { get; init; }
+}
+
+/// <summary>The thermometer at the probe. Its offset is common to calibration and reading as long as it stays the same one.</summary>
+public sealed record RecordedThermometer
+{
+    /// <summary>Its id; the probe's own when nobody named another.</summary>
+    public required string Id { get; init; }
+
+    /// <summary>Standard uncertainty of its offset, °C: the part common to calibration and reading.</summary>
+    public required double CommonStandardUncertaintyCelsius { get; init; }
+
+    /// <summary>Where that uncertainty came from.</summary>
+    public required string Source { get; init; }
+}
