@@ -81,7 +81,7 @@ internal sealed class LogReading
             CompareWithRow(record, row, name);
             Records.Add(new StoredCalibration(record, actual));
         }
-        catch (InputException unreadable)
+        catch (WorkFailedException unreadable)
         {
             _faults.Add(unreadable.Message);
         }

@@ -29,7 +29,8 @@ public static class RecordJson
     /// <summary>Reads a record.</summary>
     /// <param name="bytes">UTF-8 JSON.</param>
     /// <param name="where">What the bytes are, for the message: <c>record 3 of calibrations.db</c>.</param>
-    /// <exception cref="InputException">It is no calibration record, or one of a newer version.</exception>
+    /// <exception cref="InputException">It is a record of a newer version.</exception>
+    /// <exception cref="WorkFailedException">It is no calibration record, or a damaged one.</exception>
     public static CalibrationRecord Read(ReadOnlySpan<byte> bytes, string where)
     {
         try
@@ -37,7 +38,7 @@ public static class RecordJson
             RecordHead head = JsonSerializer.Deserialize(bytes, Context.RecordHead) ?? new RecordHead();
             if (head.Format != CalibrationRecord.FormatName)
             {
-                throw new InputException($"{where}: format is '{head.Format}'; a calibration record says '{CalibrationRecord.FormatName}'");
+                throw new WorkFailedException($"{where}: format is '{head.Format}'; a calibration record says '{CalibrationRecord.FormatName}'");
             }
 
             if (CalibrationRecord.CurrentVersion < head.Version)
@@ -47,11 +48,11 @@ public static class RecordJson
             }
 
             return JsonSerializer.Deserialize(bytes, Context.CalibrationRecord)
-                ?? throw new InputException($"{where}: an empty document is no calibration record");
+                ?? throw new WorkFailedException($"{where}: an empty document is no calibration record");
         }
         catch (JsonException damaged)
         {
-            throw new InputException($"{where}: not a readable calibration record ({OneLine(damaged.Message)})", damaged);
+            throw new WorkFailedException($"{where}: not a readable calibration record ({OneLine(damaged.Message)})", damaged);
         }
     }
 
