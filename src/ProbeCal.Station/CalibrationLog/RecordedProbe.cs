@@ -67,11 +67,17 @@ public sealed record RecordedMeterSettings
     /// <summary>What it shows: <c>mg/L</c>, <c>%local</c> or <c>%1atm</c>.</summary>
     public required string Shows { get; init; }
 
-    /// <summary>Salinity set in the meter.</summary>
+    /// <summary>The solubility equation that the meter is taken to use: <c>benson-krause-1984</c> or <c>garcia-gordon-1992</c>.</summary>
+    public required string Equation { get; init; }
+
+    /// <summary>Salinity set in the meter; enters only mg/L.</summary>
     public required double Salinity { get; init; }
 
-    /// <summary>Pressure set in the meter or measured by it, hPa.</summary>
-    public required double PressureHectopascal { get; init; }
+    /// <summary>Pressure set in the meter, hPa; none for a meter with its own barometer.</summary>
+    public double? PressureHectopascal { get; init; }
+
+    /// <summary>Temperature set in the meter by hand, °C; none for a meter with its own thermometer.</summary>
+    public double? TemperatureCelsius { get; init; }
 
     /// <summary>Last digit of the display, in the shown unit.</summary>
     public required double Resolution { get; init; }
