@@ -1,0 +1,152 @@
+using System;
+using System.Collections.Generic;
+using System.Globalization;
+using System.IO;
+using System.Threading;
+using Microsoft.Data.Sqlite;
+using ProbeCal.Station.Storage;
+
+namespace ProbeCal.Station.Journal;
+
+/// <summary>
+/// Everything a station took in and has not delivered: samples with their readings, rejected lines, events, and the outbox.
+/// One writer connection; the methods may be called from any thread and take turns. A fault of the disk reaches the caller
+/// as <see cref="SqliteException"/>, and then nothing of that call was written.
+/// </summary>
+public sealed class StationJournal : IDisposable
+{
+    /// <summary>Rejected lines kept before the oldest go. Our choice, no source: a day of garbage at one line in ten seconds.</summary>
+    public const int DefaultRejectedLinesKept = 10_000;
+
+    private readonly Lock _turn = new();
+    private readonly SqliteFile _file;
+    private readonly JournalTransaction _transaction;
+    private readonly Statement _pending;
+    private readonly Statement _removePending;
+    private readonly Statement _countPending;
+    private readonly Statement _expire;
+
+    private StationJournal(SqliteFile file, int rejectedLinesKept, long firstSequence)
+    {
+        _file = file;
+        _transaction = new JournalTransaction(file.Connection, rejectedLinesKept, firstSequence);
+        _pending = new Statement(file.Connection, "SELECT id, topic, content_type, payload FROM outbox WHERE $1 < id ORDER BY id LIMIT $2", 2);
+        _removePending = new Statement(file.Connection, "DELETE FROM outbox WHERE id <= $1", 1);
+        _countPending = new Statement(file.Connection, "SELECT count(*) FROM outbox WHERE $1 < id", 1);
+        _expire = new Statement(file.Connection, "DELETE FROM sample WHERE id IN (SELECT id FROM sample WHERE received_us < $1 ORDER BY received_us LIMIT $2)", 2);
+    }
+
+    /// <summary>The file.</summary>
+    public string Path => _file.Path;
+
+    /// <summary>For tests, which starve it of room.</summary>
+    internal SqliteConnection Connection => _file.Connection;
+
+    /// <summary>Where a damaged journal was put when this one was begun in its place, or null.</summary>
+    public string? SetAsidePath => _file.SetAsidePath;
+
+    /// <summary>The copy that was made before an older journal was migrated, or null.</summary>
+    public string? BackupPath => _file.BackupPath;
+
+    /// <summary>Opens the journal, making it when it is not there. A damaged one is renamed and a new one begun.</summary>
+    /// <param name="path">The file.</param>
+    /// <param name="time">Gives the time in the names of copies and the sequence after a damaged journal.</param>
+    /// <param name="rejectedLinesKept">How many rejected lines are kept before the oldest go.</param>
+    /// <exception cref="Entry.InputException">It is from a newer version, or no journal. It is untouched.</exception>
+    /// <exception cref="Entry.WorkFailedException">The system refuses it.</exception>
+    public static StationJournal Open(string path, TimeProvider time, int rejectedLinesKept = DefaultRejectedLinesKept)
+    {
+        SqliteFile file = SqliteFile.OpenForWriting(path, JournalFormat.Format, DamagePolicy.SetAside, time);
+        try
+        {
+            // The counter went with a damaged journal. The clock in milliseconds lies beyond every number it can have given.
+            bool counterIsLost = file.SetAsidePath != null || SetAsideEarlier(file.Path);
+            return new StationJournal(file, rejectedLinesKept, counterIsLost ? time.GetUtcNow().ToUnixTimeMilliseconds() : 1);
+        }
+        catch (SqliteException fault)
+        {
+            file.Dispose();
+            throw SqliteFaults.AsWorkFailed(fault, path);
+        }
+    }
+
+    /// <summary>Does all of <paramref name="work"/> and flushes it to the disk, or does none of it.</summary>
+    /// <exception cref="SqliteException">The disk is full or refuses. Nothing of it was written.</exception>
+    public void Commit(Action<JournalTransaction> work)
+    {
+        lock (_turn)
+        {
+            using SqliteTransaction transaction = _file.Connection.BeginTransaction();
+            _transaction.Use(transaction);
+            work(_transaction);
+            _transaction.TrimRejectedLines();
+            transaction.Commit();
+        }
+    }
+
+    /// <summary>The oldest messages behind <paramref name="after"/>, in order.</summary>
+    public IReadOnlyList<OutboxRow> Pending(long after, int most)
+    {
+        lock (_turn)
+        {
+            List<OutboxRow> rows = [];
+            using SqliteDataReader reader = _pending.Rows(after, most);
+            while (reader.Read())
+            {
+                Message message = new(reader.GetString(1), reader.GetString(2), reader.GetFieldValue<byte[]>(3));
+                rows.Add(new OutboxRow(reader.GetInt64(0), message));
+            }
+
+            return rows;
+        }
+    }
+
+    /// <summary>How many messages behind <paramref name="after"/> wait to be delivered.</summary>
+    public long CountPending(long after = 0)
+    {
+        lock (_turn)
+        {
+            return Convert.ToInt64(_countPending.Value(null, after), CultureInfo.InvariantCulture);
+        }
+    }
+
+    /// <summary>Takes the messages up to and with <paramref name="id"/> out of the outbox: the broker has them.</summary>
+    public void Delivered(long id)
+    {
+        lock (_turn)
+        {
+            _removePending.Run(null, id);
+        }
+    }
+
+    /// <summary>
+    /// Deletes at most <paramref name="most"/> samples received before <paramref name="beforeUtc"/>, oldest first. Messages
+    /// that still wait to be delivered stay: they are whole in the outbox.
+    /// </summary>
+    /// <returns>How many were deleted.</returns>
+    public int Expire(DateTimeOffset beforeUtc, int most)
+    {
+        lock (_turn)
+        {
+            return _expire.Run(null, JournalTransaction.Microseconds(beforeUtc), most);
+        }
+    }
+
+    /// <inheritdoc/>
+    public void Dispose()
+    {
+        _transaction.Dispose();
+        _pending.Dispose();
+        _removePending.Dispose();
+        _countPending.Dispose();
+        _expire.Dispose();
+        _file.Dispose();
+    }
+
+    /// <summary>True when a damaged journal was put aside by an earlier run, which may have stopped before its first sample.</summary>
+    private static bool SetAsideEarlier(string path)
+    {
+        string folder = System.IO.Path.GetDirectoryName(path)!;
+        return Directory.GetFiles(folder, System.IO.Path.GetFileName(path) + ".damaged-*").Length != 0;
+    }
+}
