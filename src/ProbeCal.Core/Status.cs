@@ -108,6 +108,23 @@ public enum Status
     DensityBelowRange = 0x0D02,
     /// <summary>Density is above what the function takes.</summary>
     DensityAboveRange = 0x0D03,
+
+    /// <summary>The equation is not one of those that Core knows.</summary>
+    EquationUnknown = 0x0E04,
+
+    /// <summary>The percentage of saturation is NaN or infinite.</summary>
+    SaturationNotFinite = 0x0F01,
+    /// <summary>The percentage of saturation is below what the function takes.</summary>
+    SaturationBelowRange = 0x0F02,
+    /// <summary>The percentage of saturation is above what the function takes.</summary>
+    SaturationAboveRange = 0x0F03,
+
+    /// <summary>Specific conductance is NaN or infinite.</summary>
+    ConductanceNotFinite = 0x1001,
+    /// <summary>Specific conductance is negative.</summary>
+    ConductanceBelowRange = 0x1002,
+    /// <summary>Specific conductance is above the range of the relation.</summary>
+    ConductanceAboveRange = 0x1003,
 }
 
 /// <summary>Which input a <see cref="Status"/> is about: its high byte.</summary>
@@ -141,6 +158,12 @@ public enum InputQuantity
     Points = 12,
     /// <summary>Density of the water.</summary>
     Density = 13,
+    /// <summary>The solubility equation asked for.</summary>
+    Equation = 14,
+    /// <summary>Percentage of saturation.</summary>
+    Saturation = 15,
+    /// <summary>Specific conductance of the water.</summary>
+    Conductance = 16,
 }
 
 /// <summary>Why an input was refused: the low byte of a <see cref="Status"/>.</summary>

@@ -1,0 +1,121 @@
+namespace ProbeCal;
+
+/// <summary>
+/// Oxygen in water in equilibrium with water-saturated air, µmol/kg, the fit to the data of Benson and Krause:
+/// ln C = ΣAi·Ts^i (i = 0–5) + S·(B0 + B1·Ts + B2·Ts² + B3·Ts³) + C0·S², Ts = ln[(298.15 − t)/(273.15 + t)] at 1 atm, t on
+/// IPTS-68, times the pressure factor of Benson and Krause.
+/// </summary>
+/// <remarks>
+/// Garcia, H.E., Gordon, L.I. (1992) Limnol. Oceanogr. 37(6), 1307–1312, doi:10.4319/lo.1992.37.6.1307, Eq. 8 with the
+/// Benson–Krause column of Table 1; erratum Limnol. Oceanogr. 38, 656 (1993): the term A3·Ts² printed in Eq. 8 is not part of
+/// it. Range freezing point to 40 °C, S 0–42, 0.5–1.1 atm. Accuracy ±0.1–0.3 % (from memory). The ITS-90 input is converted,
+/// as gsw does. The vapour and virial terms of the pressure factor are stated for 0–40 °C; below 0 °C they are continued, which changes the factor by less than 0.001 %.
+/// </remarks>
+public static class GarciaGordon1992
+{
+    /// <summary>Highest temperature, °C. The lowest is the freezing point at the given salinity.</summary>
+    public const double HighestCelsius = 40.0;
+    /// <summary>Highest practical salinity.</summary>
+    public const double HighestSalinity = 42.0;
+
+    private const double A0 = 5.80871;
+    private const double A1 = 3.20291;
+    private const double A2 = 4.17887;
+    private const double A3 = 5.10006;
+    private const double A4 = -9.86643e-2;
+    private const double A5 = 3.80369;
+    private const double B0 = -7.01577e-3;
+    private const double B1 = -7.70028e-3;
+    private const double B2 = -1.13864e-2;
+    private const double B3 = -9.51519e-3;
+    private const double C0 = -2.75915e-7;
+
+    private const double UpperKelvinOfScaling = 298.15;
+
+    /// <summary>Concentration at equilibrium with water-saturated air.</summary>
+    /// <param name="celsius">Temperature on ITS-90, freezing point to 40 °C.</param>
+    /// <param name="salinity">Practical salinity, 0–42.</param>
+    /// <param name="pressureHectopascal">Absolute pressure at the water surface, 506.625–1114.575 hPa.</param>
+    /// <param name="rule">Refuse or extrapolate outside the range.</param>
+    /// <param name="micromolesPerKilogram">Concentration, µmol per kg of water; NaN unless Ok or extrapolated.</param>
+    public static Status MicromolesPerKilogram(
+        double celsius, double salinity, double pressureHectopascal, RangeRule rule, out double micromolesPerKilogram)
+    {
+        micromolesPerKilogram = double.NaN;
+        Status status = Check(celsius, salinity, pressureHectopascal);
+        if (InputCheck.Refuses(status, rule)) { return status; }
+        double factor = OxygenPressureFactor.Value(celsius, PressureUnits.AtmospheresFromHectopascal(pressureHectopascal));
+        micromolesPerKilogram = InputCheck.FiniteOrNaN(OneAtmosphere(celsius, salinity) * factor);
+        return status;
+    }
+
+    /// <summary>How the equilibrium concentration answers to temperature, salinity and pressure.</summary>
+    /// <param name="celsius">Temperature on ITS-90, freezing point to 40 °C.</param>
+    /// <param name="salinity">Practical salinity, 0–42.</param>
+    /// <param name="pressureHectopascal">Absolute pressure at the water surface, 506.625–1114.575 hPa.</param>
+    /// <param name="rule">Refuse or extrapolate outside the range.</param>
+    /// <param name="perKelvin">∂C/∂T, µmol/kg per K; NaN unless Ok or extrapolated.</param>
+    /// <param name="perSalinity">∂C/∂S, µmol/kg per unit of salinity; NaN unless Ok or extrapolated.</param>
+    /// <param name="perHectopascal">∂C/∂P, µmol/kg per hPa; NaN unless Ok or extrapolated.</param>
+    public static Status Sensitivities(
+        double celsius, double salinity, double pressureHectopascal, RangeRule rule,
+        out double perKelvin, out double perSalinity, out double perHectopascal)
+    {
+        perKelvin = double.NaN;
+        perSalinity = double.NaN;
+        perHectopascal = double.NaN;
+        Status status = Check(celsius, salinity, pressureHectopascal);
+        if (InputCheck.Refuses(status, rule)) { return status; }
+        LogarithmicSlopes(celsius, salinity, out double logPerKelvin, out double logPerSalinity);
+        OxygenEquilibrium.ScaleSlopes(
+            OneAtmosphere(celsius, salinity), logPerKelvin, logPerSalinity, celsius, pressureHectopascal,
+            out perKelvin, out perSalinity, out perHectopascal);
+        return status;
+    }
+
+    /// <summary>Ranges of the equation and of the pressure factor. A negative salinity has no freezing point: 0 °C stands in.</summary>
+    internal static Status Check(double celsius, double salinity, double pressureHectopascal)
+    {
+        Status salinityStatus = InputCheck.Salinity(salinity, HighestSalinity);
+        double lowest = salinityStatus == Status.Ok ? FreezingPoint.Value(salinity) : 0.0;
+        Status status = InputCheck.Graver(InputCheck.Temperature(celsius, lowest, HighestCelsius), salinityStatus);
+        return InputCheck.Graver(
+            status,
+            InputCheck.Pressure(pressureHectopascal, BensonKrause1984.LowestHectopascal, BensonKrause1984.HighestHectopascal));
+    }
+
+    /// <summary>The fit at 1 atm, µmol/kg, without a range; NaN where the scaled temperature does not exist.</summary>
+    internal static double OneAtmosphere(double celsius, double salinity)
+    {
+        double ts = ScaledTemperature(celsius);
+        double fresh = A0 + (ts * (A1 + (ts * (A2 + (ts * (A3 + (ts * (A4 + (ts * A5)))))))));
+        double salt = B0 + (ts * (B1 + (ts * (B2 + (ts * B3)))));
+        return Numerics.Exp(fresh + (salinity * (salt + (C0 * salinity))));
+    }
+
+    /// <summary>∂(ln C)/∂T and ∂(ln C)/∂S at 1 atm, without a range.</summary>
+    internal static void LogarithmicSlopes(double celsius, double salinity, out double perKelvin, out double perSalinity)
+    {
+        perKelvin = double.NaN;
+        perSalinity = double.NaN;
+        double t = TemperatureScale.Ipts68FromIts90(celsius);
+        double above = UpperKelvinOfScaling - t;
+        double kelvin = TemperatureScale.KelvinAtZeroCelsius + t;
+        if (above <= 0.0 || kelvin <= 0.0) { return; }
+        double ts = Numerics.Ln(above / kelvin);
+        double tsSlope = -TemperatureScale.Ipts68PerIts90 * ((1.0 / above) + (1.0 / kelvin));
+        double fresh = A1 + (ts * ((2.0 * A2) + (ts * ((3.0 * A3) + (ts * ((4.0 * A4) + (ts * 5.0 * A5)))))));
+        double salt = B1 + (ts * ((2.0 * B2) + (ts * 3.0 * B3)));
+        perKelvin = (fresh + (salinity * salt)) * tsSlope;
+        perSalinity = B0 + (ts * (B1 + (ts * (B2 + (ts * B3))))) + (2.0 * C0 * salinity);
+    }
+
+    private static double ScaledTemperature(double celsius)
+    {
+        double t = TemperatureScale.Ipts68FromIts90(celsius);
+        double above = UpperKelvinOfScaling - t;
+        double kelvin = TemperatureScale.KelvinAtZeroCelsius + t;
+        if (above <= 0.0 || kelvin <= 0.0) { return double.NaN; }
+        return Numerics.Ln(above / kelvin);
+    }
+}

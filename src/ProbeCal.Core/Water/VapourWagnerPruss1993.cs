@@ -1,0 +1,46 @@
+namespace ProbeCal;
+
+/// <summary>
+/// Saturation vapour pressure of pure water, reference quality:
+/// ln(p/pc) = (Tc/T)·(a1·v + a2·v^1.5 + a3·v³ + a4·v^3.5 + a5·v⁴ + a6·v^7.5), v = 1 − T/Tc.
+/// </summary>
+/// <remarks>
+/// Wagner, W., Pruss, A. (1993) J. Phys. Chem. Ref. Data 22, 783–787, Eq. 1 (IAPWS SR1-86(1992)); coefficients seen in four
+/// second-hand places. ITS-90, 0 °C to the critical point; stated uncertainty 0.01–0.02 % (from memory) near ambient.
+/// </remarks>
+public static class VapourWagnerPruss1993
+{
+    /// <summary>Lowest temperature, °C.</summary>
+    public const double LowestCelsius = 0.0;
+    /// <summary>Highest temperature, °C: the critical point.</summary>
+    public const double HighestCelsius = 373.946;
+
+    private const double CriticalKelvin = 647.096;
+    private const double CriticalHectopascal = 220640.0;
+    private const double A1 = -7.85951783;
+    private const double A2 = 1.84408259;
+    private const double A3 = -11.7866497;
+    private const double A4 = 22.6807411;
+    private const double A5 = -15.9618719;
+    private const double A6 = 1.80122502;
+
+    /// <summary>Saturation vapour pressure.</summary>
+    /// <param name="celsius">Temperature, 0–373.946 °C.</param>
+    /// <param name="rule">Refuse or extrapolate outside the range.</param>
+    /// <param name="hectopascal">Vapour pressure, hPa; NaN unless Ok or extrapolated.</param>
+    public static Status Pressure(double celsius, RangeRule rule, out double hectopascal)
+    {
+        hectopascal = double.NaN;
+        Status status = InputCheck.Temperature(celsius, LowestCelsius, HighestCelsius);
+        if (InputCheck.Refuses(status, rule)) { return status; }
+        double kelvin = celsius + TemperatureScale.KelvinAtZeroCelsius;
+        if (kelvin <= 0.0) { return status; }
+        double v = 1.0 - (kelvin / CriticalKelvin);
+        // Above the critical point there is no saturation; the root gives NaN there.
+        double root = Numerics.Sqrt(v);
+        double v3 = v * v * v;
+        double sum = (A1 * v) + (A2 * v * root) + (A3 * v3) + (A4 * v3 * root) + (A5 * v3 * v) + (A6 * v3 * v3 * v * root);
+        hectopascal = InputCheck.FiniteOrNaN(CriticalHectopascal * Numerics.Exp(CriticalKelvin / kelvin * sum));
+        return status;
+    }
+}
