@@ -1,0 +1,122 @@
+using System;
+using System.Collections.Generic;
+using System.IO;
+using System.Linq;
+using System.Reflection;
+using System.Text.RegularExpressions;
+using System.Xml.Linq;
+using ProbeCal.Station;
+using Xunit;
+
+namespace ProbeCal.Host.Tests.House;
+
+/// <summary>The shape of the house: Host → Station → Core, Core imports nothing, Nano adds no file of its own.</summary>
+public class RoomsTests
+{
+    [Fact]
+    public void Core_references_only_the_framework()
+    {
+        IEnumerable<string> others = typeof(Status).Assembly.GetReferencedAssemblies().Select(static a => a.Name!)
+            .Where(static name => !name.StartsWith("System", StringComparison.Ordinal) && name != "netstandard");
+        Assert.Empty(others);
+        // The one package is an analyzer, which leaves nothing in the assembly.
+        Assert.DoesNotContain(References("src/ProbeCal.Core/ProbeCal.Core.csproj", "PackageReference"), static r => r.Attribute("PrivateAssets")?.Value != "all");
+        Assert.Empty(References("src/ProbeCal.Core/ProbeCal.Core.csproj", "ProjectReference"));
+    }
+
+    [Fact]
+    public void Station_references_Core_and_never_Host()
+    {
+        string[] ours = Ours(typeof(RawSample).Assembly);
+        Assert.Equal(["ProbeCal.Core"], ours);
+    }
+
+    [Fact]
+    public void Host_references_Station()
+    {
+        Assert.Contains("ProbeCal.Station", Ours(typeof(Program).Assembly));
+        XElement[] projects = [.. References("src/ProbeCal.Host/ProbeCal.Host.csproj", "ProjectReference")];
+        Assert.Single(projects);
+        Assert.EndsWith("ProbeCal.Station.csproj", projects[0].Attribute("Include")!.Value, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Nano_holds_no_source_of_its_own()
+    {
+        Assert.Empty(Repository.SourceFiles("src/ProbeCal.Nano"));
+        Assert.Empty(References("src/ProbeCal.Nano/ProbeCal.Nano.csproj", "ProjectReference"));
+    }
+
+    /// <summary>Which room of Station may use which: data flows from sources to the broker, and nothing reaches back.</summary>
+    private static readonly Dictionary<string, string[]> StationRooms = new()
+    {
+        ["Entry"] = [],
+        ["Storage"] = ["Entry"],
+        ["Simulation"] = ["Entry", "Sources"],
+        ["Sources"] = ["Entry", "Simulation"],
+        ["CalibrationLog"] = ["Entry", "Storage"],
+        ["Configuration"] = ["Entry", "Sources"],
+        ["Journal"] = ["Entry", "Storage"],
+        ["Publishing"] = ["Entry", "Configuration", "Journal"],
+        ["Calibrating"] = ["Entry", "Storage", "Sources", "CalibrationLog"],
+        ["Engine"] = ["Entry", "Storage", "Sources", "CalibrationLog", "Configuration", "Journal", "Publishing"],
+    };
+
+    [Fact]
+    public void Rooms_of_Station_use_only_the_rooms_they_may()
+    {
+        List<string> breaches = [];
+        foreach (string path in Repository.SourceFiles("src/ProbeCal.Station"))
+        {
+            string relative = Path.GetRelativePath(Path.Combine(Repository.Root, "src/ProbeCal.Station"), path);
+            if (!relative.Contains('/', StringComparison.Ordinal))
+            {
+                continue;
+            }
+
+            string room = relative[..relative.IndexOf('/', StringComparison.Ordinal)];
+            Assert.True(StationRooms.ContainsKey(room), $"{relative}: the room {room} is not in the table of RoomsTests");
+            foreach (Match use in Regex.Matches(File.ReadAllText(path), @"\bProbeCal\.Station\.(\w+)"))
+            {
+                string other = use.Groups[1].Value;
+                if (other != room && StationRooms.ContainsKey(other) && !StationRooms[room].Contains(other))
+                {
+                    breaches.Add($"{relative} uses {other}");
+                }
+            }
+        }
+
+        Assert.Empty(breaches.Distinct());
+    }
+
+    [Fact]
+    public void Core_uses_no_Math_clock_file_or_thread()
+    {
+        Regex forbidden = new(@"\b(Math|MathF|DateTime|DateTimeOffset|Console|File|Thread|Task|Random|Environment)\.\w|using System\.(IO|Linq|Threading|Collections\.Generic)");
+        List<string> breaches = [];
+        foreach (string path in Repository.SourceFiles("src/ProbeCal.Core"))
+        {
+            int number = 0;
+            foreach (string line in File.ReadLines(path))
+            {
+                number++;
+                if (!line.TrimStart().StartsWith("//", StringComparison.Ordinal) && forbidden.IsMatch(line))
+                {
+                    breaches.Add($"{Path.GetFileName(path)}:{number}: {line.Trim()}");
+                }
+            }
+        }
+
+        Assert.Empty(breaches);
+    }
+
+    private static string[] Ours(Assembly assembly)
+    {
+        return [.. assembly.GetReferencedAssemblies().Select(static a => a.Name!).Where(static n => n.StartsWith("ProbeCal", StringComparison.OrdinalIgnoreCase)).Order()];
+    }
+
+    private static IEnumerable<XElement> References(string project, string kind)
+    {
+        return XDocument.Load(Path.Combine(Repository.Root, project)).Descendants(kind);
+    }
+}

@@ -1,0 +1,115 @@
+#!/usr/bin/env bash
+# Sets up what is missing, builds, and runs every check. Ends with one line: N passed, N failed, N skipped.
+set -u
+cd "$(dirname "$0")/.." || exit 1
+
+usage() {
+  cat <<'TEXT'
+usage: bash tests/run.sh [--full] [--only NAME] [--no-setup]
+
+  (nothing)     build, format check, every test project, NuGet package, native publish
+  --full        long campaigns at their full figures; writes the logs that the docs cite to tests/.out/
+  --only NAME   inner loop: build and run only tests whose project or full name contains NAME
+  --no-setup    install nothing, even when it could
+
+environment:
+  PROBECAL_SEED   seed of the random campaigns (a number; printed by each campaign)
+
+examples:
+  bash tests/run.sh
+  bash tests/run.sh --only Core
+  bash tests/run.sh --only LineTemplate
+TEXT
+}
+
+full=0 only='' setup=1
+while [ $# -gt 0 ]; do
+  case "$1" in
+    --full) full=1 ;;
+    --only) [ $# -ge 2 ] || { echo "tests/run.sh: --only wants a name, for example --only Core" >&2; exit 2; }; only=$2; shift ;;
+    --no-setup) setup=0 ;;
+    -h|--help) usage; exit 0 ;;
+    *) echo "tests/run.sh: '$1' is not an option; --help lists them" >&2; exit 2 ;;
+  esac
+  shift
+done
+
+out=tests/.out
+rm -rf "$out"; mkdir -p "$out/trx" "$out/log"
+export DOTNET_CLI_TELEMETRY_OPTOUT=1 DOTNET_NOLOGO=1 DOTNET_SKIP_FIRST_TIME_EXPERIENCE=1 DOTNET_CLI_UI_LANGUAGE=en
+export PROBECAL_LOG_DIR="$PWD/$out/log"
+if [ "$full" = 1 ]; then export PROBECAL_FULL=1; echo "campaigns: full figures"; else echo "campaigns: a stated fraction (each prints its own); --full runs the figures"; fi
+
+passed=0 failed=0 skipped=0
+step() { # step NAME COMMAND...: one gate, counted as one check
+  local name=$1; shift
+  local t0=$SECONDS
+  if "$@" >"$out/$name.log" 2>&1; then
+    passed=$((passed + 1)); echo "ok      $name ($((SECONDS - t0)) s)"
+  else
+    failed=$((failed + 1)); echo "FAILED  $name ($((SECONDS - t0)) s): $out/$name.log"; tail -n 25 "$out/$name.log"
+    return 1
+  fi
+}
+finish() { echo; echo "$passed passed, $failed failed, $skipped skipped"; [ "$failed" -eq 0 ]; exit $?; }
+
+# 1. What the machine lacks. Tests whose peer is absent say so and count as skipped.
+command -v dotnet >/dev/null 2>&1 || { echo "tests/run.sh: the .NET 10 SDK is not on PATH; install it from your system's packages or its maker" >&2; failed=1; finish; }
+if [ "$setup" = 1 ] && [ "$(id -u)" = 0 ] && command -v apt-get >/dev/null 2>&1; then
+  missing=''
+  command -v mosquitto >/dev/null 2>&1 || missing="$missing mosquitto"
+  command -v mosquitto_sub >/dev/null 2>&1 || missing="$missing mosquitto-clients"
+  command -v socat >/dev/null 2>&1 || missing="$missing socat"
+  command -v openssl >/dev/null 2>&1 || missing="$missing openssl"
+  /usr/bin/python3 -c 'import gsw' >/dev/null 2>&1 || missing="$missing python3-gsw"
+  command -v clang >/dev/null 2>&1 || command -v gcc >/dev/null 2>&1 || missing="$missing clang"
+  if [ -n "$missing" ]; then
+    echo "installing:$missing"
+    # shellcheck disable=SC2086
+    { apt-get -o DPkg::Lock::Timeout=300 update -qq && DEBIAN_FRONTEND=noninteractive apt-get -o DPkg::Lock::Timeout=300 install -y -qq --no-install-recommends $missing; } >"$out/setup.log" 2>&1 \
+      || { echo "could not install:$missing ($out/setup.log); the tests that need them are skipped"; tail -n 5 "$out/setup.log"; }
+  fi
+fi
+
+# 2. Build.
+step restore dotnet restore ProbeCal.sln || finish
+step build dotnet build ProbeCal.sln -c Release --no-restore || finish
+[ -n "$only" ] || step format dotnet format ProbeCal.sln --verify-no-changes --no-restore
+
+# 3. Tests. A project name picks projects; any other name filters tests by their full name.
+projects=(tests/*.Tests/*.csproj) filter=()
+if [ -n "$only" ]; then
+  matching=()
+  for p in "${projects[@]}"; do case "$(basename "$p" .csproj)" in *"$only"*) matching+=("$p") ;; esac; done
+  if [ ${#matching[@]} -gt 0 ]; then projects=("${matching[@]}"); else filter=(--filter "FullyQualifiedName~$only"); fi
+fi
+counter() { sed -n "s/.*<Counters [^>]*[^a-zA-Z]$1=\"\([0-9]*\)\".*/\1/p" "$2" | head -n 1; }
+for p in "${projects[@]}"; do
+  name=$(basename "$p" .csproj); t0=$SECONDS
+  dotnet test "$p" -c Release --no-build "${filter[@]}" --logger "trx;LogFileName=$name.trx" --logger "console;verbosity=normal" --results-directory "$out/trx" >"$out/$name.log" 2>&1
+  code=$?
+  trx="$out/trx/$name.trx"
+  if [ -f "$trx" ]; then
+    total=$(counter total "$trx"); ran=$(counter executed "$trx"); ok=$(counter passed "$trx"); bad=$((ran - ok)); skip=$((total - ran))
+    passed=$((passed + ok)); failed=$((failed + bad)); skipped=$((skipped + skip))
+    echo "tests   $name: $ok passed, $bad failed, $skip skipped ($((SECONDS - t0)) s)"
+    if [ "$bad" -gt 0 ]; then grep -E '^ +(Failed|Error Message:|Assert)|\[FAIL\]' -A 12 "$out/$name.log" | head -n 120; fi
+    if [ "$skip" -gt 0 ]; then grep -E '\[SKIP\]' -A 2 "$out/$name.log" | head -n 40; fi
+    if [ "$code" -ne 0 ] && [ "$bad" -eq 0 ]; then failed=$((failed + 1)); echo "FAILED  $name: the test host ended with $code"; tail -n 25 "$out/$name.log"; fi
+    grep -hE '^ *campaign:' "$out/$name.log" | sort -u
+  elif [ "$code" -ne 0 ]; then
+    failed=$((failed + 1)); echo "FAILED  $name: no results (exit $code)"; tail -n 25 "$out/$name.log"
+  fi
+done
+
+# 4. What ships: the package, and the native program.
+if [ -z "$only" ]; then
+  step pack dotnet pack src/ProbeCal.Core/ProbeCal.Core.csproj -c Release --no-build -o "$out/package"
+  if command -v clang >/dev/null 2>&1 || command -v gcc >/dev/null 2>&1; then
+    step native-publish dotnet publish src/ProbeCal.Host/ProbeCal.Host.csproj -c Release -r linux-x64 -o "$out/native" \
+      && step native-run bash -c "'$out/native/probecal' equilibrium --gas O2 --temperature 20 --salinity 0 --pressure 760mmHg --format json | grep -F '\"pressureHPa\":1013.25,'"
+  else
+    skipped=$((skipped + 2)); echo "skipped native-publish, native-run: no C compiler to link with (clang or gcc)"
+  fi
+fi
+finish
