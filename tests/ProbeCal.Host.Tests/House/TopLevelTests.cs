@@ -20,7 +20,7 @@ public class TopLevelTests
     public void Top_level_holds_what_it_should_and_no_more()
     {
         string[] top = [.. Repository.TrackedFiles().Select(static f => f.Split('/')[0]).Distinct()];
-        Assert.Empty(top.Where(static name => !Allowed.Contains(name) && name[0] != '.'));
+        Assert.DoesNotContain(top, static name => !Allowed.Contains(name) && name[0] != '.');
         Assert.Empty(Allowed.Except(top));
     }
 
