@@ -1,0 +1,60 @@
+namespace ProbeCal;
+
+/// <summary>
+/// The part of a probe's response that a calibration does not change. Every model brings its raw signal onto a scale on which
+/// <c>response = zero + slope · flow · gain(T) · pO2</c>; zero, slope and flow belong to the calibration.
+/// </summary>
+/// <remarks>
+/// Implementations are sealed and immutable, made once when a calibration is loaded, and safe to share between threads. None
+/// of the members allocates. The sensitivities speak of a value already judged, so they take no range rule.
+/// </remarks>
+public interface IProbeModel
+{
+    /// <summary>The response that a raw signal stands for, in the response's unit.</summary>
+    /// <param name="signal">Raw signal, in the probe's unit.</param>
+    /// <param name="temperatureCelsius">Temperature given with the signal, °C.</param>
+    /// <param name="pressureHectopascal">Absolute pressure given with the signal, hPa; NaN where there is none.</param>
+    /// <param name="rule">What to do outside a stated range.</param>
+    /// <param name="response">The response; NaN unless the status allows a value.</param>
+    /// <returns>The input at fault, or Ok.</returns>
+    Status Response(double signal, double temperatureCelsius, double pressureHectopascal, RangeRule rule, out double response);
+
+    /// <summary>The raw signal that stands for a response: the inverse of <see cref="Response"/>.</summary>
+    /// <param name="response">The response.</param>
+    /// <param name="temperatureCelsius">Temperature, °C.</param>
+    /// <param name="pressureHectopascal">Absolute pressure, hPa; NaN where there is none.</param>
+    /// <param name="rule">What to do outside a stated range.</param>
+    /// <param name="signal">The raw signal; NaN unless the status allows a value.</param>
+    /// <returns>The input at fault, or Ok.</returns>
+    Status Signal(double response, double temperatureCelsius, double pressureHectopascal, RangeRule rule, out double signal);
+
+    /// <summary>d response/d signal at the given conditions.</summary>
+    /// <param name="temperatureCelsius">Temperature, °C.</param>
+    /// <param name="pressureHectopascal">Absolute pressure, hPa; NaN where there is none.</param>
+    /// <param name="rule">What to do outside a stated range.</param>
+    /// <param name="responsePerSignal">Response per unit of signal; NaN unless the status allows a value.</param>
+    /// <returns>The input at fault, or Ok.</returns>
+    Status ResponsePerSignal(double temperatureCelsius, double pressureHectopascal, RangeRule rule, out double responsePerSignal);
+
+    /// <summary>gain(T): how much more response one hPa gives at T than at the reference temperature.</summary>
+    /// <param name="temperatureCelsius">Temperature, °C.</param>
+    /// <param name="rule">What to do outside the fitted range.</param>
+    /// <param name="gain">The gain, positive; NaN unless the status allows a value.</param>
+    /// <returns>The input at fault, or Ok.</returns>
+    Status Gain(double temperatureCelsius, RangeRule rule, out double gain);
+
+    /// <summary>
+    /// Relative change, per kelvin of thermometer error, of the gain that stands between the membrane's current and the
+    /// computed partial pressure, 1/K. For a meter it is the compensation inside the meter, which the same thermometer feeds.
+    /// </summary>
+    /// <param name="temperatureCelsius">Temperature, °C.</param>
+    /// <param name="perKelvin">1/K; NaN unless Ok.</param>
+    /// <returns>The input at fault, or Ok.</returns>
+    Status GainPerKelvin(double temperatureCelsius, out double perKelvin);
+
+    /// <summary>d ln gain/d temperature coefficient, in the inverse of the coefficient's unit.</summary>
+    /// <param name="temperatureCelsius">Temperature, °C.</param>
+    /// <param name="perCoefficient">The sensitivity; NaN unless Ok.</param>
+    /// <returns>The input at fault, or Ok.</returns>
+    Status GainPerCoefficient(double temperatureCelsius, out double perCoefficient);
+}

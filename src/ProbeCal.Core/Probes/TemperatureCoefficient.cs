@@ -1,0 +1,225 @@
+namespace ProbeCal;
+
+/// <summary>
+/// How a membrane's temperature coefficient is written. A bare figure in %/K says nothing without the form: 15 K from the
+/// reference temperature the forms differ by tens of percent.
+/// </summary>
+public enum TemperatureCoefficientForm
+{
+    /// <summary>f = exp(b·(T − Tref)); coefficient b in 1/K.</summary>
+    Exponential = 1,
+    /// <summary>f = (1 + a)^(T − Tref); coefficient a in 1/K, as compound interest.</summary>
+    Compound = 2,
+    /// <summary>f = 1 + a·(T − Tref); coefficient a in 1/K.</summary>
+    Linear = 3,
+    /// <summary>f = exp(−(E/R)·(1/T − 1/Tref)), T in kelvin; coefficient E (activation energy) in J/mol.</summary>
+    Arrhenius = 4,
+}
+
+/// <summary>
+/// The temperature factor f(T) of a membrane: how much more signal one hPa of gas gives at T than at the reference
+/// temperature, where f is 1. Valid inside the range of temperatures over which the coefficient was fitted.
+/// </summary>
+/// <remarks>
+/// Permeation through a polymer follows the Arrhenius law; the other three are its usual short forms. A rate of r per kelvin
+/// at the reference is E = r·R·Tref² (22 kJ/mol is 3.0 %/K at 25 °C). Rounding of f is a few units in the last place.
+/// </remarks>
+public static class TemperatureCoefficient
+{
+    /// <summary>Molar gas constant, J/(mol·K): exact by the 2019 definition of the SI (CODATA 2018).</summary>
+    public const double GasConstant = 8.31446261815324;
+
+    private const double ZeroCelsius = 273.15;
+
+    /// <summary>The temperature factor f(T), dimensionless.</summary>
+    /// <param name="form">The form that the coefficient belongs to.</param>
+    /// <param name="coefficient">1/K, or J/mol for <see cref="TemperatureCoefficientForm.Arrhenius"/>.</param>
+    /// <param name="referenceCelsius">Temperature at which f is 1, °C.</param>
+    /// <param name="lowestCelsius">Lower end of the fitted range, °C.</param>
+    /// <param name="highestCelsius">Upper end of the fitted range, °C.</param>
+    /// <param name="temperatureCelsius">Temperature of the membrane, °C.</param>
+    /// <param name="rule">What to do outside the fitted range.</param>
+    /// <param name="factor">f(T), always positive; NaN unless the status allows a value.</param>
+    /// <returns>
+    /// <see cref="Status.CoefficientUnknown"/> for an unknown form; <see cref="Status.CoefficientBelowRange"/> or
+    /// <see cref="Status.CoefficientAboveRange"/> where the form gives no positive finite factor (a linear form that has
+    /// reached zero).
+    /// </returns>
+    public static Status Factor(
+        TemperatureCoefficientForm form,
+        double coefficient,
+        double referenceCelsius,
+        double lowestCelsius,
+        double highestCelsius,
+        double temperatureCelsius,
+        RangeRule rule,
+        out double factor)
+    {
+        factor = double.NaN;
+        if (InputCheck.NotFinite(lowestCelsius) || InputCheck.NotFinite(highestCelsius)) { return Status.CoefficientNotFinite; }
+        Status status = InputCheck.Temperature(temperatureCelsius, lowestCelsius, highestCelsius);
+        if (InputCheck.Refuses(status, rule)) { return status; }
+        Status refused = Evaluate(form, coefficient, referenceCelsius, temperatureCelsius, out double value);
+        if (refused != Status.Ok) { return refused; }
+        factor = value;
+        return status;
+    }
+
+    /// <summary>d ln f/dT at T, 1/K. Needs no fitted range: it is a sensitivity of a value that has already been judged.</summary>
+    /// <param name="form">The form that the coefficient belongs to.</param>
+    /// <param name="coefficient">1/K, or J/mol for <see cref="TemperatureCoefficientForm.Arrhenius"/>.</param>
+    /// <param name="referenceCelsius">Temperature at which f is 1, °C.</param>
+    /// <param name="temperatureCelsius">Temperature of the membrane, °C.</param>
+    /// <param name="perKelvin">d ln f/dT, 1/K; NaN unless Ok.</param>
+    /// <returns>As <see cref="Factor"/>, without the range.</returns>
+    public static Status LogDerivative(
+        TemperatureCoefficientForm form,
+        double coefficient,
+        double referenceCelsius,
+        double temperatureCelsius,
+        out double perKelvin)
+    {
+        perKelvin = double.NaN;
+        Status status = Evaluate(form, coefficient, referenceCelsius, temperatureCelsius, out double factor);
+        if (status != Status.Ok) { return status; }
+
+        switch (form)
+        {
+            case TemperatureCoefficientForm.Exponential:
+                perKelvin = coefficient;
+                break;
+            case TemperatureCoefficientForm.Compound:
+                perKelvin = Numerics.Ln(1.0 + coefficient);
+                break;
+            case TemperatureCoefficientForm.Linear:
+                // Evaluate has shown that the factor is positive.
+                perKelvin = coefficient / factor;
+                break;
+            default:
+                // Evaluate has shown that the absolute temperature is positive.
+                double kelvin = temperatureCelsius + ZeroCelsius;
+                perKelvin = coefficient / (GasConstant * kelvin * kelvin);
+                break;
+        }
+
+        return Status.Ok;
+    }
+
+    /// <summary>d ln f/d coefficient at T: K for the forms in 1/K, mol/J for the Arrhenius form. Zero at the reference temperature.</summary>
+    /// <param name="form">The form that the coefficient belongs to.</param>
+    /// <param name="coefficient">1/K, or J/mol for <see cref="TemperatureCoefficientForm.Arrhenius"/>.</param>
+    /// <param name="referenceCelsius">Temperature at which f is 1, °C.</param>
+    /// <param name="temperatureCelsius">Temperature of the membrane, °C.</param>
+    /// <param name="perCoefficient">d ln f/d coefficient; NaN unless Ok.</param>
+    /// <returns>As <see cref="Factor"/>, without the range.</returns>
+    public static Status CoefficientDerivative(
+        TemperatureCoefficientForm form,
+        double coefficient,
+        double referenceCelsius,
+        double temperatureCelsius,
+        out double perCoefficient)
+    {
+        perCoefficient = double.NaN;
+        Status status = Evaluate(form, coefficient, referenceCelsius, temperatureCelsius, out double factor);
+        if (status != Status.Ok) { return status; }
+
+        double difference = temperatureCelsius - referenceCelsius;
+        switch (form)
+        {
+            case TemperatureCoefficientForm.Exponential:
+                perCoefficient = difference;
+                break;
+            case TemperatureCoefficientForm.Compound:
+                // Evaluate has shown that 1 + a is positive.
+                perCoefficient = difference / (1.0 + coefficient);
+                break;
+            case TemperatureCoefficientForm.Linear:
+                perCoefficient = difference / factor;
+                break;
+            default:
+                // Evaluate has shown that both absolute temperatures are positive.
+                perCoefficient = difference / (GasConstant * (temperatureCelsius + ZeroCelsius) * (referenceCelsius + ZeroCelsius));
+                break;
+        }
+
+        return Status.Ok;
+    }
+
+    /// <summary>
+    /// The coefficient that a bare rate per kelvin would mean under each form: the rate itself, or E = r·R·Tref². With
+    /// <see cref="Factor"/> it shows a person who typed a bare %/K how far the forms lie apart.
+    /// </summary>
+    /// <param name="form">The form.</param>
+    /// <param name="ratePerKelvin">Relative change per kelvin at the reference temperature, 1/K (3 %/K is 0.03).</param>
+    /// <param name="referenceCelsius">Reference temperature, °C, above absolute zero.</param>
+    /// <param name="coefficient">1/K, or J/mol for <see cref="TemperatureCoefficientForm.Arrhenius"/>; NaN unless Ok.</param>
+    /// <returns><see cref="Status.CoefficientUnknown"/>, <see cref="Status.CoefficientNotFinite"/> or a status of the temperature.</returns>
+    public static Status FromRate(TemperatureCoefficientForm form, double ratePerKelvin, double referenceCelsius, out double coefficient)
+    {
+        coefficient = double.NaN;
+        if (!IsKnown(form)) { return Status.CoefficientUnknown; }
+        if (InputCheck.NotFinite(ratePerKelvin)) { return Status.CoefficientNotFinite; }
+        if (InputCheck.NotFinite(referenceCelsius)) { return Status.TemperatureNotFinite; }
+        double kelvin = referenceCelsius + ZeroCelsius;
+        if (kelvin <= 0.0) { return Status.TemperatureBelowRange; }
+        double value = form == TemperatureCoefficientForm.Arrhenius ? ratePerKelvin * GasConstant * kelvin * kelvin : ratePerKelvin;
+        if (double.IsInfinity(value)) { return Status.CoefficientNotFinite; }
+        coefficient = value;
+        return Status.Ok;
+    }
+
+    /// <summary>True for the four forms that Core knows.</summary>
+    /// <param name="form">The form to test.</param>
+    public static bool IsKnown(TemperatureCoefficientForm form)
+    {
+        return form == TemperatureCoefficientForm.Exponential || form == TemperatureCoefficientForm.Compound
+            || form == TemperatureCoefficientForm.Linear || form == TemperatureCoefficientForm.Arrhenius;
+    }
+
+    private static Status Evaluate(
+        TemperatureCoefficientForm form,
+        double coefficient,
+        double referenceCelsius,
+        double temperatureCelsius,
+        out double factor)
+    {
+        factor = double.NaN;
+        if (!IsKnown(form)) { return Status.CoefficientUnknown; }
+        if (InputCheck.NotFinite(coefficient)) { return Status.CoefficientNotFinite; }
+        if (InputCheck.NotFinite(referenceCelsius)) { return Status.CoefficientNotFinite; }
+        if (InputCheck.NotFinite(temperatureCelsius)) { return Status.TemperatureNotFinite; }
+
+        double difference = temperatureCelsius - referenceCelsius;
+        double value;
+        switch (form)
+        {
+            case TemperatureCoefficientForm.Exponential:
+                value = Numerics.Exp(coefficient * difference);
+                break;
+            case TemperatureCoefficientForm.Compound:
+                if (1.0 + coefficient <= 0.0) { return Status.CoefficientBelowRange; }
+                value = Numerics.Exp(difference * Numerics.Ln(1.0 + coefficient));
+                break;
+            case TemperatureCoefficientForm.Linear:
+                value = 1.0 + (coefficient * difference);
+                break;
+            default:
+                double kelvin = temperatureCelsius + ZeroCelsius;
+                double referenceKelvin = referenceCelsius + ZeroCelsius;
+                if (referenceKelvin <= 0.0) { return Status.CoefficientBelowRange; }
+                if (kelvin <= 0.0) { return Status.TemperatureBelowRange; }
+                // 1/Tref − 1/T as one quotient: no cancellation near the reference. A product of two tiny temperatures could
+                // underflow to zero, and a division by zero throws on the device.
+                double denominator = GasConstant * kelvin * referenceKelvin;
+                if (denominator == 0.0) { return Status.TemperatureBelowRange; }
+                value = Numerics.Exp(coefficient * (difference / denominator));
+                break;
+        }
+
+        if (double.IsNaN(value)) { return Status.CoefficientAboveRange; }
+        if (value <= 0.0) { return Status.CoefficientBelowRange; }
+        if (double.IsInfinity(value)) { return Status.CoefficientAboveRange; }
+        factor = value;
+        return Status.Ok;
+    }
+}
