@@ -51,6 +51,7 @@ public class RoomsTests
     private static readonly Dictionary<string, string[]> StationRooms = new()
     {
         ["Entry"] = [],
+        ["Equilibrium"] = ["Entry"],
         ["Storage"] = ["Entry"],
         ["Simulation"] = ["Entry", "Sources"],
         ["Sources"] = ["Entry", "Simulation"],

@@ -1,0 +1,81 @@
+using System;
+using System.Globalization;
+using ProbeCal.Station.Entry;
+
+namespace ProbeCal.Station.Equilibrium;
+
+/// <summary>
+/// The station pressure of a computation as a person gives it: from a barometer, or an altitude that stands in for one.
+/// </summary>
+/// <param name="Hectopascal">Absolute station pressure, hPa.</param>
+/// <param name="Source"><c>given</c> or <c>altitude</c>.</param>
+/// <param name="UncertaintyHectopascal">Standard uncertainty, hPa.</param>
+public sealed record PressureEntry(double Hectopascal, string Source, double UncertaintyHectopascal)
+{
+    /// <summary>
+    /// Least standard uncertainty of a pressure taken from the altitude alone, hPa: the weather moves it by some 3 % about
+    /// the mean, rarely (NOTES of the standard atmosphere; from memory), which is about 10 hPa as a standard uncertainty.
+    /// </summary>
+    public const double AltitudeOnlyUncertaintyHectopascal = 10;
+
+    /// <summary>Reads the options; one of pressure and altitude must be there.</summary>
+    /// <exception cref="InputException">Neither is given, one cannot be read, or the pressure is impossible at the altitude.</exception>
+    public static PressureEntry Parse(string? pressure, string? altitude, string? uncertainty)
+    {
+        double? stated = uncertainty is null ? null : Quantity.PressureHectopascal("--pressure-uncertainty", uncertainty);
+        if (stated < 0)
+        {
+            throw new InputException($"--pressure-uncertainty {uncertainty}: a standard uncertainty is zero or above");
+        }
+
+        double? metres = altitude is null ? null : Quantity.AltitudeMetres("--altitude", altitude);
+        if (pressure is null)
+        {
+            if (metres is not double height)
+            {
+                throw new InputException("--pressure is missing: give the absolute station pressure with its unit, for example --pressure 938hPa; without a barometer, --altitude 640m stands in for it");
+            }
+
+            if (StandardAtmosphere.Pressure(height, out double standard) != Status.Ok)
+            {
+                throw OutsideAtmosphere(altitude!);
+            }
+
+            return new PressureEntry(standard, "altitude", Math.Max(AltitudeOnlyUncertaintyHectopascal, stated ?? 0));
+        }
+
+        double hectopascal = Quantity.PressureHectopascal("--pressure", pressure);
+        if (metres is double above)
+        {
+            Judge(pressure, hectopascal, altitude!, above);
+        }
+
+        return new PressureEntry(hectopascal, "given", stated ?? 0);
+    }
+
+    private static void Judge(string pressure, double hectopascal, string altitude, double metres)
+    {
+        Status status = StandardAtmosphere.ReduceToSeaLevel(hectopascal, metres, out double seaLevel);
+        if (StatusParts.Input(status) == InputQuantity.Altitude)
+        {
+            throw OutsideAtmosphere(altitude);
+        }
+
+        StandardAtmosphere.Pressure(metres, out double usual);
+        if (status != Status.Ok || seaLevel is < LowestSeaLevelHectopascal or > HighestSeaLevelHectopascal)
+        {
+            throw new InputException(string.Create(CultureInfo.InvariantCulture,
+                $"--pressure {pressure} is not possible at {altitude}: reduced to sea level it is {seaLevel:F0} hPa, and sea level sees {LowestSeaLevelHectopascal} to {HighestSeaLevelHectopascal} hPa; about {usual:F0} hPa is usual there (is it a sea-level value, or another unit?)"));
+        }
+    }
+
+    // What sea level sees, apart from the eyes of tropical storms (common practice, no source).
+    private const double LowestSeaLevelHectopascal = 950;
+    private const double HighestSeaLevelHectopascal = 1050;
+
+    private static InputException OutsideAtmosphere(string altitude)
+    {
+        return new InputException(string.Create(CultureInfo.InvariantCulture,
+            $"--altitude {altitude} is outside the standard atmosphere used here, {StandardAtmosphere.LowestAltitudeMetres} to {StandardAtmosphere.HighestAltitudeMetres} m"));
+    }
+}

@@ -1,0 +1,29 @@
+using System;
+using System.IO;
+using System.Threading;
+using System.Threading.Tasks;
+
+namespace ProbeCal.Host.Tests;
+
+/// <summary>One run of the program with its streams held in memory.</summary>
+internal sealed record Run(int ExitCode, string Output, string Error)
+{
+    /// <summary>The single line that an error must be.</summary>
+    internal string ErrorLine => Error.TrimEnd('\n', '\r');
+
+    internal static async Task<Run> OfAsync(params string[] arguments)
+    {
+        StringWriter output = new();
+        StringWriter error = new();
+        Terminal terminal = new()
+        {
+            Input = TextReader.Null,
+            Output = output,
+            Error = error,
+            Time = TimeProvider.System,
+            Stop = CancellationToken.None,
+        };
+        int code = await Program.RunAsync(arguments, terminal);
+        return new Run(code, output.ToString(), error.ToString());
+    }
+}
