@@ -14,7 +14,7 @@ public sealed record PressureEntry(double Hectopascal, string Source, double Unc
 {
     /// <summary>
     /// Least standard uncertainty of a pressure taken from the altitude alone, hPa: the weather moves it by some 3 % about
-    /// the mean, rarely (NOTES of the standard atmosphere; from memory), which is about 10 hPa as a standard uncertainty.
+    /// the mean at most (from memory), which is about 10 hPa as a standard uncertainty (our choice).
     /// </summary>
     public const double AltitudeOnlyUncertaintyHectopascal = 10;
 
@@ -55,23 +55,19 @@ public sealed record PressureEntry(double Hectopascal, string Source, double Unc
 
     private static void Judge(string pressure, double hectopascal, string altitude, double metres)
     {
-        Status status = StandardAtmosphere.ReduceToSeaLevel(hectopascal, metres, out double seaLevel);
+        Status status = PressurePlausibility.Judge(hectopascal, metres, out PressureVerdict verdict, out double seaLevel);
         if (StatusParts.Input(status) == InputQuantity.Altitude)
         {
             throw OutsideAtmosphere(altitude);
         }
 
         StandardAtmosphere.Pressure(metres, out double usual);
-        if (status != Status.Ok || seaLevel is < LowestSeaLevelHectopascal or > HighestSeaLevelHectopascal)
+        if (status != Status.Ok || verdict is PressureVerdict.RefusedHigh or PressureVerdict.RefusedLow)
         {
             throw new InputException(string.Create(CultureInfo.InvariantCulture,
-                $"--pressure {pressure} is not possible at {altitude}: reduced to sea level it is {seaLevel:F0} hPa, and sea level sees {LowestSeaLevelHectopascal} to {HighestSeaLevelHectopascal} hPa; about {usual:F0} hPa is usual there (is it a sea-level value, or another unit?)"));
+                $"--pressure {pressure} is not possible at {altitude}: reduced to sea level it is {seaLevel:F0} hPa, and sea level sees {PressurePlausibility.LowestSeaLevelHectopascal} to {PressurePlausibility.HighestSeaLevelHectopascal} hPa; about {usual:F0} hPa is usual there (is it a sea-level value, or another unit?)"));
         }
     }
-
-    // What sea level sees, apart from the eyes of tropical storms (common practice, no source).
-    private const double LowestSeaLevelHectopascal = 950;
-    private const double HighestSeaLevelHectopascal = 1050;
 
     private static InputException OutsideAtmosphere(string altitude)
     {
