@@ -9,7 +9,7 @@ namespace ProbeCal;
 /// Benson and Krause (1980, 1984). Range 0–40 °C, S 0–40, 0.5–1.1 atm total pressure at the water surface. Stated accuracy
 /// about ±0.1 % in fresh and ±0.2 % in sea water (from memory). Coefficients seen in three second-hand places. The temperature
 /// enters as given, without the scale conversion: so does the national field manual, whose tables are met to every printed
-/// digit only in this way (docs/decisions/0004); the effect is at most 0.013 %.
+/// digit only in this way (docs/decisions/0004); the effect is at most 0.016 % (docs/methods.md).
 /// </remarks>
 public static class BensonKrause1984
 {

@@ -6,7 +6,7 @@ namespace ProbeCal;
 /// Salinity enters neither. Negative values pass through.
 /// </summary>
 /// <remarks>
-/// The ratio of partial pressures differs from the ratio of concentrations by 0.02 % at most. Range −2 to 40 °C, 506.625–1114.575 hPa;
+/// At the local pressure the ratio of concentrations is the same; at 1 atm it differs by up to 0.05 % (the virial term, at 0.5 atm). Range −2 to 40 °C, 506.625–1114.575 hPa;
 /// accuracy is that of the partial pressure given: the vapour formula adds less than 0.01 %.
 /// </remarks>
 public static class Saturation

@@ -3,7 +3,7 @@ namespace ProbeCal;
 /// <summary>
 /// The two temperature scales that the equations were written on. Inputs of Core are in °C on ITS-90. The scales differ by
 /// 0.24 mK per kelvin (UNESCO practice: t68 = 1.00024·t90; Saunders, P.M. 1990, WOCE Newsletter 10, from memory), which moves
-/// the oxygen value by 0.003 % at 5 °C and 0.013 % at 35 °C.
+/// the oxygen value by 0.003 % at 5 °C and 0.015 % at 40 °C.
 /// </summary>
 public static class TemperatureScale
 {

@@ -6,7 +6,7 @@ namespace ProbeCal;
 /// </summary>
 /// <remarks>
 /// Benson, B.B., Krause, D. (1980) Limnol. Oceanogr. 25(4), 662–671, doi:10.4319/lo.1980.25.4.0662; coefficients seen in
-/// three second-hand places. Range 0–40 °C. It lies 0.04 to 0.12 % below Wagner and Pruss 1993, which moves an oxygen value
+/// three second-hand places. Range 0–40 °C. It lies 0.035 to 0.123 % below Wagner and Pruss 1993, which moves an oxygen value
 /// by less than 0.005 %. The temperature is used as given: the scale difference is below 0.06 % of u.
 /// </remarks>
 public static class VapourBensonKrause1980

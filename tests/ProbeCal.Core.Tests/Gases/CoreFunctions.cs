@@ -1,0 +1,92 @@
+using System;
+using System.Collections.Generic;
+using static ProbeCal.InputQuantity;
+
+namespace ProbeCal.Core.Tests.Gases;
+
+/// <summary>Every function of the water and gas rooms that can refuse an input.</summary>
+internal static class CoreFunctions
+{
+    private const double Low = 506.625;
+    private const double High = 1114.575;
+    private const double None = double.NaN;
+
+    private static readonly Input Celsius = new(Temperature, 15.0, 0.0, 40.0);
+    private static readonly Input SeaCelsius = new(Temperature, 15.0, None, 40.0);
+    private static readonly Input AirCelsius = new(Temperature, 15.0, -2.0, 40.0);
+    private static readonly Input Salt = new(Salinity, 20.0, 0.0, 40.0);
+    private static readonly Input SeaSalt = new(Salinity, 20.0, 0.0, 42.0);
+    private static readonly Input Total = new(Pressure, 980.0, Low, High);
+    private static readonly Input Partial = new(PartialPressure, 190.0, None, High);
+    private static readonly Input Milligrams = new(Concentration, 7.5, None, None);
+    private static readonly Input Percent = new(InputQuantity.Saturation, 90.0, None, None);
+    private static readonly Input Altitude = new(InputQuantity.Altitude, 640.0, -610.0, 11000.0);
+    private static readonly Input AnyPressure = new(Pressure, 940.0, None, None);
+    private static readonly Input AnyPartial = new(PartialPressure, 190.0, None, None);
+    private static readonly Input Constant = new(Coefficient, 1.26e-3, None, None);
+    private static readonly Input Rho = new(Density, 998.0, None, None);
+    private static readonly Input Spread = new(Uncertainty, 0.1, 0.0, None);
+
+    internal static IEnumerable<CoreFunction> All()
+    {
+        yield return One("VapourBensonKrause1980.Pressure", [Celsius], (double[] x, RangeRule r, out double v) => VapourBensonKrause1980.Pressure(x[0], r, out v));
+        yield return One("VapourWagnerPruss1993.Pressure", [new Input(Temperature, 15.0, 0.0, 373.946)], (double[] x, RangeRule r, out double v) => VapourWagnerPruss1993.Pressure(x[0], r, out v));
+        yield return One("DensityEos80.Density", [AirCelsius, SeaSalt], (double[] x, RangeRule r, out double v) => DensityEos80.Density(x[0], x[1], r, out v));
+        yield return new("DensityEos80.Sensitivities", true, [AirCelsius, SeaSalt], (x, r) => (DensityEos80.Sensitivities(x[0], x[1], r, out double a, out double b), [a, b]));
+        yield return One("FreezingPoint.Celsius", [SeaSalt], (double[] x, RangeRule r, out double v) => FreezingPoint.Celsius(x[0], r, out v));
+        yield return One("SpecificConductance.Salinity", [new Input(Conductance, 800.0, 0.0, 59000.0)], (double[] x, RangeRule r, out double v) => SpecificConductance.Salinity(x[0], r, out v));
+        yield return Strict("StandardAtmosphere.Pressure", [Altitude], (double[] x, RangeRule r, out double v) => StandardAtmosphere.Pressure(x[0], out v));
+        yield return Strict("StandardAtmosphere.ReduceToSeaLevel", [AnyPressure, Altitude], (double[] x, RangeRule r, out double v) => StandardAtmosphere.ReduceToSeaLevel(x[0], x[1], out v));
+        yield return Strict("StandardAtmosphere.FromSeaLevel", [AnyPressure, Altitude], (double[] x, RangeRule r, out double v) => StandardAtmosphere.FromSeaLevel(x[0], x[1], out v));
+
+        yield return One("BensonKrause1984.MilligramsPerLitre", [Celsius, Salt, Total], (double[] x, RangeRule r, out double v) => BensonKrause1984.MilligramsPerLitre(x[0], x[1], x[2], r, out v));
+        yield return One("BensonKrause1984.PressureFactor", [Celsius, Total], (double[] x, RangeRule r, out double v) => BensonKrause1984.PressureFactor(x[0], x[1], r, out v));
+        yield return new("BensonKrause1984.Sensitivities", true, [Celsius, Salt, Total], (x, r) => (BensonKrause1984.Sensitivities(x[0], x[1], x[2], r, out double a, out double b, out double c), [a, b, c]));
+        yield return One("GarciaGordon1992.MicromolesPerKilogram", [SeaCelsius, SeaSalt, Total], (double[] x, RangeRule r, out double v) => GarciaGordon1992.MicromolesPerKilogram(x[0], x[1], x[2], r, out v));
+        yield return new("GarciaGordon1992.Sensitivities", true, [SeaCelsius, SeaSalt, Total], (x, r) => (GarciaGordon1992.Sensitivities(x[0], x[1], x[2], r, out double a, out double b, out double c), [a, b, c]));
+
+        yield return One("OxygenEquilibrium.PartialPressure", [AirCelsius, Total], (double[] x, RangeRule r, out double v) => OxygenEquilibrium.PartialPressure(x[0], x[1], r, out v));
+        yield return new("OxygenEquilibrium.PartialPressureSensitivities", true, [AirCelsius, Total], (x, r) => (OxygenEquilibrium.PartialPressureSensitivities(x[0], x[1], r, out double a, out double b), [a, b]));
+        foreach (CoreFunction function in Equilibrium(OxygenEquation.BensonKrause1984, Celsius, Salt)) { yield return function; }
+        foreach (CoreFunction function in Equilibrium(OxygenEquation.GarciaGordon1992, SeaCelsius, SeaSalt)) { yield return function; }
+
+        yield return One("Saturation.PercentLocal", [Partial, AirCelsius, Total], (double[] x, RangeRule r, out double v) => ProbeCal.Saturation.PercentLocal(x[0], x[1], x[2], r, out v));
+        yield return One("Saturation.PercentOneAtmosphere", [Partial, AirCelsius], (double[] x, RangeRule r, out double v) => ProbeCal.Saturation.PercentOneAtmosphere(x[0], x[1], r, out v));
+        yield return new("Saturation.PercentLocalSensitivities", true, [Partial, AirCelsius, Total], (x, r) => (ProbeCal.Saturation.PercentLocalSensitivities(x[0], x[1], x[2], r, out double a, out double b, out double c), [a, b, c]));
+        yield return new("Saturation.PercentOneAtmosphereSensitivities", true, [Partial, AirCelsius], (x, r) => (ProbeCal.Saturation.PercentOneAtmosphereSensitivities(x[0], x[1], r, out double a, out double b), [a, b]));
+        yield return One("Saturation.PartialPressureFromPercentLocal", [Percent, AirCelsius, Total], (double[] x, RangeRule r, out double v) => ProbeCal.Saturation.PartialPressureFromPercentLocal(x[0], x[1], x[2], r, out v));
+        yield return One("Saturation.PartialPressureFromPercentOneAtmosphere", [Percent, AirCelsius], (double[] x, RangeRule r, out double v) => ProbeCal.Saturation.PartialPressureFromPercentOneAtmosphere(x[0], x[1], r, out v));
+
+        yield return Strict("HenryLaw.MolesPerLitre", [Constant, AnyPartial], (double[] x, RangeRule r, out double v) => HenryLaw.MolesPerLitre(x[0], x[1], out v));
+        yield return Strict("HenryLaw.GramsPerLitre", [Constant, AnyPartial, new Input(Coefficient, 32.0, None, None)], (double[] x, RangeRule r, out double v) => HenryLaw.GramsPerLitre(x[0], x[1], x[2], out v));
+        yield return Strict("HenryLaw.PartialPressure", [Constant, new Input(Concentration, 2.0e-4, None, None)], (double[] x, RangeRule r, out double v) => HenryLaw.PartialPressure(x[0], x[1], out v));
+        yield return Strict("OxygenUnits.MicromolesPerKilogramFromMilligramsPerLitre", [Milligrams, Rho], (double[] x, RangeRule r, out double v) => OxygenUnits.MicromolesPerKilogramFromMilligramsPerLitre(x[0], x[1], out v));
+        yield return Strict("OxygenUnits.MilligramsPerLitreFromMicromolesPerKilogram", [Milligrams, Rho], (double[] x, RangeRule r, out double v) => OxygenUnits.MilligramsPerLitreFromMicromolesPerKilogram(x[0], x[1], out v));
+        yield return Strict("OxygenUnits.MilligramsPerKilogramFromMilligramsPerLitre", [Milligrams, Rho], (double[] x, RangeRule r, out double v) => OxygenUnits.MilligramsPerKilogramFromMilligramsPerLitre(x[0], x[1], out v));
+        yield return One("OxygenUncertainty.PartialPressure", [AirCelsius, Total, Spread, Spread], (double[] x, RangeRule r, out double v) => OxygenUncertainty.PartialPressure(x[0], x[1], x[2], x[3], r, out v));
+    }
+
+    private static IEnumerable<CoreFunction> Equilibrium(OxygenEquation e, Input t, Input s)
+    {
+        yield return One("OxygenEquilibrium.MilligramsPerLitre, " + e, [t, s, Total], (double[] x, RangeRule r, out double v) => OxygenEquilibrium.MilligramsPerLitre(e, x[0], x[1], x[2], r, out v));
+        yield return new("OxygenEquilibrium.MilligramsPerLitreSensitivities, " + e, true, [t, s, Total], (x, r) => (OxygenEquilibrium.MilligramsPerLitreSensitivities(e, x[0], x[1], x[2], r, out double a, out double b, out double c), [a, b, c]));
+        yield return One("OxygenEquilibrium.ConcentrationFromPartialPressure, " + e, [t, s, Total, Partial], (double[] x, RangeRule r, out double v) => OxygenEquilibrium.ConcentrationFromPartialPressure(e, x[0], x[1], x[2], x[3], r, out v));
+        yield return new("OxygenEquilibrium.ConcentrationSensitivities, " + e, true, [t, s, Total, Partial], (x, r) => (OxygenEquilibrium.ConcentrationSensitivities(e, x[0], x[1], x[2], x[3], r, out double a, out double b, out double c, out double d), [a, b, c, d]));
+        yield return One("OxygenEquilibrium.PartialPressureFromConcentration, " + e, [t, s, Total, Milligrams], (double[] x, RangeRule r, out double v) => OxygenEquilibrium.PartialPressureFromConcentration(e, x[0], x[1], x[2], x[3], r, out v));
+        yield return new("OxygenEquilibrium.PartialPressureFromConcentrationSensitivities, " + e, true, [t, s, Total, Milligrams], (x, r) => (OxygenEquilibrium.PartialPressureFromConcentrationSensitivities(e, x[0], x[1], x[2], x[3], r, out double a, out double b, out double c, out double d), [a, b, c, d]));
+        yield return One("OxygenUncertainty.EquationRelative, " + e, [s], (double[] x, RangeRule r, out double v) => OxygenUncertainty.EquationRelative(e, x[0], r, out v));
+        yield return One("OxygenUncertainty.MilligramsPerLitre, " + e, [t, s, Total, Spread, Spread, Spread], (double[] x, RangeRule r, out double v) => OxygenUncertainty.MilligramsPerLitre(e, x[0], x[1], x[2], x[3], x[4], x[5], r, out v));
+    }
+
+    private delegate Status Single(double[] inputs, RangeRule rule, out double value);
+
+    private static CoreFunction One(string name, Input[] inputs, Single call)
+    {
+        return new CoreFunction(name, true, inputs, (x, r) => (call(x, r, out double v), [v]));
+    }
+
+    private static CoreFunction Strict(string name, Input[] inputs, Single call)
+    {
+        return new CoreFunction(name, false, inputs, (x, r) => (call(x, r, out double v), [v]));
+    }
+}
