@@ -68,11 +68,23 @@ public sealed record CalibrationRecord
     /// <summary>Signal in water-saturated air over signal in air-saturated water, at one partial pressure; none for a point in water.</summary>
     public RecordedQuantity? AirToWaterRatio { get; init; }
 
-    /// <summary>The solubility equation, its version and its citation.</summary>
+    /// <summary>How near the reference was to its ideal state: 1 with the uncertainty of the bath's saturation or the chamber's humidity.</summary>
+    public required RecordedQuantity ReferenceState { get; init; }
+
+    /// <summary>The solubility equation: <c>benson-krause-1984</c> or <c>garcia-gordon-1992</c>.</summary>
     public required string Equation { get; init; }
+
+    /// <summary>What else was computed by which published formula, with citations.</summary>
+    public required string[] Formulas { get; init; }
 
     /// <summary>The points in the order in which they were taken.</summary>
     public required RecordedPoint[] Points { get; init; }
+
+    /// <summary>Role of the point that gave the slope: <c>span</c>, or <c>as-left</c> for a meter that was adjusted itself.</summary>
+    public required string SlopeFrom { get; init; }
+
+    /// <summary>The zero that the slope rests on.</summary>
+    public required RecordedZero Zero { get; init; }
 
     /// <summary>The calibration in force before, by its id; none when there was none.</summary>
     public string? PreviousCalibration { get; init; }

@@ -81,9 +81,6 @@ public sealed record RecordedResult
     /// <summary>Standard uncertainty of <see cref="Zero"/>.</summary>
     public required double ZeroStandardUncertainty { get; init; }
 
-    /// <summary>Where the zero comes from: <c>measured</c>, <c>entered</c>, <c>previous:ID</c> or <c>assumed</c>.</summary>
-    public required string ZeroSource { get; init; }
-
     /// <summary>True when every limit that decides was kept.</summary>
     public required bool Pass { get; init; }
 
@@ -92,4 +89,26 @@ public sealed record RecordedResult
 
     /// <summary>How the limits were applied.</summary>
     public required string DecisionRule { get; init; }
+}
+
+/// <summary>The zero that the slope rests on.</summary>
+public sealed record RecordedZero
+{
+    /// <summary>True when it was read in oxygen-free water, now or at an earlier calibration; false when it is assumed.</summary>
+    public required bool IsMeasured { get; init; }
+
+    /// <summary>Raw signal at zero.</summary>
+    public required double Signal { get; init; }
+
+    /// <summary>Its standard uncertainty, the oxygen left in the solution counted in.</summary>
+    public required double SignalStandardUncertainty { get; init; }
+
+    /// <summary>Temperature at which it was read, °C.</summary>
+    public required double TemperatureCelsius { get; init; }
+
+    /// <summary>Absolute pressure at which it was read, hPa.</summary>
+    public required double PressureHectopascal { get; init; }
+
+    /// <summary><c>measured</c>, <c>assumed</c>, or <c>previous:ID</c> for one carried over from an earlier calibration.</summary>
+    public required string Source { get; init; }
 }

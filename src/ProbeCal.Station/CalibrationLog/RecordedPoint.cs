@@ -11,14 +11,23 @@ public sealed record RecordedStatistics
     /// <summary>Mean.</summary>
     public required double Mean { get; init; }
 
-    /// <summary>Standard deviation of the samples about their mean.</summary>
+    /// <summary>Standard deviation of the samples about the straight line through them.</summary>
     public required double StandardDeviation { get; init; }
 
     /// <summary>Slope of the straight line through the samples, per minute.</summary>
     public required double SlopePerMinute { get; init; }
 
-    /// <summary>Standard error of <see cref="SlopePerMinute"/>.</summary>
+    /// <summary>Standard error of <see cref="SlopePerMinute"/>, the correlation between neighbouring samples counted in.</summary>
     public required double SlopeStandardErrorPerMinute { get; init; }
+
+    /// <summary>Smallest sample.</summary>
+    public required double Minimum { get; init; }
+
+    /// <summary>Largest sample.</summary>
+    public required double Maximum { get; init; }
+
+    /// <summary>Time from the first sample of the window to the last, s.</summary>
+    public required double WindowSeconds { get; init; }
 }
 
 /// <summary>One point: what the probe gave in a steady window, and what was true there.</summary>
@@ -45,7 +54,7 @@ public sealed record RecordedPoint
     /// <summary>Statistics of the temperature over the window; none when it was typed.</summary>
     public RecordedStatistics? TemperatureStatistics { get; init; }
 
-    /// <summary>Water (or cup) temperature.</summary>
+    /// <summary>Water (or chamber) temperature. Its uncertainty leaves out the thermometer's offset, which the probe's part of the record states.</summary>
     public required RecordedQuantity Temperature { get; init; }
 
     /// <summary>Absolute station pressure.</summary>
@@ -56,6 +65,9 @@ public sealed record RecordedPoint
 
     /// <summary><c>stirred</c>, <c>still</c> or <c>flow-insensitive</c>.</summary>
     public required string Stirring { get; init; }
+
+    /// <summary>Flow factor at the point: 1 where the slope is meant for the same stirring.</summary>
+    public required double FlowFactor { get; init; }
 
     /// <summary>True oxygen partial pressure, hPa.</summary>
     public required double ReferencePartialPressureHectopascal { get; init; }

@@ -14,8 +14,11 @@ public sealed record RecordedProbe
     /// <summary>Unit of the raw signal, for people; empty when nobody stated one.</summary>
     public required string SignalUnit { get; init; }
 
-    /// <summary>Temperature coefficient of the membrane; none when the probe delivers a compensated value.</summary>
-    public RecordedTemperatureCoefficient? TemperatureCoefficient { get; init; }
+    /// <summary>
+    /// Temperature coefficient of the membrane. For a meter with its own thermometer it serves only the uncertainty, since the
+    /// meter has compensated already.
+    /// </summary>
+    public required RecordedTemperatureCoefficient TemperatureCoefficient { get; init; }
 
     /// <summary>What is set in a meter that shows only mg/L or %; none for a raw signal.</summary>
     public RecordedMeterSettings? MeterSettings { get; init; }
@@ -59,6 +62,9 @@ public sealed record RecordedTemperatureCoefficient
 
     /// <summary>Upper end of the fitted range, °C.</summary>
     public required double FittedHighCelsius { get; init; }
+
+    /// <summary>Where it comes from: <c>entered</c>, or what stood in.</summary>
+    public string Source { get; init; } = "entered";
 }
 
 /// <summary>What a meter computes with before it shows mg/L or %.</summary>

@@ -72,7 +72,7 @@ internal static class SampleRecords
             FirstUtc = end.AddMinutes(-3),
             LastUtc = end,
             Typed = false,
-            Signal = new RecordedStatistics { Count = 181, Mean = 113.25, StandardDeviation = 0.12, SlopePerMinute = 0.01, SlopeStandardErrorPerMinute = 0.01 },
+            Signal = new RecordedStatistics { Count = 181, Mean = 113.25, StandardDeviation = 0.12, SlopePerMinute = 0.01, SlopeStandardErrorPerMinute = 0.01, Minimum = 112.9, Maximum = 113.6, WindowSeconds = 180 },
             SignalStandardUncertainty = 0.02,
             Temperature = Quantity(20.01, "degC", 0.1, "line"),
             Pressure = Quantity(939.3, "hPa", 0.8, "barometer:B-12"),

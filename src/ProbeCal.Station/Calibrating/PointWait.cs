@@ -1,0 +1,249 @@
+using System;
+using System.Threading;
+using System.Threading.Tasks;
+using ProbeCal.Station.CalibrationLog;
+using ProbeCal.Station.Entry;
+
+namespace ProbeCal.Station.Calibrating;
+
+/// <summary>The wait for one point: samples in, a steady window out, or a plain reason why there is none.</summary>
+internal sealed class PointWait
+{
+    private readonly CalibrationSession _session;
+    private readonly CalibrationSetup _setup;
+    private readonly CalibrationStep _step;
+    private readonly ICalibrationDialogue _dialogue;
+    private readonly TimeProvider _time;
+    private readonly GuardDesk _desk;
+    private readonly StabilityWatch _watch;
+    private readonly RecordedPoint? _span;
+    private readonly DateTimeOffset _notBefore;
+    private DateTimeOffset? _firstSeen;
+    private bool _conditionsSeen;
+    private int _rejected;
+    private string _lastRejection = "";
+    private string _waitingFor = "no sample came";
+    private double _zeroGuess;
+
+    internal PointWait(CalibrationSession session, CalibrationStep step, ICalibrationDialogue dialogue, TimeProvider time, GuardDesk desk)
+    {
+        _session = session;
+        _setup = session.Setup;
+        _step = step;
+        _dialogue = dialogue;
+        _time = time;
+        _desk = desk;
+        RecordedProbe probe = _setup.Probe;
+        _watch = new StabilityWatch(_setup.Waiting, new ConverterLimits(
+            probe.SignalResolution ?? double.NaN, probe.SignalLow ?? double.NaN, probe.SignalHigh ?? double.NaN));
+        _span = Fitting.Point(session.State.Points, CalibrationIds.SpanPoint);
+        _notBefore = session.State.Points.Count == 0 ? DateTimeOffset.MinValue : session.State.Points[^1].LastUtc;
+        _zeroGuess = session.Previous?.Result.Zero ?? 0;
+    }
+
+    internal async Task<RecordedPoint> RunAsync(SamplePump pump, CancellationToken cancellationToken)
+    {
+        using CancellationTokenSource waiting = CancellationTokenSource.CreateLinkedTokenSource(cancellationToken);
+        Task deadline = Task.Delay(TimeSpan.FromSeconds(_setup.Waiting.GiveUpAfterSeconds), _time, waiting.Token);
+        try
+        {
+            while (true)
+            {
+                SourceEvent? happened = await pump.NextAsync(deadline).ConfigureAwait(false);
+                cancellationToken.ThrowIfCancellationRequested();
+                if (happened == null)
+                {
+                    throw pump.HasEnded ? Failed("the source ended") : GaveUp();
+                }
+
+                if (await TakeAsync(happened, cancellationToken).ConfigureAwait(false))
+                {
+                    return PointMaker.FromWindow(CalibrationRun.RoleOf(_step), _setup, _watch);
+                }
+
+                if (deadline.IsCompleted)
+                {
+                    throw GaveUp();
+                }
+            }
+        }
+        finally
+        {
+            await waiting.CancelAsync().ConfigureAwait(false);
+        }
+    }
+
+    private async ValueTask<bool> TakeAsync(SourceEvent happened, CancellationToken cancellationToken)
+    {
+        switch (happened)
+        {
+            case RawSample sample:
+                return await TakeSampleAsync(sample, cancellationToken).ConfigureAwait(false);
+            case RejectedLine line:
+                _rejected++;
+                _lastRejection = line.Reason;
+                return false;
+            case SourceStateChanged change:
+                _dialogue.Say($"source: {change.Reason}");
+                if (change.State is SourceState.Lost)
+                {
+                    _watch.Restart();
+                }
+
+                return false;
+            default:
+                return false;
+        }
+    }
+
+    private async ValueTask<bool> TakeSampleAsync(RawSample sample, CancellationToken cancellationToken)
+    {
+        if (sample.TimeUtc <= _notBefore)
+        {
+            _waitingFor = Finding.Text($"sample times ({sample.TimeUtc:yyyy-MM-dd HH:mm:ss}Z) are not after the last point ({_notBefore:yyyy-MM-dd HH:mm:ss}Z): check the clock of the line");
+            return false;
+        }
+
+        _firstSeen ??= sample.TimeUtc;
+        if (_setup.Waiting.GiveUpAfterSeconds < (sample.TimeUtc - _firstSeen.Value).TotalSeconds)
+        {
+            throw GaveUp();
+        }
+
+        double? temperature = _setup.TypedTemperatureCelsius ?? sample.TemperatureCelsius;
+        double? pressure = _setup.Pressure.Hectopascal ?? sample.PressureHectopascal;
+        if (temperature is not double celsius || pressure is not double hectopascal)
+        {
+            _waitingFor = temperature == null
+                ? "the lines carry no temperature: name it in --line, or enter --temperature"
+                : "the lines carry no pressure: name it in --line, or enter --pressure";
+            return false;
+        }
+
+        if (!IsInPlace(sample.Signal))
+        {
+            _watch.Restart();
+            return false;
+        }
+
+        if (!_conditionsSeen)
+        {
+            // Looked at on the first sample, so that a wrong entry does not cost a whole window of waiting.
+            await LookAsync(celsius, sample.TemperatureCelsius, hectopascal, cancellationToken).ConfigureAwait(false);
+            _conditionsSeen = true;
+        }
+
+        if (!_watch.Add(sample.TimeUtc, sample.Signal, celsius, hectopascal))
+        {
+            _dialogue.Say("the clock of the line went backwards; the window begins anew");
+        }
+
+        return Judge(sample, hectopascal) && await AcceptAsync(sample, cancellationToken).ConfigureAwait(false);
+    }
+
+    private bool Judge(RawSample sample, double hectopascal)
+    {
+        if (!_watch.Judge(signal => MilligramsPerSignal(signal.Mean, hectopascal)))
+        {
+            return false;
+        }
+
+        double size = MilligramsPerSignal(_watch.Signal.Mean, hectopascal);
+        _dialogue.Report(new WaitProgress(
+            _step,
+            sample.TimeUtc,
+            (sample.TimeUtc - _firstSeen!.Value).TotalSeconds,
+            _watch.WindowCount,
+            _watch.Signal.SpanSeconds,
+            _watch.SecondsLeft(size),
+            _watch.Moving(size),
+            _watch.Signal.Mean,
+            _watch.Temperature.Mean));
+        RefuseDeadOrSaturated();
+        _waitingFor = _watch.IsFull ? "still moving: " + string.Join("; ", _watch.Moving(size)) : "the window was not full yet";
+        return _watch.Finding == StabilityFinding.Stable;
+    }
+
+    private async ValueTask<bool> AcceptAsync(RawSample sample, CancellationToken cancellationToken)
+    {
+        double celsius = _setup.TypedTemperatureCelsius ?? _watch.Temperature.Mean;
+        await LookAsync(celsius, sample.TemperatureCelsius, _setup.Pressure.Hectopascal ?? _watch.MeanPressure, cancellationToken).ConfigureAwait(false);
+        return true;
+    }
+
+    private Task LookAsync(double celsius, double? probeCelsius, double hectopascal, CancellationToken cancellationToken)
+    {
+        return _desk.PassAsync(ConditionGuards.All, _session.Situation(celsius, probeCelsius, hectopascal), aboutEntries: true, cancellationToken);
+    }
+
+    /// <summary>Whether the probe is where the step wants it, told by the signal alone.</summary>
+    private bool IsInPlace(double signal)
+    {
+        if (_span == null)
+        {
+            return true;
+        }
+
+        double share = signal / _span.Signal.Mean;
+        if (_step == CalibrationStep.Zero && _watch.IsEmpty && _setup.Waiting.ZeroEntryShare < share)
+        {
+            _waitingFor = Finding.Text($"waiting for the probe to be in the zero solution: its signal is still {Number.Fixed(100 * share, 0)} % of the 100 % point");
+            return false;
+        }
+
+        if (_step == CalibrationStep.AsLeft && share < _setup.Waiting.SpanReturnShare)
+        {
+            _waitingFor = Finding.Text($"waiting for the probe to be back at 100 %: its signal is {Number.Fixed(100 * share, 0)} % of the point as found");
+            return false;
+        }
+
+        return true;
+    }
+
+    /// <summary>Size of one unit of signal at the reference, mg/L; NaN where it has none.</summary>
+    private double MilligramsPerSignal(double meanSignal, double hectopascal)
+    {
+        if (_step == CalibrationStep.Zero && _span != null)
+        {
+            double below = _span.Signal.Mean - meanSignal;
+            return below == 0 ? double.NaN : _span.ReferenceMilligramsPerLitre / below;
+        }
+
+        double celsius = _setup.TypedTemperatureCelsius ?? _watch.Temperature.Mean;
+        Status status = OxygenEquilibrium.MilligramsPerLitre(_setup.Equation, celsius, _setup.Salinity.Value, hectopascal, RangeRule.Refuse, out double reference);
+        double above = meanSignal - _zeroGuess;
+        return status == Status.Ok && above != 0 ? reference / above : double.NaN;
+    }
+
+    private void RefuseDeadOrSaturated()
+    {
+        if (!_watch.IsFull)
+        {
+            return;
+        }
+
+        string unit = _setup.Probe.SignalUnit.Length == 0 ? "" : " " + _setup.Probe.SignalUnit;
+        if ((_watch.Finding & StabilityFinding.SignalDead) != 0)
+        {
+            throw new WorkFailedException($"{GuardNames.DeadInput}: the signal stays at {Number.Print(_watch.Signal.Mean)}{unit} without moving by a step of the converter; a dead input is perfectly stable: check plug, cable and power of the probe. {Kept}");
+        }
+
+        if ((_watch.Finding & StabilityFinding.SignalSaturated) != 0)
+        {
+            throw new WorkFailedException($"{GuardNames.SaturatedInput}: the signal touches the end of its range ({Number.Print(_watch.Signal.Minimum)} to {Number.Print(_watch.Signal.Maximum)}{unit} in the window): choose another range of the converter or check the probe. {Kept}");
+        }
+    }
+
+    private const string Kept = "What was taken so far is kept, and the same command goes on with it";
+
+    private WorkFailedException GaveUp()
+    {
+        return Failed(Finding.Text($"not steady within {Number.Print(_setup.Waiting.GiveUpAfterSeconds / 60)} min"));
+    }
+
+    private WorkFailedException Failed(string what)
+    {
+        string rejected = _rejected == 0 ? "" : Finding.Text($"; {_rejected} lines were not understood, the last one because {_lastRejection}");
+        return new WorkFailedException($"{CalibrationRun.RoleOf(_step)} point: {what}; {_waitingFor}{rejected}. {Kept}");
+    }
+}

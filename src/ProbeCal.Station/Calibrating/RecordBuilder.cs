@@ -1,0 +1,73 @@
+using System;
+using System.Collections.Generic;
+using System.Linq;
+using ProbeCal.Station.CalibrationLog;
+using ProbeCal.Station.Entry;
+
+namespace ProbeCal.Station.Calibrating;
+
+/// <summary>From the finished state to the record.</summary>
+internal static class RecordBuilder
+{
+    private static readonly string[] Formulas =
+    [
+        "oxygen in water-saturated air: 0.20946 (P - vapour pressure), vapour pressure by Benson and Krause 1980",
+        "station pressure against sea level: ICAO standard atmosphere",
+        "mean, trend and scatter by least squares; uncertainty by JCGM 100:2008",
+    ];
+
+    internal static CalibrationRecord Build(SessionState state, Fit fit, CalibrationRecord? previous, string software)
+    {
+        CalibrationSetup setup = state.Setup;
+        ProbeCalibration calibration = fit.Calibration ?? throw new InvalidOperationException("A record needs a fit.");
+        RecordedPoint slopePoint = state.Points.First(point => point.Role == fit.SlopeFrom);
+        List<RecordedLimit> limits = Judgement.Limits(setup, state.Points, calibration);
+        string[] reasons = Judgement.Reasons(limits);
+        RecordedContribution[] budget = Judgement.Budget(setup, slopePoint, fit.Zero, calibration);
+        return new CalibrationRecord
+        {
+            Simulated = setup.Simulated,
+            StartedUtc = state.StartedUtc,
+            CompletedUtc = state.Points.Max(static point => point.LastUtc),
+            By = setup.By,
+            Site = setup.Site,
+            Altitude = setup.Altitude,
+            Gas = "O2",
+            Probe = setup.Probe,
+            Method = setup.Method,
+            Readings = setup.Readings,
+            Source = setup.Source,
+            AirToWaterRatio = setup.AirToWaterRatio,
+            ReferenceState = new RecordedQuantity
+            {
+                Value = 1,
+                Unit = "1",
+                StandardUncertainty = setup.ReferenceStateRelative,
+                Source = "equilibrium taken as reached",
+                UncertaintySource = Judgement.ReferenceStateSource(setup),
+            },
+            Equation = EquationNames.NameOf(setup.Equation),
+            Formulas = Formulas,
+            Points = [.. state.Points],
+            SlopeFrom = fit.SlopeFrom,
+            Zero = fit.Zero,
+            PreviousCalibration = previous?.Id,
+            DropletCheck = setup.Method == CalibrationIds.WaterSaturatedAir ? state.DropletCheck ?? Droplets.NotChecked : Droplets.NotNeeded,
+            Result = new RecordedResult
+            {
+                Slope = calibration.Slope,
+                SlopeStandardUncertainty = Math.Abs(calibration.Slope) * Judgement.Combined(budget),
+                Zero = calibration.ZeroResponse,
+                ZeroStandardUncertainty = calibration.ZeroResponseUncertainty,
+                Pass = reasons.Length == 0,
+                Reasons = reasons,
+                DecisionRule = Judgement.DecisionRule,
+            },
+            Limits = [.. limits],
+            Findings = [.. state.Findings],
+            Budget = budget,
+            Software = software,
+            Remarks = setup.Remarks,
+        };
+    }
+}
