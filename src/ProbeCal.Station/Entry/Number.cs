@@ -141,7 +141,7 @@ public static class Number
 
         if (given[0] is '\u2212' or '\u2013')
         {
-            return "the minus sign is another character; write -" + given[1..];
+            return "the minus sign is another character; write -" + Wrong.Shown(given[1..]);
         }
 
         return "this is no number; write one with a point as decimal mark, for example 8.3";
@@ -157,13 +157,13 @@ public static class Number
             return null;
         }
 
-        string without = given.Replace(",", "", StringComparison.Ordinal);
+        string without = Wrong.Shown(given.Replace(",", "", StringComparison.Ordinal));
         if (given.Contains('.', StringComparison.Ordinal) || comma != given.LastIndexOf(','))
         {
             return "digits are not grouped here; write " + without;
         }
 
-        string point = given.Replace(',', '.');
+        string point = Wrong.Shown(given.Replace(',', '.'));
         return CouldBeGrouped(given, comma)
             ? "a comma is no decimal mark here and groups no digits; write " + point + " or " + without
             : "a comma is no decimal mark here; write " + point;

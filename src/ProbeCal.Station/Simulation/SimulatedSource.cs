@@ -23,6 +23,7 @@ public sealed class SimulatedSource : ISampleSource
     private readonly LineTemplate _template;
     private readonly TimeProvider _time;
     private readonly ProbeInWater _probe;
+    private readonly Lock _moving = new();
     private long _sequence;
 
     /// <summary>Makes the source; simulated time starts at the clock's.</summary>
@@ -43,16 +44,25 @@ public sealed class SimulatedSource : ISampleSource
     /// <inheritdoc/>
     public string Description => "simulated probe (nothing here is measured)";
 
-    /// <summary>Moves the probe to a place and leaves it there, whatever the script says.</summary>
+    /// <summary>Moves the probe to a place and leaves it there, whatever the script says. May be called while lines are read.</summary>
     public void Enter(SimulationPhase phase)
     {
-        _probe.Enter(phase);
+        lock (_moving)
+        {
+            _probe.Enter(phase);
+        }
     }
 
     /// <summary>Makes the next line at once, without waiting.</summary>
     public SimulatedLine Next()
     {
-        SimulatedTruth truth = _probe.Step(out SimulatedInstruments instruments);
+        SimulatedTruth truth;
+        SimulatedInstruments instruments;
+        lock (_moving)
+        {
+            truth = _probe.Step(out instruments);
+        }
+
         RawSample sample = new(truth.TimeUtc, "", instruments.SignalNanoampere)
         {
             TemperatureCelsius = instruments.TemperatureCelsius,
@@ -122,6 +132,6 @@ public sealed class SimulatedSource : ISampleSource
 
     private TimeSpan RealInterval()
     {
-        return TimeSpan.FromTicks(Math.Max(TimeSpan.TicksPerMillisecond, (long)(_settings.Interval.Ticks / _settings.Faster)));
+        return TimeSpan.FromTicks((long)(_settings.Interval.Ticks / _settings.Faster));
     }
 }

@@ -75,6 +75,11 @@ public sealed record SimulationSettings
             throw Wrong.Input(what, Number.Print(PressureHectopascal) + " hPa", "simulated air has from 550 to 1080 hPa");
         }
 
+        if (Faster != 0 && Interval / Faster < TimeSpan.FromMilliseconds(1))
+        {
+            throw Wrong.Input(what, Number.Print(Faster), "that would be more than 1000 lines a second; go slower, or write 0 to wait for nothing");
+        }
+
         return this;
     }
 }

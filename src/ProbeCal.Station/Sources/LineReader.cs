@@ -263,9 +263,7 @@ internal static class LineReader
     {
         if (field.Quantity is not QuantityKind kind)
         {
-            bool isNumber = Number.TryParse(text, out value, out problem);
-            value *= field.Scale;
-            return isNumber;
+            return Number.TryParse(text, out value, out problem) && TryScale(field, ref value, out problem);
         }
 
         value = double.NaN;
@@ -282,6 +280,13 @@ internal static class LineReader
 
         value = unit.ToCanonical(number * field.Scale);
         return true;
+    }
+
+    private static bool TryScale(LineField field, ref double value, [NotNullWhen(false)] out string? problem)
+    {
+        value *= field.Scale;
+        problem = double.IsFinite(value) ? null : "with its scale the number is too large";
+        return problem is null;
     }
 
     private static string? Outside(string text, double value, double lowest, double highest, string sentence)
