@@ -8,12 +8,14 @@ namespace ProbeCal;
 /// <remarks>
 /// Garcia, H.E., Gordon, L.I. (1992) Limnol. Oceanogr. 37(6), 1307–1312, doi:10.4319/lo.1992.37.6.1307, Eq. 8 with the
 /// Benson–Krause column of Table 1; erratum Limnol. Oceanogr. 38, 656 (1993): the term A3·Ts² printed in Eq. 8 is not part of
-/// it. Range freezing point to 40 °C, S 0–42, 0.5–1.1 atm. Accuracy ±0.1–0.3 % (from memory). The ITS-90 input is converted,
+/// it. Range freezing point (but not below −2 °C) to 40 °C, S 0–42, 0.5–1.1 atm. Accuracy ±0.1–0.3 % (from memory). The ITS-90 input is converted,
 /// as gsw does. The vapour and virial terms of the pressure factor are stated for 0–40 °C; below 0 °C they are continued, which changes the factor by less than 0.001 %.
 /// </remarks>
 public static class GarciaGordon1992
 {
-    /// <summary>Highest temperature, °C. The lowest is the freezing point at the given salinity.</summary>
+    /// <summary>Lowest temperature, °C, where the water is not frozen before: the end of the density and vapour formulas that go with the equation.</summary>
+    public const double LowestCelsius = -2.0;
+    /// <summary>Highest temperature, °C.</summary>
     public const double HighestCelsius = 40.0;
     /// <summary>Highest practical salinity.</summary>
     public const double HighestSalinity = 42.0;
@@ -33,7 +35,7 @@ public static class GarciaGordon1992
     private const double UpperKelvinOfScaling = 298.15;
 
     /// <summary>Concentration at equilibrium with water-saturated air.</summary>
-    /// <param name="celsius">Temperature on ITS-90, freezing point to 40 °C.</param>
+    /// <param name="celsius">Temperature on ITS-90, freezing point or −2 to 40 °C.</param>
     /// <param name="salinity">Practical salinity, 0–42.</param>
     /// <param name="pressureHectopascal">Absolute pressure at the water surface, 506.625–1114.575 hPa.</param>
     /// <param name="rule">Refuse or extrapolate outside the range.</param>
@@ -50,7 +52,7 @@ public static class GarciaGordon1992
     }
 
     /// <summary>How the equilibrium concentration answers to temperature, salinity and pressure.</summary>
-    /// <param name="celsius">Temperature on ITS-90, freezing point to 40 °C.</param>
+    /// <param name="celsius">Temperature on ITS-90, freezing point or −2 to 40 °C.</param>
     /// <param name="salinity">Practical salinity, 0–42.</param>
     /// <param name="pressureHectopascal">Absolute pressure at the water surface, 506.625–1114.575 hPa.</param>
     /// <param name="rule">Refuse or extrapolate outside the range.</param>
@@ -78,6 +80,7 @@ public static class GarciaGordon1992
     {
         Status salinityStatus = InputCheck.Salinity(salinity, HighestSalinity);
         double lowest = salinityStatus == Status.Ok ? FreezingPoint.Value(salinity) : 0.0;
+        if (lowest < LowestCelsius) { lowest = LowestCelsius; }
         Status status = InputCheck.Graver(InputCheck.Temperature(celsius, lowest, HighestCelsius), salinityStatus);
         return InputCheck.Graver(
             status,

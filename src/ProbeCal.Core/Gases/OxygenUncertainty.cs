@@ -19,7 +19,7 @@ public static class OxygenUncertainty
     private const double SalineReference = 40.0;
 
     /// <summary>The equation's own relative standard uncertainty: 0.1 % in fresh water, rising linearly to 0.2 % at salinity 40.</summary>
-    /// <param name="equation">Solubility equation. The two rest on the same data (0.02 % apart), so they share the figure.</param>
+    /// <param name="equation">Solubility equation. The two rest on the same data (0.03 % apart), so they share the figure.</param>
     /// <param name="salinity">Practical salinity, 0 to the highest of the equation.</param>
     /// <param name="rule">Refuse or extrapolate outside the range.</param>
     /// <param name="relative">Relative standard uncertainty, a fraction; NaN unless Ok or extrapolated.</param>

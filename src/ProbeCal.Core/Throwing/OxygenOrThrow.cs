@@ -100,7 +100,7 @@ public static class OxygenOrThrow
             _ => amount,
         };
         FormattableString allowed = equation == OxygenEquation.GarciaGordon1992
-            ? (FormattableString)$"freezing point to {GarciaGordon1992.HighestCelsius} °C, salinity 0 to {GarciaGordon1992.HighestSalinity}, {AirPressures()}"
+            ? (FormattableString)$"freezing point or {GarciaGordon1992.LowestCelsius} to {GarciaGordon1992.HighestCelsius} °C, salinity 0 to {GarciaGordon1992.HighestSalinity}, {AirPressures()}"
             : $"{BensonKrause1984.LowestCelsius} to {BensonKrause1984.HighestCelsius} °C, salinity 0 to {BensonKrause1984.HighestSalinity}, {AirPressures()}";
         string text = StatusParts.Input(status) == InputQuantity.Equation
             ? "1 (BensonKrause1984) or 2 (GarciaGordon1992)"

@@ -115,14 +115,14 @@ public class OxygenPropertyTests
         }, iter: Samples);
     }
 
-    /// <summary>The two equations rest on one data set: 0.022 % apart at most over the whole common range.</summary>
+    /// <summary>The two equations rest on one data set: 0.030 % apart at most over the whole common range, of which up to 0.015 % is the temperature scale.</summary>
     [Fact]
     public void TheTwoEquations_StayTogether()
     {
         Gen.Select(Celsius, Salinity, Pressure).Sample((t, s, p) =>
         {
             double ratio = Equilibrium(OxygenEquation.GarciaGordon1992, t, s, p) / Equilibrium(OxygenEquation.BensonKrause1984, t, s, p);
-            return Math.Abs(ratio - 1.0) < 0.00035;
+            return Math.Abs(ratio - 1.0) < 0.00031;
         }, iter: Samples);
     }
 

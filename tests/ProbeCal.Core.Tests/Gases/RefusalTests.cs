@@ -122,6 +122,8 @@ public class RefusalTests
         Assert.Equal(Status.TemperatureBelowRange, GarciaGordon1992.MicromolesPerKilogram(
             Math.BitDecrement(freezing), 35.0, 1013.25, RangeRule.Refuse, out double refused));
         Assert.True(double.IsNaN(refused));
+        Assert.Equal(Status.Ok, GarciaGordon1992.MicromolesPerKilogram(-2.0, 42.0, 1013.25, RangeRule.Refuse, out _));
+        Assert.Equal(Status.TemperatureBelowRange, GarciaGordon1992.MicromolesPerKilogram(-2.01, 42.0, 1013.25, RangeRule.Refuse, out _));
         Assert.Equal(Status.Ok, GarciaGordon1992.MicromolesPerKilogram(0.0, 0.0, 1013.25, RangeRule.Refuse, out _));
         Assert.Equal(Status.TemperatureBelowRange, GarciaGordon1992.MicromolesPerKilogram(-0.01, 0.0, 1013.25, RangeRule.Refuse, out _));
     }

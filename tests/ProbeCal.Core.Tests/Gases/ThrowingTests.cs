@@ -58,7 +58,7 @@ public class ThrowingTests
             Thread.CurrentThread.CurrentCulture = CultureInfo.GetCultureInfo("de-DE");
             Refused(Status.TemperatureAboveRange, "Temperature 40.5 is above the range; allowed: 0 to 40 °C, salinity 0 to 40, total pressure 506.625 to 1114.575 hPa, oxygen at most 1114.575 hPa",
                 () => OxygenOrThrow.MilligramsPerLitre(OxygenEquation.BensonKrause1984, 40.5, 0.0, 1000.0));
-            Refused(Status.SalinityBelowRange, "Salinity -1 is below the range; allowed: freezing point to 40 °C, salinity 0 to 42, total pressure 506.625 to 1114.575 hPa, oxygen at most 1114.575 hPa",
+            Refused(Status.SalinityBelowRange, "Salinity -1 is below the range; allowed: freezing point or -2 to 40 °C, salinity 0 to 42, total pressure 506.625 to 1114.575 hPa, oxygen at most 1114.575 hPa",
                 () => OxygenOrThrow.MicromolesPerKilogram(10.0, -1.0, 1000.0));
             Refused(Status.PressureNotFinite, "Pressure NaN is not a finite number; allowed: -2 to 40 °C, total pressure 506.625 to 1114.575 hPa, oxygen at most 1114.575 hPa",
                 () => OxygenOrThrow.PartialPressure(10.0, double.NaN));
