@@ -19,7 +19,7 @@ public static partial class Numerics
     /// <param name="x">Any double; the logarithm exists for positive ones.</param>
     /// <returns>ln x; +0 for 1; −∞ for ±0; +∞ for +∞; NaN for NaN and for every negative number.</returns>
     /// <remarks>
-    /// <para>Range: all positive doubles, subnormals included. Error below 1 ulp: by the derivation at most 0.8 ulp.</para>
+    /// <para>Range: all positive doubles, subnormals included. Error below 1 ulp: by the derivation at most 0.83 ulp.</para>
     /// <para>Method: x = 2^k·(1 + f), k·ln 2 with ln 2 in two parts, and for ln(1 + f) the series of the inverse hyperbolic
     /// tangent (M. Abramowitz and I. A. Stegun, Handbook of Mathematical Functions, 4.1.27) as a polynomial in s². From
     /// 2s = f − f²/2 + s·f²/2 the two leading terms need no division and are summed with their exact rests,
@@ -61,6 +61,8 @@ public static partial class Numerics
         double series = z * (((L1 + (L2 * z)) + (z2 * (L3 + (L4 * z)))) + (z4 * ((L5 + (L6 * z)) + (z2 * L7))));
         double halfSquare = 0.5 * (f * f);
 
+        // Bound, in units of 2^-54 where the result is just above 1/4 and the terms are largest: last rounding 0.5, halfSquare
+        // 0.13, rounding of s 0.07, of z and the series 0.05, of the small terms' product and sum 0.06, approximation 0.02.
         // Each sum's first operand is the larger one or zero, so that its rest is exact.
         double whole = k * Ln2High;
         double a = whole + f;
