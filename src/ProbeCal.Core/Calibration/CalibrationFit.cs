@@ -43,6 +43,42 @@ public static class CalibrationFit
         return Status.Ok;
     }
 
+    /// <summary>
+    /// Size of one unit of signal at the reference, in mg/L: what a stability limit in mg/L is compared with. For a first
+    /// calibration the slope is that of the window under judgement.
+    /// </summary>
+    /// <param name="model">The probe.</param>
+    /// <param name="slope">Response per hPa, positive.</param>
+    /// <param name="equation">Solubility equation.</param>
+    /// <param name="temperatureCelsius">Temperature of the reference, °C.</param>
+    /// <param name="pressureHectopascal">Absolute station pressure, hPa.</param>
+    /// <param name="salinity">Practical salinity; 0 in air.</param>
+    /// <param name="milligramsPerLitrePerSignal">mg/L per unit of signal; NaN unless Ok.</param>
+    /// <returns>The input at fault, or Ok.</returns>
+    public static Status SignalSize(
+        IProbeModel model,
+        double slope,
+        OxygenEquation equation,
+        double temperatureCelsius,
+        double pressureHectopascal,
+        double salinity,
+        out double milligramsPerLitrePerSignal)
+    {
+        milligramsPerLitrePerSignal = double.NaN;
+        Status status = model.ResponsePerSignal(temperatureCelsius, pressureHectopascal, RangeRule.Refuse, out double responsePerSignal);
+        if (status != Status.Ok) { return status; }
+        status = model.Gain(temperatureCelsius, RangeRule.Refuse, out double gain);
+        if (status != Status.Ok) { return status; }
+        status = AmperometricProbe.PartialPressure(responsePerSignal, 0.0, slope, 1.0, gain, out double hectopascal);
+        if (status != Status.Ok) { return status; }
+        status = OxygenEquilibrium.ConcentrationSensitivities(
+            equation, temperatureCelsius, salinity, pressureHectopascal, 1.0, RangeRule.Refuse,
+            out double _, out double _, out double _, out double milligramsPerHectopascal);
+        if (status != Status.Ok) { return status; }
+        milligramsPerLitrePerSignal = hectopascal * milligramsPerHectopascal;
+        return Status.Ok;
+    }
+
     /// <summary>The error of a probe as found at the 100 % point, with the slope and zero it came with.</summary>
     /// <param name="model">The probe.</param>
     /// <param name="slope">Slope of the calibration in use; 1 for a meter's display.</param>

@@ -114,6 +114,18 @@ public sealed class ZeroPoint
         PressureHectopascal = pressureHectopascal;
     }
 
+    /// <summary>
+    /// The zero of a probe whose zero was not read: signal 0, with <see cref="UncertaintyDefaults.AssumedZeroRelative"/> of the
+    /// signal at the 100 % point as its standard uncertainty.
+    /// </summary>
+    /// <param name="point">The 100 % point.</param>
+    public static ZeroPoint Assume(CalibrationPoint point)
+    {
+        double span = point.Signal < 0.0 ? -point.Signal : point.Signal;
+        return new ZeroPoint(
+            false, 0.0, UncertaintyDefaults.AssumedZeroRelative * span, point.TemperatureCelsius, point.PressureHectopascal);
+    }
+
     /// <summary>True when it was read in oxygen-free water.</summary>
     public bool IsMeasured { get; }
 

@@ -99,14 +99,9 @@ public static class PressurePlausibility
         out double milligramsPerLitre)
     {
         milligramsPerLitre = double.NaN;
-        Status status = OxygenEquilibrium.MilligramsPerLitre(
-            equation, temperatureCelsius, salinity, pressureHectopascal, RangeRule.Refuse, out double taken);
+        Status status = StandardAtmosphere.FromSeaLevel(pressureHectopascal, altitudeMetres, out double station);
         if (status != Status.Ok) { return status; }
-        status = StandardAtmosphere.FromSeaLevel(pressureHectopascal, altitudeMetres, out double station);
-        if (status != Status.Ok) { return status; }
-        status = OxygenEquilibrium.MilligramsPerLitre(equation, temperatureCelsius, salinity, station, RangeRule.Refuse, out double right);
-        if (status != Status.Ok) { return status; }
-        milligramsPerLitre = taken - right;
-        return Status.Ok;
+        return ExpectedEffect.ReferenceError(
+            equation, salinity, temperatureCelsius, station, temperatureCelsius, pressureHectopascal, out milligramsPerLitre);
     }
 }

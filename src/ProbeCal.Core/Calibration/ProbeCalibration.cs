@@ -96,6 +96,40 @@ public sealed class ProbeCalibration
         return Status.Ok;
     }
 
+    /// <summary>
+    /// One contribution to the relative uncertainty of <see cref="Slope"/>: relative sensitivity times standard uncertainty,
+    /// signed. The squares of all add up to that of <see cref="SlopeRelativeUncertainty"/>.
+    /// </summary>
+    /// <param name="source">Which contribution; 0 for those that belong to a reading.</param>
+    public double SlopeContribution(UncertaintySource source)
+    {
+        switch (source)
+        {
+            case UncertaintySource.ThermometerOffset: return -PerKelvinAtPoint * ThermometerOffsetUncertaintyKelvin;
+            case UncertaintySource.TemperatureAtCalibration: return -PerKelvinAtPoint * Point.TemperatureUncertaintyKelvin;
+            case UncertaintySource.PressureAtCalibration: return -PerHectopascalAtPoint * Point.PressureUncertaintyHectopascal;
+            case UncertaintySource.SignalAtCalibration: return PointResponseUncertainty / ResponseSpan;
+            case UncertaintySource.Zero: return -ZeroResponseUncertainty / ResponseSpan;
+            case UncertaintySource.TemperatureCoefficient: return -PerCoefficientAtPoint * TemperatureCoefficientUncertainty;
+            case UncertaintySource.AirToWaterRatio: return -Point.AirToWaterRatioUncertainty;
+            case UncertaintySource.ReferenceState: return -Point.ReferenceStateUncertainty;
+            default: return 0.0;
+        }
+    }
+
+    /// <summary>Combined standard uncertainty of <see cref="Slope"/>, relative.</summary>
+    public double SlopeRelativeUncertainty()
+    {
+        double squares = 0.0;
+        for (int i = 0; i < Reading.SourceCount; i++)
+        {
+            double contribution = SlopeContribution((UncertaintySource)i);
+            squares += contribution * contribution;
+        }
+
+        return Numerics.Sqrt(squares);
+    }
+
     private Status Fit()
     {
         double temperature = Point.TemperatureCelsius;

@@ -6,6 +6,12 @@ namespace ProbeCal;
 /// </summary>
 public sealed class WindowStatistics
 {
+    /// <summary>An empty window: no samples, everything else NaN.</summary>
+    public WindowStatistics()
+    {
+        Clear();
+    }
+
     /// <summary>Number of samples.</summary>
     public int Count { get; internal set; }
 

@@ -163,8 +163,8 @@ public sealed class MeterDisplay : IProbeModel
         if (InputCheck.NotFinite(response)) { return Status.PartialPressureNotFinite; }
         Status status = ResponsePerSignal(temperatureCelsius, pressureHectopascal, rule, out double scale);
         if (double.IsNaN(scale)) { return status; }
-        // No partial pressure per unit: air at the boiling point, which only extrapolation reaches.
-        if (scale == 0.0) { return Status.PressureBelowRange; }
+        // No air left beside the vapour: only extrapolation reaches it.
+        if (scale <= 0.0) { return Status.PressureBelowRange; }
         double value = response / scale;
         if (double.IsInfinity(value)) { return Status.PartialPressureAboveRange; }
         signal = value;
@@ -187,26 +187,33 @@ public sealed class MeterDisplay : IProbeModel
     /// <inheritdoc/>
     public Status Gain(double temperatureCelsius, RangeRule rule, out double gain)
     {
-        Status status = TemperatureCoefficient.Factor(
-            Form, Coefficient, ReferenceCelsius, LowestCelsius, HighestCelsius, temperatureCelsius, rule, out gain);
-        if (double.IsNaN(gain)) { return status; }
         if (hasOwnThermometer)
         {
-            gain = 1.0;
+            gain = double.NaN;
+            if (InputCheck.NotFinite(LowestCelsius) || InputCheck.NotFinite(HighestCelsius)) { return Status.CoefficientNotFinite; }
+            Status inRange = InputCheck.Temperature(temperatureCelsius, LowestCelsius, HighestCelsius);
+            if (!InputCheck.Refuses(inRange, rule)) { gain = 1.0; }
+            return inRange;
+        }
+
+        Status status = TemperatureCoefficient.Factor(
+            Form, Coefficient, ReferenceCelsius, LowestCelsius, HighestCelsius, temperatureCelsius, rule, out gain);
+        Status atSet = TemperatureCoefficient.Factor(
+            Form, Coefficient, ReferenceCelsius, LowestCelsius, HighestCelsius, TemperatureSetCelsius, rule, out double factorAtSet);
+        status = InputCheck.Graver(status, atSet);
+        if (double.IsNaN(gain) || double.IsNaN(factorAtSet))
+        {
+            gain = double.NaN;
             return status;
         }
 
-        Status atSet = TemperatureCoefficient.Factor(
-            Form, Coefficient, ReferenceCelsius, LowestCelsius, HighestCelsius, TemperatureSetCelsius, rule, out double factorAtSet);
-        if (double.IsNaN(factorAtSet))
-        {
-            gain = double.NaN;
-            return atSet;
-        }
-
-        // Factor gives no value that is not positive.
-        gain /= factorAtSet;
-        return status == Status.Ok ? atSet : status;
+        // Factor hands out nothing that is not positive, but the quotient of a tiny and a huge one may leave the numbers.
+        double ratio = gain / factorAtSet;
+        gain = double.NaN;
+        if (double.IsInfinity(ratio)) { return Status.CoefficientAboveRange; }
+        if (ratio <= 0.0) { return Status.CoefficientBelowRange; }
+        gain = ratio;
+        return status;
     }
 
     /// <inheritdoc/>

@@ -80,7 +80,7 @@ public sealed class Reading
         int start = (int)quantity * SourceCount;
         double squares = 0.0;
         for (int i = start; i < start + SourceCount; i++) { squares += contributions[i] * contributions[i]; }
-        uncertainties[(int)quantity] = Numerics.Sqrt(squares);
+        uncertainties[(int)quantity] = InputCheck.FiniteOrNaN(Numerics.Sqrt(squares));
     }
 
     internal void Clear()

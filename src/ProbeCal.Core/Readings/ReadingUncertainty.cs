@@ -96,7 +96,7 @@ internal static class ReadingUncertainty
         Put(reading, UncertaintySource.ReferenceState, partialPressure * point.ReferenceStateUncertainty);
         Put(reading, UncertaintySource.Stirring, -partialPressure * conditions.StirringUncertainty);
         reading.Combine(ReadingQuantity.PartialPressure);
-        return Status.Ok;
+        return double.IsNaN(reading.StandardUncertainty(ReadingQuantity.PartialPressure)) ? Status.UncertaintyAboveRange : Status.Ok;
     }
 
     private static void FillConcentrations(

@@ -1,0 +1,195 @@
+using System;
+using Xunit;
+
+namespace ProbeCal.Tests;
+
+/// <summary>What a bad input spoils, and what it leaves standing.</summary>
+public class CorrectionTests
+{
+    private static readonly ReadingQuantity[] All = Enum.GetValues<ReadingQuantity>();
+    private static readonly ReadingQuantity[] Concentrations =
+        [ReadingQuantity.MilligramsPerLitre, ReadingQuantity.MicromolesPerLitre, ReadingQuantity.MicromolesPerKilogram];
+
+    [Theory]
+    [InlineData(double.NaN)]
+    [InlineData(double.PositiveInfinity)]
+    [InlineData(double.NegativeInfinity)]
+    public void BadTemperature_SpoilsEverything(double temperature)
+    {
+        foreach (RangeRule rule in Enum.GetValues<RangeRule>())
+        {
+            Reading reading = Correct(50.0, temperature, 1000.0, 0.0, rule);
+            foreach (ReadingQuantity quantity in All) { AssertRefused(reading, quantity, Status.TemperatureNotFinite); }
+        }
+    }
+
+    [Theory]
+    [InlineData(double.NaN)]
+    [InlineData(double.PositiveInfinity)]
+    [InlineData(double.NegativeInfinity)]
+    public void BadSignal_SpoilsEverything(double signal)
+    {
+        Reading reading = Correct(signal, 15.0, 1000.0, 0.0, RangeRule.Extrapolate);
+        foreach (ReadingQuantity quantity in All) { AssertRefused(reading, quantity, Status.SignalNotFinite); }
+        Assert.Equal(Status.SignalNotFinite, reading.UncertaintyStatus);
+    }
+
+    [Theory]
+    [InlineData(double.NaN, Status.SalinityNotFinite)]
+    [InlineData(double.NegativeInfinity, Status.SalinityNotFinite)]
+    [InlineData(-0.1, Status.SalinityBelowRange)]
+    [InlineData(43.0, Status.SalinityAboveRange)]
+    public void BadSalinity_SpoilsOnlyConcentrations(double salinity, Status expected)
+    {
+        Reading good = Correct(50.0, 15.0, 1000.0, 0.0, RangeRule.Refuse);
+        Reading reading = Correct(50.0, 15.0, 1000.0, salinity, RangeRule.Refuse);
+        foreach (ReadingQuantity quantity in All)
+        {
+            if (Array.IndexOf(Concentrations, quantity) < 0) { AssertSame(good, reading, quantity); }
+            else { AssertRefused(reading, quantity, expected); }
+        }
+
+        Assert.Equal(Status.Ok, reading.UncertaintyStatus);
+    }
+
+    [Theory]
+    [InlineData(double.NaN, Status.PressureNotFinite)]
+    [InlineData(double.PositiveInfinity, Status.PressureNotFinite)]
+    [InlineData(300.0, Status.PressureBelowRange)]
+    [InlineData(1200.0, Status.PressureAboveRange)]
+    public void BadPressure_SpoilsOnlyPercentOfLocalPressure(double pressure, Status expected)
+    {
+        Reading good = Correct(50.0, 15.0, 1013.25, 0.0, RangeRule.Refuse);
+        Reading reading = Correct(50.0, 15.0, pressure, 0.0, RangeRule.Refuse);
+        AssertRefused(reading, ReadingQuantity.PercentLocal, expected);
+        AssertSame(good, reading, ReadingQuantity.PartialPressure);
+        AssertSame(good, reading, ReadingQuantity.PercentOneAtmosphere);
+        foreach (ReadingQuantity quantity in Concentrations)
+        {
+            Assert.Equal(Status.Ok, reading.StatusOf(quantity));
+            Assert.Equal(good.Value(quantity), reading.Value(quantity));
+            Assert.InRange(reading.StandardUncertainty(quantity) / good.StandardUncertainty(quantity), 1.0, 1.001);
+        }
+    }
+
+    [Fact]
+    public void OutsideTheFittedRange_IsRefused_OrComputedAndFlagged()
+    {
+        foreach (ReadingQuantity quantity in All)
+        {
+            AssertRefused(Correct(50.0, 40.5, 1000.0, 0.0, RangeRule.Refuse), quantity, Status.TemperatureAboveRange);
+            Reading reading = Correct(50.0, 40.5, 1000.0, 0.0, RangeRule.Extrapolate);
+            Assert.Equal(Status.TemperatureAboveRange, reading.StatusOf(quantity));
+            Assert.True(double.IsFinite(reading.Value(quantity)));
+            Assert.True(reading.StandardUncertainty(quantity) > 0.0);
+        }
+    }
+
+    [Fact]
+    public void AnoxicWater_GivesANegativeValue_NotAClippedOne()
+    {
+        Reading reading = Correct(Bench.Zero - 0.1, 15.0, 1000.0, 0.0, RangeRule.Refuse);
+        foreach (ReadingQuantity quantity in All)
+        {
+            Assert.Equal(Status.Ok, reading.StatusOf(quantity));
+            Assert.True(reading.Value(quantity) < 0.0);
+            Assert.True(reading.StandardUncertainty(quantity) > 0.0);
+        }
+    }
+
+    [Fact]
+    public void PartialPressureBeyondPureOxygen_HasNoConcentration()
+    {
+        Reading reading = Correct(1000.0, 15.0, 1000.0, 0.0, RangeRule.Refuse);
+        Assert.Equal(Status.Ok, reading.StatusOf(ReadingQuantity.PartialPressure));
+        AssertRefused(reading, ReadingQuantity.MilligramsPerLitre, Status.PartialPressureAboveRange);
+        AssertRefused(reading, ReadingQuantity.PercentLocal, Status.PartialPressureAboveRange);
+    }
+
+    [Fact]
+    public void BadUncertainty_LeavesTheValues()
+    {
+        ProbeCalibration calibration = Calibration();
+        var reading = new Reading();
+        Assert.Equal(Status.Ok, Correction.Correct(
+            calibration, Bench.Conditions(signalUncertainty: double.NaN), 50.0, 15.0, 1000.0, 0.0, RangeRule.Refuse, reading));
+        Assert.Equal(Status.UncertaintyNotFinite, reading.UncertaintyStatus);
+        Assert.True(double.IsFinite(reading.Value(ReadingQuantity.MilligramsPerLitre)));
+        Assert.True(double.IsNaN(reading.StandardUncertainty(ReadingQuantity.MilligramsPerLitre)));
+        Correction.Correct(
+            calibration, Bench.Conditions(pressure: -1.0), 50.0, 15.0, 1000.0, 0.0, RangeRule.Refuse, reading);
+        Assert.Equal(Status.UncertaintyBelowRange, reading.UncertaintyStatus);
+    }
+
+    [Fact]
+    public void ReusedReading_KeepsNothingOfTheOneBefore()
+    {
+        ProbeCalibration calibration = Calibration();
+        var reading = new Reading();
+        Correction.Correct(calibration, Bench.Conditions(), 50.0, 15.0, 1000.0, 0.0, RangeRule.Refuse, reading);
+        Correction.Correct(calibration, Bench.Conditions(), 50.0, 15.0, 1000.0, double.NaN, RangeRule.Refuse, reading);
+        AssertRefused(reading, ReadingQuantity.MilligramsPerLitre, Status.SalinityNotFinite);
+        Assert.True(double.IsNaN(reading.Contribution(UncertaintySource.Zero, ReadingQuantity.MilligramsPerLitre)));
+        Correction.Correct(calibration, Bench.Conditions(), 50.0, double.NaN, 1000.0, 0.0, RangeRule.Refuse, reading);
+        foreach (ReadingQuantity quantity in All) { AssertRefused(reading, quantity, Status.TemperatureNotFinite); }
+    }
+
+    [Fact]
+    public void GarciaGordon_GivesItsOwnContent()
+    {
+        ProbeCalibration calibration = Calibration();
+        double raw = Bench.Signal(Bench.Probe(), Bench.Slope, Bench.Zero, 1.0, 10.0, 1013.25, Bench.Air(10.0, 1013.25));
+        var reading = new Reading();
+        Correction.Correct(
+            calibration, Bench.Conditions(equation: OxygenEquation.GarciaGordon1992), raw, 10.0, 1013.25, 35.0, RangeRule.Refuse, reading);
+        GarciaGordon1992.MicromolesPerKilogram(10.0, 35.0, 1013.25, RangeRule.Refuse, out double expected);
+        Assert.Equal(1.0, reading.Value(ReadingQuantity.MicromolesPerKilogram) / expected, 12);
+    }
+
+    [Fact]
+    public void StirringMismatch_IsSeen()
+    {
+        CalibrationPoint stirred = Bench.WaterPoint(60.0, 20.0, 1013.25);
+        Assert.False(Water(Stirring.Stirred).IsStirringMismatch(stirred));
+        Assert.True(Water(Stirring.Still).IsStirringMismatch(stirred));
+        Assert.False(Water(Stirring.FlowInsensitive).IsStirringMismatch(stirred));
+        var air = new CalibrationPoint(
+            CalibrationMethod.WaterSaturatedAir, 60.0, 0.0, 20.0, 0.0, 1013.25, 0.0, Stirring.Still, 1.0, 1.0, 0.0, 0.0);
+        Assert.False(Water(Stirring.Stirred).IsStirringMismatch(air));
+        Assert.True(Water(Stirring.Still).IsStirringMismatch(air));
+    }
+
+    private static ReadingConditions Water(Stirring stirring)
+    {
+        return new ReadingConditions(OxygenEquation.BensonKrause1984, 0.0, true, 0.0, 0.0, 0.0, 0.0, stirring, 1.0, 0.0);
+    }
+
+    private static ProbeCalibration Calibration()
+    {
+        double signal = Bench.Signal(Bench.Probe(), Bench.Slope, Bench.Zero, 1.0, 20.0, 1013.25, Bench.Air(20.0, 1013.25));
+        return Bench.Calibrate(
+            Bench.Probe(), Bench.WaterPoint(signal, 20.0, 1013.25, 0.05, 0.03, 0.8, 0.0075), new ZeroPoint(true, Bench.Zero, 0.02, 20.0, 1013.25), 0.1, 0.00024);
+    }
+
+    private static Reading Correct(double signal, double temperature, double pressure, double salinity, RangeRule rule)
+    {
+        var reading = new Reading();
+        Correction.Correct(
+            Calibration(), Bench.Conditions(0.05, true, 0.0, 0.03, 0.8, 0.25, 0.01), signal, temperature, pressure, salinity, rule, reading);
+        return reading;
+    }
+
+    private static void AssertRefused(Reading reading, ReadingQuantity quantity, Status expected)
+    {
+        Assert.Equal(expected, reading.StatusOf(quantity));
+        Assert.True(double.IsNaN(reading.Value(quantity)));
+        Assert.True(double.IsNaN(reading.StandardUncertainty(quantity)));
+    }
+
+    private static void AssertSame(Reading expected, Reading actual, ReadingQuantity quantity)
+    {
+        Assert.Equal(Status.Ok, actual.StatusOf(quantity));
+        Assert.Equal(expected.Value(quantity), actual.Value(quantity));
+        Assert.Equal(expected.StandardUncertainty(quantity), actual.StandardUncertainty(quantity));
+    }
+}
