@@ -75,7 +75,9 @@ public static class CalibrationFit
             equation, temperatureCelsius, salinity, pressureHectopascal, 1.0, RangeRule.Refuse,
             out double _, out double _, out double _, out double milligramsPerHectopascal);
         if (status != Status.Ok) { return status; }
-        milligramsPerLitrePerSignal = hectopascal * milligramsPerHectopascal;
+        double size = hectopascal * milligramsPerHectopascal;
+        if (double.IsInfinity(size)) { return Status.SlopeBelowRange; }
+        milligramsPerLitrePerSignal = size;
         return Status.Ok;
     }
 
@@ -118,6 +120,7 @@ public static class CalibrationFit
             response, zeroResponse, slope, point.FlowFactor * point.AirToWaterRatio, gain, out double found);
         if (status != Status.Ok) { return status; }
         double relative = (found - reference) / reference;
+        if (double.IsInfinity(relative * concentration) || double.IsInfinity(100.0 * relative)) { return Status.SignalAboveRange; }
         milligramsPerLitre = relative * concentration;
         percent = 100.0 * relative;
         return Status.Ok;

@@ -208,10 +208,9 @@ public static class TemperatureCoefficient
                 double referenceKelvin = referenceCelsius + ZeroCelsius;
                 if (referenceKelvin <= 0.0) { return Status.CoefficientBelowRange; }
                 if (kelvin <= 0.0) { return Status.TemperatureBelowRange; }
-                // 1/Tref − 1/T as one quotient: no cancellation near the reference. A product of two tiny temperatures could
-                // underflow to zero, and a division by zero throws on the device.
+                // 1/Tref − 1/T as one quotient: no cancellation near the reference. A positive sum with 273.15 is at least a unit
+                // in its last place, 6e-14, so the product cannot underflow to zero.
                 double denominator = GasConstant * kelvin * referenceKelvin;
-                if (denominator == 0.0) { return Status.TemperatureBelowRange; }
                 value = Numerics.Exp(coefficient * (difference / denominator));
                 break;
         }
