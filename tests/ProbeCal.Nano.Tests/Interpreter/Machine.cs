@@ -93,6 +93,12 @@ internal sealed partial class Machine
         return Decoded(MethodOf(definition));
     }
 
+    /// <summary>Whether a method has been called, or decoded for another reason.</summary>
+    public bool WasCalled(MethodDefinition definition)
+    {
+        return methods.TryGetValue(definition, out InterpretedMethod? method) && method.Code != null;
+    }
+
     private DecodedInstruction[] Decoded(InterpretedMethod method)
     {
         if (method.Code == null)
