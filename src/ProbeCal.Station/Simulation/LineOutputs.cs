@@ -110,6 +110,7 @@ public sealed class TcpOutput : ILineOutput
     private readonly TcpListener _listener;
     private readonly List<Socket> _clients = [];
     private readonly CancellationTokenSource _stop = new();
+    private readonly TaskCompletionSource _letIn = new(TaskCreationOptions.RunContinuationsAsynchronously);
     private readonly Task _accepting;
 
     private TcpOutput(TcpListener listener)
@@ -123,6 +124,12 @@ public sealed class TcpOutput : ILineOutput
 
     /// <inheritdoc/>
     public string Description => FormattableString.Invariant($"TCP port {Port} on this machine; listen with --source tcp:127.0.0.1:{Port}");
+
+    /// <summary>Completes when the first client is in and gets the lines from now on.</summary>
+    public Task ClientLetInAsync()
+    {
+        return _letIn.Task;
+    }
 
     /// <summary>Listens on the loopback address only.</summary>
     /// <param name="what">The option that the port was given for.</param>
@@ -190,6 +197,8 @@ public sealed class TcpOutput : ILineOutput
                 {
                     _clients.Add(client);
                 }
+
+                _letIn.TrySetResult();
             }
             catch (Exception fault) when (fault is OperationCanceledException or SocketException)
             {

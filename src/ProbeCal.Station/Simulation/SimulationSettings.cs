@@ -62,22 +62,22 @@ public sealed record SimulationSettings
     {
         if (!(1 <= TemperatureCelsius && TemperatureCelsius <= 38))
         {
-            throw Wrong.Input(what, Number.Print(TemperatureCelsius) + " C", "simulated water is from 1 to 38 C, so that day and night stay within the equations");
+            throw Wrong.Input(what + " temperature", Number.Print(TemperatureCelsius) + " C", "simulated water is from 1 to 38 C, so that day and night stay within the equations");
         }
 
         if (!(0 <= Salinity && Salinity <= 40))
         {
-            throw Wrong.Input(what, Number.Print(Salinity), "simulated water has a salinity from 0 to 40");
+            throw Wrong.Input(what + " salinity", Number.Print(Salinity), "simulated water has a salinity from 0 to 40");
         }
 
         if (!(550 <= PressureHectopascal && PressureHectopascal <= 1080))
         {
-            throw Wrong.Input(what, Number.Print(PressureHectopascal) + " hPa", "simulated air has from 550 to 1080 hPa");
+            throw Wrong.Input(what + " pressure", Number.Print(PressureHectopascal) + " hPa", "simulated air has from 550 to 1080 hPa");
         }
 
         if (Faster != 0 && Interval / Faster < TimeSpan.FromMilliseconds(1))
         {
-            throw Wrong.Input(what, Number.Print(Faster), "that would be more than 1000 lines a second; go slower, or write 0 to wait for nothing");
+            throw Wrong.Input(what + " faster", Number.Print(Faster), "that would be more than 1000 lines a second; go slower, or write 0 to wait for nothing");
         }
 
         return this;

@@ -44,7 +44,6 @@ internal sealed class SerialOpener(SerialAddress address, ILogger logger) : IByt
         SerialPort port = new(device, address.Baud, ParityOf(address.Parity), address.DataBits, StopBitsOf(address.StopBits))
         {
             Handshake = HandshakeOf(address.Flow),
-            DtrEnable = address.DataTerminalReady,
         };
         try
         {
@@ -86,7 +85,7 @@ internal sealed class SerialOpener(SerialAddress address, ILogger logger) : IByt
     {
         try
         {
-            // Set again although Open has tried: Open passes over a refusal in silence.
+            // After the opening, for a port that refuses DTR cannot be opened with DTR set; the system raises both while opening.
             if (address.DataTerminalReady)
             {
                 port.DtrEnable = true;
