@@ -2,6 +2,7 @@ using System;
 using System.Collections.Generic;
 using System.Diagnostics;
 using System.Globalization;
+using System.IO;
 using System.Linq;
 using System.Text;
 using ProbeCal.Nano.Tests.Interpreter;
@@ -38,6 +39,11 @@ public sealed class CampaignRun
         Seconds = Stopwatch.GetElapsedTime(start).TotalSeconds;
         NeverCalled = DeviceAssembly.Nano.MainModule.GetTypes().Where(t => t.BaseType?.FullName != "System.Attribute")
             .SelectMany(t => t.Methods).Where(m => m.HasBody && !machine.WasCalled(m)).Select(m => m.DeclaringType.Name + "." + m.Name).ToList();
+        if (Environment.GetEnvironmentVariable("PROBECAL_LOG_DIR") is { Length: > 0 } folder)
+        {
+            Directory.CreateDirectory(folder);
+            File.WriteAllText(Path.Combine(folder, "device-campaign.log"), Summary());
+        }
     }
 
     /// <summary>10,000 in the ordinary run; ten times as many with PROBECAL_FULL=1.</summary>

@@ -20,6 +20,10 @@ internal sealed partial class Machine
         while (true)
         {
             ref readonly DecodedInstruction i = ref code[next++];
+            if (counts != null)
+            {
+                counts[(int)i.Operation]++;
+            }
             switch (i.Operation)
             {
                 case Operation.Constant: f[i.Target].I = i.Immediate; break;

@@ -26,6 +26,7 @@ internal sealed partial class Machine
     private readonly bool nanOrdersAsGreater;
     private readonly bool infinitiesCompareEqual;
     private readonly bool conversionsRefused;
+    private long[]? counts;
     private int initialisersRunning;
 
     public Machine(IEnumerable<TypeDefinition> program, Deviations deviations)
@@ -85,6 +86,24 @@ internal sealed partial class Machine
         arguments.CopyTo(slots.AsSpan(1));
         Run(MethodOf(constructor), 0);
         return created;
+    }
+
+    /// <summary>Calls a method once and counts its operations.</summary>
+    public OperationCount Count(MethodDefinition definition, ReadOnlySpan<Value> arguments)
+    {
+        counts = new long[256];
+        try
+        {
+            Call(definition, arguments);
+            long divisions = counts[(int)Operation.DivideDouble] + counts[(int)Operation.DivideDoubleOrThrow];
+            long others = counts[(int)Operation.AddDouble] + counts[(int)Operation.SubtractDouble] + counts[(int)Operation.MultiplyDouble]
+                + counts[(int)Operation.NegateDouble] + counts[(int)Operation.RemainderDouble] + counts[(int)Operation.RemainderDoubleOrThrow];
+            return new OperationCount(divisions + others, divisions, counts[(int)Operation.Call] + counts[(int)Operation.CallVirtual], counts.Sum());
+        }
+        finally
+        {
+            counts = null;
+        }
     }
 
     /// <summary>Decodes a method without calling it, to see that every instruction in it is known.</summary>
