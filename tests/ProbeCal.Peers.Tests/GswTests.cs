@@ -76,7 +76,7 @@ public class GswTests(ITestOutputHelper output)
         Assert.InRange(worst, 0.0, allowed);
     }
 
-    /// <summary>The freezing point against the peer's (air-free) one; the old formula is stated to 0.004 K.</summary>
+    /// <summary>The freezing point against the peer's for air-saturated water; the old formula is stated to 0.004 K.</summary>
     [SkippableFact]
     public void FreezingPoint_StaysBesideThePeer()
     {
