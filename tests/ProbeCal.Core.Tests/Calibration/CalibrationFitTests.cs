@@ -1,6 +1,7 @@
+using ProbeCal.Core.Tests.Readings;
 using Xunit;
 
-namespace ProbeCal.Tests;
+namespace ProbeCal.Core.Tests.Calibration;
 
 public class CalibrationFitTests
 {

@@ -1,7 +1,8 @@
 using System;
+using ProbeCal.Core.Tests.Readings;
 using Xunit;
 
-namespace ProbeCal.Tests;
+namespace ProbeCal.Core.Tests.Calibration;
 
 /// <summary>Limits, plausible pressures and the size of usual slips.</summary>
 public class JudgementTests

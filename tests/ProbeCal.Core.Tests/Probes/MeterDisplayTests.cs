@@ -1,6 +1,7 @@
+using ProbeCal.Core.Tests.Readings;
 using Xunit;
 
-namespace ProbeCal.Tests;
+namespace ProbeCal.Core.Tests.Probes;
 
 public class MeterDisplayTests
 {

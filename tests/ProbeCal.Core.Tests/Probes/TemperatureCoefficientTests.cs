@@ -1,7 +1,7 @@
 using System;
 using Xunit;
 
-namespace ProbeCal.Tests;
+namespace ProbeCal.Core.Tests.Probes;
 
 public class TemperatureCoefficientTests
 {

@@ -1,6 +1,6 @@
 using Xunit;
 
-namespace ProbeCal.Tests;
+namespace ProbeCal.Core.Tests.Readings;
 
 /// <summary>An invented probe and its calibration, the common ground of the tests of this folder.</summary>
 internal static class Bench

@@ -4,7 +4,7 @@ using System.Linq;
 using System.Reflection;
 using Xunit;
 
-namespace ProbeCal.Tests;
+namespace ProbeCal.Core.Tests.Readings;
 
 /// <summary>
 /// Every public static function of these rooms that takes plain numbers gets NaN and both infinities in each of them: it must

@@ -1,6 +1,6 @@
 using Xunit;
 
-namespace ProbeCal.Tests;
+namespace ProbeCal.Core.Tests.Readings;
 
 /// <summary>Forward model, calibration and correction undo each other: what the simulated water held comes out again.</summary>
 public class ClosedLoopTests

@@ -1,7 +1,7 @@
 using System;
 using Xunit;
 
-namespace ProbeCal.Tests;
+namespace ProbeCal.Core.Tests.Readings;
 
 /// <summary>What a bad input spoils, and what it leaves standing.</summary>
 public class CorrectionTests

@@ -1,9 +1,8 @@
 using System;
-using System.Globalization;
 using Xunit;
 using Xunit.Abstractions;
 
-namespace ProbeCal.Tests;
+namespace ProbeCal.Core.Tests.Readings;
 
 /// <summary>
 /// The analytic uncertainty against simulated calibrations and readings (the idea of JCGM 101): its size, and how often the truth lies within k = 2.
@@ -39,11 +38,11 @@ public class MonteCarloTests
     public void AnalyticUncertainty_AgreesWithSimulation(string scenario)
     {
         SimulatedChain chain = Chain(scenario);
-        int trials = Campaign.IsFull ? FullTrials : OrdinaryTrials;
-        Campaign.Print(output, trials);
+        var campaign = new Campaign(output, "reading-uncertainty " + scenario.Replace('/', ' '), OrdinaryTrials, FullTrials);
+        int trials = campaign.Count;
         var reading = new Reading();
         // Another stretch of random numbers for each scenario.
-        Random random = Campaign.Random(scenario.Length + (257 * scenario[^1]));
+        var random = new Random(unchecked((campaign.Seed * 397) ^ (scenario.Length + (257 * scenario[^1]))));
         double[] squares = new double[Reading.QuantityCount];
         int[] covered = new int[Reading.QuantityCount];
         for (int trial = 0; trial < trials; trial++)
@@ -67,12 +66,13 @@ public class MonteCarloTests
             double analytic = reading.StandardUncertainty(quantity);
             double simulated = Math.Sqrt(squares[i] / trials);
             double coverage = (double)covered[i] / trials;
-            output.WriteLine(string.Create(
-                CultureInfo.InvariantCulture, $"{quantity}: value {reading.Value(quantity):G6}, analytic u {analytic:G4}, simulated {simulated:G4}, coverage {coverage:P1}"));
+            campaign.Say($"{quantity}: value {reading.Value(quantity):G6}, analytic u {analytic:G4}, simulated {simulated:G4}, coverage {100.0 * coverage:F1} %");
             Assert.Equal(0.0, none[i] / Math.Max(1.0, Math.Abs(reading.Value(quantity))), 10);
             Assert.InRange(simulated / analytic, 1.0 - tolerance, 1.0 + tolerance);
             Assert.InRange(coverage, 0.93, 0.99);
         }
+
+        campaign.Close();
     }
 
     [Fact]

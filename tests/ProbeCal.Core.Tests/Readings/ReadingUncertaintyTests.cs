@@ -1,7 +1,7 @@
 using System;
 using Xunit;
 
-namespace ProbeCal.Tests;
+namespace ProbeCal.Core.Tests.Readings;
 
 /// <summary>Every contribution against a difference quotient of the whole chain, calibration and correction together.</summary>
 public class ReadingUncertaintyTests

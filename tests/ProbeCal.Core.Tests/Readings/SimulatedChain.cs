@@ -1,7 +1,7 @@
 using System;
 using Xunit;
 
-namespace ProbeCal.Tests;
+namespace ProbeCal.Core.Tests.Readings;
 
 /// <summary>
 /// One way of calibrating and reading, with known truth and known uncertainties: draws the errors of every input, calibrates
@@ -42,8 +42,8 @@ internal sealed class SimulatedChain
     /// <returns>Deviation from the truth for each quantity; the reading keeps value and uncertainty.</returns>
     public double[] Run(Random? random, Reading reading)
     {
-        double Normal() => random is null ? 0.0 : Campaign.Gaussian(random);
-        double Flat() => random is null ? 0.0 : Campaign.Rectangular(random);
+        double Normal() => random is null ? 0.0 : Draw.Gaussian(random);
+        double Flat() => random is null ? 0.0 : Draw.Rectangular(random);
 
         double offsetAtPoint = UOffset * Flat();
         double offset = SameThermometer ? offsetAtPoint : UOffset * Flat();
