@@ -2,7 +2,10 @@ using System;
 using System.Collections.Generic;
 using System.IO;
 using System.Linq;
+using System.Reflection.Metadata.Ecma335;
+using System.Reflection.PortableExecutable;
 using Mono.Cecil;
+using Mono.Cecil.Cil;
 using ProbeCal.Nano.Tests.Gate;
 using Xunit;
 
@@ -39,11 +42,17 @@ public class GateTests
         }
     }
 
+    /// <summary>The device's offsets into code, strings and signatures are 16 bits wide; a quarter is kept free.</summary>
     [Fact]
     public void The_device_assembly_stays_well_below_the_64_KB_that_its_offsets_reach()
     {
+        const int Most = 48 * 1024;
         int code = DeviceAssembly.Nano.MainModule.GetTypes().SelectMany(t => t.Methods).Where(m => m.HasBody).Sum(m => m.Body.CodeSize);
-        Assert.InRange(code, 1, 48 * 1024);
+        Assert.InRange(code, 1, Most);
+        using var reader = new PEReader(File.OpenRead(Path.Combine(AppContext.BaseDirectory, "device", "ProbeCal.Nano.dll")));
+        System.Reflection.Metadata.MetadataReader metadata = System.Reflection.Metadata.PEReaderExtensions.GetMetadataReader(reader);
+        Assert.InRange(metadata.GetHeapSize(HeapIndex.String) + metadata.GetHeapSize(HeapIndex.UserString), 1, Most);
+        Assert.InRange(metadata.GetHeapSize(HeapIndex.Blob), 1, Most);
     }
 
     [Fact]
@@ -122,9 +131,61 @@ public class GateTests
     }
 
     [Fact]
+    public void A_method_longer_than_a_branch_reaches_is_refused()
+    {
+        Assert.Contains(IlGate.Check([Crafted(il =>
+        {
+            for (int n = 0; n < 32768; n++)
+            {
+                il.Emit(OpCodes.Nop);
+            }
+            il.Emit(OpCodes.Ret);
+        })]), breach => breach.Rule == "size");
+    }
+
+    [Fact]
+    public void A_switch_of_more_cases_than_a_byte_counts_is_refused()
+    {
+        Assert.Contains(IlGate.Check([Crafted(il =>
+        {
+            Instruction end = il.Create(OpCodes.Ret);
+            il.Emit(OpCodes.Ldc_I4_0);
+            il.Emit(OpCodes.Switch, Enumerable.Repeat(end, 256).ToArray());
+            il.Append(end);
+        })]), breach => breach.Rule == "opcode");
+    }
+
+    [Fact]
+    public void What_the_gate_does_not_know_it_refuses()
+    {
+        Assert.Contains(IlGate.Check([Crafted(il =>
+        {
+            il.Emit(OpCodes.Arglist);
+            il.Emit(OpCodes.Ldobj, il.Body.Method.Module.TypeSystem.Double);
+            il.Emit(OpCodes.Pop);
+            il.Emit(OpCodes.Ret);
+        })]), breach => breach.Rule == "unknown");
+    }
+
+    [Fact]
     public void No_rule_fires_on_code_that_keeps_them_all()
     {
         TypeDefinition type = DeviceAssembly.Tests.MainModule.GetType("ProbeCal.Nano.Tests.Fixtures.Keeping");
         Assert.Empty(IlGate.Check([type]));
+    }
+
+    /// <summary>A static class with one method, its IL written here: no compiler would write it.</summary>
+    private static TypeDefinition Crafted(Action<ILProcessor> body)
+    {
+        ModuleDefinition module = ModuleDefinition.CreateModule("crafted", ModuleKind.Dll);
+        var type = new TypeDefinition("", "Crafted", TypeAttributes.Abstract | TypeAttributes.Sealed, module.TypeSystem.Object);
+        var method = new MethodDefinition("Run", MethodAttributes.Static, module.TypeSystem.Void);
+        module.Types.Add(type);
+        type.Methods.Add(method);
+        body(method.Body.GetILProcessor());
+        var stream = new MemoryStream();
+        module.Write(stream);
+        stream.Position = 0;
+        return ModuleDefinition.ReadModule(stream).GetType("Crafted");
     }
 }
