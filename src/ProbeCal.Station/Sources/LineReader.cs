@@ -1,5 +1,4 @@
 using System;
-using System.Diagnostics.CodeAnalysis;
 using System.Text;
 using ProbeCal.Station.Entry;
 
@@ -8,15 +7,6 @@ namespace ProbeCal.Station.Sources;
 /// <summary>Holds a line against a template. Works from left to right without going back, so its time grows with the line only.</summary>
 internal static class LineReader
 {
-    /// <summary>°C. Water is liquid between these; what is outside is no water temperature, whatever the unit.</summary>
-    private const double LowestTemperature = -5, HighestTemperature = 100;
-
-    /// <summary>hPa. Wider than any air pressure at a lake, narrow enough to catch kPa, psi, inHg, bar and Pa without their name.</summary>
-    private const double LowestPressure = 300, HighestPressure = 1300;
-
-    /// <summary>Practical salinity. A sensor in fresh water may read a little below 0; no natural brine is above 300.</summary>
-    private const double LowestSalinity = -1, HighestSalinity = 300;
-
     internal static SourceEvent Read(LineTemplate template, string line, DateTimeOffset receivedUtc)
     {
         Fields fields = new();
@@ -237,62 +227,24 @@ internal static class LineReader
             return null;
         }
 
-        if (!TryValue(field, text, out double value, out string? problem))
-        {
-            return Wrong.Shown(text) + ": " + problem;
-        }
-
+        string? reason = LineValue.Read(field, text, out double value);
         switch (field.Kind)
         {
             case LineFieldKind.Signal:
                 fields.Signal = value;
-                return null;
+                break;
             case LineFieldKind.Temperature:
                 fields.Temperature = value;
-                return Outside(text, value, LowestTemperature, HighestTemperature, "°C is no temperature of water");
+                break;
             case LineFieldKind.Pressure:
                 fields.Pressure = value;
-                return Outside(text, value, LowestPressure, HighestPressure, "hPa is no air pressure; name the unit that the line gives, for example {pressure:mmHg}");
+                break;
             default:
                 fields.Salinity = value;
-                return Outside(text, value, LowestSalinity, HighestSalinity, "is no practical salinity");
-        }
-    }
-
-    private static bool TryValue(LineField field, string text, out double value, [NotNullWhen(false)] out string? problem)
-    {
-        if (field.Quantity is not QuantityKind kind)
-        {
-            return Number.TryParse(text, out value, out problem) && TryScale(field, ref value, out problem);
+                break;
         }
 
-        value = double.NaN;
-        if (!Quantity.TrySplit(kind, text, field.Unit, out double number, out QuantityUnit? unit, out problem))
-        {
-            return false;
-        }
-
-        if (field.UnitText is not null && unit != field.Unit)
-        {
-            problem = $"the line says {unit.Name} and the template {field.Unit!.Name}; one of them is wrong";
-            return false;
-        }
-
-        value = unit.ToCanonical(number * field.Scale);
-        return true;
-    }
-
-    private static bool TryScale(LineField field, ref double value, [NotNullWhen(false)] out string? problem)
-    {
-        value *= field.Scale;
-        problem = double.IsFinite(value) ? null : "with its scale the number is too large";
-        return problem is null;
-    }
-
-    private static string? Outside(string text, double value, double lowest, double highest, string sentence)
-    {
-        // Written so that NaN and infinity, which a scale can produce, are outside too.
-        return lowest <= value && value <= highest ? null : $"{Wrong.Shown(text)}: {Number.Print(value)} {sentence}";
+        return reason;
     }
 
     private static string? TakeTime(Fields fields)

@@ -196,7 +196,7 @@ public class QuantityTests
         ];
         Gen.Select(Gen.Double, Gen.Int[0, kinds.Length - 1]).Where(pair => double.IsFinite(pair.Item1)).Sample(
             (value, kind) => Quantity.Parse(kinds[kind], "x", Quantity.Print(kinds[kind], value)) == value,
-            iter: 20_000);
+            iter: Fuzz.Count(200_000));
     }
 
     [Fact]
@@ -222,7 +222,7 @@ public class QuantityTests
         {
             bool good = Quantity.TryParse(QuantityKind.Pressure, text, out double value, out string? problem);
             return good ? double.IsFinite(value) && problem is null : double.IsNaN(value) && !string.IsNullOrEmpty(problem);
-        }, iter: 20_000);
+        }, iter: Fuzz.Count(200_000));
     }
 
     [Theory]

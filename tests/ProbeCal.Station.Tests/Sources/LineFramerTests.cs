@@ -4,6 +4,7 @@ using System.Linq;
 using System.Text;
 using CsCheck;
 using ProbeCal.Station.Sources;
+using ProbeCal.Station.Tests.Entry;
 using Xunit;
 
 namespace ProbeCal.Station.Tests.Sources;
@@ -60,18 +61,20 @@ public class LineFramerTests
         Assert.Equal("a", Frame(new LineFramer(false), [[0xEF, 0xBB, 0xBF, (byte)'a', (byte)'\n']])[0].Text);
     }
 
-    /// <summary>However a stream of any bytes is cut into reads, the lines are the same and none is longer than the cap.</summary>
+    /// <summary>However a stream of any bytes is cut into reads, the lines are the same, none is longer than the cap, and each gives a sample or a reason.</summary>
     [Fact]
     public void AnyBytes_InAnyPiecesGiveTheSameLines()
     {
+        LineTemplate template = LineTemplate.Parse("l", "{signal},{}");
         Gen<byte> some = Gen.Frequency((6, Gen.Byte), (1, Gen.Const((byte)'\n')), (1, Gen.Const((byte)'\r')));
-        Gen.Select(some.Array[0, 3000], Gen.Int[1, 400], Gen.Bool).Sample((bytes, piece, middle) =>
+        Gen.Select(some.Array[0, 3000], Gen.Int[5, 400], Gen.Bool).Sample((bytes, piece, middle) =>
         {
             List<FramedLine> whole = Frame(new LineFramer(middle), [bytes]);
             List<FramedLine> pieces = Frame(new LineFramer(middle), bytes.Chunk(piece));
             int ends = bytes.Count(b => b is (byte)'\n' or (byte)'\r');
-            return whole.SequenceEqual(pieces) && whole.All(line => line.Text.Length <= LineTemplate.LongestLine) && whole.Count <= ends + 1;
-        }, iter: 5_000);
+            bool isRead = whole.All(line => template.Read(line.Text, DateTimeOffset.UnixEpoch) is RawSample or RejectedLine { Reason.Length: > 0 });
+            return isRead && whole.SequenceEqual(pieces) && whole.All(line => line.Text.Length <= LineTemplate.LongestLine) && whole.Count <= ends + 1;
+        }, iter: Fuzz.Count(10_000));
     }
 
     [Fact]

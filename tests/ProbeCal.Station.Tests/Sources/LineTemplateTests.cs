@@ -4,6 +4,7 @@ using System.Linq;
 using CsCheck;
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Sources;
+using ProbeCal.Station.Tests.Entry;
 using Xunit;
 
 namespace ProbeCal.Station.Tests.Sources;
@@ -210,7 +211,7 @@ public class LineTemplateTests
                 string line = templates[index].Write(sample);
                 SourceEvent read = templates[index].Read(line, Received);
                 return read is RawSample back && back == sample with { RawText = line };
-            }, iter: 20_000);
+            }, iter: Fuzz.Count(200_000));
     }
 
     [Fact]
@@ -230,7 +231,7 @@ public class LineTemplateTests
                 RejectedLine rejected => rejected.Reason.Length is > 0 and < 600 && !rejected.Reason.Any(char.IsControl) && rejected.RawText == line,
                 _ => false,
             },
-            iter: 50_000);
+            iter: Fuzz.Count(500_000));
     }
 
     [Fact]
@@ -249,7 +250,7 @@ public class LineTemplateTests
             {
                 return wrong.Message.StartsWith("l ", StringComparison.Ordinal) && !wrong.Message.Any(char.IsControl);
             }
-        }, iter: 20_000);
+        }, iter: Fuzz.Count(200_000));
     }
 
     private static DateTimeOffset LineTimeStart { get; } = new(2001, 1, 1, 0, 0, 0, TimeSpan.Zero);
