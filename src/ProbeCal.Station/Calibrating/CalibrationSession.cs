@@ -140,7 +140,7 @@ public sealed class CalibrationSession
     /// <summary>Writes the record into the log and removes the saved state.</summary>
     internal StoredCalibration Finish(string software)
     {
-        StoredCalibration stored = _log.Append(RecordBuilder.Build(State, CurrentFit(), _previous, software));
+        StoredCalibration stored = _log.Append(RecordBuilder.Build(State, CurrentFit(), _previous, _time.GetUtcNow(), software));
         _file.Delete();
         return stored;
     }

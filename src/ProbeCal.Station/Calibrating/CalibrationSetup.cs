@@ -42,7 +42,7 @@ public static class CalibrationIds
 }
 
 /// <summary>The pressure as it was entered.</summary>
-public sealed record PressureEntry
+public sealed record EnteredPressure
 {
     /// <summary>Absolute station pressure, hPa; none when it comes with each line.</summary>
     public double? Hectopascal { get; init; }
@@ -82,7 +82,7 @@ public sealed record CalibrationSetup
     public required OxygenEquation Equation { get; init; }
 
     /// <summary>Pressure and its source.</summary>
-    public required PressureEntry Pressure { get; init; }
+    public required EnteredPressure Pressure { get; init; }
 
     /// <summary>Temperature that was typed, °C; none when it comes with each line.</summary>
     public double? TypedTemperatureCelsius { get; init; }

@@ -66,7 +66,8 @@ public static class CoefficientText
             Form = words[0].ToLowerInvariant(),
             Value = value,
             Unit = arrhenius ? "J/mol" : "1/K",
-            StandardUncertainty = 0,
+            StandardUncertainty = DefaultUncertainty(form),
+            UncertaintySource = "0.024 % per kelvin away from the calibration (published budget, Helm et al. 2018)",
             ReferenceCelsius = double.NaN,
             FittedLowCelsius = double.NaN,
             FittedHighCelsius = double.NaN,
@@ -83,7 +84,7 @@ public static class CoefficientText
     public static string Print(RecordedTemperatureCoefficient coefficient)
     {
         string unit = coefficient.Unit == "J/mol" ? "J/mol" : "/K";
-        string sure = coefficient.StandardUncertainty == 0 ? "" : " u " + Number.Print(coefficient.StandardUncertainty) + unit;
+        string sure = coefficient.UncertaintySource != null ? "" : " u " + Number.Print(coefficient.StandardUncertainty) + unit;
         return $"{coefficient.Form} {Number.Print(coefficient.Value)}{unit} at {Number.Print(coefficient.ReferenceCelsius)}C"
             + $" fitted {Number.Print(coefficient.FittedLowCelsius)}..{Number.Print(coefficient.FittedHighCelsius)}C{sure}";
     }
@@ -102,6 +103,12 @@ public static class CoefficientText
 
         return "a rate alone does not say its form, and 15 K below a reference of 25 C the forms make of it "
             + string.Join(", ", factors) + "; " + Wanted;
+    }
+
+    private static double DefaultUncertainty(TemperatureCoefficientForm form)
+    {
+        TemperatureCoefficient.FromRate(form, UncertaintyDefaults.TemperatureCoefficientPerKelvin, DefaultReferenceCelsius, out double uncertainty);
+        return uncertainty;
     }
 
     private static double? BareRate(string word)
@@ -158,7 +165,7 @@ public static class CoefficientText
                 double uncertainty = Coefficient(what, text, given, arrhenius);
                 return uncertainty < 0
                     ? throw Wrong.Input(what, text, $"{given}: a standard uncertainty is not negative")
-                    : read with { StandardUncertainty = uncertainty };
+                    : read with { StandardUncertainty = uncertainty, UncertaintySource = null };
             default:
                 throw Wrong.Input(what, text, $"'{keyword}' is not understood there; {Wanted}");
         }

@@ -1,3 +1,4 @@
+using System.Collections.Generic;
 using System.Globalization;
 using ProbeCal.Station.CalibrationLog;
 
@@ -80,9 +81,6 @@ public static class GuardNames
     /// <summary>A slope that has no right sign, or is far from the last one.</summary>
     public const string Slope = "slope";
 
-    /// <summary>A slope outside the window that the person entered.</summary>
-    public const string SlopeWindow = "slope-window";
-
     /// <summary>A zero that is above the 100 % point or larger than the limit.</summary>
     public const string Zero = "zero";
 
@@ -95,6 +93,6 @@ public static class GuardNames
     /// <summary>A clock that stands before the last calibration of this probe.</summary>
     public const string Clock = "clock";
 
-    /// <summary>Droplets on the membrane.</summary>
-    public const string Droplets = "droplets";
+    /// <summary>The guards that a reason can get past.</summary>
+    public static IReadOnlyList<string> WithReason { get; } = [PressureAtAltitude, PressureReduced, PressureHere, TemperatureTwice, Slope];
 }

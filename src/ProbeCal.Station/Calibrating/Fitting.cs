@@ -82,23 +82,15 @@ internal static class Fitting
     /// <returns>Value and its standard uncertainty in the unit the meter shows.</returns>
     internal static (double Value, double StandardUncertainty) ValueToSet(CalibrationSetup setup, RecordedPoint span)
     {
-        double ratio = setup.AirToWaterRatio?.Value ?? 1;
-        double relativeRatio = (setup.AirToWaterRatio?.StandardUncertainty ?? 0) / ratio;
-        IProbeModel model = RecordConversion.Model(setup.Probe);
-        Status status = model.Gain(span.Temperature.Value, RangeRule.Refuse, out double gain);
-        if (status == Status.Ok)
-        {
-            status = model.Signal(ratio * gain * span.ReferencePartialPressureHectopascal, span.Temperature.Value, span.Pressure.Value, RangeRule.Refuse, out double shown);
-            if (status == Status.Ok)
-            {
-                double relative = setup.Probe.MeterSettings?.Shows == "mg/L"
-                    ? span.ReferenceUncertaintyMilligramsPerLitre / span.ReferenceMilligramsPerLitre
-                    : span.ReferencePartialPressureUncertaintyHectopascal / span.ReferencePartialPressureHectopascal;
-                return (shown, PointMaker.Combine(shown * relative, shown * relativeRatio));
-            }
-        }
-
-        throw new InputException($"the value to set in the meter cannot be computed ({status}); check what is set in it");
+        Status status = MeterSetting.ValueToSet(
+            (MeterDisplay)RecordConversion.Model(setup.Probe),
+            RecordConversion.Point(setup.Method, span, setup.AirToWaterRatio, setup.ReferenceStateRelative),
+            setup.Probe.Thermometer.CommonStandardUncertaintyCelsius,
+            out double shown,
+            out double uncertainty);
+        return status == Status.Ok
+            ? (shown, uncertainty)
+            : throw new InputException($"the value to set in the meter cannot be computed ({status}); check what is set in it");
     }
 
     internal static RecordedPoint? Point(IReadOnlyList<RecordedPoint> points, string role)
@@ -148,13 +140,14 @@ internal static class Fitting
             return carried;
         }
 
+        ZeroPoint assumed = ZeroPoint.Assume(RecordConversion.Point(setup.Method, span, setup.AirToWaterRatio, setup.ReferenceStateRelative));
         return new RecordedZero
         {
             IsMeasured = false,
-            Signal = 0,
-            SignalStandardUncertainty = UncertaintyDefaults.AssumedZeroRelative * Math.Abs(span.Signal.Mean),
-            TemperatureCelsius = span.Temperature.Value,
-            PressureHectopascal = span.Pressure.Value,
+            Signal = assumed.Signal,
+            SignalStandardUncertainty = assumed.SignalUncertainty,
+            TemperatureCelsius = assumed.TemperatureCelsius,
+            PressureHectopascal = assumed.PressureHectopascal,
             Source = "assumed",
         };
     }

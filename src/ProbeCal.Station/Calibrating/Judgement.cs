@@ -56,8 +56,7 @@ internal static class Judgement
             Line("pressure", point.Pressure.StandardUncertainty, "hPa", fit.PerHectopascalAtPoint * point.Pressure.StandardUncertainty, point.Pressure.UncertaintySource ?? "entered"),
             Line("signal at the point", point.SignalStandardUncertainty, unit, fit.PointResponseUncertainty / span, "scatter, drift and resolution over the window"),
             Line("zero", zero.SignalStandardUncertainty, unit, fit.ZeroResponseUncertainty / span, ZeroSource(zero)),
-            Line("temperature coefficient", coefficient.StandardUncertainty, coefficient.Unit, fit.PerCoefficientAtPoint * coefficient.StandardUncertainty,
-                coefficient.StandardUncertainty == 0 ? "not stated: left out" : coefficient.Source),
+            CoefficientLine(setup, coefficient, fit),
             Line("state of the reference", setup.ReferenceStateRelative * 100, "%", setup.ReferenceStateRelative, ReferenceStateSource(setup)),
         ];
         if (setup.AirToWaterRatio is RecordedQuantity ratio)
@@ -157,6 +156,18 @@ internal static class Judgement
             Verdict = low <= slope && slope <= high ? "pass" : "fail",
             Decides = true,
         };
+    }
+
+    private static RecordedContribution CoefficientLine(CalibrationSetup setup, RecordedTemperatureCoefficient coefficient, ProbeCalibration fit)
+    {
+        // A meter that compensates by itself is right at the temperature of its calibration, whatever its coefficient.
+        bool compensates = setup.Probe.MeterSettings is { TemperatureCelsius: null };
+        return Line(
+            "temperature coefficient",
+            coefficient.StandardUncertainty,
+            coefficient.Unit,
+            compensates ? 0 : fit.PerCoefficientAtPoint * coefficient.StandardUncertainty,
+            compensates ? "acts only away from the temperature of the calibration" : coefficient.UncertaintySource ?? coefficient.Source);
     }
 
     private static string ZeroSource(RecordedZero zero)

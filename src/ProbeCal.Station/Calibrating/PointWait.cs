@@ -1,4 +1,5 @@
 using System;
+using System.Collections.Generic;
 using System.Threading;
 using System.Threading.Tasks;
 using ProbeCal.Station.CalibrationLog;
@@ -123,6 +124,7 @@ internal sealed class PointWait
         if (!IsInPlace(sample.Signal))
         {
             _watch.Restart();
+            Report(sample, null, [_waitingFor]);
             return false;
         }
 
@@ -149,19 +151,24 @@ internal sealed class PointWait
         }
 
         double size = MilligramsPerSignal(_watch.Signal.Mean, hectopascal);
+        Report(sample, _watch.SecondsLeft(size), _watch.Moving(size));
+        RefuseDeadOrSaturated();
+        _waitingFor = _watch.IsFull ? "still moving: " + string.Join("; ", _watch.Moving(size)) : "the window was not full yet";
+        return _watch.Finding == StabilityFinding.Stable;
+    }
+
+    private void Report(RawSample sample, double? secondsLeft, IReadOnlyList<string> moving)
+    {
         _dialogue.Report(new WaitProgress(
             _step,
             sample.TimeUtc,
             (sample.TimeUtc - _firstSeen!.Value).TotalSeconds,
             _watch.WindowCount,
-            _watch.Signal.SpanSeconds,
-            _watch.SecondsLeft(size),
-            _watch.Moving(size),
-            _watch.Signal.Mean,
-            _watch.Temperature.Mean));
-        RefuseDeadOrSaturated();
-        _waitingFor = _watch.IsFull ? "still moving: " + string.Join("; ", _watch.Moving(size)) : "the window was not full yet";
-        return _watch.Finding == StabilityFinding.Stable;
+            _watch.Signal.Count == 0 ? 0 : _watch.Signal.SpanSeconds,
+            secondsLeft,
+            moving,
+            sample.Signal,
+            _setup.TypedTemperatureCelsius ?? sample.TemperatureCelsius ?? double.NaN));
     }
 
     private async ValueTask<bool> AcceptAsync(RawSample sample, CancellationToken cancellationToken)
@@ -187,13 +194,13 @@ internal sealed class PointWait
         double share = signal / _span.Signal.Mean;
         if (_step == CalibrationStep.Zero && _watch.IsEmpty && _setup.Waiting.ZeroEntryShare < share)
         {
-            _waitingFor = Finding.Text($"waiting for the probe to be in the zero solution: its signal is still {Number.Fixed(100 * share, 0)} % of the 100 % point");
+            _waitingFor = Finding.Text($"not in the zero solution yet: its signal is still {Number.Fixed(100 * share, 0)} % of the 100 % point");
             return false;
         }
 
         if (_step == CalibrationStep.AsLeft && share < _setup.Waiting.SpanReturnShare)
         {
-            _waitingFor = Finding.Text($"waiting for the probe to be back at 100 %: its signal is {Number.Fixed(100 * share, 0)} % of the point as found");
+            _waitingFor = Finding.Text($"not back at 100 % yet: its signal is {Number.Fixed(100 * share, 0)} % of the point as found");
             return false;
         }
 

@@ -16,11 +16,12 @@ internal static class RecordBuilder
         "mean, trend and scatter by least squares; uncertainty by JCGM 100:2008",
     ];
 
-    internal static CalibrationRecord Build(SessionState state, Fit fit, CalibrationRecord? previous, string software)
+    internal static CalibrationRecord Build(SessionState state, Fit fit, CalibrationRecord? previous, DateTimeOffset nowUtc, string software)
     {
         CalibrationSetup setup = state.Setup;
         ProbeCalibration calibration = fit.Calibration ?? throw new InvalidOperationException("A record needs a fit.");
         RecordedPoint slopePoint = state.Points.First(point => point.Role == fit.SlopeFrom);
+        DateTimeOffset last = state.Points.Max(static point => point.LastUtc);
         List<RecordedLimit> limits = Judgement.Limits(setup, state.Points, calibration);
         string[] reasons = Judgement.Reasons(limits);
         RecordedContribution[] budget = Judgement.Budget(setup, slopePoint, fit.Zero, calibration);
@@ -28,7 +29,7 @@ internal static class RecordBuilder
         {
             Simulated = setup.Simulated,
             StartedUtc = state.StartedUtc,
-            CompletedUtc = state.Points.Max(static point => point.LastUtc),
+            CompletedUtc = last < nowUtc ? last : nowUtc,
             By = setup.By,
             Site = setup.Site,
             Altitude = setup.Altitude,

@@ -12,8 +12,8 @@ namespace ProbeCal.Station.Calibrating;
 /// <param name="WindowSeconds">Time that the window spans so far.</param>
 /// <param name="SecondsLeft">Estimate of the time left; null when it cannot be told.</param>
 /// <param name="Moving">What still keeps the window from being accepted, for people; empty when it is steady.</param>
-/// <param name="Signal">Mean signal of the window.</param>
-/// <param name="TemperatureCelsius">Mean temperature of the window.</param>
+/// <param name="Signal">Newest signal.</param>
+/// <param name="TemperatureCelsius">Newest temperature, °C.</param>
 public sealed record WaitProgress(
     CalibrationStep Step,
     DateTimeOffset SampleTimeUtc,

@@ -35,10 +35,13 @@ public sealed record CalibrationRecord
     /// <summary>True when the signal came from a simulation: no real probe was calibrated.</summary>
     public required bool Simulated { get; init; }
 
-    /// <summary>When the calibration was begun, UTC.</summary>
+    /// <summary>When the calibration was begun, UTC, by the clock of the program.</summary>
     public required DateTimeOffset StartedUtc { get; init; }
 
-    /// <summary>When its last point was taken, UTC. The calibration is valid from here on.</summary>
+    /// <summary>
+    /// When its last point was taken, UTC; the calibration is valid from here on. It is the time of the line, which for a replay
+    /// lies before <see cref="StartedUtc"/>, and never after the clock of the program.
+    /// </summary>
     public required DateTimeOffset CompletedUtc { get; init; }
 
     /// <summary>Who did it; none when not stated.</summary>

@@ -51,8 +51,11 @@ public sealed record RecordedTemperatureCoefficient
     /// <summary><c>1/K</c>, or <c>J/mol</c> for the Arrhenius form.</summary>
     public required string Unit { get; init; }
 
-    /// <summary>Standard uncertainty of the coefficient in <see cref="Unit"/>; 0 when not stated, and the record says so.</summary>
+    /// <summary>Standard uncertainty of the coefficient in <see cref="Unit"/>.</summary>
     public required double StandardUncertainty { get; init; }
+
+    /// <summary>Where that uncertainty came from, when it is a default and nobody entered it.</summary>
+    public string? UncertaintySource { get; init; }
 
     /// <summary>Reference temperature at which the factor is 1, °C.</summary>
     public required double ReferenceCelsius { get; init; }

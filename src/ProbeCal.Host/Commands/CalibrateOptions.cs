@@ -1,0 +1,151 @@
+using System.Collections.Generic;
+using System.CommandLine;
+
+namespace ProbeCal.Host.Commands;
+
+/// <summary>The options of <c>probecal calibrate</c>: names and help only. Every value is text; Station's parsers read it.</summary>
+internal sealed class CalibrateOptions
+{
+    private readonly List<Option> _all = [];
+
+    internal CalibrateOptions()
+    {
+        Data = Text("--data", "DIR", "Folder of the calibration log and of unfinished calibrations (default probecal-data).");
+        Source = Text("--source", "ADDRESS", "Where readings come from: serial:/dev/ttyUSB0?baud=9600, tcp:HOST:PORT, file:PATH, stdin, simulated.");
+        Line = Text("--line", "TEMPLATE", "How a line reads (default {time},{signal},{temperature},{pressure}).");
+        Manual = Flag("--manual", "Readings are typed from a meter that shows only mg/L or %.");
+        Unattended = Flag("--unattended", "Ask nothing; for scripts. Exit code 0 pass, 1 fail or not finished, 2 wrong input.");
+        StartOver = Flag("--start-over", "Set an unfinished calibration of this probe aside and begin anew.");
+        Simulated = Flag("--simulated", "Mark the record as simulated, for a line that a simulation writes.");
+        Format = Text("--format", "text|json", "Result as text (default) or as the record in JSON.");
+
+        Probe = Text("--probe", "ID", "The probe.");
+        Membrane = Text("--membrane", "ID", "Membrane or cap on it.");
+        MembraneInstalled = Text("--membrane-installed", "DATE", "Day it was put on: 2026-05-01.");
+        Coefficient = Text("--coefficient", "TEXT", "Temperature coefficient with its form: 'exponential 0.03/K at 25C fitted 5..35C u 0.002/K'; also compound, linear, arrhenius 22kJ/mol.");
+        SignalResolution = Text("--signal-resolution", "X", "Smallest step of the signal, in its unit.");
+        SignalRange = Text("--signal-range", "LOW..HIGH", "Ends of the input's range, in the signal's unit.");
+        SignalUnit = Text("--signal-unit", "UNIT", "Unit of the signal, a label, where --line names none.");
+        Thermometer = Text("--thermometer", "ID", "Thermometer that gives the temperature (default: the probe's own).");
+        ThermometerUncertainty = Text("--thermometer-uncertainty", "u", "Standard uncertainty of its offset, common to calibration and readings: 0.05K.");
+
+        Method = Text("--method", "NAME", "air-saturated-water or water-saturated-air.");
+        Pressure = Text("--pressure", "P", "Absolute station pressure with its unit: 742mmHg. Left out when the line carries it.");
+        PressureSource = Text("--pressure-source", "SOURCE", "barometer:ID, weather-service:NAME, airport:NAME, telephone, or altitude when there is no pressure at all.");
+        PressureUncertainty = Text("--pressure-uncertainty", "u", "Standard uncertainty of the pressure: 1hPa.");
+        Altitude = Text("--altitude", "Z", "Altitude with its unit: 640m, 2100ft. The pressure is judged against it.");
+        Temperature = Text("--temperature", "T", "Temperature at the probe, where the line carries none or another thermometer counts.");
+        TemperatureUncertainty = Text("--temperature-uncertainty", "u", "Standard uncertainty of one temperature without the thermometer's offset: 0.03K.");
+        Salinity = Text("--salinity", "S", "Practical salinity of the water; 0 for fresh water.");
+        SalinityUncertainty = Text("--salinity-uncertainty", "u", "Standard uncertainty of the salinity: 0.1.");
+        StirringOption = Text("--stirring", "HOW", "stirred, still, or flow-insensitive for a probe that does not need it.");
+        AirToWaterRatio = Text("--air-to-water-ratio", "X", "Signal in air over signal in stirred water (default 1.00, from memory).");
+        AirToWaterUncertainty = Text("--air-to-water-uncertainty", "u", "Its standard uncertainty: 1.5%.");
+        ReferenceUncertainty = Text("--reference-uncertainty", "u", "How near to equilibrium the bath or chamber is, standard uncertainty: 0.5%.");
+        Equation = Text("--equation", "NAME", "benson-krause-1984 (default) or garcia-gordon-1992.");
+        Zero = Text("--zero", "PLAN", "keep (default): the last measured zero of this membrane; assume; check: read and judge; adjust: read and use.");
+
+        Limit = Text("--limit", "X", "Limit of the error at 100 %: 0.2mg/L (default, TM 9-A6.2).");
+        LimitPercent = Text("--limit-percent", "X", "The same in % of the reference; the larger of the two applies: 2% (default).");
+        ZeroLimit = Text("--zero-limit", "X", "Limit of the zero reading: 0.2mg/L (default, TM 9-A6.2).");
+        SlopeWindow = Text("--slope-window", "LOW..HIGH", "Slope that the probe's maker allows, per hPa; none unless entered.");
+        Window = Text("--window", "TIME", "Length of a steady window: 3min (default).");
+        Samples = Text("--samples", "N", "Least number of samples in it: 30 (default).");
+        StableWithin = Text("--stable-within", "X", "What may still move over a window: 0.05mg/L (default).");
+        StableTemperature = Text("--stable-temperature", "X", "The same for temperature: 0.05K (default).");
+        GiveUpAfter = Text("--give-up-after", "TIME", "Longest wait for one point: 30min (default).");
+
+        Confirm = Many("--confirm", "GUARD=REASON", "Reason for going on past a guard; it goes into the record. May be given several times.");
+        ConfirmPressure = Text("--confirm-pressure", "REASON", "The same for all guards on the pressure.");
+        By = Text("--by", "NAME", "Who calibrates.");
+        Site = Text("--site", "NAME", "Site; the pressure is compared with the last one here.");
+        Remarks = Text("--remarks", "TEXT", "Remarks for the record.");
+
+        MeterShows = Text("--meter-shows", "UNIT", "With --manual: mg/L, %local or %1atm.");
+        MeterSalinity = Text("--meter-salinity", "S", "Salinity set in the meter (default 0).");
+        MeterPressure = Text("--meter-pressure", "P", "Pressure set in the meter; left out when it has its own barometer.");
+        MeterTemperature = Text("--meter-temperature", "T", "Temperature set in the meter by hand; left out when it has its own thermometer.");
+        MeterResolution = Text("--meter-resolution", "X", "Last digit of the display (default 0.01 mg/L or 0.1 %).");
+        AsFound = Text("--as-found", "X", "What the meter shows before it is set: 8.61mg/L or 98.2%.");
+        AsLeft = Text("--as-left", "X", "What it shows after it was set.");
+        ZeroReading = Text("--zero-reading", "X", "What it shows in the zero solution.");
+    }
+
+    internal IReadOnlyList<Option> All => _all;
+
+    internal Option<string> Data { get; }
+    internal Option<string> Source { get; }
+    internal Option<string> Line { get; }
+    internal Option<bool> Manual { get; }
+    internal Option<bool> Unattended { get; }
+    internal Option<bool> StartOver { get; }
+    internal Option<bool> Simulated { get; }
+    internal Option<string> Format { get; }
+    internal Option<string> Probe { get; }
+    internal Option<string> Membrane { get; }
+    internal Option<string> MembraneInstalled { get; }
+    internal Option<string> Coefficient { get; }
+    internal Option<string> SignalResolution { get; }
+    internal Option<string> SignalRange { get; }
+    internal Option<string> SignalUnit { get; }
+    internal Option<string> Thermometer { get; }
+    internal Option<string> ThermometerUncertainty { get; }
+    internal Option<string> Method { get; }
+    internal Option<string> Pressure { get; }
+    internal Option<string> PressureSource { get; }
+    internal Option<string> PressureUncertainty { get; }
+    internal Option<string> Altitude { get; }
+    internal Option<string> Temperature { get; }
+    internal Option<string> TemperatureUncertainty { get; }
+    internal Option<string> Salinity { get; }
+    internal Option<string> SalinityUncertainty { get; }
+    internal Option<string> StirringOption { get; }
+    internal Option<string> AirToWaterRatio { get; }
+    internal Option<string> AirToWaterUncertainty { get; }
+    internal Option<string> ReferenceUncertainty { get; }
+    internal Option<string> Equation { get; }
+    internal Option<string> Zero { get; }
+    internal Option<string> Limit { get; }
+    internal Option<string> LimitPercent { get; }
+    internal Option<string> ZeroLimit { get; }
+    internal Option<string> SlopeWindow { get; }
+    internal Option<string> Window { get; }
+    internal Option<string> Samples { get; }
+    internal Option<string> StableWithin { get; }
+    internal Option<string> StableTemperature { get; }
+    internal Option<string> GiveUpAfter { get; }
+    internal Option<string[]> Confirm { get; }
+    internal Option<string> ConfirmPressure { get; }
+    internal Option<string> By { get; }
+    internal Option<string> Site { get; }
+    internal Option<string> Remarks { get; }
+    internal Option<string> MeterShows { get; }
+    internal Option<string> MeterSalinity { get; }
+    internal Option<string> MeterPressure { get; }
+    internal Option<string> MeterTemperature { get; }
+    internal Option<string> MeterResolution { get; }
+    internal Option<string> AsFound { get; }
+    internal Option<string> AsLeft { get; }
+    internal Option<string> ZeroReading { get; }
+
+    private Option<string> Text(string name, string placeholder, string help)
+    {
+        Option<string> option = new(name) { Description = help, HelpName = placeholder };
+        _all.Add(option);
+        return option;
+    }
+
+    private Option<string[]> Many(string name, string placeholder, string help)
+    {
+        Option<string[]> option = new(name) { Description = help, HelpName = placeholder, Arity = ArgumentArity.ZeroOrMore };
+        _all.Add(option);
+        return option;
+    }
+
+    private Option<bool> Flag(string name, string help)
+    {
+        Option<bool> option = new(name) { Description = help };
+        _all.Add(option);
+        return option;
+    }
+}

@@ -1,0 +1,292 @@
+using System;
+using System.Collections.Generic;
+using System.CommandLine;
+using System.Globalization;
+using System.Linq;
+using System.Threading;
+using System.Threading.Tasks;
+using ProbeCal.Station.Calibrating;
+using ProbeCal.Station.CalibrationLog;
+using ProbeCal.Station.Entry;
+using ProbeCal.Station.Sources;
+
+namespace ProbeCal.Host.Commands;
+
+/// <summary>From options, and answers where options are missing, to a set-up.</summary>
+internal sealed class CalibrateSetup
+{
+    private static readonly string[] Methods = [CalibrationIds.AirSaturatedWater, CalibrationIds.WaterSaturatedAir];
+    private static readonly string[] ZeroPlans = [CalibrationIds.ZeroKeep, CalibrationIds.ZeroAssume, CalibrationIds.ZeroCheck, CalibrationIds.ZeroAdjust];
+    private static readonly string[] Scales = ["mg/L", "%local", "%1atm"];
+
+    // A typical membrane, needed only for how a thermometer error acts on a meter that compensates by itself.
+    private static readonly RecordedTemperatureCoefficient TypicalMembrane =
+        CoefficientText.Parse("typical membrane", "exponential 0.03/K at 25C fitted 0..40C") with { Source = "typical membrane (from memory); serves the uncertainty only" };
+
+    private readonly CalibrateOptions _options;
+    private readonly OptionReader _reader;
+
+    /// <param name="options">The options.</param>
+    /// <param name="parsed">What was given.</param>
+    /// <param name="questions">Who asks for what is missing; null refuses instead.</param>
+    internal CalibrateSetup(CalibrateOptions options, ParseResult parsed, Questions? questions)
+    {
+        _options = options;
+        _reader = new OptionReader(parsed, questions);
+    }
+
+    internal async Task<CalibrationSetup> BuildAsync(SourceAddress? address, LineTemplate? line, CancellationToken cancellationToken)
+    {
+        bool manual = address == null;
+        string method = await _reader.NeedAsync(_options.Method, "Method (air-saturated-water or water-saturated-air)?", OptionReader.Choice(_options.Method, Methods), cancellationToken).ConfigureAwait(false);
+        bool air = method == CalibrationIds.WaterSaturatedAir;
+        string probe = await _reader.NeedAsync(_options.Probe, "Probe id?", OptionReader.NotEmpty(_options.Probe), cancellationToken).ConfigureAwait(false);
+        double? temperature = Temperature(line, manual);
+        if (temperature == null && line is not { HasTemperature: true })
+        {
+            temperature = await _reader.NeedAsync(_options.Temperature, "Temperature at the probe (for example 20.1C)?", text => Quantity.TemperatureCelsius("--temperature", text), cancellationToken).ConfigureAwait(false);
+        }
+
+        RecordedQuantity? altitude = _reader.Given(_options.Altitude) is string height
+            ? Measured(Quantity.AltitudeMetres("--altitude", height), "m", 5, "typed")
+            : null;
+        EnteredPressure pressure = await PressureAsync(line, altitude, cancellationToken).ConfigureAwait(false);
+        // In air the salinity only says at which salinity the errors are expressed in mg/L.
+        double salinity = _reader.Given(_options.Salinity) == null && air
+            ? 0
+            : await _reader.NeedAsync(_options.Salinity, "Practical salinity of the water (0 for fresh)?", text => Quantity.Salinity("--salinity", text), cancellationToken).ConfigureAwait(false);
+        Stirring stirring = _reader.Given(_options.StirringOption) == null && air
+            ? Stirring.Stirred
+            : await _reader.NeedAsync(_options.StirringOption, "Is the water stirred, still, or the probe flow-insensitive?", StirringOf, cancellationToken).ConfigureAwait(false);
+        return new CalibrationSetup
+        {
+            Probe = await ProbeAsync(probe, line, manual, cancellationToken).ConfigureAwait(false),
+            Method = method,
+            Readings = manual ? CalibrationIds.Typed : CalibrationIds.Live,
+            Source = address?.ToString() ?? "the display of the meter",
+            Simulated = address is SimulatedAddress || _reader.IsSet(_options.Simulated),
+            Equation = _reader.Given(_options.Equation) is string equation ? EquationNames.Parse("--equation", equation) : EquationNames.Default,
+            Pressure = pressure,
+            TypedTemperatureCelsius = temperature,
+            TemperatureStandardUncertaintyKelvin = _reader.NotNegative(_options.TemperatureUncertainty, QuantityKind.TemperatureDifference) ?? UncertaintyDefaults.TemperatureKelvin,
+            Salinity = Measured(salinity, "1", _reader.NotNegative(_options.SalinityUncertainty, QuantityKind.Salinity) ?? UncertaintyDefaults.Salinity, "typed"),
+            Altitude = altitude,
+            Stirring = stirring,
+            AirToWaterRatio = air ? Ratio() : null,
+            ReferenceStateRelative = (_reader.NotNegative(_options.ReferenceUncertainty, QuantityKind.Percent) / 100)
+                ?? UncertaintyDefaults.ReferenceStateRelative(RecordNames.Method(method)),
+            ZeroPlan = ZeroPlan(manual),
+            Limits = Limits(),
+            Waiting = Waiting(),
+            Reasons = Reasons(),
+            By = _reader.Given(_options.By),
+            Site = _reader.Given(_options.Site),
+            Remarks = _reader.Given(_options.Remarks),
+        };
+    }
+
+    private double? Temperature(LineTemplate? line, bool manual)
+    {
+        if (_reader.Given(_options.Temperature) is string given)
+        {
+            return Quantity.TemperatureCelsius("--temperature", given);
+        }
+
+        bool needed = manual || line is not { HasTemperature: true };
+        return needed && !_reader.CanAsk
+            ? throw new InputException(manual
+                ? "--temperature is missing: a typed calibration needs the temperature of the water, for example --temperature 20.1C"
+                : "--temperature is missing: the lines carry no {temperature}, so it has to be given, for example --temperature 20.1C")
+            : null;
+    }
+
+    private async Task<EnteredPressure> PressureAsync(LineTemplate? line, RecordedQuantity? altitude, CancellationToken cancellationToken)
+    {
+        PressureSource source = await _reader.NeedAsync(
+            _options.PressureSource,
+            "Where does the pressure come from (barometer:ID, weather-service:NAME, airport:NAME, telephone, altitude)?",
+            text => PressureSource.Parse("--pressure-source", text),
+            cancellationToken).ConfigureAwait(false);
+        double? uncertainty = _reader.NotNegative(_options.PressureUncertainty, QuantityKind.Pressure);
+        double? value;
+        if (source.IsAltitudeOnly)
+        {
+            value = FromAltitude(altitude);
+            uncertainty = uncertainty == null ? null : Math.Max(uncertainty.Value, UncertaintyDefaults.AltitudeOnlyHectopascal);
+        }
+        else
+        {
+            bool fromLine = _reader.Given(_options.Pressure) == null && line is { HasPressure: true };
+            value = fromLine
+                ? null
+                : await _reader.NeedAsync(_options.Pressure, "Absolute station pressure with its unit (for example 742mmHg)?", text => Quantity.PressureHectopascal("--pressure", text), cancellationToken).ConfigureAwait(false);
+        }
+
+        return new EnteredPressure
+        {
+            Hectopascal = value,
+            Source = source.Text,
+            StandardUncertaintyHectopascal = uncertainty ?? source.DefaultUncertaintyHectopascal,
+            UncertaintySource = uncertainty == null ? source.DefaultUncertaintySource : null,
+        };
+    }
+
+    private double FromAltitude(RecordedQuantity? altitude)
+    {
+        if (_reader.Given(_options.Pressure) is string given)
+        {
+            throw new InputException($"--pressure {given}: with --pressure-source altitude the pressure comes from --altitude; leave one of them out");
+        }
+
+        if (altitude == null)
+        {
+            throw new InputException("--pressure-source altitude: give the altitude too, for example --altitude 640m");
+        }
+
+        Status status = StandardAtmosphere.Pressure(altitude.Value, out double hectopascal);
+        return status == Status.Ok
+            ? hectopascal
+            : throw new InputException($"--altitude {Number.Print(altitude.Value)} m is outside the standard atmosphere ({Number.Print(StandardAtmosphere.LowestAltitudeMetres)} to {Number.Print(StandardAtmosphere.HighestAltitudeMetres)} m)");
+    }
+
+    private async Task<RecordedProbe> ProbeAsync(string id, LineTemplate? line, bool manual, CancellationToken cancellationToken)
+    {
+        RecordedMeterSettings? meter = manual ? Meter(await _reader.NeedAsync(_options.MeterShows, "What does the meter show (mg/L, %local or %1atm)?", OptionReader.Choice(_options.MeterShows, Scales), cancellationToken).ConfigureAwait(false)) : null;
+        RecordedTemperatureCoefficient coefficient = meter is { TemperatureCelsius: null } && _reader.Given(_options.Coefficient) == null
+            ? TypicalMembrane
+            : await _reader.NeedAsync(_options.Coefficient, "Temperature coefficient (for example: exponential 0.03/K at 25C fitted 5..35C)?", text => CoefficientText.Parse("--coefficient", text), cancellationToken).ConfigureAwait(false);
+        (double Low, double High)? range = _reader.Range(_options.SignalRange);
+        double? common = _reader.NotNegative(_options.ThermometerUncertainty, QuantityKind.TemperatureDifference);
+        string signalUnit = meter?.Shows ?? (line is { SignalUnit.Length: > 0 } ? line.SignalUnit : _reader.Given(_options.SignalUnit) ?? "");
+        return new RecordedProbe
+        {
+            Id = id,
+            Model = manual ? "meter-display" : "amperometric",
+            SignalUnit = signalUnit,
+            TemperatureCoefficient = coefficient,
+            MeterSettings = meter,
+            SignalResolution = _reader.Positive(_options.SignalResolution),
+            SignalLow = range?.Low,
+            SignalHigh = range?.High,
+            Membrane = _reader.Given(_options.Membrane) is string membrane ? new RecordedMembrane { Id = membrane, InstalledOn = _reader.Day(_options.MembraneInstalled) } : null,
+            Thermometer = new RecordedThermometer
+            {
+                Id = _reader.Given(_options.Thermometer) ?? id,
+                CommonStandardUncertaintyCelsius = common ?? UncertaintyDefaults.ThermometerOffsetKelvin,
+                Source = common == null ? "passed a check of 0.2 C, rectangular (TM 9-A6.8)" : "entered",
+            },
+        };
+    }
+
+    private RecordedMeterSettings Meter(string shows)
+    {
+        return new RecordedMeterSettings
+        {
+            Shows = shows,
+            Equation = EquationNames.NameOf(_reader.Given(_options.Equation) is string equation ? EquationNames.Parse("--equation", equation) : EquationNames.Default),
+            Salinity = _reader.Given(_options.MeterSalinity) is string salinity ? Quantity.Salinity("--meter-salinity", salinity) : 0,
+            PressureHectopascal = _reader.Given(_options.MeterPressure) is string pressure ? Quantity.PressureHectopascal("--meter-pressure", pressure) : null,
+            TemperatureCelsius = _reader.Given(_options.MeterTemperature) is string temperature ? Quantity.TemperatureCelsius("--meter-temperature", temperature) : null,
+            Resolution = _reader.Positive(_options.MeterResolution) ?? (shows == "mg/L" ? 0.01 : 0.1),
+        };
+    }
+
+    private RecordedQuantity Ratio()
+    {
+        double? ratio = _reader.Positive(_options.AirToWaterRatio);
+        double? uncertainty = _reader.NotNegative(_options.AirToWaterUncertainty, QuantityKind.Percent) / 100;
+        return new RecordedQuantity
+        {
+            Value = ratio ?? 1,
+            Unit = "1",
+            StandardUncertainty = (uncertainty ?? UncertaintyDefaults.AirToWaterRatioRelative) * (ratio ?? 1),
+            Source = ratio == null ? "default (from memory)" : "entered",
+            UncertaintySource = uncertainty == null ? "1.5 % (from memory)" : null,
+        };
+    }
+
+    private CalibrationLimits Limits()
+    {
+        double? absolute = _reader.NotNegative(_options.Limit, QuantityKind.MassConcentration);
+        double? percent = _reader.NotNegative(_options.LimitPercent, QuantityKind.Percent);
+        double? zero = _reader.NotNegative(_options.ZeroLimit, QuantityKind.MassConcentration);
+        (double Low, double High)? window = _reader.Range(_options.SlopeWindow);
+        bool entered = absolute != null || percent != null;
+        return new CalibrationLimits
+        {
+            // Whoever enters one of the two means it: the other published one would soften it.
+            SaturationMilligramsPerLitre = absolute ?? (entered ? 0 : AcceptanceLimit.SaturationMilligramsPerLitre),
+            SaturationPercent = percent ?? (entered ? 0 : AcceptanceLimit.SaturationPercent),
+            SaturationSource = entered ? CalibrationLimits.Entered : CalibrationLimits.FieldManual,
+            ZeroMilligramsPerLitre = zero ?? AcceptanceLimit.ZeroMilligramsPerLitre,
+            ZeroSource = zero == null ? CalibrationLimits.FieldManual : CalibrationLimits.Entered,
+            SlopeLow = window?.Low,
+            SlopeHigh = window?.High,
+        };
+    }
+
+    private WaitingRules Waiting()
+    {
+        WaitingRules usual = new();
+        return new WaitingRules
+        {
+            WindowSeconds = _reader.Given(_options.Window) is string window ? Quantity.Duration("--window", window).TotalSeconds : usual.WindowSeconds,
+            LeastCount = _reader.Given(_options.Samples) is string samples ? (int)Number.ParseWhole("--samples", samples, 3, 1_000_000) : usual.LeastCount,
+            MilligramsPerLitre = _reader.AboveZero(_options.StableWithin, QuantityKind.MassConcentration) ?? usual.MilligramsPerLitre,
+            Kelvin = _reader.AboveZero(_options.StableTemperature, QuantityKind.TemperatureDifference) ?? usual.Kelvin,
+            GiveUpAfterSeconds = _reader.Given(_options.GiveUpAfter) is string longest ? Quantity.Duration("--give-up-after", longest).TotalSeconds : usual.GiveUpAfterSeconds,
+        };
+    }
+
+    private Dictionary<string, string> Reasons()
+    {
+        Dictionary<string, string> reasons = [];
+        foreach (string given in _reader.Many(_options.Confirm))
+        {
+            int equals = given.IndexOf('=', StringComparison.Ordinal);
+            string guard = equals < 0 ? given : given[..equals].Trim();
+            string reason = equals < 0 ? "" : given[(equals + 1)..].Trim();
+            if (!GuardNames.WithReason.Contains(guard))
+            {
+                throw Wrong.Input("--confirm", given, $"there is no guard '{guard}'{NearestName.DidYouMean(guard, GuardNames.WithReason)}; the message that asked for a reason names it");
+            }
+
+            reasons[guard] = reason.Length == 0 ? throw Wrong.Input("--confirm", given, $"the reason is missing; write {guard}=\"REASON\"") : reason;
+        }
+
+        if (_reader.Given(_options.ConfirmPressure) is string why)
+        {
+            string reason = OptionReader.NotEmpty(_options.ConfirmPressure)(why);
+            foreach (string guard in new[] { GuardNames.PressureAtAltitude, GuardNames.PressureReduced, GuardNames.PressureHere })
+            {
+                reasons.TryAdd(guard, reason);
+            }
+        }
+
+        return reasons;
+    }
+
+    private string ZeroPlan(bool manual)
+    {
+        string plan = _reader.Given(_options.Zero) is string given ? OptionReader.Choice(_options.Zero, ZeroPlans)(given) : CalibrationIds.ZeroKeep;
+        return manual && plan == CalibrationIds.ZeroAdjust
+            ? throw new InputException("--zero adjust: the zero of a meter is adjusted in the meter; use check to read and judge it")
+            : plan;
+    }
+
+    private static Stirring StirringOf(string text)
+    {
+        return text switch
+        {
+            "stirred" => Stirring.Stirred,
+            "still" => Stirring.Still,
+            "flow-insensitive" => Stirring.FlowInsensitive,
+            _ => throw Wrong.Input("--stirring", text, "it is stirred, still or flow-insensitive"),
+        };
+    }
+
+    private static RecordedQuantity Measured(double value, string unit, double uncertainty, string source)
+    {
+        return new RecordedQuantity { Value = value, Unit = unit, StandardUncertainty = uncertainty, Source = source };
+    }
+}

@@ -1,0 +1,181 @@
+using System;
+using System.Collections.Generic;
+using System.Globalization;
+using System.IO;
+using System.Linq;
+using ProbeCal.Station.CalibrationLog;
+using ProbeCal.Station.Entry;
+
+namespace ProbeCal.Host.Commands;
+
+/// <summary>A calibration record as plain text for people.</summary>
+internal static class CalibrationText
+{
+    /// <summary>Writes the whole record.</summary>
+    internal static void Write(TextWriter output, CalibrationRecord record)
+    {
+        output.WriteLine($"Calibration {record.Id}: {(record.Result.Pass ? "PASS" : "FAIL")}{(record.Simulated ? "   (SIMULATED: no real probe was calibrated)" : "")}");
+        foreach (string reason in record.Result.Reasons)
+        {
+            output.WriteLine("  " + reason);
+        }
+
+        output.WriteLine();
+        WriteIdentity(output, record);
+        output.WriteLine();
+        WritePoints(output, record.Points, record.Probe.SignalUnit);
+        output.WriteLine();
+        WriteResult(output, record);
+        WriteLimits(output, record);
+        WriteBudget(output, record);
+        WriteFindings(output, record);
+        output.WriteLine("This is a field calibration record and no accredited certificate.");
+    }
+
+    private static void WriteIdentity(TextWriter output, CalibrationRecord record)
+    {
+        RecordedProbe probe = record.Probe;
+        Line("probe", probe.Id + ", " + probe.Model);
+        if (probe.Membrane is RecordedMembrane membrane)
+        {
+            Line("membrane", membrane.Id + (membrane.InstalledOn is DateOnly day ? ", on since " + day.ToString("yyyy-MM-dd", CultureInfo.InvariantCulture) : ""));
+        }
+
+        RecordedTemperatureCoefficient coefficient = probe.TemperatureCoefficient;
+        Line("temperature coefficient", $"{coefficient.Form} {Number.Print(coefficient.Value)} {coefficient.Unit} at {Number.Print(coefficient.ReferenceCelsius)} C, fitted {Number.Print(coefficient.FittedLowCelsius)} to {Number.Print(coefficient.FittedHighCelsius)} C, u {Number.Print(coefficient.StandardUncertainty)} {coefficient.Unit} ({coefficient.Source})");
+        if (probe.MeterSettings is RecordedMeterSettings meter)
+        {
+            Line("set in the meter", $"shows {meter.Shows}, salinity {Number.Print(meter.Salinity)}, pressure {(meter.PressureHectopascal is double set ? Number.Print(set) + " hPa" : "its own barometer")}, temperature {(meter.TemperatureCelsius is double by ? Number.Print(by) + " C by hand" : "its own thermometer")}");
+        }
+
+        Line("thermometer", $"{probe.Thermometer.Id}, offset u {Number.Fixed(probe.Thermometer.CommonStandardUncertaintyCelsius, 3)} K ({probe.Thermometer.Source})");
+        Line("method", $"{record.Method}, readings {record.Readings} from {record.Source}");
+        Line("place", $"{record.Site ?? "not stated"}, altitude {(record.Altitude is RecordedQuantity altitude ? Number.Print(altitude.Value) + " m" : "not stated")}");
+        Line("time (UTC)", $"{Time(record.StartedUtc)} to {Time(record.CompletedUtc)}{(record.By is string by2 ? ", by " + by2 : "")}");
+        Line("previous calibration", record.PreviousCalibration ?? "none");
+        Line("droplets", record.DropletCheck);
+        if (record.AirToWaterRatio is RecordedQuantity ratio)
+        {
+            Line("air-to-water ratio", $"{Number.Print(ratio.Value)}, u {Number.Fixed(ratio.StandardUncertainty, 4)} ({ratio.Source})");
+        }
+
+        Line("equation", record.Equation);
+        foreach (string formula in record.Formulas)
+        {
+            Line("", formula);
+        }
+
+        Line("software", record.Software);
+        if (record.Remarks is string remarks)
+        {
+            Line("remarks", remarks);
+        }
+
+        void Line(string name, string value)
+        {
+            output.WriteLine("  " + name.PadRight(24) + value);
+        }
+    }
+
+    private static void WritePoints(TextWriter output, RecordedPoint[] points, string signalUnit)
+    {
+        string unit = signalUnit.Length == 0 ? "" : " " + signalUnit;
+        List<string[]> rows =
+        [
+            ["point", .. points.Select(static point => point.Role)],
+            ["taken (UTC)", .. points.Select(static point => point.LastUtc.ToString("HH:mm:ss", CultureInfo.InvariantCulture))],
+            ["samples in window", .. points.Select(static point => point.Typed ? "typed" : $"{Number.Print(point.Signal.Count)} in {Number.Fixed(point.Signal.WindowSeconds, 0)} s")],
+            ["signal" + unit, .. points.Select(static point => Number.Fixed(point.Signal.Mean, 3))],
+            ["  scatter", .. points.Select(static point => Number.Fixed(point.Signal.StandardDeviation, 4))],
+            ["  drift a minute", .. points.Select(static point => Number.Fixed(point.Signal.SlopePerMinute, 4))],
+            ["temperature C", .. points.Select(static point => $"{Number.Fixed(point.Temperature.Value, 2)} ({point.Temperature.Source})")],
+            ["pressure hPa", .. points.Select(static point => $"{Number.Fixed(point.Pressure.Value, 1)} u {Number.Fixed(point.Pressure.StandardUncertainty, 1)}")],
+            ["  source", .. points.Select(static point => point.Pressure.Source)],
+            ["salinity", .. points.Select(static point => Number.Print(point.Salinity.Value))],
+            ["stirring", .. points.Select(static point => point.Stirring)],
+            ["reference hPa O2", .. points.Select(static point => $"{Number.Fixed(point.ReferencePartialPressureHectopascal, 2)} u {Number.Fixed(point.ReferencePartialPressureUncertaintyHectopascal, 2)}")],
+            ["reference mg/L", .. points.Select(static point => $"{Number.Fixed(point.ReferenceMilligramsPerLitre, 3)} u {Number.Fixed(point.ReferenceUncertaintyMilligramsPerLitre, 3)}")],
+            ["reading mg/L", .. points.Select(static point => point.ReadingMilligramsPerLitre is double reading ? Number.Fixed(reading, 3) : "-")],
+            ["error mg/L", .. points.Select(static point => point.ErrorMilligramsPerLitre is double error ? Signed(error, 3) : "-")],
+            ["  read by", .. points.Select(static point => point.ReadBy ?? "-")],
+        ];
+        TextTable.Write(output, rows, "  ");
+    }
+
+    private static void WriteResult(TextWriter output, CalibrationRecord record)
+    {
+        string unit = record.Probe.SignalUnit.Length == 0 ? "" : " " + record.Probe.SignalUnit;
+        RecordedResult result = record.Result;
+        double percent = 100 * result.SlopeStandardUncertainty / Math.Abs(result.Slope);
+        output.WriteLine($"  slope {Number.Print(Rounded(result.Slope))}{(record.Probe.MeterSettings == null ? unit + "/hPa" : " (1 is a meter that shows the truth)")}, u {Number.Print(Rounded(result.SlopeStandardUncertainty))} ({Number.Fixed(percent, 2)} %)");
+        output.WriteLine($"  zero  {Number.Print(Rounded(result.Zero))}{(record.Probe.MeterSettings == null ? unit : " hPa")}, u {Number.Print(Rounded(result.ZeroStandardUncertainty))} ({record.Zero.Source})");
+        output.WriteLine();
+    }
+
+    private static void WriteLimits(TextWriter output, CalibrationRecord record)
+    {
+        output.WriteLine("Limits (" + record.Result.DecisionRule + ")");
+        List<string[]> rows = [["check", "found", "limit", "verdict", "source"]];
+        foreach (RecordedLimit limit in record.Limits)
+        {
+            string found = limit.Found is double value ? Number.Fixed(value, 3) + " " + limit.Unit : "-";
+            string applied = limit.Applied is string which ? $"{limit.Limit}: {which}" : limit.Limit;
+            rows.Add([limit.Check, found, applied, limit.Verdict + (limit.Decides ? "" : " (informs)"), limit.Source]);
+        }
+
+        TextTable.Write(output, rows, "  ");
+        output.WriteLine();
+    }
+
+    private static void WriteBudget(TextWriter output, CalibrationRecord record)
+    {
+        output.WriteLine("Uncertainty of the slope (k = 1)");
+        List<string[]> rows = [["input", "u", "% of slope", "source"]];
+        foreach (RecordedContribution line in record.Budget)
+        {
+            rows.Add([line.Input, Number.Print(Rounded(line.StandardUncertainty)) + " " + line.Unit, Number.Fixed(line.SlopePercent, 3), line.Source]);
+        }
+
+        TextTable.Write(output, rows, "  ");
+        output.WriteLine();
+    }
+
+    private static void WriteFindings(TextWriter output, CalibrationRecord record)
+    {
+        if (record.Findings.Length == 0)
+        {
+            return;
+        }
+
+        output.WriteLine("What the guards saw");
+        foreach (RecordedFinding finding in record.Findings)
+        {
+            output.WriteLine($"  {finding.Guard} ({finding.Severity}): {finding.Saw}");
+            if (finding.Reason is string reason)
+            {
+                output.WriteLine("    reason for going on: " + reason);
+            }
+        }
+
+        output.WriteLine();
+    }
+
+    /// <summary>A time for people.</summary>
+    internal static string Time(DateTimeOffset time)
+    {
+        return time.UtcDateTime.ToString("yyyy-MM-dd HH:mm", CultureInfo.InvariantCulture);
+    }
+
+    /// <summary>A value with its sign.</summary>
+    internal static string Signed(double value, int decimals)
+    {
+        string text = Number.Fixed(value, decimals);
+        return text.StartsWith('-') ? text : "+" + text;
+    }
+
+    /// <summary>Five digits: enough for people, the record keeps all.</summary>
+    internal static double Rounded(double value)
+    {
+        return double.Parse(value.ToString("G5", CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
+    }
+}
