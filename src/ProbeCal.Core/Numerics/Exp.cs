@@ -32,7 +32,7 @@ public static partial class Numerics
     /// </returns>
     /// <remarks>
     /// <para>Range: all doubles. Error below 1 ulp: by the derivation at most 0.77 ulp where the result is normal, at most
-    /// 1 ulp where it is subnormal (there the scaling rounds a second time).</para>
+    /// 0.9 ulp where it is subnormal (there the scaling rounds a second time).</para>
     /// <para>Method: x = k·ln 2 + r with k the nearest integer (argument reduction with ln 2 in two parts: W. J. Cody and
     /// W. Waite, Software Manual for the Elementary Functions, Prentice-Hall 1980, chapter 6), a polynomial for e^r, and
     /// 2^k put on through the exponent bits. 1 + r is kept as a rounded sum and its exact rest, so that one rounding
