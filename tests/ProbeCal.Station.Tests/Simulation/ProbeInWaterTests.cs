@@ -17,8 +17,13 @@ public class ProbeInWaterTests
 
     private static readonly SimulatedProbe Quiet = new()
     {
-        NoiseNanoampere = 0, ThermometerNoiseKelvin = 0, BarometerNoiseHectopascal = 0, ThermometerOffsetKelvin = 0,
-        BarometerOffsetHectopascal = 0, SlopeDriftPerDay = 0, ResolutionNanoampere = 1e-9,
+        NoiseNanoampere = 0,
+        ThermometerNoiseKelvin = 0,
+        BarometerNoiseHectopascal = 0,
+        ThermometerOffsetKelvin = 0,
+        BarometerOffsetHectopascal = 0,
+        SlopeDriftPerDay = 0,
+        ResolutionNanoampere = 1e-9,
     };
 
     [Fact]
@@ -61,7 +66,10 @@ public class ProbeInWaterTests
     {
         SimulationSettings settings = new()
         {
-            Probe = Quiet, TemperatureCelsius = celsius, PressureHectopascal = hectopascal, WeatherHectopascal = 0,
+            Probe = Quiet,
+            TemperatureCelsius = celsius,
+            PressureHectopascal = hectopascal,
+            WeatherHectopascal = 0,
             Script = SimulationScript.Parse("p", "air-saturated-water"),
         };
         (SimulatedTruth truth, SimulatedInstruments instruments) = Run(settings, 1)[0];
@@ -84,7 +92,11 @@ public class ProbeInWaterTests
         {
             SimulationSettings settings = new()
             {
-                Probe = Quiet, DailySaturationPercent = 0, SaturationPercent = 100, DailyTemperatureKelvin = 0, Script = SimulationScript.Parse("p", phase),
+                Probe = Quiet,
+                DailySaturationPercent = 0,
+                SaturationPercent = 100,
+                DailyTemperatureKelvin = 0,
+                Script = SimulationScript.Parse("p", phase),
             };
             return Run(settings, 1)[0].Truth.SettledSignalNanoampere - Quiet.ZeroNanoampere;
         }
@@ -113,7 +125,9 @@ public class ProbeInWaterTests
     {
         SimulationSettings settings = new()
         {
-            Probe = Quiet with { SlopeDriftPerDay = -0.01 }, Interval = TimeSpan.FromHours(24), WeatherHectopascal = 0,
+            Probe = Quiet with { SlopeDriftPerDay = -0.01 },
+            Interval = TimeSpan.FromHours(24),
+            WeatherHectopascal = 0,
             Script = SimulationScript.Parse("p", "air-saturated-water"),
         };
         (SimulatedTruth Truth, SimulatedInstruments Instruments)[] run = Run(settings, 2);
