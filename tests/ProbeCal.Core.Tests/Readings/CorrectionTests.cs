@@ -159,6 +159,23 @@ public class CorrectionTests
         Assert.True(Water(Stirring.Still).IsStirringMismatch(air));
     }
 
+    [Fact]
+    public void Correct_AllocatesNothing()
+    {
+        ProbeCalibration calibration = Calibration();
+        ReadingConditions conditions = Bench.Conditions(0.05, true, 0.0, 0.03, 0.8, 0.25, 0.01);
+        var reading = new Reading();
+        Correction.Correct(calibration, conditions, 50.0, 15.0, 1000.0, 5.0, RangeRule.Refuse, reading);
+        long before = GC.GetAllocatedBytesForCurrentThread();
+        for (int i = 0; i < 1000; i++)
+        {
+            Correction.Correct(calibration, conditions, 50.0 + (0.01 * i), 15.0, 1000.0, 5.0, RangeRule.Refuse, reading);
+        }
+
+        Assert.Equal(0L, GC.GetAllocatedBytesForCurrentThread() - before);
+        Assert.Equal(Status.Ok, reading.UncertaintyStatus);
+    }
+
     private static ReadingConditions Water(Stirring stirring)
     {
         return new ReadingConditions(OxygenEquation.BensonKrause1984, 0.0, true, 0.0, 0.0, 0.0, 0.0, stirring, 1.0, 0.0);
