@@ -21,6 +21,18 @@ internal static class InputCheck
         return double.IsInfinity(value) ? double.NaN : value;
     }
 
+    /// <summary>
+    /// Hands out a result. One that overflowed is NaN, and where no input was at fault before, the status given says which one
+    /// was too large: Ok always comes with a finite value.
+    /// </summary>
+    internal static Status Deliver(double result, Status status, Status overflow, out double value)
+    {
+        value = double.NaN;
+        if (NotFinite(result)) { return status == Status.Ok ? overflow : status; }
+        value = result;
+        return status;
+    }
+
     internal static bool NotFinite(double value)
     {
         return double.IsNaN(value) || double.IsInfinity(value);

@@ -52,6 +52,13 @@ public class CampaignTests(CampaignRun run, ITestOutputHelper output) : IClassFi
     }
 
     [Fact]
+    public void Values_are_finite_with_Ok_and_NaN_with_a_refusal()
+    {
+        string[] contradictions = run.Reports.Where(r => r.FirstContradiction != null).Select(r => r.FirstContradiction!).ToArray();
+        Assert.True(contradictions.Length == 0, string.Join("\n", contradictions));
+    }
+
+    [Fact]
     public void Every_method_of_the_device_assembly_was_reached()
     {
         Assert.True(run.NeverCalled.Count == 0, string.Join("\n", run.NeverCalled));

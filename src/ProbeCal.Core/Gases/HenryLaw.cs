@@ -21,9 +21,9 @@ public static class HenryLaw
             CheckCoefficient(molesPerLitreAtmosphere),
             InputCheck.NotFinite(partialPressureHectopascal) ? Status.PartialPressureNotFinite : Status.Ok);
         if (status != Status.Ok) { return status; }
-        molesPerLitre = InputCheck.FiniteOrNaN(
-            molesPerLitreAtmosphere * PressureUnits.AtmospheresFromHectopascal(partialPressureHectopascal));
-        return status;
+        return InputCheck.Deliver(
+            molesPerLitreAtmosphere * PressureUnits.AtmospheresFromHectopascal(partialPressureHectopascal),
+            status, Status.CoefficientAboveRange, out molesPerLitre);
     }
 
     /// <summary>Mass concentration from partial pressure.</summary>
@@ -39,8 +39,7 @@ public static class HenryLaw
             MolesPerLitre(molesPerLitreAtmosphere, partialPressureHectopascal, out double molesPerLitre),
             CheckCoefficient(gramsPerMole));
         if (status != Status.Ok) { return status; }
-        gramsPerLitre = InputCheck.FiniteOrNaN(molesPerLitre * gramsPerMole);
-        return status;
+        return InputCheck.Deliver(molesPerLitre * gramsPerMole, status, Status.CoefficientAboveRange, out gramsPerLitre);
     }
 
     /// <summary>Partial pressure from concentration.</summary>
@@ -54,9 +53,9 @@ public static class HenryLaw
             CheckCoefficient(molesPerLitreAtmosphere),
             InputCheck.NotFinite(molesPerLitre) ? Status.ConcentrationNotFinite : Status.Ok);
         if (status != Status.Ok) { return status; }
-        partialPressureHectopascal = InputCheck.FiniteOrNaN(
-            PressureUnits.HectopascalFromAtmospheres(molesPerLitre / molesPerLitreAtmosphere));
-        return status;
+        return InputCheck.Deliver(
+            PressureUnits.HectopascalFromAtmospheres(molesPerLitre / molesPerLitreAtmosphere),
+            status, Status.CoefficientBelowRange, out partialPressureHectopascal);
     }
 
     private static Status CheckCoefficient(double coefficient)

@@ -109,6 +109,7 @@ public static partial class OxygenEquilibrium
             equation, celsius, salinity, pressureHectopascal,
             out double logPerKelvin, out double logPerSalinity, out double logPerHectopascal);
         double partialPressure = milligramsPerLitre / solubility;
+        if (InputCheck.NotFinite(partialPressure)) { return status == Status.Ok ? Status.ConcentrationBelowRange : status; }
         perKelvin = InputCheck.FiniteOrNaN(-partialPressure * logPerKelvin);
         perSalinity = InputCheck.FiniteOrNaN(-partialPressure * logPerSalinity);
         perHectopascal = InputCheck.FiniteOrNaN(-partialPressure * logPerHectopascal);

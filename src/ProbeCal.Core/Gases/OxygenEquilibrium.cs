@@ -92,8 +92,8 @@ public static partial class OxygenEquilibrium
         Status status = CheckConcentration(
             equation, celsius, salinity, pressureHectopascal, milligramsPerLitre, rule, out double solubility);
         if (InputCheck.Refuses(status, rule) || double.IsNaN(solubility)) { return status; }
-        partialPressureHectopascal = InputCheck.FiniteOrNaN(milligramsPerLitre / solubility);
-        return status;
+        return InputCheck.Deliver(
+            milligramsPerLitre / solubility, status, Status.ConcentrationBelowRange, out partialPressureHectopascal);
     }
 
     /// <summary>Ranges of the partial pressure of air.</summary>

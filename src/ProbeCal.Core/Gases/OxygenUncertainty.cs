@@ -62,10 +62,9 @@ public static class OxygenUncertainty
         double fromSalinity = perSalinity * salinityUncertainty;
         double fromPressure = perHectopascal * pressureUncertainty;
         double fromEquation = value * Relative(salinity);
-        milligramsPerLitre = InputCheck.FiniteOrNaN(Numerics.Sqrt(
-            (fromTemperature * fromTemperature) + (fromSalinity * fromSalinity)
-            + (fromPressure * fromPressure) + (fromEquation * fromEquation)));
-        return status;
+        double squares = (fromTemperature * fromTemperature) + (fromSalinity * fromSalinity)
+            + (fromPressure * fromPressure) + (fromEquation * fromEquation);
+        return InputCheck.Deliver(Numerics.Sqrt(squares), status, Status.UncertaintyAboveRange, out milligramsPerLitre);
     }
 
     /// <summary>
@@ -91,9 +90,8 @@ public static class OxygenUncertainty
         if (uncertainties != Status.Ok || InputCheck.Refuses(status, rule)) { return status; }
         double fromTemperature = perKelvin * temperatureUncertainty;
         double fromPressure = perHectopascal * pressureUncertainty;
-        hectopascal = InputCheck.FiniteOrNaN(Numerics.Sqrt(
-            (fromTemperature * fromTemperature) + (fromPressure * fromPressure)));
-        return status;
+        double squares = (fromTemperature * fromTemperature) + (fromPressure * fromPressure);
+        return InputCheck.Deliver(Numerics.Sqrt(squares), status, Status.UncertaintyAboveRange, out hectopascal);
     }
 
     private static double Relative(double salinity)

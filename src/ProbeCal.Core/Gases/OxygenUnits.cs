@@ -50,9 +50,9 @@ public static class OxygenUnits
         micromolesPerKilogram = double.NaN;
         Status status = Check(milligramsPerLitre, densityKilogramsPerCubicMetre);
         if (status != Status.Ok) { return status; }
-        micromolesPerKilogram = InputCheck.FiniteOrNaN(
-            MicromolesPerLitreFromMilligramsPerLitre(milligramsPerLitre) * Thousand / densityKilogramsPerCubicMetre);
-        return status;
+        return InputCheck.Deliver(
+            MicromolesPerLitreFromMilligramsPerLitre(milligramsPerLitre) * Thousand / densityKilogramsPerCubicMetre,
+            status, Status.ConcentrationAboveRange, out micromolesPerKilogram);
     }
 
     /// <summary>µmol per kg of water to mg/L.</summary>
@@ -65,9 +65,9 @@ public static class OxygenUnits
         milligramsPerLitre = double.NaN;
         Status status = Check(micromolesPerKilogram, densityKilogramsPerCubicMetre);
         if (status != Status.Ok) { return status; }
-        milligramsPerLitre = InputCheck.FiniteOrNaN(
-            MilligramsPerLitreFromMicromolesPerLitre(micromolesPerKilogram * densityKilogramsPerCubicMetre / Thousand));
-        return status;
+        return InputCheck.Deliver(
+            MilligramsPerLitreFromMicromolesPerLitre(micromolesPerKilogram * densityKilogramsPerCubicMetre / Thousand),
+            status, Status.ConcentrationAboveRange, out milligramsPerLitre);
     }
 
     /// <summary>mg/L to mg per kg of water (parts per million by mass).</summary>
@@ -80,8 +80,9 @@ public static class OxygenUnits
         milligramsPerKilogram = double.NaN;
         Status status = Check(milligramsPerLitre, densityKilogramsPerCubicMetre);
         if (status != Status.Ok) { return status; }
-        milligramsPerKilogram = InputCheck.FiniteOrNaN(milligramsPerLitre * Thousand / densityKilogramsPerCubicMetre);
-        return status;
+        return InputCheck.Deliver(
+            milligramsPerLitre * Thousand / densityKilogramsPerCubicMetre,
+            status, Status.ConcentrationAboveRange, out milligramsPerKilogram);
     }
 
     private static Status Check(double concentration, double densityKilogramsPerCubicMetre)

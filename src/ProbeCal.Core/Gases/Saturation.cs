@@ -27,8 +27,8 @@ public static class Saturation
         if (InputCheck.Refuses(status, rule)) { return status; }
         double air = OxygenEquilibrium.AirPartialPressure(celsius, pressureHectopascal);
         if (air <= 0.0) { return status; }
-        percent = InputCheck.FiniteOrNaN(PerCent * partialPressureHectopascal / air);
-        return status;
+        return InputCheck.Deliver(
+            PerCent * partialPressureHectopascal / air, status, Status.PartialPressureBelowRange, out percent);
     }
 
     /// <summary>Percentage of saturation at 1 atm (1013.25 hPa), whatever the local pressure.</summary>
@@ -61,9 +61,14 @@ public static class Saturation
         double air = OxygenEquilibrium.AirPartialPressure(celsius, pressureHectopascal);
         if (air <= 0.0) { return status; }
         double percentPerAir = -PerCent * partialPressureHectopascal / air / air;
+        double slope = percentPerAir * OxygenEquilibrium.AirPartialPressureSlope(celsius);
+        if (InputCheck.NotFinite(percentPerAir) || InputCheck.NotFinite(slope))
+        {
+            return status == Status.Ok ? Status.PartialPressureBelowRange : status;
+        }
         perPartialPressure = InputCheck.FiniteOrNaN(PerCent / air);
-        perKelvin = InputCheck.FiniteOrNaN(percentPerAir * OxygenEquilibrium.AirPartialPressureSlope(celsius));
-        perHectopascal = InputCheck.FiniteOrNaN(percentPerAir * DryAir.OxygenMoleFraction);
+        perKelvin = slope;
+        perHectopascal = percentPerAir * DryAir.OxygenMoleFraction;
         return status;
     }
 
@@ -100,8 +105,7 @@ public static class Saturation
             status = InputCheck.Graver(status, Status.SaturationAboveRange);
             if (InputCheck.Refuses(status, rule)) { return status; }
         }
-        partialPressureHectopascal = InputCheck.FiniteOrNaN(value);
-        return status;
+        return InputCheck.Deliver(value, status, Status.SaturationBelowRange, out partialPressureHectopascal);
     }
 
     /// <summary>Partial pressure behind a percentage at 1 atm: the inverse of <see cref="PercentOneAtmosphere"/>.</summary>

@@ -83,26 +83,27 @@ public static class TemperatureCoefficient
         Status status = Evaluate(form, coefficient, referenceCelsius, temperatureCelsius, out double factor);
         if (status != Status.Ok) { return status; }
 
+        double value;
         switch (form)
         {
             case TemperatureCoefficientForm.Exponential:
-                perKelvin = coefficient;
+                value = coefficient;
                 break;
             case TemperatureCoefficientForm.Compound:
-                perKelvin = Numerics.Ln(1.0 + coefficient);
+                value = Numerics.Ln(1.0 + coefficient);
                 break;
             case TemperatureCoefficientForm.Linear:
                 // Evaluate has shown that the factor is positive.
-                perKelvin = coefficient / factor;
+                value = coefficient / factor;
                 break;
             default:
                 // Evaluate has shown that the absolute temperature is positive.
                 double kelvin = temperatureCelsius + ZeroCelsius;
-                perKelvin = coefficient / (GasConstant * kelvin * kelvin);
+                value = coefficient / (GasConstant * kelvin * kelvin);
                 break;
         }
 
-        return Status.Ok;
+        return InputCheck.Deliver(value, status, Status.CoefficientAboveRange, out perKelvin);
     }
 
     /// <summary>d ln f/d coefficient at T: K for the forms in 1/K, mol/J for the Arrhenius form. Zero at the reference temperature.</summary>
@@ -124,25 +125,26 @@ public static class TemperatureCoefficient
         if (status != Status.Ok) { return status; }
 
         double difference = temperatureCelsius - referenceCelsius;
+        double value;
         switch (form)
         {
             case TemperatureCoefficientForm.Exponential:
-                perCoefficient = difference;
+                value = difference;
                 break;
             case TemperatureCoefficientForm.Compound:
                 // Evaluate has shown that 1 + a is positive.
-                perCoefficient = difference / (1.0 + coefficient);
+                value = difference / (1.0 + coefficient);
                 break;
             case TemperatureCoefficientForm.Linear:
-                perCoefficient = difference / factor;
+                value = difference / factor;
                 break;
             default:
                 // Evaluate has shown that both absolute temperatures are positive.
-                perCoefficient = difference / (GasConstant * (temperatureCelsius + ZeroCelsius) * (referenceCelsius + ZeroCelsius));
+                value = difference / (GasConstant * (temperatureCelsius + ZeroCelsius) * (referenceCelsius + ZeroCelsius));
                 break;
         }
 
-        return Status.Ok;
+        return InputCheck.Deliver(value, status, Status.CoefficientAboveRange, out perCoefficient);
     }
 
     /// <summary>

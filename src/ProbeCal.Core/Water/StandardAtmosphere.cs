@@ -50,8 +50,7 @@ public static class StandardAtmosphere
         hectopascal = double.NaN;
         Status status = InputCheck.Graver(CheckPressure(stationHectopascal), CheckAltitude(altitudeMetres));
         if (status != Status.Ok) { return status; }
-        hectopascal = stationHectopascal / Ratio(altitudeMetres);
-        return Status.Ok;
+        return InputCheck.Deliver(stationHectopascal / Ratio(altitudeMetres), status, Status.PressureAboveRange, out hectopascal);
     }
 
     /// <summary>The station pressure that stands behind a sea-level pressure, by the standard atmosphere.</summary>
@@ -63,8 +62,7 @@ public static class StandardAtmosphere
         hectopascal = double.NaN;
         Status status = InputCheck.Graver(CheckPressure(seaLevelHectopascal), CheckAltitude(altitudeMetres));
         if (status != Status.Ok) { return status; }
-        hectopascal = seaLevelHectopascal * Ratio(altitudeMetres);
-        return Status.Ok;
+        return InputCheck.Deliver(seaLevelHectopascal * Ratio(altitudeMetres), status, Status.PressureAboveRange, out hectopascal);
     }
 
     // Inside the range the base lies between 0.75 and 1.02, so the ratio is never zero.
