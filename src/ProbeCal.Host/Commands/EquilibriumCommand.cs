@@ -49,7 +49,7 @@ internal static class EquilibriumCommand
                 throw new InputException($"--format '{shape}': there are text and json");
             }
 
-            PressureEntry air = PressureEntry.Parse(parsed.GetValue(pressure), parsed.GetValue(altitude), parsed.GetValue(pressureUncertainty));
+            StationPressure air = StationPressure.Parse(parsed.GetValue(pressure), parsed.GetValue(altitude), parsed.GetValue(pressureUncertainty));
             WaterConditions conditions = new(
                 Quantity.TemperatureCelsius("--temperature", parsed.GetValue(temperature)!),
                 Quantity.Salinity("--salinity", parsed.GetValue(salinity)!),

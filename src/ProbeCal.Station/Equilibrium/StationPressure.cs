@@ -10,7 +10,7 @@ namespace ProbeCal.Station.Equilibrium;
 /// <param name="Hectopascal">Absolute station pressure, hPa.</param>
 /// <param name="Source"><c>given</c> or <c>altitude</c>.</param>
 /// <param name="UncertaintyHectopascal">Standard uncertainty, hPa.</param>
-public sealed record PressureEntry(double Hectopascal, string Source, double UncertaintyHectopascal)
+public sealed record StationPressure(double Hectopascal, string Source, double UncertaintyHectopascal)
 {
     /// <summary>
     /// Least standard uncertainty of a pressure taken from the altitude alone, hPa: the weather moves it by some 3 % about
@@ -20,7 +20,7 @@ public sealed record PressureEntry(double Hectopascal, string Source, double Unc
 
     /// <summary>Reads the options; one of pressure and altitude must be there.</summary>
     /// <exception cref="InputException">Neither is given, one cannot be read, or the pressure is impossible at the altitude.</exception>
-    public static PressureEntry Parse(string? pressure, string? altitude, string? uncertainty)
+    public static StationPressure Parse(string? pressure, string? altitude, string? uncertainty)
     {
         double? stated = uncertainty is null ? null : Quantity.PressureHectopascal("--pressure-uncertainty", uncertainty);
         if (stated < 0)
@@ -41,7 +41,7 @@ public sealed record PressureEntry(double Hectopascal, string Source, double Unc
                 throw OutsideAtmosphere(altitude!);
             }
 
-            return new PressureEntry(standard, "altitude", Math.Max(AltitudeOnlyUncertaintyHectopascal, stated ?? 0));
+            return new StationPressure(standard, "altitude", Math.Max(AltitudeOnlyUncertaintyHectopascal, stated ?? 0));
         }
 
         double hectopascal = Quantity.PressureHectopascal("--pressure", pressure);
@@ -50,7 +50,7 @@ public sealed record PressureEntry(double Hectopascal, string Source, double Unc
             Judge(pressure, hectopascal, altitude!, above);
         }
 
-        return new PressureEntry(hectopascal, "given", stated ?? 0);
+        return new StationPressure(hectopascal, "given", stated ?? 0);
     }
 
     private static void Judge(string pressure, double hectopascal, string altitude, double metres)
