@@ -70,7 +70,7 @@ internal static class DemoCommand
                 return refused;
             }
 
-            screen.Step(2, "The probe: simulated, 60 times faster than life, first in air-saturated water, then in the tarn");
+            screen.Step(2, "A simulated probe, sixty times faster than life: in air-saturated water, then in the tarn");
             Task<int> simulation = shell.InBackgroundAsync(
                 "simulate", "--tcp", Text(port), "--line", Line, "--altitude", "640m", "--temperature", "16C", "--phase", "air-saturated-water:20min,lake",
                 "--faster", "60", "--seed", Text(seed), "--truth", truth);

@@ -30,13 +30,14 @@ internal sealed class DemoScreen
 
     internal void Step(int number, string what)
     {
-        _console.WriteLine();
+        _terminal.Output.WriteLine();
         _console.MarkupLineInterpolated($"[bold]{number}. {what}[/]");
     }
 
     internal void Command(IEnumerable<string> arguments)
     {
-        _console.MarkupLineInterpolated($"[dim]> probecal {string.Join(' ', arguments.Select(Quoted))}[/]");
+        // Past Spectre, which would break the line: what stands here is to be copied.
+        _terminal.Output.WriteLine("> probecal " + string.Join(' ', arguments.Select(Quoted)));
     }
 
     internal void End(string? complaint)
