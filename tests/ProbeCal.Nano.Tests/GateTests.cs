@@ -103,7 +103,7 @@ public class GateTests
         { "opcode", "CheckedAdd" },
         { "opcode", "Boxes" },
         { "opcode", "Float" },
-        { "throw", "Throws" },
+        { "opcode", "Throws" },
         { "exception-handler", "Catches" },
         { "greater-than", "Greater" },
         { "greater-than", "GreaterOrEqual" },

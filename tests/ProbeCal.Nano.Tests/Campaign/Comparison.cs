@@ -38,10 +38,6 @@ internal sealed class Comparison
             long bits = ToBits(desktop!);
             return bits == device.I ? null : $"{name}: desktop {desktop}, device {device.I}";
         }
-        if (type.MetadataType == MetadataType.String)
-        {
-            return Equals(desktop, device.R) ? null : $"{name}: desktop {desktop}, device {device.R}";
-        }
         return ObjectDifference(name, desktop, device.R);
     }
 

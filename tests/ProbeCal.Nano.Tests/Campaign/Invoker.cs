@@ -75,7 +75,7 @@ internal sealed class Invoker(Machine machine)
         }
         catch (Exception thrown) when (thrown is not NotSupportedException)
         {
-            deviceRefusal = thrown is ProgramException own ? own.TypeName[(own.TypeName.LastIndexOf('.') + 1)..] : thrown.GetType().Name;
+            deviceRefusal = thrown.GetType().Name;
         }
         for (int i = 0; i < arguments.Length; i++)
         {

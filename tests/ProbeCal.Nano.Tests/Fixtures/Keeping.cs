@@ -17,11 +17,7 @@ public sealed class Keeping
 
     public Keeping(double scale)
     {
-        if (!(0.0 < scale))
-        {
-            throw new ArgumentOutOfRangeException(nameof(scale));
-        }
-        this.scale = scale;
+        this.scale = 0.0 < scale ? scale : 1.0;
     }
 
     public static Answer Lookup(double x, int index, out double value)

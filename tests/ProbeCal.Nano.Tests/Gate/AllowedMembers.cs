@@ -11,21 +11,16 @@ internal static class AllowedMembers
         ["System.Void"] = "no value",
         ["System.Boolean"] = "an integer on the device",
         ["System.Byte"] = "an integer on the device",
-        ["System.Char"] = "an integer on the device",
         ["System.Int32"] = "the device's own integer",
         ["System.UInt32"] = "as long as it is never cast to a signed type (rule sign-cast)",
         ["System.Int64"] = "exact on the device",
         ["System.UInt64"] = "as long as it is never cast to a signed type (rule sign-cast)",
         ["System.Double"] = "IEEE double in + - * /, apart from what the other rules refuse",
-        ["System.String"] = "constants and comparison only",
         ["System.Object"] = "base of every class",
         ["System.Array"] = "base of every array",
         ["System.Enum"] = "base of every enumeration",
         ["System.ValueType"] = "base of every enumeration",
         ["System.Attribute"] = "base of the attributes that the compiler adds",
-        ["System.ArgumentException"] = "at the edge, with one or two strings",
-        ["System.ArgumentNullException"] = "at the edge, with one string",
-        ["System.ArgumentOutOfRangeException"] = "at the edge, with one or two strings",
     };
 
     /// <summary>Methods and constructors that may be called.</summary>
@@ -40,16 +35,5 @@ internal static class AllowedMembers
         ["System.BitConverter::DoubleToInt64Bits(System.Double)"] = "exact on the device",
         ["System.BitConverter::Int64BitsToDouble(System.Int64)"] = "exact on the device",
         ["System.Runtime.CompilerServices.RuntimeHelpers::InitializeArray(System.Array,System.RuntimeFieldHandle)"] = "static array initialisers work on the device",
-        ["System.Array::Copy(System.Array,System.Array,System.Int32)"] = "native on the device",
-        ["System.Array::Copy(System.Array,System.Int32,System.Array,System.Int32,System.Int32)"] = "native on the device",
-        ["System.Array::Clear(System.Array,System.Int32,System.Int32)"] = "native on the device",
-        ["System.ArgumentException::.ctor(System.String)"] = "exists on the device",
-        ["System.ArgumentException::.ctor(System.String,System.String)"] = "exists on the device",
-        ["System.ArgumentNullException::.ctor(System.String)"] = "exists on the device",
-        ["System.ArgumentOutOfRangeException::.ctor(System.String)"] = "exists on the device",
-        ["System.ArgumentOutOfRangeException::.ctor(System.String,System.String)"] = "exists on the device",
-        ["System.String::get_Length()"] = "native on the device",
-        ["System.String::get_Chars(System.Int32)"] = "native on the device",
-        ["System.String::op_Equality(System.String,System.String)"] = "compares the bytes on the device",
     };
 }

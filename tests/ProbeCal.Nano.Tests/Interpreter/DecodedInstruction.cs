@@ -10,7 +10,6 @@ internal enum Operation : byte
     Return,
     ReturnBits,
     ReturnAll,
-    Throw,
     EnsureInitialised,
 
     Jump,
@@ -144,7 +143,6 @@ internal enum Operation : byte
     Length,
     NewArray,
     NewObject,
-    NewException,
     IsInstance,
     CastClass,
 

@@ -170,16 +170,12 @@ internal sealed partial class Decoder
 
     private void DecodeCreation(MethodReference constructor, DecodedInstruction decoded)
     {
-        if (constructor is MethodDefinition own)
+        if (constructor is not MethodDefinition own)
         {
-            decoded.Operation = Operation.NewObject;
-            decoded.Object = new Creation(machine.TypeOf(own.DeclaringType), machine.MethodOf(own));
+            throw new NotSupportedException("an object of another assembly's class " + constructor.DeclaringType.FullName);
         }
-        else
-        {
-            decoded.Operation = Operation.NewException;
-            decoded.Object = constructor.DeclaringType.FullName;
-        }
+        decoded.Operation = Operation.NewObject;
+        decoded.Object = new Creation(machine.TypeOf(own.DeclaringType), machine.MethodOf(own));
         Emit(decoded);
         stack.Add(new Operand(decoded.Target, StackKind.Object));
     }

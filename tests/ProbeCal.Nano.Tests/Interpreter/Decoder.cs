@@ -142,9 +142,6 @@ internal sealed partial class Decoder
             case Code.Ret:
                 DecodeReturn();
                 return;
-            case Code.Throw:
-                Emit(new DecodedInstruction { Operation = Operation.Throw, A = Pop().Slot });
-                return;
             default:
                 throw new NotSupportedException($"the instruction {at} in {method.FullName}");
         }
@@ -198,9 +195,6 @@ internal sealed partial class Decoder
                 return true;
             case Code.Ldnull:
                 EmitResult(StackKind.Object, new DecodedInstruction { Operation = Operation.ObjectConstant });
-                return true;
-            case Code.Ldstr:
-                EmitResult(StackKind.Object, new DecodedInstruction { Operation = Operation.ObjectConstant, Object = at.Operand });
                 return true;
             case Code.Ldtoken:
                 EmitResult(StackKind.Object, new DecodedInstruction { Operation = Operation.ObjectConstant, Object = ((FieldReference)at.Operand).Resolve().InitialValue });

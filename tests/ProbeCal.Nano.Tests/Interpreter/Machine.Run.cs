@@ -33,7 +33,6 @@ internal sealed partial class Machine
                 case Operation.Return: return;
                 case Operation.ReturnBits: f[0].I = f[i.A].I; return;
                 case Operation.ReturnAll: f[0] = f[i.A]; return;
-                case Operation.Throw: throw (Exception)f[i.A].R!;
                 case Operation.EnsureInitialised: EnsureInitialised((InterpretedType)i.Object!); break;
 
                 case Operation.Jump: next = i.Target; break;
@@ -166,7 +165,6 @@ internal sealed partial class Machine
                 case Operation.Length: f[i.Target].I = ((ArrayObject)f[i.A].R!).Items.Length; break;
                 case Operation.NewArray: f[i.Target] = Value.OfObject(new ArrayObject((TypeReference)i.Object!, checked((int)f[i.A].I))); break;
                 case Operation.NewObject: NewObject(in i, frame); break;
-                case Operation.NewException: f[i.Target] = Value.OfObject(new ProgramException((string)i.Object!)); break;
                 case Operation.IsInstance: f[i.Target] = Is(f[i.A].R, i.Object!) ? f[i.A] : default; break;
                 case Operation.CastClass: if (f[i.A].R != null && !Is(f[i.A].R, i.Object!)) { throw new InvalidCastException(); } f[i.Target] = f[i.A]; break;
 

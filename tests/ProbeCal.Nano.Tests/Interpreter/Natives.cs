@@ -15,13 +15,6 @@ internal static class Natives
     {
         ["System.Object::.ctor()"] = static _ => { },
         ["System.Runtime.CompilerServices.RuntimeHelpers::InitializeArray(System.Array,System.RuntimeFieldHandle)"] = InitializeArray,
-        ["System.Array::Copy(System.Array,System.Array,System.Int32)"] = static s => Array.Copy(Items(s[0]), Items(s[1]), (int)s[2].I),
-        ["System.Array::Copy(System.Array,System.Int32,System.Array,System.Int32,System.Int32)"] =
-            static s => Array.Copy(Items(s[0]), (int)s[1].I, Items(s[2]), (int)s[3].I, (int)s[4].I),
-        ["System.Array::Clear(System.Array,System.Int32,System.Int32)"] = static s => Array.Clear(Items(s[0]), (int)s[1].I, (int)s[2].I),
-        ["System.String::get_Length()"] = static s => s[0].I = ((string)s[0].R!).Length,
-        ["System.String::get_Chars(System.Int32)"] = static s => s[0].I = ((string)s[0].R!)[(int)s[1].I],
-        ["System.String::op_Equality(System.String,System.String)"] = static s => s[0].I = (string?)s[0].R == (string?)s[1].R ? 1 : 0,
     };
 
     public static Native Find(MethodReference method)
@@ -29,11 +22,6 @@ internal static class Natives
         return All.TryGetValue(ReferenceRules.NameOf(method), out Native? native)
             ? native
             : throw new NotSupportedException("the interpreter does not know " + ReferenceRules.NameOf(method));
-    }
-
-    private static Value[] Items(Value value)
-    {
-        return ((ArrayObject)value.R!).Items;
     }
 
     private static void InitializeArray(Span<Value> slots)

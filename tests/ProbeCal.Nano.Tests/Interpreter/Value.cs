@@ -60,9 +60,3 @@ internal sealed class DeviceException(string message) : Exception(message);
 
 /// <summary>The program did something for which devices have no common result.</summary>
 internal sealed class UnspecifiedException(string message) : Exception(message);
-
-/// <summary>An exception that the interpreted program made itself.</summary>
-internal sealed class ProgramException(string typeName) : Exception(typeName)
-{
-    public string TypeName { get; } = typeName;
-}
