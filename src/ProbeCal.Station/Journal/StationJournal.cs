@@ -11,7 +11,7 @@ namespace ProbeCal.Station.Journal;
 /// <summary>
 /// Everything a station took in and has not delivered: samples with their readings, rejected lines, events, and the outbox.
 /// One writer connection; the methods may be called from any thread and take turns. A fault of the disk reaches the caller
-/// as <see cref="SqliteException"/>, and then nothing of that call was written.
+/// as <see cref="JournalException"/>, and then nothing of that call was written.
 /// </summary>
 public sealed class StationJournal : IDisposable
 {
@@ -25,6 +25,7 @@ public sealed class StationJournal : IDisposable
     private readonly Statement _removePending;
     private readonly Statement _countPending;
     private readonly Statement _expire;
+    private readonly Statement _lastTime;
 
     private StationJournal(SqliteFile file, int rejectedLinesKept, long firstSequence)
     {
@@ -34,19 +35,20 @@ public sealed class StationJournal : IDisposable
         _removePending = new Statement(file.Connection, "DELETE FROM outbox WHERE id <= $1", 1);
         _countPending = new Statement(file.Connection, "SELECT count(*) FROM outbox WHERE $1 < id", 1);
         _expire = new Statement(file.Connection, "DELETE FROM sample WHERE id IN (SELECT id FROM sample WHERE received_us < $1 ORDER BY received_us LIMIT $2)", 2);
+        _lastTime = new Statement(file.Connection, "SELECT time_us FROM sample WHERE station = $1 AND probe = $2 ORDER BY sequence DESC LIMIT 1", 2);
     }
 
     /// <summary>The file.</summary>
     public string Path => _file.Path;
-
-    /// <summary>For tests, which starve it of room.</summary>
-    internal SqliteConnection Connection => _file.Connection;
 
     /// <summary>Where a damaged journal was put when this one was begun in its place, or null.</summary>
     public string? SetAsidePath => _file.SetAsidePath;
 
     /// <summary>The copy that was made before an older journal was migrated, or null.</summary>
     public string? BackupPath => _file.BackupPath;
+
+    /// <summary>For tests, which starve it of room.</summary>
+    internal SqliteConnection Connection => _file.Connection;
 
     /// <summary>Opens the journal, making it when it is not there. A damaged one is renamed and a new one begun.</summary>
     /// <param name="path">The file.</param>
@@ -71,23 +73,25 @@ public sealed class StationJournal : IDisposable
     }
 
     /// <summary>Does all of <paramref name="work"/> and flushes it to the disk, or does none of it.</summary>
-    /// <exception cref="SqliteException">The disk is full or refuses. Nothing of it was written.</exception>
+    /// <exception cref="JournalException">The disk is full or refuses. Nothing of it was written.</exception>
     public void Commit(Action<JournalTransaction> work)
     {
-        lock (_turn)
+        InTurn(() =>
         {
             using SqliteTransaction transaction = _file.Connection.BeginTransaction();
             _transaction.Use(transaction);
             work(_transaction);
             _transaction.TrimRejectedLines();
             transaction.Commit();
-        }
+            return 0;
+        });
     }
 
     /// <summary>The oldest messages behind <paramref name="after"/>, in order.</summary>
+    /// <exception cref="JournalException">It could not be read.</exception>
     public IReadOnlyList<OutboxRow> Pending(long after, int most)
     {
-        lock (_turn)
+        return InTurn(() =>
         {
             List<OutboxRow> rows = [];
             using SqliteDataReader reader = _pending.Rows(after, most);
@@ -98,25 +102,21 @@ public sealed class StationJournal : IDisposable
             }
 
             return rows;
-        }
+        });
     }
 
     /// <summary>How many messages behind <paramref name="after"/> wait to be delivered.</summary>
+    /// <exception cref="JournalException">It could not be read.</exception>
     public long CountPending(long after = 0)
     {
-        lock (_turn)
-        {
-            return Convert.ToInt64(_countPending.Value(null, after), CultureInfo.InvariantCulture);
-        }
+        return InTurn(() => Convert.ToInt64(_countPending.Value(null, after), CultureInfo.InvariantCulture));
     }
 
     /// <summary>Takes the messages up to and with <paramref name="id"/> out of the outbox: the broker has them.</summary>
+    /// <exception cref="JournalException">It could not be written.</exception>
     public void Delivered(long id)
     {
-        lock (_turn)
-        {
-            _removePending.Run(null, id);
-        }
+        InTurn(() => _removePending.Run(null, id));
     }
 
     /// <summary>
@@ -124,23 +124,33 @@ public sealed class StationJournal : IDisposable
     /// that still wait to be delivered stay: they are whole in the outbox.
     /// </summary>
     /// <returns>How many were deleted.</returns>
+    /// <exception cref="JournalException">It could not be written.</exception>
     public int Expire(DateTimeOffset beforeUtc, int most)
     {
-        lock (_turn)
-        {
-            return _expire.Run(null, JournalTransaction.Microseconds(beforeUtc), most);
-        }
+        return InTurn(() => _expire.Run(null, JournalTransaction.Microseconds(beforeUtc), most));
+    }
+
+    /// <summary>When the last sample of this probe was taken, or null when there is none.</summary>
+    /// <exception cref="JournalException">It could not be read.</exception>
+    public DateTimeOffset? LastSampleTime(string station, string probe)
+    {
+        object? microseconds = InTurn(() => _lastTime.Value(null, station, probe));
+        return microseconds is long value ? DateTimeOffset.UnixEpoch.AddTicks(value * TimeSpan.TicksPerMicrosecond) : null;
     }
 
     /// <inheritdoc/>
     public void Dispose()
     {
-        _transaction.Dispose();
-        _pending.Dispose();
-        _removePending.Dispose();
-        _countPending.Dispose();
-        _expire.Dispose();
-        _file.Dispose();
+        lock (_turn)
+        {
+            _transaction.Dispose();
+            _pending.Dispose();
+            _removePending.Dispose();
+            _countPending.Dispose();
+            _expire.Dispose();
+            _lastTime.Dispose();
+            _file.Dispose();
+        }
     }
 
     /// <summary>True when a damaged journal was put aside by an earlier run, which may have stopped before its first sample.</summary>
@@ -148,5 +158,20 @@ public sealed class StationJournal : IDisposable
     {
         string folder = System.IO.Path.GetDirectoryName(path)!;
         return Directory.GetFiles(folder, System.IO.Path.GetFileName(path) + ".damaged-*").Length != 0;
+    }
+
+    private T InTurn<T>(Func<T> work)
+    {
+        lock (_turn)
+        {
+            try
+            {
+                return work();
+            }
+            catch (SqliteException fault)
+            {
+                throw new JournalException(SqliteFaults.Describe(fault, Path), SqliteFaults.KindOf(fault) == StorageFault.DiskFull, fault);
+            }
+        }
     }
 }

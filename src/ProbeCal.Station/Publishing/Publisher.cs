@@ -2,10 +2,8 @@ using System;
 using System.Collections.Generic;
 using System.Threading;
 using System.Threading.Tasks;
-using Microsoft.Data.Sqlite;
 using Microsoft.Extensions.Logging;
 using ProbeCal.Station.Journal;
-using ProbeCal.Station.Storage;
 
 namespace ProbeCal.Station.Publishing;
 
@@ -153,9 +151,9 @@ public sealed class Publisher
             {
                 rows = _journal.Pending(_delivered, BatchSize);
             }
-            catch (SqliteException fault)
+            catch (JournalException fault)
             {
-                return new LinkResult(LinkOutcome.Refused, "the outbox could not be read: " + SqliteFaults.Describe(fault, _journal.Path));
+                return new LinkResult(LinkOutcome.Refused, "the outbox could not be read: " + fault.Message);
             }
 
             if (rows.Count == 0)
@@ -205,10 +203,10 @@ public sealed class Publisher
         {
             _journal.Delivered(_delivered);
         }
-        catch (SqliteException fault)
+        catch (JournalException fault)
         {
             // They are not sent again by this run, which remembers how far it came; they go with the next removal.
-            PublisherLog.RemovalFailed(_log, SqliteFaults.Describe(fault, _journal.Path));
+            PublisherLog.RemovalFailed(_log, fault.Message);
         }
     }
 

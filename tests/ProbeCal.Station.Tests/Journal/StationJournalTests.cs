@@ -56,7 +56,7 @@ public class StationJournalTests
     {
         using TemporaryFolder folder = new();
         using StationJournal journal = Open(folder);
-        Assert.Throws<SqliteException>(() => journal.Commit(work => Sample(work, 1, null, null)));
+        Assert.Throws<JournalException>(() => journal.Commit(work => Sample(work, 1, null, null)));
         Assert.Equal(0, journal.CountPending());
     }
 
@@ -121,8 +121,9 @@ public class StationJournalTests
         string big = new('x', 200_000);
         Limit(journal, 20);
 
-        SqliteException fault = Assert.Throws<SqliteException>(() => journal.Commit(work => Sample(work, 2, "{}", null, big)));
-        Assert.Equal(StorageFault.DiskFull, SqliteFaults.KindOf(fault));
+        JournalException fault = Assert.Throws<JournalException>(() => journal.Commit(work => Sample(work, 2, "{}", null, big)));
+        Assert.True(fault.IsDiskFull);
+        Assert.Contains("no room is left", fault.Message);
         using (SqliteFile reader = Look(folder))
         {
             Assert.Equal("1", Text(reader, "SELECT count(*) FROM sample"));
@@ -141,7 +142,7 @@ public class StationJournalTests
         using SmallDisk disk = SmallDisk.TryMount();
         using StationJournal journal = StationJournal.Open(System.IO.Path.Combine(disk.Path, "journal.db"), _time);
         int written = 0;
-        SqliteException fault = Assert.Throws<SqliteException>(() =>
+        JournalException fault = Assert.Throws<JournalException>(() =>
         {
             while (written < 100_000)
             {
@@ -150,7 +151,8 @@ public class StationJournalTests
             }
         });
 
-        Assert.Equal(StorageFault.DiskFull, SqliteFaults.KindOf(fault));
+        Assert.True(fault.IsDiskFull);
+        Assert.Contains("no room is left", fault.Message);
         Assert.InRange(written, 10, 100_000);
         using SqliteFile reader = SqliteFile.OpenForReading(journal.Path, JournalFormat.Format);
         Assert.Equal(written.ToString(CultureInfo.InvariantCulture) + "|" + written.ToString(CultureInfo.InvariantCulture), Text(reader, "SELECT count(*), max(sequence) FROM sample"));
@@ -215,6 +217,23 @@ public class StationJournalTests
 
         using SqliteFile reader = Look(folder);
         Assert.Equal("garbage 3,garbage 4,garbage 5|too few fields|5", Text(reader, "SELECT group_concat(raw_text), max(reason), max(id) FROM rejected_line"));
+    }
+
+    [Fact]
+    public void LastSampleTime_IsThatOfTheHighestSequence_AcrossRestarts()
+    {
+        using TemporaryFolder folder = new();
+        using (StationJournal journal = Open(folder))
+        {
+            Assert.Null(journal.LastSampleTime("pier", "do-1"));
+            journal.Commit(work => Sample(work, 1, "{}", null));
+            _time.Advance(TimeSpan.FromMinutes(3));
+            journal.Commit(work => Sample(work, 2, "{}", null));
+        }
+
+        using StationJournal again = Open(folder);
+        Assert.Equal(_start.AddMinutes(3), again.LastSampleTime("pier", "do-1"));
+        Assert.Null(again.LastSampleTime("pier", "do-2"));
     }
 
     [Fact]
