@@ -1,15 +1,82 @@
+using System;
 using System.CommandLine;
+using System.IO;
+using System.Text;
+using System.Threading;
+using System.Threading.Tasks;
+using Microsoft.Extensions.Logging;
+using ProbeCal.Station;
+using ProbeCal.Station.Configuration;
+using ProbeCal.Station.Engine;
 using ProbeCal.Station.Entry;
 
 namespace ProbeCal.Host.Commands;
 
-/// <summary><c>probecal station</c>.</summary>
+/// <summary><c>probecal station</c>: streams corrected readings until it is stopped.</summary>
 internal static class StationCommand
 {
     internal static Command Create(Terminal terminal)
     {
-        Command command = new("station", "(being built)");
-        command.SetAction(int (_) => throw new WorkFailedException("station: not built yet at " + terminal.Time.GetUtcNow().ToString("O", System.Globalization.CultureInfo.InvariantCulture)));
+        Option<string> config = new("--config") { Description = "Configuration file; docs/protocols.md describes it.", Required = true, HelpName = "FILE" };
+        Option<string> data = new("--data") { Description = "Folder with the calibrations, the journal and the lock; made when it is not there.", Required = true, HelpName = "DIR" };
+        Option<string> duration = new("--duration") { Description = "Stop after this long: 10min, 24h. Without it, Ctrl-C or SIGTERM stops.", HelpName = "TIME" };
+        Option<bool> print = new("--print") { Description = "Print each reading, once it is on the disk, as one line of JSON." };
+        Command command = new(
+            "station",
+            """
+            Reads a calibrated probe, corrects, journals and sends every reading.
+
+            Nothing that was journaled is lost when the broker or the power fails; it is sent later.
+            Stopping by Ctrl-C or SIGTERM writes down what has come and exits with 0.
+
+            Examples:
+              probecal station --config station.json --data ./north-pier
+              probecal station --config station.json --data ./north-pier --duration 10min --print
+            """)
+        {
+            config, data, duration, print,
+        };
+        command.SetAction((parsed, stop) => RunAsync(
+            terminal,
+            parsed.GetValue(config)!,
+            parsed.GetValue(data)!,
+            parsed.GetValue(duration),
+            parsed.GetValue(print),
+            stop));
         return command;
+    }
+
+    private static async Task<int> RunAsync(Terminal terminal, string config, string data, string? duration, bool print, CancellationToken stop)
+    {
+        StationConfiguration configuration = ConfigurationFile.Read(config);
+        TimeSpan? length = duration == null ? null : Quantity.Duration("--duration", duration);
+        using DataDirectory folder = DataDirectory.OpenForWriting(data);
+        using ILoggerFactory logs = TerminalLog.FactoryFor(terminal);
+        using CancellationTokenSource end = new(length ?? Timeout.InfiniteTimeSpan, terminal.Time);
+        using CancellationTokenSource either = CancellationTokenSource.CreateLinkedTokenSource(end.Token, stop);
+        StationSurroundings around = new()
+        {
+            Time = terminal.Time,
+            Random = Random.Shared,
+            Logs = logs,
+            Software = Software(),
+            Environment = Environment.GetEnvironmentVariable,
+            StandardInput = terminal.Input,
+            Reading = print ? payload => Print(terminal.Output, payload) : static _ => { },
+        };
+        await StationRun.RunAsync(configuration, folder, around, either.Token).ConfigureAwait(false);
+        return ExitCode.Done;
+    }
+
+    private static void Print(TextWriter output, ReadOnlyMemory<byte> payload)
+    {
+        output.WriteLine(Encoding.UTF8.GetString(payload.Span));
+        output.Flush();
+    }
+
+    private static string Software()
+    {
+        Version version = typeof(StationCommand).Assembly.GetName().Version!;
+        return "probecal " + version.ToString(3);
     }
 }

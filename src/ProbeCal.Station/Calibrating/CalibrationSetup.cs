@@ -47,7 +47,7 @@ public sealed record EnteredPressure
     /// <summary>Absolute station pressure, hPa; none when it comes with each line.</summary>
     public double? Hectopascal { get; init; }
 
-    /// <summary>Where it comes from, see <see cref="PressureSource"/>.</summary>
+    /// <summary>Where it comes from, see <see cref="Entry.PressureSource"/>.</summary>
     public required string Source { get; init; }
 
     /// <summary>Standard uncertainty, hPa.</summary>

@@ -244,7 +244,7 @@ public sealed class Publisher
 
     private async Task<LinkResult> FarewellAsync(LinkResult last, CancellationToken end)
     {
-        LinkResult farewell = await _link.PublishAsync(_options.Farewell, retain: true, end).ConfigureAwait(false);
+        LinkResult farewell = await _link.PublishAsync(_options.Farewell(), retain: true, end).ConfigureAwait(false);
         foreach (LinkResult result in new[] { last, farewell })
         {
             if (result.Outcome != LinkOutcome.Done)

@@ -18,6 +18,6 @@ public sealed record PublisherOptions
     /// <summary>How long delivery may go on after the stop was asked for.</summary>
     public TimeSpan FarewellTime { get; init; } = TimeSpan.FromSeconds(5);
 
-    /// <summary>The last retained message of an orderly stop.</summary>
-    public required Message Farewell { get; init; }
+    /// <summary>Makes the last retained message of an orderly stop.</summary>
+    public required Func<Message> Farewell { get; init; }
 }

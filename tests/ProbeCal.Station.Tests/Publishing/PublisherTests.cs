@@ -25,7 +25,7 @@ public sealed class PublisherTests : IDisposable
     public PublisherTests()
     {
         _journal = StationJournal.Open(_folder.File("journal.db"), _time);
-        PublisherOptions options = new() { Farewell = Message("farewell") };
+        PublisherOptions options = new() { Farewell = () => Message("farewell") };
         _publisher = new Publisher(_journal, _link, options, _time, new FixedRandom(0.5), _log);
     }
 
@@ -68,7 +68,7 @@ public sealed class PublisherTests : IDisposable
 
         await _time.NextWaitAsync();
         Assert.Equal(0, _journal.CountPending());
-        Assert.Contains(_log.Lines, line => line.Contains("201") && line.Contains("not authorised") && line.Contains("everything is kept"));
+        Assert.Contains(_log.Lines, line => line.Contains("2102") && line.Contains("not authorised") && line.Contains("everything is kept"));
         await StopAsync(run, "retain farewell", "disconnect");
     }
 
