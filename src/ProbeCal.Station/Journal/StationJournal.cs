@@ -47,9 +47,6 @@ public sealed class StationJournal : IDisposable
     /// <summary>The copy that was made before an older journal was migrated, or null.</summary>
     public string? BackupPath => _file.BackupPath;
 
-    /// <summary>For tests, which starve it of room.</summary>
-    internal SqliteConnection Connection => _file.Connection;
-
     /// <summary>Opens the journal, making it when it is not there. A damaged one is renamed and a new one begun.</summary>
     /// <param name="path">The file.</param>
     /// <param name="time">Gives the time in the names of copies and the sequence after a damaged journal.</param>
@@ -136,6 +133,17 @@ public sealed class StationJournal : IDisposable
     {
         object? microseconds = InTurn(() => _lastTime.Value(null, station, probe));
         return microseconds is long value ? DateTimeOffset.UnixEpoch.AddTicks(value * TimeSpan.TicksPerMicrosecond) : null;
+    }
+
+    /// <summary>Lets the file grow to so many pages and no further, as a full disk would. For tests.</summary>
+    internal void CapPages(int pages)
+    {
+        InTurn(() =>
+        {
+            using SqliteCommand command = _file.Connection.CreateCommand();
+            command.CommandText = string.Create(CultureInfo.InvariantCulture, $"PRAGMA max_page_count={pages}");
+            return command.ExecuteScalar();
+        });
     }
 
     /// <inheritdoc/>

@@ -72,7 +72,8 @@ public sealed class Publisher
         using CancellationTokenRegistration asked = stop.Register(() => end.CancelAfter(_options.FarewellTime));
         try
         {
-            while (!stop.IsCancellationRequested)
+            // Even a run that is over before it began tries once: a short replay is delivered like a long stream.
+            do
             {
                 LinkResult result = await _link.ConnectAsync(end.Token).ConfigureAwait(false);
                 if (result.Outcome == LinkOutcome.Done)
@@ -89,6 +90,7 @@ public sealed class Publisher
                     await WaitAfterFailureAsync(result, stop).ConfigureAwait(false);
                 }
             }
+            while (!stop.IsCancellationRequested);
         }
         catch (OperationCanceledException) when (end.IsCancellationRequested)
         {

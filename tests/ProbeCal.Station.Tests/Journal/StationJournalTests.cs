@@ -119,7 +119,7 @@ public class StationJournalTests
         using StationJournal journal = Open(folder);
         journal.Commit(work => Sample(work, 1, "{}", null));
         string big = new('x', 200_000);
-        Limit(journal, 20);
+        journal.CapPages(20);
 
         JournalException fault = Assert.Throws<JournalException>(() => journal.Commit(work => Sample(work, 2, "{}", null, big)));
         Assert.True(fault.IsDiskFull);
@@ -129,7 +129,7 @@ public class StationJournalTests
             Assert.Equal("1", Text(reader, "SELECT count(*) FROM sample"));
         }
 
-        Limit(journal, 1_000_000);
+        journal.CapPages(1_000_000);
         long next = 0;
         journal.Commit(work => next = Sample(work, 2, "{}", null, big));
         Assert.Equal(2, next);
@@ -315,14 +315,6 @@ public class StationJournalTests
         string payload = "payload " + sequence.ToString(CultureInfo.InvariantCulture);
         work.Enqueue(new Message("t/" + sequence.ToString(CultureInfo.InvariantCulture), "application/json", Encoding.UTF8.GetBytes(payload)));
         return sequence;
-    }
-
-    /// <summary>Caps the file as a full disk would. It works on the journal's own connection, the only one the cap binds.</summary>
-    private static void Limit(StationJournal journal, int pages)
-    {
-        using SqliteCommand command = journal.Connection.CreateCommand();
-        command.CommandText = string.Create(CultureInfo.InvariantCulture, $"PRAGMA max_page_count={pages}");
-        command.ExecuteNonQuery();
     }
 
     private static SqliteFile Look(TemporaryFolder folder)

@@ -1,5 +1,6 @@
 using System;
 using System.Buffers;
+using System.Collections.Generic;
 using System.Net;
 using System.Net.Sockets;
 using System.Security.Cryptography.X509Certificates;
@@ -67,6 +68,18 @@ public sealed class TestBroker : IAsyncDisposable
     public async Task<Arrival> NextAsync()
     {
         return await _arrivals.Reader.ReadAsync().AsTask().WaitAsync(Deadline.Generous);
+    }
+
+    /// <summary>All messages that reached the broker and were not looked at yet, taken or not.</summary>
+    public List<Arrival> Arrived()
+    {
+        List<Arrival> arrived = [];
+        while (_arrivals.Reader.TryRead(out Arrival? arrival))
+        {
+            arrived.Add(arrival);
+        }
+
+        return arrived;
     }
 
     public bool NothingArrived()
