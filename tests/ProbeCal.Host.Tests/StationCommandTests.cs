@@ -17,7 +17,7 @@ public sealed class StationCommandTests : IDisposable
     private readonly string _folder = Directory.CreateTempSubdirectory("probecal-").FullName;
     private readonly StringWriter _output = new();
     private readonly StringWriter _error = new();
-    private readonly CancellationTokenSource _stop = new();
+    private CancellationTokenSource _stop = new();
     private readonly TaskCompletionSource _firstLine = new(TaskCreationOptions.RunContinuationsAsynchronously);
 
     public void Dispose()
@@ -61,6 +61,8 @@ public sealed class StationCommandTests : IDisposable
         Assert.Equal(0, await run.WaitAsync(TimeSpan.FromSeconds(30)));
         int last = LastSequence();
 
+        _stop.Dispose();
+        _stop = new CancellationTokenSource();
         Assert.Equal(0, await RunAsync("--print", "--duration", "200ms"));
         Assert.True(last < LastSequence());
     }

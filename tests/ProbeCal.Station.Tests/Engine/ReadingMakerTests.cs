@@ -143,6 +143,13 @@ public class ReadingMakerTests
         Assert.Null(json["mgPerL"]!["value"]);
     }
 
+    [Fact]
+    public void TextThatIsNoUnicode_IsSentWithReplacementCharacters()
+    {
+        RawSample sample = new(StationParts.Time, "half a pair: \ud83d.", 100) { TemperatureCelsius = 18, PressureHectopascal = 940, Salinity = 0 };
+        Assert.Equal("half a pair: \ufffd.", (string)Make(sample, StationParts.Configuration(), StationParts.Calibration())["raw"]!["text"]!);
+    }
+
     [Theory]
     [InlineData("simulated", "true")]
     [InlineData("source", "\"simulated\"")]

@@ -68,7 +68,7 @@ public sealed class StationEngineTests : IDisposable
     [Fact]
     public async Task RawText_IsKeptExactly_WhateverStandsInIt()
     {
-        string odd = "\u00b5 \"quoted\" '; DROP TABLE sample; -- \u4e2d\t\u0001";
+        string odd = "\u00b5 \"quoted\" '; DROP TABLE sample; -- \u4e2d\t\u0001 \0 end";
         _source.Deliver(new RawSample(StationParts.Time, odd, 100) { TemperatureCelsius = 18, PressureHectopascal = 940, Salinity = 0 });
         _source.End();
         await Engine().RunAsync(_stop.Token).WaitAsync(Deadline.Generous);

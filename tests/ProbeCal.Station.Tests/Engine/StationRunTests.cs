@@ -157,7 +157,7 @@ public sealed class StationRunTests : IDisposable
         int nobody = TestBroker.FreePort();
         StationConfiguration configuration = Configuration(("source", "\"tcp:127.0.0.1:" + nobody.ToString(System.Globalization.CultureInfo.InvariantCulture) + "\""), ("broker", "{ \"address\": \"mqtt://127.0.0.1:1\" }"));
         Task run = RunAsync(configuration);
-        await _log.SeenAsync(" 2002 ");
+        await _log.SeenAsync(": Lost: ");
         await _stop.CancelAsync();
         await run.WaitAsync(Deadline.Generous);
         Assert.Equal("1", Journal("SELECT count(*) > 0 FROM event WHERE kind = 'source-lost'"));

@@ -291,6 +291,23 @@ public class StationJournalTests
         Assert.Equal(["journal.db"], Directory.GetFiles(folder.Path).Select(System.IO.Path.GetFileName));
     }
 
+    [Fact]
+    public void ReleasedVersion1_Opens_WithEverythingInIt_AndGoesOn()
+    {
+        // Written by a station with four samples, two rejected lines and a broker that refused the readings.
+        using TemporaryFolder folder = new();
+        File.Copy(Repository.File("tests", "Formats", "journal", "version-1.db"), folder.File("journal.db"));
+        using StationJournal journal = Open(folder);
+
+        using SqliteFile reader = Look(folder);
+        Assert.Equal("4|3|2|2", Text(reader, "SELECT (SELECT count(*) FROM sample), (SELECT count(reading) FROM sample), (SELECT count(*) FROM rejected_line), (SELECT count(*) > 1 FROM event) + 1"));
+        Assert.Contains(journal.Pending(0, 100), row => Encoding.UTF8.GetString(row.Message.Payload.Span).Contains("\"sequence\":1,", StringComparison.Ordinal));
+        Assert.Equal(new DateTimeOffset(2026, 6, 2, 12, 0, 4, TimeSpan.Zero), journal.LastSampleTime("tarn", "do-1"));
+        long next = 0;
+        journal.Commit(work => next = work.NextSequence("tarn", "do-1"));
+        Assert.Equal(5, next);
+    }
+
     private StationJournal Open(TemporaryFolder folder)
     {
         return StationJournal.Open(folder.File("journal.db"), _time);
