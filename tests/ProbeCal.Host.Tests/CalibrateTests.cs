@@ -110,6 +110,9 @@ public sealed class CalibrateTests : IDisposable
     [InlineData("--salinity", "35ppt", "35ppt")]
     [InlineData("--give-up-after", "30", "carries its unit")]
     [InlineData("--window", "-3min", "--window -3min")]
+    [InlineData("--window", "31min", "does not fit into --give-up-after 1800 s")]
+    [InlineData("--give-up-after", "60d", "7d at most")]
+    [InlineData("--source", "file:nothing-there.txt", "there is no such file")]
     [InlineData("--samples", "2", "a whole number from 3")]
     [InlineData("--limit", "0.2", "carries its unit")]
     [InlineData("--slope-window", "0.6..0.5", "runs from low to high")]
@@ -255,6 +258,39 @@ public sealed class CalibrateTests : IDisposable
         Assert.Equal(1, list.Code);
         Assert.Contains("CHAIN BROKEN: record 1 was changed after it was stored", list.Error, StringComparison.Ordinal);
         Assert.DoesNotContain("chain whole", list.Output, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public async Task PortThatIsNotThere_IsOneLine_AndExitsWithOne()
+    {
+        Ran ran = await RunAsync(Unattended(("--source", "serial:/dev/probecal-no-such-port")));
+        Assert.Equal(1, ran.Code);
+        Assert.Contains("probecal-no-such-port", ran.Error, StringComparison.Ordinal);
+        Assert.Single(ran.Error.Split('\n'), line => line.StartsWith("probecal: ", StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public async Task NewerLog_IsRefusedAndNotTouched()
+    {
+        await RunAsync(Unattended());
+        string file = Path.Combine(_folder, "calibrations.db");
+        using (Microsoft.Data.Sqlite.SqliteConnection raw = new($"Data Source={file};Pooling=False"))
+        {
+            raw.Open();
+            using Microsoft.Data.Sqlite.SqliteCommand command = raw.CreateCommand();
+            command.CommandText = "PRAGMA user_version = 2; PRAGMA wal_checkpoint(TRUNCATE);";
+            command.ExecuteNonQuery();
+        }
+
+        byte[] before = await File.ReadAllBytesAsync(file);
+        foreach (string[] arguments in new[] { Unattended(), ["calibrations", "list", "--data", _folder] })
+        {
+            Ran ran = await RunAsync(arguments);
+            Assert.Equal(2, ran.Code);
+            Assert.Contains("version 2", ran.Error, StringComparison.Ordinal);
+        }
+
+        Assert.Equal(before, await File.ReadAllBytesAsync(file));
     }
 
     [Fact]

@@ -15,6 +15,8 @@ namespace ProbeCal.Host.Commands;
 /// <summary>From options, and answers where options are missing, to a set-up.</summary>
 internal sealed class CalibrateSetup
 {
+    private const double LongestWaitSeconds = 7 * 86_400;
+
     private static readonly string[] Methods = [CalibrationIds.AirSaturatedWater, CalibrationIds.WaterSaturatedAir];
     private static readonly string[] ZeroPlans = [CalibrationIds.ZeroKeep, CalibrationIds.ZeroAssume, CalibrationIds.ZeroCheck, CalibrationIds.ZeroAdjust];
     private static readonly string[] Scales = ["mg/L", "%local", "%1atm"];
@@ -228,7 +230,7 @@ internal sealed class CalibrateSetup
     private WaitingRules Waiting()
     {
         WaitingRules usual = new();
-        return new WaitingRules
+        WaitingRules waiting = new()
         {
             WindowSeconds = _reader.Given(_options.Window) is string window ? Quantity.Duration("--window", window).TotalSeconds : usual.WindowSeconds,
             LeastCount = _reader.Given(_options.Samples) is string samples ? (int)Number.ParseWhole("--samples", samples, 3, 1_000_000) : usual.LeastCount,
@@ -236,6 +238,14 @@ internal sealed class CalibrateSetup
             Kelvin = _reader.AboveZero(_options.StableTemperature, QuantityKind.TemperatureDifference) ?? usual.Kelvin,
             GiveUpAfterSeconds = _reader.Given(_options.GiveUpAfter) is string longest ? Quantity.Duration("--give-up-after", longest).TotalSeconds : usual.GiveUpAfterSeconds,
         };
+        if (LongestWaitSeconds < waiting.GiveUpAfterSeconds)
+        {
+            throw Wrong.Input("--give-up-after", _reader.Given(_options.GiveUpAfter)!, "a point is waited for 7d at most");
+        }
+
+        return waiting.WindowSeconds < waiting.GiveUpAfterSeconds
+            ? waiting
+            : throw new InputException($"--window {Number.Print(waiting.WindowSeconds)} s does not fit into --give-up-after {Number.Print(waiting.GiveUpAfterSeconds)} s; make the wait longer than the window");
     }
 
     private Dictionary<string, string> Reasons()

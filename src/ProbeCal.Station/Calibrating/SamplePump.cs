@@ -34,8 +34,10 @@ internal sealed class SamplePump : IAsyncDisposable
             }
         }
 
-        bool more = await _pending.ConfigureAwait(false);
+        // Taken off first: a read that failed has been told about once and is not waited for again.
+        Task<bool> done = _pending;
         _pending = null;
+        bool more = await done.ConfigureAwait(false);
         HasEnded = !more;
         return more ? _events.Current : null;
     }
