@@ -52,6 +52,18 @@ public class FileListTests
         }
     }
 
+    [Fact]
+    public void The_device_project_takes_the_mscorlib_that_the_compile_gate_takes()
+    {
+        const string Package = "nanoFramework.CoreLibrary";
+        string central = XDocument.Load(Path.Combine(DeviceAssembly.Root, "Directory.Packages.props")).Descendants("PackageVersion")
+            .Single(e => e.Attribute("Include")!.Value == Package).Attribute("Version")!.Value;
+        string device = XDocument.Load(Path.Combine(NanoFolder, "packages.config")).Descendants("package")
+            .Single(e => e.Attribute("id")!.Value == Package).Attribute("version")!.Value;
+        Assert.Equal(central, device);
+        Assert.Contains($"{Package}.{central}", File.ReadAllText(DeviceProject), StringComparison.Ordinal);
+    }
+
     private static List<string> OnDisk()
     {
         return Directory.EnumerateFiles(CoreFolder, "*.cs", SearchOption.AllDirectories)
