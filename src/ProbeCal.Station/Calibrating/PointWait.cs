@@ -85,7 +85,7 @@ internal sealed class PointWait
                 _lastRejection = line.Reason;
                 return false;
             case SourceStateChanged change:
-                _dialogue.Say($"source: {change.Reason}");
+                _dialogue.Say($"source {change.State.ToString().ToLowerInvariant()}: {change.Reason}");
                 if (change.State is SourceState.Lost)
                 {
                     _watch.Restart();
