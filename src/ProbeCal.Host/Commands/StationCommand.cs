@@ -18,7 +18,7 @@ internal static class StationCommand
     internal static Command Create(Terminal terminal)
     {
         Option<string> config = new("--config") { Description = "Configuration file; docs/protocols.md describes it.", Required = true, HelpName = "FILE" };
-        Option<string> data = new("--data") { Description = "Folder with the calibrations, the journal and the lock; made when it is not there.", Required = true, HelpName = "DIR" };
+        Option<string> data = new("--data") { Description = "Folder with the calibrations, the journal and the lock (default probecal-data).", DefaultValueFactory = static _ => CalibrateCommand.UsualData, HelpName = "DIR" };
         Option<string> duration = new("--duration") { Description = "Stop after this long: 10min, 24h. Without it, Ctrl-C or SIGTERM stops.", HelpName = "TIME" };
         Option<bool> print = new("--print") { Description = "Print each reading, once it is on the disk, as one line of JSON." };
         Command command = new(
@@ -52,8 +52,6 @@ internal static class StationCommand
         TimeSpan? length = duration == null ? null : Quantity.Duration("--duration", duration);
         using DataDirectory folder = DataDirectory.OpenForWriting(data);
         using ILoggerFactory logs = TerminalLog.FactoryFor(terminal);
-        using CancellationTokenSource end = new(length ?? Timeout.InfiniteTimeSpan, terminal.Time);
-        using CancellationTokenSource either = CancellationTokenSource.CreateLinkedTokenSource(end.Token, stop);
         StationSurroundings around = new()
         {
             Time = terminal.Time,
@@ -64,7 +62,7 @@ internal static class StationCommand
             StandardInput = terminal.Input,
             Reading = print ? payload => Print(terminal.Output, payload) : static _ => { },
         };
-        await StationRun.RunAsync(configuration, folder, around, either.Token).ConfigureAwait(false);
+        await StationRun.RunAsync(configuration, folder, around, length, stop).ConfigureAwait(false);
         return ExitCode.Done;
     }
 

@@ -40,10 +40,15 @@ public sealed record StationSurroundings
 /// <summary>A station from start to stop: opens what the configuration names, runs it, and closes it in order.</summary>
 public static class StationRun
 {
-    /// <summary>Runs until the source ends or <paramref name="stop"/>. What arrived is journaled; what could not be sent is kept.</summary>
+    /// <summary>Runs until the source ends, the time is up or <paramref name="stop"/>. What arrived is journaled; what could not be sent is kept.</summary>
+    /// <param name="configuration">What the station is told.</param>
+    /// <param name="data">The folder it keeps things in, held open for writing.</param>
+    /// <param name="around">What it needs of its host.</param>
+    /// <param name="duration">How long to read the source; null for as long as it goes.</param>
+    /// <param name="stop">Ends it in order.</param>
     /// <exception cref="InputException">Configuration, calibration or a file does not fit. Nothing was changed.</exception>
     /// <exception cref="WorkFailedException">The journal or the embedded broker could not be opened, or the journal not be written to the end.</exception>
-    public static async Task RunAsync(StationConfiguration configuration, DataDirectory data, StationSurroundings around, CancellationToken stop)
+    public static async Task RunAsync(StationConfiguration configuration, DataDirectory data, StationSurroundings around, TimeSpan? duration, CancellationToken stop)
     {
         ILogger log = around.Logs.CreateLogger("station");
         LoadedCalibration? calibration = LoadedCalibration.Find(data.CalibrationLogFile, configuration, around.Time.GetUtcNow());
@@ -77,7 +82,9 @@ public static class StationRun
                     };
                     EngineLog.Started(log, configuration.Station, configuration.Probe, source.Description, calibration?.Record.Id ?? "none", journal.Path);
                     publisher.Announce(messages.Calibration());
-                    await RunAsync(engine, publisher, Beginning(journal, configuration, around.Time), stop).ConfigureAwait(false);
+                    using CancellationTokenSource timeUp = new(duration ?? Timeout.InfiniteTimeSpan, around.Time);
+                    using CancellationTokenSource either = CancellationTokenSource.CreateLinkedTokenSource(timeUp.Token, stop);
+                    await RunAsync(engine, publisher, Beginning(journal, configuration, around.Time), either.Token).ConfigureAwait(false);
                     EngineLog.Stopped(log, engine.Samples, engine.Rejected, journal.CountPending());
                 }
             }

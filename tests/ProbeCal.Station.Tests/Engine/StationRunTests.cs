@@ -234,7 +234,7 @@ public sealed class StationRunTests : IDisposable
             Software = "probecal 9.9.9",
             Environment = static _ => "not this one",
         };
-        await StationRun.RunAsync(configuration, data, around, _stop.Token).WaitAsync(Deadline.Generous);
+        await StationRun.RunAsync(configuration, data, around, duration: null, _stop.Token).WaitAsync(Deadline.Generous);
     }
 
     private string Journal(string sql)
