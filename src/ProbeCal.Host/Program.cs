@@ -1,5 +1,7 @@
 using System;
 using System.CommandLine;
+using System.Runtime.InteropServices;
+using System.Threading;
 using System.Threading.Tasks;
 using ProbeCal.Host.Commands;
 using ProbeCal.Station.Entry;
@@ -12,9 +14,22 @@ namespace ProbeCal.Host;
 /// </summary>
 internal static class Program
 {
-    private static Task<int> Main(string[] args)
+    private static async Task<int> Main(string[] args)
     {
-        return RunAsync(args, Terminal.OfProcess());
+        using CancellationTokenSource stop = new();
+        using PosixSignalRegistration interrupt = PosixSignalRegistration.Create(PosixSignal.SIGINT, Ask);
+        using PosixSignalRegistration terminate = PosixSignalRegistration.Create(PosixSignal.SIGTERM, Ask);
+        return await RunAsync(args, Terminal.OfProcess(stop.Token)).ConfigureAwait(false);
+
+        // The first signal asks for an orderly end; a second one ends the process as it would any other.
+        void Ask(PosixSignalContext signal)
+        {
+            if (!stop.IsCancellationRequested)
+            {
+                signal.Cancel = true;
+                stop.Cancel();
+            }
+        }
     }
 
     /// <summary>Runs one command line against a given terminal and clock: what the tests call.</summary>
@@ -41,7 +56,8 @@ internal static class Program
             Output = terminal.Output,
             Error = terminal.Error,
             EnableDefaultExceptionHandler = false,
-            ProcessTerminationTimeout = TimeSpan.FromSeconds(10),
+            // Signals are Main's: the demo runs several commands in one process.
+            ProcessTerminationTimeout = null,
         };
         try
         {

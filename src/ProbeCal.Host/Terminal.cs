@@ -23,10 +23,10 @@ internal sealed class Terminal
     /// <summary>True when a person can answer a question here.</summary>
     internal bool IsInteractive { get; init; }
 
-    /// <summary>Cancelled when a test wants the command to stop; Ctrl-C and SIGTERM come on top.</summary>
+    /// <summary>Cancelled by Ctrl-C, SIGTERM or a test: the command ends in order.</summary>
     internal CancellationToken Stop { get; init; }
 
-    internal static Terminal OfProcess()
+    internal static Terminal OfProcess(CancellationToken stop)
     {
         return new Terminal
         {
@@ -35,6 +35,7 @@ internal sealed class Terminal
             Error = Console.Error,
             Time = TimeProvider.System,
             IsInteractive = !Console.IsInputRedirected && !Console.IsOutputRedirected,
+            Stop = stop,
         };
     }
 }
