@@ -83,7 +83,7 @@ if [ -n "$only" ]; then
   for p in "${projects[@]}"; do case "$(basename "$p" .csproj)" in *"$only"*) matching+=("$p") ;; esac; done
   if [ ${#matching[@]} -gt 0 ]; then projects=("${matching[@]}"); else filter=(--filter "FullyQualifiedName~$only"); fi
 fi
-counter() { sed -n "s/.*<Counters [^>]*[^a-zA-Z]$1=\"\([0-9]*\)\".*/\1/p" "$2" | head -n 1; }
+counter() { sed -n "s/.*<Counters\b[^>]*[^a-zA-Z]$1=\"\([0-9]*\)\".*/\1/p" "$2" | head -n 1; }
 for p in "${projects[@]}"; do
   name=$(basename "$p" .csproj); t0=$SECONDS
   dotnet test "$p" -c Release --no-build "${filter[@]}" --logger "trx;LogFileName=$name.trx" --logger "console;verbosity=normal" --results-directory "$out/trx" >"$out/$name.log" 2>&1
