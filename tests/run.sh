@@ -86,7 +86,7 @@ fi
 counter() { sed -n "s/.*<Counters\b[^>]*[^a-zA-Z]$1=\"\([0-9]*\)\".*/\1/p" "$2" | head -n 1; }
 for p in "${projects[@]}"; do
   name=$(basename "$p" .csproj); t0=$SECONDS
-  dotnet test "$p" -c Release --no-build "${filter[@]}" --logger "trx;LogFileName=$name.trx" --logger "console;verbosity=normal" --results-directory "$out/trx" >"$out/$name.log" 2>&1
+  dotnet test "$p" -c Release --no-build "${filter[@]}" --logger "trx;LogFileName=$name.trx" --logger "console;verbosity=detailed" --results-directory "$out/trx" >"$out/$name.log" 2>&1
   code=$?
   trx="$out/trx/$name.trx"
   if [ -f "$trx" ]; then
@@ -96,7 +96,7 @@ for p in "${projects[@]}"; do
     if [ "$bad" -gt 0 ]; then grep -E '^ +(Failed|Error Message:|Assert)|\[FAIL\]' -A 12 "$out/$name.log" | head -n 120; fi
     if [ "$skip" -gt 0 ]; then grep -E '\[SKIP\]' -A 2 "$out/$name.log" | head -n 40; fi
     if [ "$code" -ne 0 ] && [ "$bad" -eq 0 ]; then failed=$((failed + 1)); echo "FAILED  $name: the test host ended with $code"; tail -n 25 "$out/$name.log"; fi
-    grep -hE '^ *campaign:' "$out/$name.log" | sort -u
+    grep -hE '^ *campaign:|seed [0-9]' "$out/$name.log" | sed 's/^ */        /' | sort -u | head -n 40
   elif [ "$code" -ne 0 ]; then
     failed=$((failed + 1)); echo "FAILED  $name: no results (exit $code)"; tail -n 25 "$out/$name.log"
   fi
