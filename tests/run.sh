@@ -62,6 +62,7 @@ if [ "$setup" = 1 ] && [ "$(id -u)" = 0 ] && command -v apt-get >/dev/null 2>&1;
   command -v socat >/dev/null 2>&1 || missing="$missing socat"
   command -v openssl >/dev/null 2>&1 || missing="$missing openssl"
   /usr/bin/python3 -c 'import gsw' >/dev/null 2>&1 || missing="$missing python3-gsw"
+  command -v qemu-aarch64 >/dev/null 2>&1 && [ -e /usr/aarch64-linux-gnu/lib/libstdc++.so.6 ] || missing="$missing qemu-user libc6-arm64-cross libstdc++6-arm64-cross libgcc-s1-arm64-cross"
   command -v clang >/dev/null 2>&1 || command -v gcc >/dev/null 2>&1 || missing="$missing clang"
   if [ -n "$missing" ]; then
     echo "installing:$missing"
@@ -75,6 +76,12 @@ fi
 step restore dotnet restore ProbeCal.sln || finish
 step build dotnet build ProbeCal.sln -c Release --no-restore || finish
 [ -n "$only" ] || step format dotnet format ProbeCal.sln --verify-no-changes --no-restore
+
+# Core's bits on another processor: the same program for arm64, run by an emulator.
+if command -v qemu-aarch64 >/dev/null 2>&1; then case "SameBits Peers" in *"$only"*)
+  step arm64-publish dotnet publish tests/ProbeCal.SameBits/ProbeCal.SameBits.csproj -c Release -r linux-arm64 --self-contained -o "$out/arm64" \
+    && export PROBECAL_ARM64="$PWD/$out/arm64" ;;
+esac; fi
 
 # 3. Tests. A project name picks projects; any other name filters tests by their full name.
 projects=(tests/*.Tests/*.csproj) filter=()
