@@ -51,6 +51,10 @@ step() { # step NAME COMMAND...: one gate, counted as one check
     return 1
   fi
 }
+native_run() { # the native program computes, and does the whole job: SQLite, broker, terminal
+  "$1" equilibrium --gas O2 --temperature 20 --salinity 0 --pressure 760mmHg --format json | grep -F '"pressureHPa":1013.25,' \
+    && "$1" demo --readings 3 | grep -F 'The demo has ended'
+}
 finish() { echo; echo "$passed passed, $failed failed, $skipped skipped"; [ "$failed" -eq 0 ]; exit $?; }
 
 # 1. What the machine lacks. Tests whose peer is absent say so and count as skipped.
@@ -114,7 +118,7 @@ if [ -z "$only" ]; then
   step pack dotnet pack src/ProbeCal.Core/ProbeCal.Core.csproj -c Release --no-build -o "$out/package"
   if command -v clang >/dev/null 2>&1 || command -v gcc >/dev/null 2>&1; then
     step native-publish dotnet publish src/ProbeCal.Host/ProbeCal.Host.csproj -c Release -r linux-x64 -o "$out/native" \
-      && step native-run bash -c "'$out/native/probecal' equilibrium --gas O2 --temperature 20 --salinity 0 --pressure 760mmHg --format json | grep -F '\"pressureHPa\":1013.25,'"
+      && step native-run native_run "$out/native/probecal"
   else
     skipped=$((skipped + 2)); echo "skipped native-publish, native-run: no C compiler to link with (clang or gcc)"
   fi
