@@ -20,9 +20,9 @@ internal static partial class EngineLog
     [LoggerMessage(EventId = 2205, Level = LogLevel.Information, Message = "{Event}: {Text}")]
     internal static partial void Happened(ILogger log, string @event, string text);
 
-    [LoggerMessage(EventId = 2206, Level = LogLevel.Information, Message = "{Count} samples older than {Days:F0} d deleted from the journal")]
+    [LoggerMessage(EventId = 2206, Level = LogLevel.Information, Message = "{Count} samples and events older than {Days:F0} d deleted from the journal")]
     internal static partial void Expired(ILogger log, long count, double days);
 
-    [LoggerMessage(EventId = 2207, Level = LogLevel.Warning, Message = "old samples could not be deleted: {Reason}")]
+    [LoggerMessage(EventId = 2207, Level = LogLevel.Warning, Message = "old samples and events could not be deleted: {Reason}")]
     internal static partial void ExpiryFailed(ILogger log, string reason);
 }

@@ -4,7 +4,7 @@ using ProbeCal.Station.Journal;
 
 namespace ProbeCal.Station.Engine;
 
-/// <summary>Deletes samples that were kept long enough, a few at a time, so that it never holds up the stream for long.</summary>
+/// <summary>Deletes samples and events that were kept long enough, a few at a time, so that it never holds up the stream for long.</summary>
 internal sealed class Retention
 {
     private const int AtOnce = 500;

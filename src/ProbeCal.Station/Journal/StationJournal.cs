@@ -13,7 +13,7 @@ namespace ProbeCal.Station.Journal;
 /// One writer connection; the methods may be called from any thread and take turns. A fault of the disk reaches the caller
 /// as <see cref="JournalException"/>, and then nothing of that call was written.
 /// </summary>
-public sealed class StationJournal : IDisposable
+internal sealed class StationJournal : IDisposable
 {
     /// <summary>Rejected lines kept before the oldest go. Our choice, no source: a day of garbage at one line in ten seconds.</summary>
     public const int DefaultRejectedLinesKept = 10_000;
@@ -24,7 +24,8 @@ public sealed class StationJournal : IDisposable
     private readonly Statement _pending;
     private readonly Statement _removePending;
     private readonly Statement _countPending;
-    private readonly Statement _expire;
+    private readonly Statement _expireSamples;
+    private readonly Statement _expireEvents;
     private readonly Statement _lastTime;
 
     private StationJournal(SqliteFile file, int rejectedLinesKept, long firstSequence)
@@ -34,7 +35,8 @@ public sealed class StationJournal : IDisposable
         _pending = new Statement(file.Connection, "SELECT id, topic, content_type, payload FROM outbox WHERE $1 < id ORDER BY id LIMIT $2", 2);
         _removePending = new Statement(file.Connection, "DELETE FROM outbox WHERE id <= $1", 1);
         _countPending = new Statement(file.Connection, "SELECT count(*) FROM outbox WHERE $1 < id", 1);
-        _expire = new Statement(file.Connection, "DELETE FROM sample WHERE id IN (SELECT id FROM sample WHERE received_us < $1 ORDER BY received_us LIMIT $2)", 2);
+        _expireSamples = new Statement(file.Connection, "DELETE FROM sample WHERE id IN (SELECT id FROM sample WHERE received_us < $1 ORDER BY received_us LIMIT $2)", 2);
+        _expireEvents = new Statement(file.Connection, "DELETE FROM event WHERE id IN (SELECT id FROM event WHERE time_us < $1 ORDER BY id LIMIT $2)", 2);
         _lastTime = new Statement(file.Connection, "SELECT time_us FROM sample WHERE station = $1 AND probe = $2 ORDER BY sequence DESC LIMIT 1", 2);
     }
 
@@ -117,14 +119,19 @@ public sealed class StationJournal : IDisposable
     }
 
     /// <summary>
-    /// Deletes at most <paramref name="most"/> samples received before <paramref name="beforeUtc"/>, oldest first. Messages
-    /// that still wait to be delivered stay: they are whole in the outbox.
+    /// Deletes at most <paramref name="most"/> samples and events older than <paramref name="beforeUtc"/>, samples first, each
+    /// oldest first. Messages that still wait to be delivered stay: they are whole in the outbox.
     /// </summary>
     /// <returns>How many were deleted.</returns>
     /// <exception cref="JournalException">It could not be written.</exception>
     public int Expire(DateTimeOffset beforeUtc, int most)
     {
-        return InTurn(() => _expire.Run(null, JournalTransaction.Microseconds(beforeUtc), most));
+        long before = JournalTransaction.Microseconds(beforeUtc);
+        return InTurn(() =>
+        {
+            int samples = _expireSamples.Run(null, before, most);
+            return samples + _expireEvents.Run(null, before, most - samples);
+        });
     }
 
     /// <summary>When the last sample of this probe was taken, or null when there is none.</summary>
@@ -155,7 +162,8 @@ public sealed class StationJournal : IDisposable
             _pending.Dispose();
             _removePending.Dispose();
             _countPending.Dispose();
-            _expire.Dispose();
+            _expireSamples.Dispose();
+            _expireEvents.Dispose();
             _lastTime.Dispose();
             _file.Dispose();
         }

@@ -194,6 +194,29 @@ public class StationJournalTests
     }
 
     [Fact]
+    public void Expire_TakesOldEventsToo_SamplesFirst_AndNeverMoreThanAsked()
+    {
+        using TemporaryFolder folder = new();
+        using StationJournal journal = Open(folder);
+        journal.Commit(work =>
+        {
+            Sample(work, 1, "{}", null);
+            work.Add(new JournalEvent(_start, "gap", "old 1"));
+            work.Add(new JournalEvent(_start, "gap", "old 2"));
+            work.Add(new JournalEvent(_start.AddDays(2), "gap", "new"));
+        });
+
+        Assert.Equal(2, journal.Expire(_start.AddDays(1), 2));
+        using SqliteFile reader = Look(folder);
+        Assert.Equal("0", Text(reader, "SELECT count(*) FROM sample"));
+        Assert.Equal("old 2,new", Text(reader, "SELECT group_concat(text) FROM event"));
+
+        Assert.Equal(1, journal.Expire(_start.AddDays(1), 2));
+        Assert.Equal("new", Text(reader, "SELECT group_concat(text) FROM event"));
+        Assert.Equal(0, journal.Expire(_start.AddDays(1), 2));
+    }
+
+    [Fact]
     public void OutboxIds_AreNotGivenAgain_AfterTheOutboxWasEmptied()
     {
         using TemporaryFolder folder = new();
