@@ -11,6 +11,9 @@ namespace ProbeCal.Host.Commands;
 /// <summary>A calibration record as plain text for people.</summary>
 internal static class CalibrationText
 {
+    /// <summary>Significant digits of slope and uncertainties: enough for people, the record keeps all.</summary>
+    internal const int Digits = 5;
+
     /// <summary>Writes the whole record.</summary>
     internal static void Write(TextWriter output, CalibrationRecord record)
     {
@@ -107,8 +110,8 @@ internal static class CalibrationText
         string unit = record.Probe.SignalUnit.Length == 0 ? "" : " " + record.Probe.SignalUnit;
         RecordedResult result = record.Result;
         double percent = 100 * result.SlopeStandardUncertainty / Math.Abs(result.Slope);
-        output.WriteLine($"  slope {Number.Print(Rounded(result.Slope))}{(record.Probe.MeterSettings == null ? unit + "/hPa" : " (1 is a meter that shows the truth)")}, u {Number.Print(Rounded(result.SlopeStandardUncertainty))} ({Number.Fixed(percent, 2)} %)");
-        output.WriteLine($"  zero  {Number.Print(Rounded(result.Zero))}{(record.Probe.MeterSettings == null ? unit : " hPa")}, u {Number.Print(Rounded(result.ZeroStandardUncertainty))} ({record.Zero.Source})");
+        output.WriteLine($"  slope {Number.Significant(result.Slope, Digits)}{(record.Probe.MeterSettings == null ? unit + "/hPa" : " (1 is a meter that shows the truth)")}, u {Number.Significant(result.SlopeStandardUncertainty, Digits)} ({Number.Fixed(percent, 2)} %)");
+        output.WriteLine($"  zero  {Number.Significant(result.Zero, Digits)}{(record.Probe.MeterSettings == null ? unit : " hPa")}, u {Number.Significant(result.ZeroStandardUncertainty, Digits)} ({record.Zero.Source})");
         output.WriteLine();
     }
 
@@ -133,7 +136,7 @@ internal static class CalibrationText
         List<string[]> rows = [["input", "u", "% of slope", "source"]];
         foreach (RecordedContribution line in record.Budget)
         {
-            rows.Add([line.Input, Number.Print(Rounded(line.StandardUncertainty)) + " " + line.Unit, Number.Fixed(line.SlopePercent, 3), line.Source]);
+            rows.Add([line.Input, Number.Significant(line.StandardUncertainty, Digits) + " " + line.Unit, Number.Fixed(line.SlopePercent, 3), line.Source]);
         }
 
         TextTable.Write(output, rows, "  ");
@@ -171,11 +174,5 @@ internal static class CalibrationText
     {
         string text = Number.Fixed(value, decimals);
         return text.StartsWith('-') ? text : "+" + text;
-    }
-
-    /// <summary>Five digits: enough for people, the record keeps all.</summary>
-    internal static double Rounded(double value)
-    {
-        return double.Parse(value.ToString("G5", CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
     }
 }

@@ -59,6 +59,13 @@ public static class Number
         return value.ToString("R", CultureInfo.InvariantCulture);
     }
 
+    /// <summary>The shortest text of the value rounded to so many significant digits: <c>0.44871</c>, <c>123460</c>.</summary>
+    public static string Significant(double value, int digits)
+    {
+        string rounded = value.ToString("G" + digits.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
+        return Print(double.Parse(rounded, CultureInfo.InvariantCulture));
+    }
+
     /// <summary>The value with a fixed number of decimals; a value that rounds to zero carries no minus sign.</summary>
     public static string Fixed(double value, int decimals)
     {

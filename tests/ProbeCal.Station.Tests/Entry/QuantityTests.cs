@@ -178,6 +178,15 @@ public class QuantityTests
     }
 
     [Fact]
+    public void Significant_KeepsSoManyDigits_AndWritesThemShort()
+    {
+        Assert.Equal("0.44871", Number.Significant(0.448712345, 5));
+        Assert.Equal("123460", Number.Significant(123456.7, 5));
+        Assert.Equal("1.5E-05", Number.Significant(1.5e-5, 5));
+        Assert.Equal("0.1", Number.Significant(0.1, 5));
+    }
+
+    [Fact]
     public void Fixed_RoundsToZeroWithoutAMinusSign()
     {
         Assert.Equal("0.00", Number.Fixed(-0.001, 2));
