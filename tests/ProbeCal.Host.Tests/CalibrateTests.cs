@@ -57,6 +57,7 @@ public sealed class CalibrateTests : IDisposable
         Assert.Equal(ran.Output, show.Output);
         Ran list = await RunAsync("calibrations", "list", "--data", _folder, "--format", "json", "--probe", "P-1");
         using JsonDocument parsed = JsonDocument.Parse(list.Output);
+        Assert.True(Schemas.Of("calibration-list").Evaluate(parsed.RootElement).IsValid, list.Output);
         Assert.Equal(record.Id, parsed.RootElement.GetProperty("calibrations")[0].GetProperty("id").GetString());
         Ran other = await RunAsync("calibrations", "list", "--data", _folder, "--format", "json", "--probe", "P-2");
         Assert.Equal(0, JsonDocument.Parse(other.Output).RootElement.GetProperty("calibrations").GetArrayLength());

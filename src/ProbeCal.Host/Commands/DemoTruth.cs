@@ -2,6 +2,8 @@ using System;
 using System.Collections.Generic;
 using System.Globalization;
 using System.IO;
+using ProbeCal.Station.Entry;
+using ProbeCal.Station.Simulation;
 
 namespace ProbeCal.Host.Commands;
 
@@ -13,6 +15,7 @@ internal sealed class DemoTruth(string file) : IDisposable
 
     private readonly StreamReader _reader = new(new FileStream(file, FileMode.Open, FileAccess.Read, FileShare.ReadWrite));
     private readonly Dictionary<DateTimeOffset, double> _known = [];
+    private bool _formatSeen;
     private string[]? _header;
 
     /// <summary>True concentration at a time, mg/L; null when the simulation has no line of that time.</summary>
@@ -20,12 +23,14 @@ internal sealed class DemoTruth(string file) : IDisposable
     {
         while (_reader.ReadLine() is string row)
         {
-            string[] cells = row.Split(',');
-            if (row.StartsWith('#'))
+            if (!_formatSeen)
             {
+                _formatSeen = row == SimulationRun.TruthFormat ? true
+                    : throw new WorkFailedException($"{file}: it begins with '{Wrong.Shown(row)}'; this program reads files that begin with '{SimulationRun.TruthFormat}'");
                 continue;
             }
 
+            string[] cells = row.Split(',');
             if (_header is null)
             {
                 _header = cells;
@@ -33,7 +38,7 @@ internal sealed class DemoTruth(string file) : IDisposable
             else if (cells.Length == _header.Length)
             {
                 DateTimeOffset at = DateTimeOffset.Parse(cells[Array.IndexOf(_header, TimeColumn)], CultureInfo.InvariantCulture);
-                _known[at] = double.Parse(cells[Array.IndexOf(_header, ValueColumn)], CultureInfo.InvariantCulture);
+                _known[at] = Number.Parse(ValueColumn, cells[Array.IndexOf(_header, ValueColumn)]);
             }
         }
 
