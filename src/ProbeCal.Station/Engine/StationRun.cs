@@ -147,7 +147,8 @@ public static class StationRun
         return configuration.GapAfter == null ? null : journal.LastSampleTime(configuration.Station, configuration.Probe);
     }
 
-    private static BrokerSettings Settings(StationConfiguration configuration, StationMessages messages, StationSurroundings around)
+    /// <summary>How the broker is entered, and what it says when the station goes without a word.</summary>
+    internal static BrokerSettings Settings(StationConfiguration configuration, StationMessages messages, StationSurroundings around)
     {
         BrokerSettings common = new()
         {

@@ -216,7 +216,7 @@ internal sealed partial class LineSource
             }
             catch (Exception fault)
             {
-                source._logger.LogDebug(SourceEventIds.CloseHangs, fault, "{Source}: closing failed", source.Description);
+                source._logger.LogDebug(SourceEventIds.CloseFailed, fault, "{Source}: closing failed", source.Description);
             }
         }
 

@@ -10,4 +10,5 @@ internal static class SourceEventIds
     internal static readonly EventId CloseHangs = new(2003, "SourceCloseHangs");
     internal static readonly EventId LineSettings = new(2004, "SerialLineSettings");
     internal static readonly EventId Stopped = new(2005, "SourceStopped");
+    internal static readonly EventId CloseFailed = new(2006, "SourceCloseFailed");
 }

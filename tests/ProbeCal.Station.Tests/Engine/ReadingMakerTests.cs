@@ -1,3 +1,4 @@
+using System;
 using System.Collections.Generic;
 using System.Linq;
 using System.Text;
@@ -6,6 +7,7 @@ using System.Text.Json.Nodes;
 using Json.Schema;
 using ProbeCal.Station.Configuration;
 using ProbeCal.Station.Engine;
+using ProbeCal.Station.Journal;
 using Xunit;
 
 namespace ProbeCal.Station.Tests.Engine;
@@ -156,6 +158,30 @@ public class ReadingMakerTests
     public void WhatIsSimulated_SaysSo(string key, string json)
     {
         Assert.True((bool)Make(StationParts.Sample, StationParts.Configuration((key, json)), StationParts.Calibration())["simulated"]!);
+    }
+
+    [Theory]
+    [InlineData("simulated", "true", true)]
+    [InlineData("simulated", "false", false)]
+    [InlineData("source", "\"simulated\"", true)]
+    public void StatusAndWill_SayWhetherItIsSimulated(string key, string json, bool simulated)
+    {
+        StationMessages messages = new(StationParts.Configuration((key, json)), StationParts.Calibration(), "probecal 9.9.9", "scripted");
+        SourceStateChanged open = new(StationParts.Time, SourceState.Open, "opened");
+        foreach (Message message in new[] { messages.Running(open), messages.Stopped(StationParts.Time), messages.Lost() })
+        {
+            Assert.Equal(simulated, (bool)JsonNode.Parse(message.Payload.Span)!["simulated"]!);
+        }
+    }
+
+    [Fact]
+    public void Times_AreSentInUtc_WhateverTheirOffset()
+    {
+        TimeSpan offset = TimeSpan.FromHours(2);
+        RawSample abroad = StationParts.Sample with { TimeUtc = StationParts.Time.ToOffset(offset), ReceivedUtc = StationParts.Time.ToOffset(offset) };
+        JsonNode reading = Make(abroad, StationParts.Configuration(), StationParts.Calibration());
+        Assert.Equal("2026-06-02T12:00:00.000000Z", (string)reading["timeUtc"]!);
+        Assert.Equal("2026-06-02T12:00:00.000000Z", (string)reading["receivedUtc"]!);
     }
 
     [Fact]

@@ -2,6 +2,7 @@ using System;
 using System.Collections.Generic;
 using System.Globalization;
 using System.Linq;
+using System.Runtime.CompilerServices;
 using System.Text;
 using System.Threading;
 using System.Threading.Tasks;
@@ -141,6 +142,16 @@ public sealed class StationEngineTests : IDisposable
     }
 
     [Fact]
+    public async Task StopAfterTheLastSample_JournalsEverythingThatWasHandedOver()
+    {
+        StationEngine engine = Engine(source: new StoppingSource(_stop, StationParts.Sample, At(1), At(2)));
+        await engine.RunAsync(_stop.Token).WaitAsync(Deadline.Generous);
+
+        Assert.Equal("1,2,3", Column("SELECT sequence FROM sample ORDER BY id"));
+        Assert.Equal(3, _committed.Count);
+    }
+
+    [Fact]
     public async Task SourceThatFails_EndsTheRun_AfterWhatCameBeforeWasJournaled()
     {
         _source.Deliver(StationParts.Sample);
@@ -230,5 +241,27 @@ public sealed class StationEngineTests : IDisposable
         }
 
         return string.Join(',', values);
+    }
+
+    /// <summary>Hands everything over in one go and is stopped then.</summary>
+    private sealed class StoppingSource(CancellationTokenSource stop, params SourceEvent[] events) : ISampleSource
+    {
+        public string Description => "stopping";
+
+        public async IAsyncEnumerable<SourceEvent> ReadAsync([EnumeratorCancellation] CancellationToken cancellationToken)
+        {
+            foreach (SourceEvent each in events)
+            {
+                yield return each;
+            }
+
+            await stop.CancelAsync();
+            cancellationToken.ThrowIfCancellationRequested();
+        }
+
+        public ValueTask DisposeAsync()
+        {
+            return ValueTask.CompletedTask;
+        }
     }
 }

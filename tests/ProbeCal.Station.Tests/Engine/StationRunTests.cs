@@ -7,12 +7,14 @@ using System.Text.Json;
 using System.Text.Json.Nodes;
 using System.Threading;
 using System.Threading.Tasks;
+using Microsoft.Data.Sqlite;
 using MQTTnet.Protocol;
 using ProbeCal.Station.CalibrationLog;
 using ProbeCal.Station.Configuration;
 using ProbeCal.Station.Engine;
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Journal;
+using ProbeCal.Station.Publishing;
 using ProbeCal.Station.Storage;
 using ProbeCal.Station.Tests.CalibrationLog;
 using ProbeCal.Station.Tests.Publishing;
@@ -144,6 +146,21 @@ public sealed class StationRunTests : IDisposable
     }
 
     [Fact]
+    public void BrokerSettings_AreThoseOfTheConfiguration_AndTheWillSaysLost()
+    {
+        StationConfiguration configuration = Configuration(("broker", """{ "address": "mqtts://broker.example", "user": "tarn", "passwordEnvironment": "PASSWORD", "checkRevocation": false }"""));
+        StationMessages messages = new(configuration, StationParts.Calibration(), "probecal 9.9.9", "scripted");
+        BrokerSettings settings = StationRun.Settings(configuration, messages, Surroundings());
+
+        Assert.Equal(("broker.example", 8883, true, false), (settings.Host, settings.Port, settings.UseTls, settings.CheckRevocation));
+        Assert.Equal(("probecal-tarn-do-1", "tarn", "not this one"), (settings.ClientId, settings.User, settings.Password?.Fetch()));
+        Assert.Equal("probecal/v1/tarn/do-1/status", settings.Will.Topic);
+        using JsonDocument will = JsonDocument.Parse(settings.Will.Payload);
+        Assert.Equal("lost", will.RootElement.GetProperty("state").GetString());
+        Assert.True(Schemas.Of("status").Evaluate(will.RootElement).IsValid);
+    }
+
+    [Fact]
     public async Task EmbeddedBroker_IsUsed_WhenNoneIsNamed()
     {
         StationConfiguration configuration = Configuration(("embeddedBroker", "{ \"port\": " + TestBroker.FreePort().ToString(System.Globalization.CultureInfo.InvariantCulture) + " }"));
@@ -172,6 +189,38 @@ public sealed class StationRunTests : IDisposable
         StationConfiguration configuration = Configuration((key, json));
         InputException refused = await Assert.ThrowsAsync<InputException>(() => RunAsync(configuration));
         Assert.Contains(message, refused.Message);
+        Assert.False(File.Exists(_folder.File("journal.db")));
+    }
+
+    [Theory]
+    [InlineData("do-2", true, "it is of probe do-2, and this station has do-1")]
+    [InlineData("do-1", false, "it did not pass")]
+    public async Task NamedCalibration_OfAnotherProbe_OrThatFailed_IsRefused(string probe, bool pass, string message)
+    {
+        string id;
+        using (CalibrationLogStore log = CalibrationLogStore.OpenForWriting(_folder.File("calibrations.db"), _time, Guid.NewGuid))
+        {
+            CalibrationRecord record = SampleRecords.Of(probe, SampleRecords.Noon);
+            id = log.Append(record with { Result = record.Result with { Pass = pass } }).Record.Id;
+        }
+
+        InputException refused = await Assert.ThrowsAsync<InputException>(() => RunAsync(Configuration(("calibration", JsonSerializer.Serialize(id)))));
+        Assert.Contains("calibration " + id + ": " + message, refused.Message);
+    }
+
+    [Fact]
+    public async Task BrokenChainOfCalibrations_IsRefused_BeforeAnythingIsWritten()
+    {
+        using (SqliteConnection log = new(new SqliteConnectionStringBuilder { DataSource = _folder.File("calibrations.db"), Pooling = false }.ConnectionString))
+        {
+            log.Open();
+            using SqliteCommand forge = log.CreateCommand();
+            forge.CommandText = "DROP TRIGGER records_no_update; UPDATE records SET bytes = CAST(replace(CAST(bytes AS TEXT), '\"stirred\"', '\"still\"') AS BLOB)";
+            forge.ExecuteNonQuery();
+        }
+
+        WorkFailedException refused = await Assert.ThrowsAsync<WorkFailedException>(() => RunAsync(1));
+        Assert.Contains("the chain of calibration records is broken", refused.Message);
         Assert.False(File.Exists(_folder.File("journal.db")));
     }
 
@@ -226,7 +275,12 @@ public sealed class StationRunTests : IDisposable
     private async Task RunAsync(StationConfiguration configuration)
     {
         using DataDirectory data = DataDirectory.OpenForWriting(_folder.Path);
-        StationSurroundings around = new()
+        await StationRun.RunAsync(configuration, data, Surroundings(), duration: null, _stop.Token).WaitAsync(Deadline.Generous);
+    }
+
+    private StationSurroundings Surroundings()
+    {
+        return new StationSurroundings
         {
             Time = _time,
             Random = new Random(1),
@@ -234,7 +288,6 @@ public sealed class StationRunTests : IDisposable
             Software = "probecal 9.9.9",
             Environment = static _ => "not this one",
         };
-        await StationRun.RunAsync(configuration, data, around, duration: null, _stop.Token).WaitAsync(Deadline.Generous);
     }
 
     private string Journal(string sql)

@@ -2,6 +2,7 @@ using System;
 using System.Text;
 using System.Threading;
 using System.Threading.Tasks;
+using Microsoft.Data.Sqlite;
 using ProbeCal.Station.Journal;
 using ProbeCal.Station.Publishing;
 using ProbeCal.Station.Tests.Storage;
@@ -187,6 +188,27 @@ public sealed class PublisherTests : IDisposable
     }
 
     [Fact]
+    public async Task RemovalThatFails_SendsNothingTwice_AndIsMadeUpForLater()
+    {
+        using SqliteConnection other = new(new SqliteConnectionStringBuilder { DataSource = _folder.File("journal.db"), Pooling = false }.ConnectionString);
+        other.Open();
+        Execute(other, "CREATE TRIGGER stuck BEFORE DELETE ON outbox BEGIN SELECT RAISE(ABORT, 'stuck'); END");
+        Enqueue("1", "2");
+        Task run = _publisher.RunAsync(_stop.Token);
+        await _link.ExpectAsync("connect", "publish 1", "publish 2");
+        await _time.NextWaitAsync();
+        Assert.Equal(2, _journal.CountPending());
+        Assert.Contains(_log.Lines, line => line.Contains(" 2103 "));
+
+        Execute(other, "DROP TRIGGER stuck");
+        Enqueue("3");
+        await _link.ExpectAsync("publish 3");
+        await _time.NextWaitAsync();
+        Assert.Equal(0, _journal.CountPending());
+        await StopAsync(run, "retain farewell", "disconnect");
+    }
+
+    [Fact]
     public async Task Stop_DeliversWhatWaits_BeforeTheFarewell()
     {
         Task run = _publisher.RunAsync(_stop.Token);
@@ -219,6 +241,13 @@ public sealed class PublisherTests : IDisposable
     public void Backoff_DoublesToItsCap_AndIsShortenedByUpToHalf(int failures, double random, double seconds)
     {
         Assert.Equal(TimeSpan.FromSeconds(seconds), Backoff.Default.After(failures, new FixedRandom(random)));
+    }
+
+    private static void Execute(SqliteConnection connection, string sql)
+    {
+        using SqliteCommand command = connection.CreateCommand();
+        command.CommandText = sql;
+        command.ExecuteNonQuery();
     }
 
     private async Task StopAsync(Task run, params string[] calls)
