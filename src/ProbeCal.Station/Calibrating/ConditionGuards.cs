@@ -7,7 +7,7 @@ using static ProbeCal.Station.Calibrating.Finding;
 namespace ProbeCal.Station.Calibrating;
 
 /// <summary>The guards on what was entered and on the conditions, before any point is accepted.</summary>
-public static class ConditionGuards
+internal static class ConditionGuards
 {
     /// <summary>Difference from the last pressure at the site that wants a reason, hPa: an uncommonly deep change of weather (our choice, no source).</summary>
     public const double PressureChangeHectopascal = 30;

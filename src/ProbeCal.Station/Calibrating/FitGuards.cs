@@ -7,7 +7,7 @@ using static ProbeCal.Station.Calibrating.Finding;
 namespace ProbeCal.Station.Calibrating;
 
 /// <summary>The guards on slope and zero, once there is a fit and before the probe counts as adjusted.</summary>
-public static class FitGuards
+internal static class FitGuards
 {
     /// <summary>
     /// Change of the slope since the last calibration that wants a reason, %: of 56 calibrations of seven membrane sensors of a

@@ -8,7 +8,7 @@ namespace ProbeCal.Station.Calibrating;
 /// What to do, look for and beware of at each step, as data. Waits and order from the field manual (TM 9-A6.2) where it has
 /// them; the cautions are those of docs/safety.md.
 /// </summary>
-public static class Instructions
+internal static class Instructions
 {
     private static readonly string[] Water =
     [

@@ -4,7 +4,7 @@ using ProbeCal.Station.CalibrationLog;
 namespace ProbeCal.Station.Calibrating;
 
 /// <summary>What the guards look at. What is not known yet is null, and a guard that needs it keeps quiet.</summary>
-public sealed record Situation
+internal sealed record Situation
 {
     /// <summary>The set-up.</summary>
     public required CalibrationSetup Setup { get; init; }
@@ -56,4 +56,4 @@ public sealed record Situation
 /// <param name="Name">One of <see cref="GuardNames"/>.</param>
 /// <param name="Watches">What it watches, for people.</param>
 /// <param name="Look">Gives a finding, or null when there is nothing to say or not enough known.</param>
-public sealed record Guard(string Name, string Watches, Func<Situation, Finding?> Look);
+internal sealed record Guard(string Name, string Watches, Func<Situation, Finding?> Look);

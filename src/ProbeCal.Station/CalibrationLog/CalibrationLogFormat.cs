@@ -3,7 +3,7 @@ using ProbeCal.Station.Storage;
 namespace ProbeCal.Station.CalibrationLog;
 
 /// <summary>The SQLite file of the calibration log: what it is called, its number and its tables.</summary>
-public static class CalibrationLogFormat
+internal static class CalibrationLogFormat
 {
     // "PClg" in ASCII.
     private const int ApplicationId = 0x50436C67;

@@ -4,7 +4,7 @@ using ProbeCal.Station.Entry;
 namespace ProbeCal.Station.CalibrationLog;
 
 /// <summary>From a record to what Core corrects readings with. Live and re-corrected data pass through the same call.</summary>
-public static class RecordConversion
+internal static class RecordConversion
 {
     /// <summary>The calibration that the record describes. The same record gives the same bits.</summary>
     /// <exception cref="InputException">The record names something that this program does not know.</exception>

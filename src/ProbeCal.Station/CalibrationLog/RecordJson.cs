@@ -7,7 +7,7 @@ using ProbeCal.Station.Entry;
 namespace ProbeCal.Station.CalibrationLog;
 
 /// <summary>A calibration record as UTF-8 JSON and back. The bytes written are the bytes kept and hashed.</summary>
-public static class RecordJson
+internal static class RecordJson
 {
     // Written for people too: one property a line, and "°" or "µ" as themselves.
     private static readonly RecordJsonContext Context = new(new JsonSerializerOptions

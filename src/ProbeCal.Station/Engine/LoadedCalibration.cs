@@ -8,7 +8,7 @@ using ProbeCal.Station.Entry;
 namespace ProbeCal.Station.Engine;
 
 /// <summary>The calibration that a station corrects with, as it stands in the log.</summary>
-public sealed class LoadedCalibration
+internal sealed class LoadedCalibration
 {
     /// <summary>Takes a record apart.</summary>
     /// <param name="record">The record.</param>

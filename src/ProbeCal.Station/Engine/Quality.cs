@@ -3,7 +3,7 @@ namespace ProbeCal.Station.Engine;
 /// <summary>
 /// How far a quantity of a reading can be trusted: the integers of the IODE primary flags as the QARTOD manuals use them.
 /// </summary>
-public enum Quality
+internal enum Quality
 {
     /// <summary>Nothing speaks against it.</summary>
     Pass = 1,
@@ -22,7 +22,7 @@ public enum Quality
 }
 
 /// <summary>A flag with the reason for it; the reason is empty for a pass.</summary>
-public readonly record struct Judged(Quality Flag, string Reason)
+internal readonly record struct Judged(Quality Flag, string Reason)
 {
     /// <summary>Nothing speaks against it.</summary>
     public static Judged Pass => new(Quality.Pass, "");

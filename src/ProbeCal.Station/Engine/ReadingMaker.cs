@@ -8,13 +8,13 @@ using ProbeCal.Station.Sources;
 namespace ProbeCal.Station.Engine;
 
 /// <summary>A sample as the journal keeps it and the message that goes out. The bytes of the message never change afterwards.</summary>
-public sealed record MadeReading(SampleRow Row, Message Message);
+internal sealed record MadeReading(SampleRow Row, Message Message);
 
 /// <summary>
 /// Sample and sequence number in, journal row and message out. The same sample with the same number gives the same bytes. Not
 /// for concurrent use.
 /// </summary>
-public sealed class ReadingMaker
+internal sealed class ReadingMaker
 {
     private readonly StationConfiguration _configuration;
     private readonly LoadedCalibration? _calibration;

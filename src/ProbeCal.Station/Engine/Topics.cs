@@ -1,7 +1,7 @@
 namespace ProbeCal.Station.Engine;
 
 /// <summary>The topics of one probe at one station. docs/protocols.md describes what is sent there.</summary>
-public sealed class Topics
+internal sealed class Topics
 {
     private readonly string _stem;
 

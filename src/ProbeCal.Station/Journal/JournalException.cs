@@ -3,7 +3,7 @@ using System;
 namespace ProbeCal.Station.Journal;
 
 /// <summary>The journal could not be read or written; nothing of the call took effect. A state to wait out, not the end of a stream.</summary>
-public sealed class JournalException : Exception
+internal sealed class JournalException : Exception
 {
     /// <summary>Makes one.</summary>
     /// <param name="message">One line that names the file and what would help.</param>

@@ -5,10 +5,10 @@ namespace ProbeCal.Station.Journal;
 /// <summary>A value that a reading was made with, and where it came from: <c>line</c>, <c>barometer baro-7</c>, <c>none</c>.</summary>
 /// <param name="Value">In the unit the field is named for; null when there is none.</param>
 /// <param name="Source">Where it came from, for people.</param>
-public readonly record struct SourcedValue(double? Value, string Source);
+internal readonly record struct SourcedValue(double? Value, string Source);
 
 /// <summary>One sample as the journal keeps it: always the raw line, and the reading or the reason there is none.</summary>
-public sealed record SampleRow
+internal sealed record SampleRow
 {
     /// <summary>Station id: first part of the identity.</summary>
     public required string Station { get; init; }
@@ -45,13 +45,13 @@ public sealed record SampleRow
 /// <param name="TimeUtc">When.</param>
 /// <param name="Kind">A word for machines: <c>source-lost</c>, <c>gap</c>.</param>
 /// <param name="Text">A sentence for people.</param>
-public sealed record JournalEvent(DateTimeOffset TimeUtc, string Kind, string Text);
+internal sealed record JournalEvent(DateTimeOffset TimeUtc, string Kind, string Text);
 
 /// <summary>A message to be sent, as the bytes it will have however often it is sent.</summary>
 /// <param name="Topic">Where to.</param>
 /// <param name="ContentType">Media type of the payload.</param>
 /// <param name="Payload">The bytes.</param>
-public sealed record Message(string Topic, string ContentType, ReadOnlyMemory<byte> Payload);
+internal sealed record Message(string Topic, string ContentType, ReadOnlyMemory<byte> Payload);
 
 /// <summary>A message that waits in the outbox. Ids rise in the order in which messages were written.</summary>
-public sealed record OutboxRow(long Id, Message Message);
+internal sealed record OutboxRow(long Id, Message Message);

@@ -5,7 +5,7 @@ using Microsoft.Data.Sqlite;
 namespace ProbeCal.Station.Journal;
 
 /// <summary>What may be written in one transaction of the journal. Handed out by <see cref="StationJournal.Commit"/> and good only inside it.</summary>
-public sealed class JournalTransaction : IDisposable
+internal sealed class JournalTransaction : IDisposable
 {
     private readonly Statement _start;
     private readonly Statement _next;

@@ -8,7 +8,7 @@ namespace ProbeCal.Station.Publishing;
 /// </summary>
 /// <param name="First">The wait after the first failure, before shortening.</param>
 /// <param name="Longest">No wait is longer.</param>
-public sealed record Backoff(TimeSpan First, TimeSpan Longest)
+internal sealed record Backoff(TimeSpan First, TimeSpan Longest)
 {
     /// <summary>One second to one minute. Our choice, no source.</summary>
     public static Backoff Default { get; } = new(TimeSpan.FromSeconds(1), TimeSpan.FromMinutes(1));

@@ -6,7 +6,7 @@ using ProbeCal.Station.Journal;
 namespace ProbeCal.Station.Publishing;
 
 /// <summary>How a step with the broker ended.</summary>
-public enum LinkOutcome
+internal enum LinkOutcome
 {
     /// <summary>The broker said yes.</summary>
     Done,
@@ -19,7 +19,7 @@ public enum LinkOutcome
 }
 
 /// <summary>How a step with the broker ended, and why: a phrase for people that holds no secret.</summary>
-public readonly record struct LinkResult(LinkOutcome Outcome, string Reason)
+internal readonly record struct LinkResult(LinkOutcome Outcome, string Reason)
 {
     /// <summary>The broker said yes.</summary>
     public static LinkResult Done => new(LinkOutcome.Done, "");
@@ -29,7 +29,7 @@ public readonly record struct LinkResult(LinkOutcome Outcome, string Reason)
 /// One connection to a broker at a time. Faults of the broker or the network are results, never exceptions; only a
 /// cancelled token throws. Calls must not overlap, except that <see cref="Lost"/> may be awaited at any time.
 /// </summary>
-public interface IBrokerLink : IAsyncDisposable
+internal interface IBrokerLink : IAsyncDisposable
 {
     /// <summary>Which broker, for people: <c>broker.example:8883 (TLS)</c>.</summary>
     string Description { get; }

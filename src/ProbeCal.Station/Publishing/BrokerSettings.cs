@@ -4,7 +4,7 @@ using ProbeCal.Station.Journal;
 namespace ProbeCal.Station.Publishing;
 
 /// <summary>Where the broker is and how this station enters. The password itself is fetched at every connection and kept nowhere.</summary>
-public sealed record BrokerSettings
+internal sealed record BrokerSettings
 {
     /// <summary>Host name or address.</summary>
     public required string Host { get; init; }

@@ -13,7 +13,7 @@ namespace ProbeCal.Station.Publishing;
 /// A broker inside the station, for whoever has none: on loopback only, so that nothing is open to the network. It keeps
 /// retained messages while it runs and no session across restarts.
 /// </summary>
-public sealed class EmbeddedBroker : IAsyncDisposable
+internal sealed class EmbeddedBroker : IAsyncDisposable
 {
     private readonly MqttServer _server;
 

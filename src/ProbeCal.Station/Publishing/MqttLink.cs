@@ -17,7 +17,7 @@ using ProbeCal.Station.Journal;
 namespace ProbeCal.Station.Publishing;
 
 /// <summary>An MQTT 5 connection to a broker, over TCP or TLS.</summary>
-public sealed class MqttLink : IBrokerLink
+internal sealed class MqttLink : IBrokerLink
 {
     /// <summary>How long the broker may take for any answer. The library's own default is 100 s.</summary>
     public static readonly TimeSpan AnswerTime = TimeSpan.FromSeconds(10);

@@ -5,7 +5,7 @@ using ProbeCal.Station.Entry;
 namespace ProbeCal.Station.Publishing;
 
 /// <summary>A place where a password lies: a variable of the environment, or the first line of a file. Never the password itself.</summary>
-public sealed class PasswordSource
+internal sealed class PasswordSource
 {
     private readonly string? _variable;
     private readonly string? _file;

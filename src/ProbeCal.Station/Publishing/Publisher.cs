@@ -13,7 +13,7 @@ namespace ProbeCal.Station.Publishing;
 /// at least once. Nothing here ever holds up the journal. <see cref="Wake"/>, <see cref="Announce"/> and the properties may
 /// be used from any thread; <see cref="RunAsync"/> runs once.
 /// </summary>
-public sealed class Publisher
+internal sealed class Publisher
 {
     private const int BatchSize = 100;
 

@@ -4,7 +4,7 @@ using ProbeCal.Station.Journal;
 namespace ProbeCal.Station.Publishing;
 
 /// <summary>How the publisher behaves in time. The numbers are our choice, no source.</summary>
-public sealed record PublisherOptions
+internal sealed record PublisherOptions
 {
     /// <summary>Waits between tries.</summary>
     public Backoff Backoff { get; init; } = Backoff.Default;

@@ -27,7 +27,7 @@ public sealed record SimulatedTruth(
 /// <param name="SignalNanoampere">Signal, nA, in steps of the converter.</param>
 /// <param name="TemperatureCelsius">Thermometer, °C.</param>
 /// <param name="PressureHectopascal">Barometer, hPa.</param>
-public sealed record SimulatedInstruments(double SignalNanoampere, double TemperatureCelsius, double PressureHectopascal);
+internal sealed record SimulatedInstruments(double SignalNanoampere, double TemperatureCelsius, double PressureHectopascal);
 
 /// <summary>
 /// An amperometric membrane probe in water, as physics: a first-order membrane lag, a thermal lag, the membrane's
@@ -38,7 +38,7 @@ public sealed record SimulatedInstruments(double SignalNanoampere, double Temper
 /// It has no clock: each <see cref="Step"/> takes it one interval on. The same settings and the same steps give the same
 /// values. The steps of both lags are exact for a target that holds still within the interval. Not thread-safe.
 /// </remarks>
-public sealed class ProbeInWater
+internal sealed class ProbeInWater
 {
     private const double DaySeconds = 86_400;
     private const double WeatherSeconds = 3.7 * DaySeconds;

@@ -11,7 +11,7 @@ namespace ProbeCal.Station.Simulation;
 /// for a serial port. Disposing is a pulled cable: the device vanishes under whoever has it open.
 /// </summary>
 /// <remarks>Like a serial line it keeps nothing for later: what nobody reads is lost. Not thread-safe.</remarks>
-public sealed partial class PseudoTerminal : IDisposable
+internal sealed partial class PseudoTerminal : IDisposable
 {
     private const int ReadWrite = 0x2, NoControllingTerminal = 0x100, NonBlocking = 0x800, CloseOnExec = 0x80000;
     private const short HangUp = 0x10;

@@ -188,7 +188,7 @@ public sealed record TcpAddress(string Host, int Port) : SourceAddress
 }
 
 /// <summary>A file of lines, read once from start to end.</summary>
-public sealed record FileAddress(string Path) : SourceAddress
+internal sealed record FileAddress(string Path) : SourceAddress
 {
     private static readonly string[] Keys = ["pace"];
 

@@ -4,7 +4,7 @@ using ProbeCal.Station.Entry;
 namespace ProbeCal.Station.Storage;
 
 /// <summary>The faults of a database file that a program can meet in use, told apart.</summary>
-public enum StorageFault
+internal enum StorageFault
 {
     /// <summary>No room is left on the disk, or the file has reached its own cap.</summary>
     DiskFull,
@@ -26,7 +26,7 @@ public enum StorageFault
 }
 
 /// <summary>Turns SQLite's result codes into states and into one line for people.</summary>
-public static class SqliteFaults
+internal static class SqliteFaults
 {
     // Primary result codes: https://www.sqlite.org/rescode.html
     private const int BusyCode = 5;

@@ -11,7 +11,7 @@ namespace ProbeCal.Station.Storage;
 /// newer version refused without a byte of it changed, an older one migrated after a backup copy. One connection, not for
 /// concurrent use; readers open their own.
 /// </summary>
-public sealed class SqliteFile : IDisposable
+internal sealed class SqliteFile : IDisposable
 {
     // How long a command waits for another program's lock before it is a fault.
     private const int BusySeconds = 5;

@@ -9,14 +9,14 @@ namespace ProbeCal.Station.Storage;
 /// <param name="Name">What it is, for people, with its article: <c>the journal</c>.</param>
 /// <param name="ApplicationId">The number that SQLite keeps in the file's header for its owner's use.</param>
 /// <param name="Migrations">SQL scripts; entry <c>i</c> lifts a file from version <c>i</c> to version <c>i + 1</c>.</param>
-public sealed record SqliteFormat(string Name, int ApplicationId, IReadOnlyList<string> Migrations)
+internal sealed record SqliteFormat(string Name, int ApplicationId, IReadOnlyList<string> Migrations)
 {
     /// <summary>The version this program writes.</summary>
     public int Version => Migrations.Count;
 }
 
 /// <summary>What is done with a file that SQLite finds damaged.</summary>
-public enum DamagePolicy
+internal enum DamagePolicy
 {
     /// <summary>It is left alone and the work is refused: for records that nothing can replace.</summary>
     Refuse,

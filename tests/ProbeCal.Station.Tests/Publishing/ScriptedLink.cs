@@ -10,7 +10,7 @@ using ProbeCal.Station.Publishing;
 namespace ProbeCal.Station.Tests.Publishing;
 
 /// <summary>A link whose answers a test gives, and whose calls it reads one by one.</summary>
-public sealed class ScriptedLink : IBrokerLink
+internal sealed class ScriptedLink : IBrokerLink
 {
     private readonly Channel<string> _calls = Channel.CreateUnbounded<string>();
     private TaskCompletionSource _lost = new();
