@@ -114,7 +114,16 @@ for p in "${projects[@]}"; do
 done
 
 # 4. What ships: the package, and the native program.
+reproducible() { # Core built again gives the same bytes, and no path of this machine is in them
+  local before after
+  before=$(sha256sum src/ProbeCal.Core/bin/Release/*/ProbeCal.Core.dll) || return 1
+  dotnet build src/ProbeCal.Core/ProbeCal.Core.csproj -c Release --no-restore --no-incremental || return 1
+  after=$(sha256sum src/ProbeCal.Core/bin/Release/*/ProbeCal.Core.dll)
+  printf '%s\n%s\n' "$before" "$after"
+  [ "$before" = "$after" ] && ! grep -aqF "$PWD" src/ProbeCal.Core/bin/Release/*/ProbeCal.Core.dll
+}
 if [ -z "$only" ]; then
+  step reproducible reproducible
   step pack dotnet pack src/ProbeCal.Core/ProbeCal.Core.csproj -c Release --no-build -o "$out/package"
   if command -v clang >/dev/null 2>&1 || command -v gcc >/dev/null 2>&1; then
     step native-publish dotnet publish src/ProbeCal.Host/ProbeCal.Host.csproj -c Release -r linux-x64 -o "$out/native" \
