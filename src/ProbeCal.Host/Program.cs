@@ -44,10 +44,17 @@ internal static class Program
             SimulateCommand.Create(terminal),
             DemoCommand.Create(terminal),
         };
+        if (args.Length == 0)
+        {
+            // Whoever types the bare name wants to know what there is; nothing was done all the same.
+            UsageErrors.Overview(root, terminal.Error);
+            return ExitCode.InputWrong;
+        }
+
         ParseResult parsed = root.Parse(args);
         if (parsed.Errors.Count != 0)
         {
-            terminal.Error.WriteLine("probecal: " + parsed.Errors[0].Message + " ('" + CommandPath(parsed) + " --help' lists what it takes)");
+            terminal.Error.WriteLine("probecal: " + UsageErrors.Line(parsed));
             return ExitCode.InputWrong;
         }
 
@@ -78,12 +85,6 @@ internal static class Program
             terminal.Error.WriteLine("probecal: stopped before the work was finished");
             return ExitCode.WorkFailed;
         }
-    }
-
-    private static string CommandPath(ParseResult parsed)
-    {
-        string name = parsed.CommandResult.Command.Name;
-        return parsed.CommandResult.Command is RootCommand ? "probecal" : "probecal " + name;
     }
 }
 

@@ -23,7 +23,7 @@ internal static class DemoCommand
     internal static Command Create(Terminal terminal)
     {
         Option<string> readings = new("--readings") { Description = "Stop after so many readings (default: run until Ctrl-C, or 20 where nobody watches).", HelpName = "N" };
-        Option<string> seed = new("--seed") { Description = "Seed of the simulation (default 7).", DefaultValueFactory = static _ => "7", HelpName = "N" };
+        Option<string> seed = new("--seed") { Description = "Seed of the simulation.", DefaultValueFactory = static _ => "7", HelpName = "N" };
         Command command = new(
             "demo",
             """

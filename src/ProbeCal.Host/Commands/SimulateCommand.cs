@@ -141,24 +141,24 @@ internal static class SimulateCommand
     /// <summary>The options of one command: they may not be shared between two.</summary>
     private sealed class Options
     {
-        internal readonly Option<string?> Temperature = Text("--temperature", "Mean temperature of the lake, and that of bath and air: 18C, 64F. Usual: 18C.");
-        internal readonly Option<string?> Salinity = Text("--salinity", "Practical salinity. Usual: 0.");
-        internal readonly Option<string?> Pressure = Text("--pressure", "Absolute station pressure with its unit: 1009hPa, 757mmHg. Usual: 1013.25hPa.");
-        internal readonly Option<string?> Altitude = Text("--altitude", "In place of --pressure: the standard atmosphere's pressure at 640m, 2100ft.");
-        internal readonly Option<string?> Phase = Text("--phase", "Where the probe is: lake, lake-still, air-saturated-water, air, zero; or a script such as air-saturated-water:15min,zero:10min,lake. Usual: lake.");
-        internal readonly Option<string?> Rate = Text("--rate", "Lines per simulated time: 1Hz, 6/min. Usual: 1Hz.");
-        internal readonly Option<string?> Faster = Text("--faster", "Simulated seconds in a real one; 0 waits for nothing. Usual: 1.");
-        internal readonly Option<string?> Count = Text("--count", "Stop after so many lines.");
-        internal readonly Option<string?> Duration = Text("--duration", "Stop after so much simulated time: 30min.");
-        internal readonly Option<string?> Seed = Text("--seed", "Seed of the noise: the same seed gives the same lines. Usual: 1.");
-        internal readonly Option<string?> Line = Text("--line", "Form of the lines. Usual: " + LineTemplate.UsualText);
-        internal readonly Option<string?> Truth = Text("--truth", "CSV file for the true values beside each line.");
-        internal readonly Option<string?> Pty = Text("--pty", "Make a pseudo-terminal and a link to it at this path, and write there.");
-        internal readonly Option<string?> Tcp = Text("--tcp", "Write to everyone who connects to this port of this machine; 0 takes a free port.");
+        internal readonly Option<string?> Temperature = Text("--temperature", "T", "Mean temperature of the lake, and that of bath and air: 18C, 64F. Default: 18C.");
+        internal readonly Option<string?> Salinity = Text("--salinity", "S", "Practical salinity. Default: 0.");
+        internal readonly Option<string?> Pressure = Text("--pressure", "P", "Absolute station pressure with its unit: 1009hPa, 757mmHg. Default: 1013.25hPa.");
+        internal readonly Option<string?> Altitude = Text("--altitude", "Z", "In place of --pressure: the standard atmosphere's pressure at 640m, 2100ft.");
+        internal readonly Option<string?> Phase = Text("--phase", "PHASE", "Where the probe is: lake, lake-still, air-saturated-water, air, zero; or a script such as air-saturated-water:15min,zero:10min,lake. Default: lake.");
+        internal readonly Option<string?> Rate = Text("--rate", "RATE", "Lines per simulated time: 1Hz, 6/min. Default: 1Hz.");
+        internal readonly Option<string?> Faster = Text("--faster", "X", "Simulated seconds in a real one; 0 waits for nothing. Default: 1.");
+        internal readonly Option<string?> Count = Text("--count", "N", "Stop after so many lines.");
+        internal readonly Option<string?> Duration = Text("--duration", "TIME", "Stop after so much simulated time: 30min.");
+        internal readonly Option<string?> Seed = Text("--seed", "N", "Seed of the noise: the same seed gives the same lines. Default: 1.");
+        internal readonly Option<string?> Line = Text("--line", "TEMPLATE", "Form of the lines. Default: " + LineTemplate.UsualText);
+        internal readonly Option<string?> Truth = Text("--truth", "FILE", "CSV file for the true values beside each line.");
+        internal readonly Option<string?> Pty = Text("--pty", "PATH", "Make a pseudo-terminal and a link to it at this path, and write there.");
+        internal readonly Option<string?> Tcp = Text("--tcp", "PORT", "Write to everyone who connects to this port of this machine; 0 takes a free port.");
 
-        private static Option<string?> Text(string name, string description)
+        private static Option<string?> Text(string name, string value, string description)
         {
-            return new Option<string?>(name) { Description = description };
+            return new Option<string?>(name) { Description = description, HelpName = value };
         }
     }
 

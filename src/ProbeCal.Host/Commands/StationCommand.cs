@@ -18,7 +18,7 @@ internal static class StationCommand
     internal static Command Create(Terminal terminal)
     {
         Option<string> config = new("--config") { Description = "Configuration file; docs/protocols.md describes it.", Required = true, HelpName = "FILE" };
-        Option<string> data = new("--data") { Description = "Folder with the calibrations, the journal and the lock (default probecal-data).", DefaultValueFactory = static _ => CalibrateCommand.UsualData, HelpName = "DIR" };
+        Option<string> data = new("--data") { Description = "Folder with the calibrations, the journal and the lock.", DefaultValueFactory = static _ => CalibrateCommand.UsualData, HelpName = "DIR" };
         Option<string> duration = new("--duration") { Description = "Stop after this long: 10min, 24h. Without it, Ctrl-C or SIGTERM stops.", HelpName = "TIME" };
         Option<bool> print = new("--print") { Description = "Print each reading, once it is on the disk, as one line of JSON." };
         Command command = new(
