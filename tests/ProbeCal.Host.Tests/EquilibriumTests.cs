@@ -112,6 +112,26 @@ public class EquilibriumTests
     }
 
     [Fact]
+    public async Task Text_fits_a_terminal_and_claims_no_uncertainty_of_zero()
+    {
+        Run exact = await Run.OfAsync("equilibrium", "--temperature", "8.4", "--salinity", "0", "--pressure", "706mmHg");
+        Run stated = await Run.OfAsync("equilibrium", "--temperature", "8.4", "--salinity", "35", "--pressure", "706mmHg", "--pressure-uncertainty", "1mmHg");
+        Assert.DoesNotContain("± 0.00 hPa", exact.Output, StringComparison.Ordinal);
+        Assert.Contains("temperature, pressure, salinity taken as exact", exact.Output, StringComparison.Ordinal);
+        Assert.Contains("pressure ± 1.33 hPa", stated.Output, StringComparison.Ordinal);
+        Assert.Contains("(706.0 mmHg)", exact.Output, StringComparison.Ordinal);
+        Assert.All((exact.Output + stated.Output).Split('\n'), static line => Assert.True(line.TrimEnd('\r').Length <= 110, line));
+    }
+
+    [Fact]
+    public async Task A_pressure_that_is_rare_at_the_altitude_is_computed_with_a_note()
+    {
+        Run run = await Run.OfAsync("equilibrium", "--temperature", "20", "--salinity", "0", "--pressure", "1013hPa", "--altitude", "230m");
+        Assert.Equal(0, run.ExitCode);
+        Assert.Contains("note: --pressure 1013hPa at 230m is 1041 hPa reduced to sea level, which is rare", run.Error, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public async Task A_pressure_that_cannot_be_at_the_altitude_is_refused()
     {
         Run run = await Run.OfAsync("equilibrium", "--temperature", "20", "--salinity", "0", "--pressure", "1013hPa", "--altitude", "640m");

@@ -17,11 +17,11 @@ internal static class EquilibriumCommand
         Option<string> salinity = new("--salinity") { Description = "Practical salinity; 0 for fresh water.", Required = true, HelpName = "S" };
         Option<string> pressure = new("--pressure") { Description = "Absolute station pressure with its unit: 760mmHg, 938hPa, 27.7inHg. Not the sea-level value of a weather service.", HelpName = "P" };
         Option<string> altitude = new("--altitude") { Description = "Altitude with its unit: 640m, 2100ft. Stands in for a barometer where --pressure is missing; with it, the pressure is judged.", HelpName = "Z" };
-        Option<string> equation = new("--equation") { Description = "benson-krause-1984 (default) or garcia-gordon-1992.", DefaultValueFactory = static _ => EquationNames.NameOf(EquationNames.Default), HelpName = "NAME" };
+        Option<string> equation = new("--equation") { Description = "benson-krause-1984 or garcia-gordon-1992.", DefaultValueFactory = static _ => EquationNames.NameOf(EquationNames.Default), HelpName = "NAME" };
         Option<string> temperatureUncertainty = new("--temperature-uncertainty") { Description = "Standard uncertainty of the temperature: 0.1K.", HelpName = "u" };
         Option<string> salinityUncertainty = new("--salinity-uncertainty") { Description = "Standard uncertainty of the salinity: 0.1.", HelpName = "u" };
         Option<string> pressureUncertainty = new("--pressure-uncertainty") { Description = "Standard uncertainty of the pressure: 1hPa.", HelpName = "u" };
-        Option<string> format = new("--format") { Description = "text (default) or json.", DefaultValueFactory = static _ => "text", HelpName = "text|json" };
+        Option<string> format = new("--format") { Description = "text or json.", DefaultValueFactory = static _ => "text", HelpName = "text|json" };
         Command command = new(
             "equilibrium",
             """
@@ -59,6 +59,11 @@ internal static class EquilibriumCommand
                 Uncertainty(QuantityKind.Salinity, "--salinity-uncertainty", parsed.GetValue(salinityUncertainty)),
                 air.UncertaintyHectopascal);
             OxygenAtEquilibrium result = OxygenAtEquilibrium.Compute(EquationNames.Parse("--equation", parsed.GetValue(equation)!), conditions);
+            if (air.Note is string note)
+            {
+                terminal.Error.WriteLine("note: " + note);
+            }
+
             TextWriter output = terminal.Output;
             if (shape == "json")
             {

@@ -18,6 +18,9 @@ public sealed record StationPressure(double Hectopascal, string Source, double U
     /// </summary>
     public const double AltitudeOnlyUncertaintyHectopascal = 10;
 
+    /// <summary>What is unusual about the pressure, for a person to look at; null when nothing is.</summary>
+    public string? Note { get; private init; }
+
     /// <summary>Reads the options; one of pressure and altitude must be there.</summary>
     /// <exception cref="InputException">Neither is given, one cannot be read, or the pressure is impossible at the altitude.</exception>
     public static StationPressure Parse(string? pressure, string? altitude, string? uncertainty)
@@ -45,15 +48,18 @@ public sealed record StationPressure(double Hectopascal, string Source, double U
         }
 
         double hectopascal = Quantity.PressureHectopascal("--pressure", pressure);
-        if (metres is double above)
-        {
-            Judge(pressure, hectopascal, altitude!, above);
-        }
-
-        return new StationPressure(hectopascal, "given", stated ?? 0);
+        string? note = metres is double above ? Judge(pressure, hectopascal, altitude!, above) : null;
+        return new StationPressure(hectopascal, "given", stated ?? 0) { Note = note };
     }
 
-    private static void Judge(string pressure, double hectopascal, string altitude, double metres)
+    /// <summary>Judges a pressure as a person typed it against the altitude.</summary>
+    /// <param name="pressure">The pressure as typed.</param>
+    /// <param name="hectopascal">The same, hPa.</param>
+    /// <param name="altitude">The altitude as typed.</param>
+    /// <param name="metres">The same, m.</param>
+    /// <returns>What is unusual about it, or null.</returns>
+    /// <exception cref="InputException">The pressure is impossible there, or the altitude is outside the standard atmosphere.</exception>
+    public static string? Judge(string pressure, double hectopascal, string altitude, double metres)
     {
         Status status = PressurePlausibility.Judge(hectopascal, metres, out PressureVerdict verdict, out double seaLevel);
         if (StatusParts.Input(status) == InputQuantity.Altitude)
@@ -65,8 +71,12 @@ public sealed record StationPressure(double Hectopascal, string Source, double U
         if (status != Status.Ok || verdict is PressureVerdict.RefusedHigh or PressureVerdict.RefusedLow)
         {
             throw new InputException(string.Create(CultureInfo.InvariantCulture,
-                $"--pressure {pressure} is not possible at {altitude}: reduced to sea level it is {seaLevel:F0} hPa, and sea level sees {PressurePlausibility.LowestSeaLevelHectopascal} to {PressurePlausibility.HighestSeaLevelHectopascal} hPa; about {usual:F0} hPa is usual there (is it a sea-level value, or another unit?)"));
+                $"--pressure {pressure} is not possible at {altitude}: reduced to sea level it is {seaLevel:F0} hPa, and sea level sees {PressurePlausibility.LowestSeaLevelHectopascal} to {PressurePlausibility.HighestSeaLevelHectopascal} hPa; about {usual:F0} hPa ({PressureUnits.MillimetresOfMercuryFromHectopascal(usual):F0} mmHg) is usual there (is it a sea-level value, or another unit?)"));
         }
+
+        return verdict is PressureVerdict.ConfirmHigh or PressureVerdict.ConfirmLow
+            ? string.Create(CultureInfo.InvariantCulture, $"--pressure {pressure} at {altitude} is {seaLevel:F0} hPa reduced to sea level, which is rare; about {usual:F0} hPa is usual there: make sure of unit and altitude, and that it is no sea-level value")
+            : null;
     }
 
     private static InputException OutsideAtmosphere(string altitude)
