@@ -35,8 +35,7 @@ public sealed class CalibrateTests : IDisposable
 
         Ran list = await RunAsync("calibrations", "list", "--data", _folder);
         Assert.Equal(0, list.Code);
-        Assert.Contains("air-saturated-water", list.Output, StringComparison.Ordinal);
-        Assert.Contains("1 records, chain whole", list.Output, StringComparison.Ordinal);
+        Assert.Contains("1 record, chain whole", list.Output, StringComparison.Ordinal);
         string id = list.Output.Split('\n')[1].Split(' ')[0];
 
         Ran show = await RunAsync("calibrations", "show", id, "--data", _folder);
@@ -106,7 +105,7 @@ public sealed class CalibrateTests : IDisposable
     [InlineData("--coefficient", "3%/K", "--coefficient 3%/K: a rate alone does not say its form")]
     [InlineData("--method", "air", "--method air: there is no such choice")]
     [InlineData("--method", "air-saturated-watr", "did you mean air-saturated-water?")]
-    [InlineData("--stirring", "stired", "it is stirred, still or flow-insensitive")]
+    [InlineData("--stirring", "stired", "there is no such choice (did you mean stirred?); there are stirred, still, flow-insensitive")]
     [InlineData("--zero", "maybe", "there are keep, assume, check, adjust")]
     [InlineData("--salinity", "35ppt", "35ppt")]
     [InlineData("--give-up-after", "30", "carries its unit")]
@@ -208,7 +207,7 @@ public sealed class CalibrateTests : IDisposable
         Assert.Contains("Practical salinity of the water (0 for fresh)?", ran.Error, StringComparison.Ordinal);
         Assert.Contains("--salinity none: ", ran.Error, StringComparison.Ordinal);
         Assert.Contains("--salinity 0,0: ", ran.Error, StringComparison.Ordinal);
-        Assert.Contains("--stirring sure: it is stirred, still or flow-insensitive", ran.Error, StringComparison.Ordinal);
+        Assert.Contains("--stirring sure: there is no such choice; there are stirred, still, flow-insensitive", ran.Error, StringComparison.Ordinal);
         Assert.Contains("Press Enter when it is so.", ran.Error, StringComparison.Ordinal);
     }
 
@@ -222,7 +221,7 @@ public sealed class CalibrateTests : IDisposable
         Assert.Contains("'perhaps' is neither yes nor no", ran.Error, StringComparison.Ordinal);
         Assert.Contains("Caution: sulfite irritates", ran.Error, StringComparison.Ordinal);
         Assert.Contains("Caution: nitrogen suffocates", ran.Error, StringComparison.Ordinal);
-        Assert.Contains("none-seen", ran.Output, StringComparison.Ordinal);
+        Assert.Contains("looked for, none seen", ran.Output, StringComparison.Ordinal);
     }
 
     [Fact]
@@ -231,7 +230,46 @@ public sealed class CalibrateTests : IDisposable
         string[] arguments = [.. Unattended(("--salinity", null)).Where(word => word != "--unattended")];
         Ran ran = await RunAsync(arguments, "");
         Assert.Equal(2, ran.Code);
-        Assert.Contains("the input ended before the question was answered", ran.Error, StringComparison.Ordinal);
+        Assert.Contains("\nprobecal: the input ended before the question was answered", ran.Error, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public async Task Interactive_AsksAgainForAPressureThatCannotBeAtTheAltitude_AndShowsTheCommandWithoutQuestions()
+    {
+        string[] arguments =
+        [
+            .. Unattended(("--method", null), ("--pressure-source", null), ("--altitude", null), ("--stirring", null), ("--line", "{time},{signal},{temperature}")).Where(word => word != "--unattended"),
+            "--simulated",
+        ];
+        Ran ran = await RunAsync(arguments, "1\nbarometer:B-12\n2100\n2100ft\n760mmHg\n705mmHg\n1\n\n\n");
+        Assert.True(ran.Code == 0, ran.Error);
+        Assert.Contains("--altitude 2100: an altitude carries its unit", ran.Error, StringComparison.Ordinal);
+        Assert.Contains("--pressure 760mmHg is not possible at 2100ft", ran.Error, StringComparison.Ordinal);
+        string again = ran.Error.Split('\n').Single(line => line.StartsWith("probecal calibrate ", StringComparison.Ordinal));
+        Assert.EndsWith("--simulated --method air-saturated-water --pressure-source barometer:B-12 --altitude 2100ft --pressure 705mmHg --stirring stirred", again.TrimEnd('\r'), StringComparison.Ordinal);
+        Assert.Contains(OperatingSystem.IsWindows() ? "\"" + Coefficient + "\"" : "'" + Coefficient + "'", again, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public async Task Interactive_PressureFromTheAltitude_AsksForTheAltitudeUntilItIsThere()
+    {
+        string[] arguments = [.. Unattended(("--pressure-source", null), ("--altitude", null), ("--line", "{time},{signal},{temperature}")).Where(word => word != "--unattended")];
+        Ran ran = await RunAsync(arguments, "altitude\n\n640m\n\n\n");
+        Assert.True(ran.Code == 0, ran.Error);
+        Assert.DoesNotContain("Enter if not known", ran.Error, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public async Task Text_FitsATerminal_AndSaysOfADefaultThatItIsOne()
+    {
+        Ran ran = await RunAsync(Unattended(("--coefficient", "arrhenius 22kJ/mol at 25C fitted 5..35C")));
+        Ran list = await RunAsync("calibrations", "list", "--data", _folder);
+        Assert.Contains("u 177.38 J/mol (default: 0.024 % per kelvin", ran.Output, StringComparison.Ordinal);
+        // A word without blanks, such as the address of a source, is never broken.
+        Assert.All((ran.Output + list.Output).Split('\n').Where(static line => line.Trim().Contains(' ', StringComparison.Ordinal)), static line => Assert.True(line.TrimEnd('\r').Length <= 110, line));
+        Assert.Contains(" nA/hPa ", list.Output, StringComparison.Ordinal);
+        Ran entered = await RunAsync([.. Unattended(), "--start-over"]);
+        Assert.Contains("u 500 J/mol (entered)", entered.Output, StringComparison.Ordinal);
     }
 
     [Fact]

@@ -1,5 +1,6 @@
 using System;
 using System.CommandLine;
+using System.Linq;
 using System.Reflection;
 using System.Threading;
 using System.Threading.Tasks;
@@ -28,10 +29,10 @@ internal static class CalibrateCommand
             Asks for what is missing, waits for steady readings, and writes the record into the calibration log.
 
             Examples:
-              probecal calibrate --source serial:/dev/ttyUSB0 --line "{time},{signal:nA},{temperature}" --probe P-17
-                --method air-saturated-water --pressure 706mmHg --pressure-source barometer:B-12 --altitude 640m
+              probecal calibrate --source serial:/dev/ttyUSB0 --line "{time},{signal:nA},{temperature}" --probe P-17 \
+                --method air-saturated-water --pressure 706mmHg --pressure-source barometer:B-12 --altitude 640m \
                 --salinity 0 --stirring stirred --coefficient "exponential 0.03/K at 25C fitted 5..35C"
-              probecal calibrate --manual --probe M-3 --meter-shows mg/L --method water-saturated-air
+              probecal calibrate --manual --probe M-3 --meter-shows mg/L --method water-saturated-air \
                 --temperature 20.1C --pressure 706mmHg --pressure-source barometer:B-12 --altitude 640m
             """);
         foreach (Option option in options.All)
@@ -50,7 +51,14 @@ internal static class CalibrateCommand
         SourceAddress? address = Address(parsed.GetValue(options.Source), manual);
         LineTemplate? line = address == null ? null : LineTemplate.Parse("--line", parsed.GetValue(options.Line) ?? LineTemplate.UsualText);
         Questions? questions = Asks(parsed.GetValue(options.Unattended), address, terminal) ? new Questions(terminal) : null;
-        CalibrationSetup setup = await new CalibrateSetup(options, parsed, questions).BuildAsync(address, line, cancellationToken).ConfigureAwait(false);
+        CalibrateSetup entries = new(options, parsed, questions);
+        CalibrationSetup setup = await entries.BuildAsync(address, line, cancellationToken).ConfigureAwait(false);
+        if (entries.Answered.Count != 0)
+        {
+            terminal.Error.WriteLine("The same without these questions, also to go on after an interruption:");
+            terminal.Error.WriteLine(CommandLineText.Of(parsed.Tokens.Select(static token => token.Value).Concat(entries.Answered), OperatingSystem.IsWindows()));
+        }
+
         ICalibrationDialogue dialogue = Dialogue(options, parsed, terminal, questions, setup);
 
         using DataDirectory data = DataDirectory.OpenForWriting(parsed.GetValue(options.Data) ?? UsualData);
@@ -58,15 +66,24 @@ internal static class CalibrateCommand
         CalibrationSession session = CalibrationSession.Begin(setup, data, log, terminal.Time, parsed.GetValue(options.StartOver), dialogue.Say);
         CalibrationRun run = new(session, dialogue, terminal.Time);
         StoredCalibration stored;
-        if (address == null)
+        try
         {
-            stored = await run.RunTypedAsync(Software, cancellationToken).ConfigureAwait(false);
+            if (address == null)
+            {
+                stored = await run.RunTypedAsync(Software, cancellationToken).ConfigureAwait(false);
+            }
+            else
+            {
+                await using ISampleSource source = SourceFactory.Create(address, line!, terminal.Time, NullLogger.Instance, terminal.Input, mustOpen: true);
+                bool goesOnByItself = address is SerialAddress or TcpAddress;
+                stored = await run.RunAsync(source, goesOnByItself, Software, cancellationToken).ConfigureAwait(false);
+            }
         }
-        else
+        catch (OperationCanceledException stopped)
         {
-            await using ISampleSource source = SourceFactory.Create(address, line!, terminal.Time, NullLogger.Instance, terminal.Input, mustOpen: true);
-            bool goesOnByItself = address is SerialAddress or TcpAddress;
-            stored = await run.RunAsync(source, goesOnByItself, Software, cancellationToken).ConfigureAwait(false);
+            throw new WorkFailedException(session.State.Points.Count == 0
+                ? "stopped before a point was taken; nothing was recorded"
+                : "stopped before the calibration was finished; the points taken are kept, and the same command goes on with them", stopped);
         }
 
         Print(stored, json, log, terminal);

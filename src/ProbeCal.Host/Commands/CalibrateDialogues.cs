@@ -33,7 +33,7 @@ internal sealed class CalibrationProgress
     {
         foreach (string line in instructions)
         {
-            _error.WriteLine("  " + line);
+            TextTable.WriteWrapped(_error, "  ", "    ", line);
         }
     }
 
@@ -49,13 +49,13 @@ internal sealed class CalibrationProgress
         _told = wait.SampleTimeUtc;
         string left = wait.SecondsLeft is double seconds ? "; about " + Clock(seconds) + " left" : "";
         string moving = wait.Moving.Count == 0 ? "" : "; " + string.Join(", ", wait.Moving);
-        _error.WriteLine($"{Name(wait.Step)}: {Clock(wait.ElapsedSeconds)}, {Number.Print(wait.Samples)} samples, signal {Number.Fixed(wait.Signal, 3)}, {Number.Fixed(wait.TemperatureCelsius, 2)} C{moving}{left}");
+        _error.WriteLine($"{Name(wait.Step)}: {Clock(wait.ElapsedSeconds)}, {Number.Print(wait.Samples)} {(wait.Samples == 1 ? "sample" : "samples")}, signal {Number.Fixed(wait.Signal, 3)}, {Number.Fixed(wait.TemperatureCelsius, 2)} °C{moving}{left}");
     }
 
     internal void Taken(RecordedPoint point)
     {
         string error = point.ErrorMilligramsPerLitre is double off ? $", off by {(off < 0 ? "" : "+")}{Number.Fixed(off, 3)} mg/L" : "";
-        _error.WriteLine($"{point.Role} point taken: signal {Number.Fixed(point.Signal.Mean, 3)} at {Number.Fixed(point.Temperature.Value, 2)} C, reference {Number.Fixed(point.ReferenceMilligramsPerLitre, 2)} mg/L{error}");
+        _error.WriteLine($"{CalibrationText.Role(point)} point taken: {(point.Typed ? "shown" : "signal")} {Number.Fixed(point.Signal.Mean, 3)} at {Number.Fixed(point.Temperature.Value, 2)} °C, reference {Number.Fixed(point.ReferenceMilligramsPerLitre, 2)} mg/L{error}");
     }
 
     private static string Name(CalibrationStep step)

@@ -61,7 +61,7 @@ internal sealed class CalibrateOptions
         Site = Text("--site", "NAME", "Site; the pressure is compared with the last one here.");
         Remarks = Text("--remarks", "TEXT", "Remarks for the record.");
 
-        MeterShows = Text("--meter-shows", "UNIT", "With --manual: mg/L, %local or %1atm.");
+        MeterShows = Text("--meter-shows", "UNIT", "With --manual: mg/L, %local (100 % is equilibrium at the pressure here) or %1atm (at 1 atm).");
         MeterSalinity = Text("--meter-salinity", "S", "Salinity set in the meter (default 0).");
         MeterPressure = Text("--meter-pressure", "P", "Pressure set in the meter; left out when it has its own barometer.");
         MeterTemperature = Text("--meter-temperature", "T", "Temperature set in the meter by hand; left out when it has its own thermometer.");

@@ -8,6 +8,7 @@ using System.Threading.Tasks;
 using ProbeCal.Station.Calibrating;
 using ProbeCal.Station.CalibrationLog;
 using ProbeCal.Station.Entry;
+using ProbeCal.Station.Equilibrium;
 using ProbeCal.Station.Sources;
 
 namespace ProbeCal.Host.Commands;
@@ -19,6 +20,7 @@ internal sealed class CalibrateSetup
 
     private static readonly string[] Methods = [CalibrationIds.AirSaturatedWater, CalibrationIds.WaterSaturatedAir];
     private static readonly string[] ZeroPlans = [CalibrationIds.ZeroKeep, CalibrationIds.ZeroAssume, CalibrationIds.ZeroCheck, CalibrationIds.ZeroAdjust];
+    private static readonly string[] Stirrings = ["stirred", "still", "flow-insensitive"];
     private static readonly string[] Scales = ["mg/L", "%local", "%1atm"];
 
     // A typical membrane, needed only for how a thermometer error acts on a meter that compensates by itself.
@@ -37,10 +39,13 @@ internal sealed class CalibrateSetup
         _reader = new OptionReader(parsed, questions);
     }
 
+    /// <summary>Options and answers of the questions that were asked, as words of a command line.</summary>
+    internal IReadOnlyList<string> Answered => _reader.Answered;
+
     internal async Task<CalibrationSetup> BuildAsync(SourceAddress? address, LineTemplate? line, CancellationToken cancellationToken)
     {
         bool manual = address == null;
-        string method = await _reader.NeedAsync(_options.Method, "Method (air-saturated-water or water-saturated-air)?", OptionReader.Choice(_options.Method, Methods), cancellationToken).ConfigureAwait(false);
+        string method = await _reader.NeedChoiceAsync(_options.Method, "Method:", Methods, cancellationToken).ConfigureAwait(false);
         bool air = method == CalibrationIds.WaterSaturatedAir;
         string probe = await _reader.NeedAsync(_options.Probe, "Probe id?", OptionReader.NotEmpty(_options.Probe), cancellationToken).ConfigureAwait(false);
         double? temperature = Temperature(line, manual);
@@ -49,17 +54,21 @@ internal sealed class CalibrateSetup
             temperature = await _reader.NeedAsync(_options.Temperature, "Temperature at the probe (for example 20.1C)?", text => Quantity.TemperatureCelsius("--temperature", text), cancellationToken).ConfigureAwait(false);
         }
 
-        RecordedQuantity? altitude = _reader.Given(_options.Altitude) is string height
-            ? Measured(Quantity.AltitudeMetres("--altitude", height), "m", 5, "typed")
-            : null;
-        EnteredPressure pressure = await PressureAsync(line, altitude, cancellationToken).ConfigureAwait(false);
+        PressureSource pressureSource = await _reader.NeedAsync(
+            _options.PressureSource,
+            line is { HasPressure: true } ? "Who measures the pressure in the lines (barometer:ID; or weather-service:NAME, airport:NAME)?" : "Where does the pressure come from (barometer:ID, weather-service:NAME, airport:NAME, telephone, or altitude without any)?",
+            static text => PressureSource.Parse("--pressure-source", text),
+            cancellationToken).ConfigureAwait(false);
+        string? height = await HeightAsync(pressureSource, cancellationToken).ConfigureAwait(false);
+        RecordedQuantity? altitude = height == null ? null : Measured(Quantity.AltitudeMetres("--altitude", height), "m", 5, "typed");
+        EnteredPressure pressure = await PressureAsync(pressureSource, line, height, altitude, cancellationToken).ConfigureAwait(false);
         // In air the salinity only says at which salinity the errors are expressed in mg/L.
         double salinity = _reader.Given(_options.Salinity) == null && air
             ? 0
             : await _reader.NeedAsync(_options.Salinity, "Practical salinity of the water (0 for fresh)?", text => Quantity.Salinity("--salinity", text), cancellationToken).ConfigureAwait(false);
         Stirring stirring = _reader.Given(_options.StirringOption) == null && air
             ? Stirring.Stirred
-            : await _reader.NeedAsync(_options.StirringOption, "Is the water stirred, still, or the probe flow-insensitive?", StirringOf, cancellationToken).ConfigureAwait(false);
+            : StirringOf(await _reader.NeedChoiceAsync(_options.StirringOption, "The water at the probe:", Stirrings, cancellationToken).ConfigureAwait(false));
         return new CalibrationSetup
         {
             Probe = await ProbeAsync(probe, line, manual, cancellationToken).ConfigureAwait(false),
@@ -102,13 +111,8 @@ internal sealed class CalibrateSetup
             : null;
     }
 
-    private async Task<EnteredPressure> PressureAsync(LineTemplate? line, RecordedQuantity? altitude, CancellationToken cancellationToken)
+    private async Task<EnteredPressure> PressureAsync(PressureSource source, LineTemplate? line, string? height, RecordedQuantity? altitude, CancellationToken cancellationToken)
     {
-        PressureSource source = await _reader.NeedAsync(
-            _options.PressureSource,
-            "Where does the pressure come from (barometer:ID, weather-service:NAME, airport:NAME, telephone, altitude)?",
-            text => PressureSource.Parse("--pressure-source", text),
-            cancellationToken).ConfigureAwait(false);
         double? uncertainty = _reader.NotNegative(_options.PressureUncertainty, QuantityKind.Pressure);
         double? value;
         if (source.IsAltitudeOnly)
@@ -121,7 +125,7 @@ internal sealed class CalibrateSetup
             bool fromLine = _reader.Given(_options.Pressure) == null && line is { HasPressure: true };
             value = fromLine
                 ? null
-                : await _reader.NeedAsync(_options.Pressure, "Absolute station pressure with its unit (for example 742mmHg)?", text => Quantity.PressureHectopascal("--pressure", text), cancellationToken).ConfigureAwait(false);
+                : await _reader.NeedAsync(_options.Pressure, "Absolute station pressure with its unit (for example 742mmHg)?", text => Pressure(text, height, altitude), cancellationToken).ConfigureAwait(false);
         }
 
         return new EnteredPressure
@@ -131,6 +135,34 @@ internal sealed class CalibrateSetup
             StandardUncertaintyHectopascal = uncertainty ?? source.DefaultUncertaintyHectopascal,
             UncertaintySource = uncertainty == null ? source.DefaultUncertaintySource : null,
         };
+    }
+
+    /// <summary>The altitude as typed. A person is asked for it, since a sea-level pressure shows against nothing else.</summary>
+    private Task<string?> HeightAsync(PressureSource source, CancellationToken cancellationToken)
+    {
+        const string Question = "Altitude of the site (for example 640m or 2100ft";
+        return source.IsAltitudeOnly && _reader.CanAsk
+            ? _reader.NeedAsync<string?>(_options.Altitude, Question + ")?", Checked, cancellationToken)
+            : _reader.WishAsync(_options.Altitude, Question + "; Enter if not known)?", static text => Checked(text), cancellationToken);
+
+        static string Checked(string text)
+        {
+            Quantity.AltitudeMetres("--altitude", text);
+            return text;
+        }
+    }
+
+    /// <summary>Reads a pressure; one that cannot be at the altitude is asked for again while the person is still there.</summary>
+    private double Pressure(string text, string? height, RecordedQuantity? altitude)
+    {
+        double hectopascal = Quantity.PressureHectopascal("--pressure", text);
+        if (_reader.Given(_options.Pressure) == null && altitude != null)
+        {
+            // What is unusual and not impossible is asked about by the guards, which keep the reason.
+            StationPressure.Judge(text, hectopascal, height!, altitude.Value);
+        }
+
+        return hectopascal;
     }
 
     private double FromAltitude(RecordedQuantity? altitude)
@@ -153,10 +185,10 @@ internal sealed class CalibrateSetup
 
     private async Task<RecordedProbe> ProbeAsync(string id, LineTemplate? line, bool manual, CancellationToken cancellationToken)
     {
-        RecordedMeterSettings? meter = manual ? Meter(await _reader.NeedAsync(_options.MeterShows, "What does the meter show (mg/L, %local or %1atm)?", OptionReader.Choice(_options.MeterShows, Scales), cancellationToken).ConfigureAwait(false)) : null;
+        RecordedMeterSettings? meter = manual ? Meter(await _reader.NeedChoiceAsync(_options.MeterShows, "The meter shows (%local: 100 % at the pressure here, %1atm: 100 % at 1 atm):", Scales, cancellationToken).ConfigureAwait(false)) : null;
         RecordedTemperatureCoefficient coefficient = meter is { TemperatureCelsius: null } && _reader.Given(_options.Coefficient) == null
             ? TypicalMembrane
-            : await _reader.NeedAsync(_options.Coefficient, "Temperature coefficient (for example: exponential 0.03/K at 25C fitted 5..35C)?", text => CoefficientText.Parse("--coefficient", text), cancellationToken).ConfigureAwait(false);
+            : await _reader.NeedAsync(_options.Coefficient, "Temperature coefficient of the membrane, from its maker (for example: exponential 0.03/K at 25C fitted 5..35C)?", text => CoefficientText.Parse("--coefficient", text), cancellationToken).ConfigureAwait(false);
         (double Low, double High)? range = _reader.Range(_options.SignalRange);
         double? common = _reader.NotNegative(_options.ThermometerUncertainty, QuantityKind.TemperatureDifference);
         string signalUnit = meter?.Shows ?? (line is { SignalUnit.Length: > 0 } ? line.SignalUnit : _reader.Given(_options.SignalUnit) ?? "");
@@ -290,8 +322,7 @@ internal sealed class CalibrateSetup
         {
             "stirred" => Stirring.Stirred,
             "still" => Stirring.Still,
-            "flow-insensitive" => Stirring.FlowInsensitive,
-            _ => throw Wrong.Input("--stirring", text, "it is stirred, still or flow-insensitive"),
+            _ => Stirring.FlowInsensitive,
         };
     }
 

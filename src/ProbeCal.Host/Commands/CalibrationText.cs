@@ -3,6 +3,7 @@ using System.Collections.Generic;
 using System.Globalization;
 using System.IO;
 using System.Linq;
+using ProbeCal.Station.Calibrating;
 using ProbeCal.Station.CalibrationLog;
 using ProbeCal.Station.Entry;
 
@@ -20,7 +21,7 @@ internal static class CalibrationText
         output.WriteLine($"Calibration {record.Id}: {(record.Result.Pass ? "PASS" : "FAIL")}{(record.Simulated ? "   (SIMULATED: no real probe was calibrated)" : "")}");
         foreach (string reason in record.Result.Reasons)
         {
-            output.WriteLine("  " + reason);
+            TextTable.WriteWrapped(output, "  ", "    ", reason);
         }
 
         output.WriteLine();
@@ -45,10 +46,11 @@ internal static class CalibrationText
         }
 
         RecordedTemperatureCoefficient coefficient = probe.TemperatureCoefficient;
-        Line("temperature coefficient", $"{coefficient.Form} {Number.Print(coefficient.Value)} {coefficient.Unit} at {Number.Print(coefficient.ReferenceCelsius)} C, fitted {Number.Print(coefficient.FittedLowCelsius)} to {Number.Print(coefficient.FittedHighCelsius)} C, u {Number.Print(coefficient.StandardUncertainty)} {coefficient.Unit} ({coefficient.Source})");
+        Line("temperature coefficient", $"{coefficient.Form} {Number.Print(coefficient.Value)} {coefficient.Unit} at {Number.Print(coefficient.ReferenceCelsius)} °C, fitted {Number.Print(coefficient.FittedLowCelsius)} to {Number.Print(coefficient.FittedHighCelsius)} °C ({coefficient.Source})");
+        Line("", $"u {Number.Significant(coefficient.StandardUncertainty, Digits)} {coefficient.Unit} ({(coefficient.UncertaintySource is string usual ? "default: " + usual : "entered")})");
         if (probe.MeterSettings is RecordedMeterSettings meter)
         {
-            Line("set in the meter", $"shows {meter.Shows}, salinity {Number.Print(meter.Salinity)}, pressure {(meter.PressureHectopascal is double set ? Number.Print(set) + " hPa" : "its own barometer")}, temperature {(meter.TemperatureCelsius is double by ? Number.Print(by) + " C by hand" : "its own thermometer")}");
+            Line("set in the meter", $"shows {meter.Shows}, salinity {Number.Print(meter.Salinity)}, pressure {(meter.PressureHectopascal is double set ? Number.Print(set) + " hPa" : "its own barometer")}, temperature {(meter.TemperatureCelsius is double by ? Number.Print(by) + " °C by hand" : "its own thermometer")}");
         }
 
         Line("thermometer", $"{probe.Thermometer.Id}, offset u {Number.Fixed(probe.Thermometer.CommonStandardUncertaintyCelsius, 3)} K ({probe.Thermometer.Source})");
@@ -56,7 +58,7 @@ internal static class CalibrationText
         Line("place", $"{record.Site ?? "not stated"}, altitude {(record.Altitude is RecordedQuantity altitude ? Number.Print(altitude.Value) + " m" : "not stated")}");
         Line("time (UTC)", $"{Time(record.StartedUtc)} to {Time(record.CompletedUtc)}{(record.By is string by2 ? ", by " + by2 : "")}");
         Line("previous calibration", record.PreviousCalibration ?? "none");
-        Line("droplets", record.DropletCheck);
+        Line("droplets", Looked(record.DropletCheck));
         if (record.AirToWaterRatio is RecordedQuantity ratio)
         {
             Line("air-to-water ratio", $"{Number.Print(ratio.Value)}, u {Number.Fixed(ratio.StandardUncertainty, 4)} ({ratio.Source})");
@@ -76,7 +78,8 @@ internal static class CalibrationText
 
         void Line(string name, string value)
         {
-            output.WriteLine("  " + name.PadRight(24) + value);
+            string first = "  " + name.PadRight(24);
+            TextTable.WriteWrapped(output, first, new string(' ', first.Length), value);
         }
     }
 
@@ -85,13 +88,13 @@ internal static class CalibrationText
         string unit = signalUnit.Length == 0 ? "" : " " + signalUnit;
         List<string[]> rows =
         [
-            ["point", .. points.Select(static point => point.Role)],
+            ["point", .. points.Select(Role)],
             ["taken (UTC)", .. points.Select(static point => point.LastUtc.ToString("HH:mm:ss", CultureInfo.InvariantCulture))],
             ["samples in window", .. points.Select(static point => point.Typed ? "typed" : $"{Number.Print(point.Signal.Count)} in {Number.Fixed(point.Signal.WindowSeconds, 0)} s")],
-            ["signal" + unit, .. points.Select(static point => Number.Fixed(point.Signal.Mean, 3))],
-            ["  scatter", .. points.Select(static point => Number.Fixed(point.Signal.StandardDeviation, 4))],
-            ["  drift a minute", .. points.Select(static point => Number.Fixed(point.Signal.SlopePerMinute, 4))],
-            ["temperature C", .. points.Select(static point => $"{Number.Fixed(point.Temperature.Value, 2)} ({point.Temperature.Source})")],
+            [(points.Length != 0 && points[0].Typed ? "shown" : "signal") + unit, .. points.Select(static point => Number.Fixed(point.Signal.Mean, 3))],
+            ["  scatter", .. points.Select(static point => point.Typed ? "-" : Number.Fixed(point.Signal.StandardDeviation, 4))],
+            ["  drift a minute", .. points.Select(static point => point.Typed ? "-" : Number.Fixed(point.Signal.SlopePerMinute, 4))],
+            ["temperature °C", .. points.Select(static point => $"{Number.Fixed(point.Temperature.Value, 2)} ({point.Temperature.Source})")],
             ["pressure hPa", .. points.Select(static point => $"{Number.Fixed(point.Pressure.Value, 1)} u {Number.Fixed(point.Pressure.StandardUncertainty, 1)}")],
             ["  source", .. points.Select(static point => point.Pressure.Source)],
             ["salinity", .. points.Select(static point => Number.Print(point.Salinity.Value))],
@@ -107,7 +110,7 @@ internal static class CalibrationText
 
     private static void WriteResult(TextWriter output, CalibrationRecord record)
     {
-        string unit = record.Probe.SignalUnit.Length == 0 ? "" : " " + record.Probe.SignalUnit;
+        string unit = " " + (record.Probe.SignalUnit.Length == 0 ? "signal" : record.Probe.SignalUnit);
         RecordedResult result = record.Result;
         double percent = 100 * result.SlopeStandardUncertainty / Math.Abs(result.Slope);
         output.WriteLine($"  slope {Number.Significant(result.Slope, Digits)}{(record.Probe.MeterSettings == null ? unit + "/hPa" : " (1 is a meter that shows the truth)")}, u {Number.Significant(result.SlopeStandardUncertainty, Digits)} ({Number.Fixed(percent, 2)} %)");
@@ -118,15 +121,27 @@ internal static class CalibrationText
     private static void WriteLimits(TextWriter output, CalibrationRecord record)
     {
         output.WriteLine("Limits (" + record.Result.DecisionRule + ")");
-        List<string[]> rows = [["check", "found", "limit", "verdict", "source"]];
+        List<string[]> rows = [["check", "found", "limit", "verdict"]];
+        List<string> sources = [];
         foreach (RecordedLimit limit in record.Limits)
         {
             string found = limit.Found is double value ? Number.Fixed(value, 3) + " " + limit.Unit : "-";
             string applied = limit.Applied is string which ? $"{limit.Limit}: {which}" : limit.Limit;
-            rows.Add([limit.Check, found, applied, limit.Verdict + (limit.Decides ? "" : " (informs)"), limit.Source]);
+            if (!sources.Contains(limit.Source))
+            {
+                sources.Add(limit.Source);
+            }
+
+            int source = 1 + sources.IndexOf(limit.Source);
+            rows.Add([limit.Check, found, $"{applied} [{Number.Print(source)}]", limit.Verdict + (limit.Decides ? "" : " (for information)")]);
         }
 
         TextTable.Write(output, rows, "  ");
+        for (int i = 0; i < sources.Count; i++)
+        {
+            TextTable.WriteWrapped(output, $"  [{Number.Print(i + 1)}] ", "      ", sources[i]);
+        }
+
         output.WriteLine();
     }
 
@@ -153,14 +168,36 @@ internal static class CalibrationText
         output.WriteLine("What the guards saw");
         foreach (RecordedFinding finding in record.Findings)
         {
-            output.WriteLine($"  {finding.Guard} ({finding.Severity}): {finding.Saw}");
+            TextTable.WriteWrapped(output, "  ", "    ", $"{finding.Guard} ({finding.Severity}): {finding.Saw}");
             if (finding.Reason is string reason)
             {
-                output.WriteLine("    reason for going on: " + reason);
+                TextTable.WriteWrapped(output, "    ", "      ", "reason for going on: " + reason);
             }
         }
 
         output.WriteLine();
+    }
+
+    /// <summary>The role of a point in the words of the trade; the record says <c>span</c> for the 100 % point.</summary>
+    internal static string Role(RecordedPoint point)
+    {
+        return point.Role switch
+        {
+            CalibrationIds.SpanPoint => "100 %",
+            CalibrationIds.AsLeftPoint => "as left",
+            _ => point.Role,
+        };
+    }
+
+    private static string Looked(string check)
+    {
+        return check switch
+        {
+            Droplets.NoneSeen => "looked for, none seen",
+            Droplets.NotChecked => "nobody looked",
+            Droplets.NotNeeded => "not needed in water",
+            _ => check,
+        };
     }
 
     /// <summary>A time for people.</summary>

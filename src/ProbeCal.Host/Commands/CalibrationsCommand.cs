@@ -7,6 +7,7 @@ using System.Text;
 using System.Text.Json;
 using System.Text.Json.Serialization;
 using ProbeCal.Station;
+using ProbeCal.Station.Calibrating;
 using ProbeCal.Station.CalibrationLog;
 using ProbeCal.Station.Entry;
 
@@ -86,7 +87,7 @@ internal static class CalibrationsCommand
 
     private static void WriteList(TextWriter output, List<StoredCalibration> records)
     {
-        List<string[]> rows = [["id", "time (UTC)", "probe", "method", "slope", "zero", "as found mg/L", "as left mg/L", "result"]];
+        List<string[]> rows = [["id", "time (UTC)", "probe", "in", "slope", "zero", "as found", "as left", "result"]];
         foreach (StoredCalibration stored in records)
         {
             CalibrationRecord record = stored.Record;
@@ -95,9 +96,9 @@ internal static class CalibrationsCommand
                 record.Id,
                 CalibrationText.Time(record.CompletedUtc),
                 record.Probe.Id,
-                record.Method,
-                Number.Significant(record.Result.Slope, CalibrationText.Digits),
-                Number.Significant(record.Result.Zero, CalibrationText.Digits),
+                record.Method == CalibrationIds.AirSaturatedWater ? "water" : "air",
+                Number.Significant(record.Result.Slope, CalibrationText.Digits) + Unit(record, "/hPa"),
+                Number.Significant(record.Result.Zero, CalibrationText.Digits) + (record.Probe.MeterSettings == null ? Unit(record, "") : " hPa"),
                 Error(record, "span"),
                 Error(record, "as-left"),
                 (record.Result.Pass ? "pass" : "fail") + (record.Simulated ? " (simulated)" : ""),
@@ -105,6 +106,13 @@ internal static class CalibrationsCommand
         }
 
         TextTable.Write(output, rows, "");
+        output.WriteLine("as found, as left: error at 100 % before and after the adjustment, mg/L");
+    }
+
+    private static string Unit(CalibrationRecord record, string per)
+    {
+        bool none = record.Probe.MeterSettings != null || record.Probe.SignalUnit.Length == 0;
+        return none ? "" : " " + record.Probe.SignalUnit + per;
     }
 
     private static string Error(CalibrationRecord record, string role)
@@ -119,7 +127,8 @@ internal static class CalibrationsCommand
         {
             if (!json)
             {
-                terminal.Output.WriteLine($"log {log.LogId}: {Number.Print(chain.Count)} records, chain whole; records cut off at the end would not show (head {chain.HeadSha256})");
+                terminal.Output.WriteLine($"log {log.LogId}: {Number.Print(chain.Count)} {(chain.Count == 1 ? "record" : "records")}, chain whole, head {chain.HeadSha256}");
+                terminal.Output.WriteLine("  Keep count and head elsewhere: records cut off at the end show only against them.");
             }
 
             return ExitCode.Done;

@@ -1,4 +1,5 @@
 using System;
+using System.Collections.Generic;
 using System.CommandLine;
 using System.Globalization;
 using System.Threading;
@@ -12,6 +13,7 @@ internal sealed class OptionReader
 {
     private readonly ParseResult _parsed;
     private readonly Questions? _questions;
+    private readonly List<string> _answered = [];
 
     /// <param name="parsed">What was given.</param>
     /// <param name="questions">Who asks for what is missing; null refuses instead.</param>
@@ -22,6 +24,9 @@ internal sealed class OptionReader
     }
 
     internal bool CanAsk => _questions != null;
+
+    /// <summary>Options and answers of the questions that were asked, in order, as words of a command line.</summary>
+    internal IReadOnlyList<string> Answered => _answered;
 
     internal bool IsSet(Option<bool> flag)
     {
@@ -49,7 +54,80 @@ internal sealed class OptionReader
 
         return _questions == null
             ? throw new InputException($"{option.Name} is missing: {option.Description}")
-            : await _questions.AskAsync(question, read, cancellationToken).ConfigureAwait(false);
+            : await AskAsync(option, question, read, cancellationToken).ConfigureAwait(false);
+    }
+
+    /// <summary>What was given, or the answer to a question that may be passed over with Enter; null when nobody said.</summary>
+    internal async Task<string?> WishAsync(Option<string> option, string question, Action<string> check, CancellationToken cancellationToken)
+    {
+        if (Given(option) is string given)
+        {
+            check(given);
+            return given;
+        }
+
+        if (_questions == null)
+        {
+            return null;
+        }
+
+        return await AskAsync(option, question, Read, cancellationToken).ConfigureAwait(false);
+
+        string? Read(string text)
+        {
+            if (text.Length == 0)
+            {
+                return null;
+            }
+
+            check(text);
+            return text;
+        }
+    }
+
+    /// <summary>What was given, or one of numbered choices: a person at the water answers with the number or the word.</summary>
+    internal async Task<string> NeedChoiceAsync(Option<string> option, string question, string[] choices, CancellationToken cancellationToken)
+    {
+        string numbered = question;
+        for (int i = 0; i < choices.Length; i++)
+        {
+            numbered += $"{(i == 0 ? " " : ", ")}{Number.Print(i + 1)} {choices[i]}";
+        }
+
+        return await NeedAsync(option, numbered + "?", Read, cancellationToken).ConfigureAwait(false);
+
+        string Read(string text)
+        {
+            for (int i = 0; i < choices.Length; i++)
+            {
+                if (Given(option) == null && text == Number.Print(i + 1))
+                {
+                    return choices[i];
+                }
+            }
+
+            return Choice(option, choices)(text);
+        }
+    }
+
+    private async Task<T> AskAsync<T>(Option<string> option, string question, Func<string, T> read, CancellationToken cancellationToken)
+    {
+        string answer = "";
+        T value = await _questions!.AskAsync(question, Keep, cancellationToken).ConfigureAwait(false);
+        if (answer.Length != 0)
+        {
+            _answered.AddRange([option.Name, answer]);
+        }
+
+        return value;
+
+        T Keep(string text)
+        {
+            T understood = read(text);
+            // A choice by its number is kept as the word.
+            answer = understood as string ?? text;
+            return understood;
+        }
     }
 
     /// <summary>A day, or null.</summary>

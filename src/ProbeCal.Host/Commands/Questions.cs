@@ -49,7 +49,20 @@ internal sealed class Questions
     private async Task<string> LineAsync(CancellationToken cancellationToken)
     {
         // A console blocks the thread that reads it, and a live source is read on meanwhile.
-        string? line = await Task.Run(_terminal.Input.ReadLine, cancellationToken).WaitAsync(cancellationToken).ConfigureAwait(false);
+        string? line = null;
+        try
+        {
+            line = await Task.Run(_terminal.Input.ReadLine, cancellationToken).WaitAsync(cancellationToken).ConfigureAwait(false);
+        }
+        finally
+        {
+            if (line == null)
+            {
+                // What is said next does not belong behind the question.
+                _terminal.Error.WriteLine();
+            }
+        }
+
         return line ?? throw new InputException("the input ended before the question was answered; answer it, or give every option and --unattended");
     }
 }

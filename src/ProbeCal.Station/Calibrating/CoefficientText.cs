@@ -211,8 +211,9 @@ public static class CoefficientText
         string unit = word[length..];
         double scale = (arrhenius, unit) switch
         {
-            (false, "/K" or "1/K") => 1,
-            (false, "%/K") => 0.01,
+            // A difference of 1 °C is 1 K, and data sheets write it either way.
+            (false, "/K" or "1/K" or "/C" or "/°C" or "1/°C" or "/degC") => 1,
+            (false, "%/K" or "%/C" or "%/°C" or "%/degC") => 0.01,
             (true, "J/mol") => 1,
             (true, "kJ/mol") => 1000,
             (true, _) => throw Wrong.Input(what, text, Number.CommaAdvice(word) ?? $"'{word}': the arrhenius form takes an activation energy, for example 22kJ/mol"),

@@ -30,8 +30,8 @@ internal static class Instructions
         "Caution: nitrogen suffocates without warning: ventilate, chain the cylinder, use an oxygen alarm.",
     ];
 
-    private static readonly string[] WaterAgain = ["Leave the probe in the air-saturated water: the point after the adjustment is a new window."];
-    private static readonly string[] AirAgain = ["Leave the probe in the chamber (or put it back as before): the point after the adjustment is a new window."];
+    private static readonly string[] WaterAgain = ["Leave the probe in the air-saturated water: fresh readings now check the new calibration (as left)."];
+    private static readonly string[] AirAgain = ["Leave the probe in the chamber, or put it back as before: fresh readings now check the new calibration (as left)."];
 
     private static readonly string[] AfterZero =
     [

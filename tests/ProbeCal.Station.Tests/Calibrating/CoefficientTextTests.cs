@@ -11,6 +11,8 @@ public class CoefficientTextTests
     [Theory]
     [InlineData("exponential 0.03/K at 25C fitted 5..35C", "exponential", 0.03, "1/K", 25, 5, 35)]
     [InlineData("compound 3%/K at 20degC fitted 0C..40C", "compound", 0.03, "1/K", 20, 0, 40)]
+    [InlineData("compound 3%/°C at 25C fitted 0..40C", "compound", 0.03, "1/K", 25, 0, 40)]
+    [InlineData("exponential 0.03/C at 25C fitted 0..40C", "exponential", 0.03, "1/K", 25, 0, 40)]
     [InlineData("linear 0.03/K fitted 5..35C at 25C", "linear", 0.03, "1/K", 25, 5, 35)]
     [InlineData("Arrhenius 22kJ/mol at 25 fitted 5..35C", "", 0, "", 0, 0, 0)]
     [InlineData("arrhenius 22kJ/mol at 25°C fitted 2.5..35.5C", "arrhenius", 22000, "J/mol", 25, 2.5, 35.5)]
