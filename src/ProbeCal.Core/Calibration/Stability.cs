@@ -9,6 +9,10 @@ public static class Stability
     // Beyond this the effective count loses its meaning: the noise is slower than the window.
     private const double HighestCorrelation = 0.99;
 
+    // Two neighbouring codes are one step apart, less what their scaling and printing in few decimals rounds away: 0.1 of a
+    // step is more than that for a step printed with two figures (our choice, no source).
+    private const double LeastShareOfAStep = 0.9;
+
     /// <summary>Index of the first sample of the window that ends with the last sample.</summary>
     /// <param name="timesSeconds">Rising times, s.</param>
     /// <param name="count">How many of them are in use.</param>
@@ -200,8 +204,7 @@ public static class Stability
         double spread = signal.Maximum - signal.Minimum;
         if (spread <= 0.0) { return true; }
         if (InputCheck.NotFinite(converter.Resolution)) { return false; }
-        // Half a step: two neighbouring codes, scaled to a unit, may lie a rounding less than one step apart.
-        return spread < 0.5 * converter.Resolution;
+        return spread < LeastShareOfAStep * converter.Resolution;
     }
 
     private static bool IsSaturated(WindowStatistics signal, ConverterLimits converter)

@@ -91,6 +91,14 @@ public class StabilityTests(ITestOutputHelper output)
         Assert.Equal(expected, Judge(t => 100.0 + (unitsPerWindow * t / 180.0) + Alternating(t, 0.05), t => 20.0 + Alternating(t, 0.001)));
     }
 
+    [Fact]
+    public void Trend_CountsOverTheWindow_AlsoWhereTheSamplesSpanMore()
+    {
+        // 30 samples at 7 s span 203 s: 0.47 units in 180 s are 0.53 over all of them.
+        Assert.Equal(StabilityFinding.Stable, Judge(
+            t => 100.0 + (0.47 * t / 180.0) + Alternating(t, 0.01), t => 20.0 + (0.047 * t / 180.0) + Alternating(t, 0.0001), count: 30, interval: 7.0));
+    }
+
     [Theory]
     [InlineData(0.045, StabilityFinding.Stable)]
     [InlineData(0.055, StabilityFinding.TemperatureDrifts)]
@@ -137,6 +145,9 @@ public class StabilityTests(ITestOutputHelper output)
         Assert.Equal(StabilityFinding.SignalDead, Judge(t => 100.0, t => 20.0));
         Assert.Equal(StabilityFinding.SignalDead, Judge(t => 100.0, t => 20.0, converter: known));
         Assert.Equal(StabilityFinding.SignalDead, Judge(t => 100.0 + Alternating(t, 0.01), t => 20.0, converter: known));
+        Assert.Equal(StabilityFinding.SignalDead, Judge(t => 100.0 + Alternating(t, 0.04), t => 20.0, converter: known));
+        // A step of 0.0625 printed with two decimals moves by 0.06.
+        Assert.Equal(StabilityFinding.Stable, Judge(t => 100.0 + Alternating(t, 0.03), t => 20.0, converter: new ConverterLimits(0.0625)));
         // Two neighbouring codes, as a steady signal between them gives; 0.1 has no exact binary form.
         Assert.Equal(StabilityFinding.Stable, Judge(t => 0.1 * (1000 + ((int)t % 2)), t => 20.0, converter: known));
     }
