@@ -98,7 +98,8 @@ public sealed class ProbeCalibration
 
     /// <summary>
     /// One contribution to the relative uncertainty of <see cref="Slope"/>: relative sensitivity times standard uncertainty,
-    /// signed. The squares of all add up to that of <see cref="SlopeRelativeUncertainty"/>.
+    /// signed. The squares of all add up to that of <see cref="SlopeRelativeUncertainty"/>. The slope of a meter with its own
+    /// thermometer is that at the temperature of the point, so its temperature coefficient adds nothing.
     /// </summary>
     /// <param name="source">Which contribution; 0 for those that belong to a reading.</param>
     public double SlopeContribution(UncertaintySource source)
@@ -110,7 +111,7 @@ public sealed class ProbeCalibration
             case UncertaintySource.PressureAtCalibration: return -PerHectopascalAtPoint * Point.PressureUncertaintyHectopascal;
             case UncertaintySource.SignalAtCalibration: return PointResponseUncertainty / ResponseSpan;
             case UncertaintySource.Zero: return -ZeroResponseUncertainty / ResponseSpan;
-            case UncertaintySource.TemperatureCoefficient: return -PerCoefficientAtPoint * TemperatureCoefficientUncertainty;
+            case UncertaintySource.TemperatureCoefficient: return Model.CompensatesTemperature ? 0.0 : -PerCoefficientAtPoint * TemperatureCoefficientUncertainty;
             case UncertaintySource.AirToWaterRatio: return -Point.AirToWaterRatioUncertainty;
             case UncertaintySource.ReferenceState: return -Point.ReferenceStateUncertainty;
             default: return 0.0;

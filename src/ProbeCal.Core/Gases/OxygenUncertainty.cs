@@ -37,14 +37,14 @@ public static class OxygenUncertainty
     /// <param name="celsius">Temperature, the range of the equation.</param>
     /// <param name="salinity">Practical salinity, the range of the equation.</param>
     /// <param name="pressureHectopascal">Absolute pressure at the water surface, 506.625–1114.575 hPa.</param>
-    /// <param name="temperatureUncertainty">Standard uncertainty of the temperature, K, not negative.</param>
+    /// <param name="temperatureUncertaintyKelvin">Standard uncertainty of the temperature, K, not negative.</param>
     /// <param name="salinityUncertainty">Standard uncertainty of the salinity, not negative.</param>
-    /// <param name="pressureUncertainty">Standard uncertainty of the pressure, hPa, not negative.</param>
+    /// <param name="pressureUncertaintyHectopascal">Standard uncertainty of the pressure, hPa, not negative.</param>
     /// <param name="rule">Refuse or extrapolate outside the range.</param>
     /// <param name="milligramsPerLitre">Combined standard uncertainty, mg/L; NaN unless Ok or extrapolated.</param>
     public static Status MilligramsPerLitre(
         OxygenEquation equation, double celsius, double salinity, double pressureHectopascal,
-        double temperatureUncertainty, double salinityUncertainty, double pressureUncertainty, RangeRule rule,
+        double temperatureUncertaintyKelvin, double salinityUncertainty, double pressureUncertaintyHectopascal, RangeRule rule,
         out double milligramsPerLitre)
     {
         milligramsPerLitre = double.NaN;
@@ -52,15 +52,15 @@ public static class OxygenUncertainty
             equation, celsius, salinity, pressureHectopascal, rule,
             out double perKelvin, out double perSalinity, out double perHectopascal);
         Status uncertainties = InputCheck.Graver(
-            InputCheck.Uncertainty(temperatureUncertainty),
-            InputCheck.Graver(InputCheck.Uncertainty(salinityUncertainty), InputCheck.Uncertainty(pressureUncertainty)));
+            InputCheck.Uncertainty(temperatureUncertaintyKelvin),
+            InputCheck.Graver(InputCheck.Uncertainty(salinityUncertainty), InputCheck.Uncertainty(pressureUncertaintyHectopascal)));
         status = InputCheck.Graver(status, uncertainties);
         // A negative uncertainty has no meaning to extrapolate to.
         if (uncertainties != Status.Ok || InputCheck.Refuses(status, rule)) { return status; }
         OxygenEquilibrium.MilligramsPerLitre(equation, celsius, salinity, pressureHectopascal, rule, out double value);
-        double fromTemperature = perKelvin * temperatureUncertainty;
+        double fromTemperature = perKelvin * temperatureUncertaintyKelvin;
         double fromSalinity = perSalinity * salinityUncertainty;
-        double fromPressure = perHectopascal * pressureUncertainty;
+        double fromPressure = perHectopascal * pressureUncertaintyHectopascal;
         double fromEquation = value * Relative(salinity);
         double squares = (fromTemperature * fromTemperature) + (fromSalinity * fromSalinity)
             + (fromPressure * fromPressure) + (fromEquation * fromEquation);
@@ -73,23 +73,23 @@ public static class OxygenUncertainty
     /// </summary>
     /// <param name="celsius">Temperature, −2 to 40 °C.</param>
     /// <param name="pressureHectopascal">Absolute pressure, 506.625–1114.575 hPa.</param>
-    /// <param name="temperatureUncertainty">Standard uncertainty of the temperature, K, not negative.</param>
-    /// <param name="pressureUncertainty">Standard uncertainty of the pressure, hPa, not negative.</param>
+    /// <param name="temperatureUncertaintyKelvin">Standard uncertainty of the temperature, K, not negative.</param>
+    /// <param name="pressureUncertaintyHectopascal">Standard uncertainty of the pressure, hPa, not negative.</param>
     /// <param name="rule">Refuse or extrapolate outside the range.</param>
     /// <param name="hectopascal">Combined standard uncertainty, hPa; NaN unless Ok or extrapolated.</param>
     public static Status PartialPressure(
-        double celsius, double pressureHectopascal, double temperatureUncertainty, double pressureUncertainty, RangeRule rule,
+        double celsius, double pressureHectopascal, double temperatureUncertaintyKelvin, double pressureUncertaintyHectopascal, RangeRule rule,
         out double hectopascal)
     {
         hectopascal = double.NaN;
         Status status = OxygenEquilibrium.PartialPressureSensitivities(
             celsius, pressureHectopascal, rule, out double perKelvin, out double perHectopascal);
         Status uncertainties = InputCheck.Graver(
-            InputCheck.Uncertainty(temperatureUncertainty), InputCheck.Uncertainty(pressureUncertainty));
+            InputCheck.Uncertainty(temperatureUncertaintyKelvin), InputCheck.Uncertainty(pressureUncertaintyHectopascal));
         status = InputCheck.Graver(status, uncertainties);
         if (uncertainties != Status.Ok || InputCheck.Refuses(status, rule)) { return status; }
-        double fromTemperature = perKelvin * temperatureUncertainty;
-        double fromPressure = perHectopascal * pressureUncertainty;
+        double fromTemperature = perKelvin * temperatureUncertaintyKelvin;
+        double fromPressure = perHectopascal * pressureUncertaintyHectopascal;
         double squares = (fromTemperature * fromTemperature) + (fromPressure * fromPressure);
         return InputCheck.Deliver(Numerics.Sqrt(squares), status, Status.UncertaintyAboveRange, out hectopascal);
     }

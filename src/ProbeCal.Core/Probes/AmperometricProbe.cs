@@ -45,6 +45,12 @@ public sealed class AmperometricProbe : IProbeModel
     /// <summary>Upper end of the fitted range, °C.</summary>
     public double HighestCelsius { get; }
 
+    /// <inheritdoc/>
+    public bool CompensatesTemperature
+    {
+        get { return false; }
+    }
+
     /// <summary>Partial pressure from a response: (response − zero)/(slope · flow · gain), hPa. The static path, without an object.</summary>
     /// <param name="response">Signal, in its unit.</param>
     /// <param name="zero">Response in oxygen-free water, same unit.</param>

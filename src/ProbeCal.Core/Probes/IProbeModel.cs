@@ -10,6 +10,12 @@ namespace ProbeCal;
 /// </remarks>
 public interface IProbeModel
 {
+    /// <summary>
+    /// True when the signal comes already compensated for the membrane's temperature, by the thermometer whose temperature is
+    /// given with it. The gain is then 1.
+    /// </summary>
+    bool CompensatesTemperature { get; }
+
     /// <summary>The response that a raw signal stands for, in the response's unit.</summary>
     /// <param name="signal">Raw signal, in the probe's unit.</param>
     /// <param name="temperatureCelsius">Temperature given with the signal, °C.</param>
@@ -52,7 +58,10 @@ public interface IProbeModel
     /// <returns>The input at fault, or Ok.</returns>
     Status GainPerKelvin(double temperatureCelsius, out double perKelvin);
 
-    /// <summary>d ln gain/d temperature coefficient, in the inverse of the coefficient's unit.</summary>
+    /// <summary>
+    /// d ln gain/d temperature coefficient, in the inverse of the coefficient's unit. For a meter with its own thermometer it is
+    /// that of the compensation inside the meter, of which only the difference between two temperatures means something.
+    /// </summary>
     /// <param name="temperatureCelsius">Temperature, °C.</param>
     /// <param name="perCoefficient">The sensitivity; NaN unless Ok.</param>
     /// <returns>The input at fault, or Ok.</returns>

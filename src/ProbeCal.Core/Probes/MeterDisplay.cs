@@ -96,6 +96,12 @@ public sealed class MeterDisplay : IProbeModel
     /// <summary>Upper end of the range in which the meter compensates, °C.</summary>
     public double HighestCelsius { get; }
 
+    /// <inheritdoc/>
+    public bool CompensatesTemperature
+    {
+        get { return hasOwnThermometer; }
+    }
+
     /// <summary>
     /// The partial pressure that one shown unit stands for, hPa per mg/L or hPa per %: every scale is proportional to pO2.
     /// </summary>
@@ -225,6 +231,11 @@ public sealed class MeterDisplay : IProbeModel
     /// <inheritdoc/>
     public Status GainPerCoefficient(double temperatureCelsius, out double perCoefficient)
     {
-        return TemperatureCoefficient.CoefficientDerivative(Form, Coefficient, ReferenceCelsius, temperatureCelsius, out perCoefficient);
+        Status status = TemperatureCoefficient.CoefficientDerivative(Form, Coefficient, ReferenceCelsius, temperatureCelsius, out perCoefficient);
+        if (hasOwnThermometer || status != Status.Ok) { return status; }
+        status = TemperatureCoefficient.CoefficientDerivative(Form, Coefficient, ReferenceCelsius, TemperatureSetCelsius, out double atSet);
+        // The gain is f(T)/f(Tset): set to the water's own temperature, the coefficient says nothing.
+        perCoefficient = status == Status.Ok ? perCoefficient - atSet : double.NaN;
+        return status;
     }
 }

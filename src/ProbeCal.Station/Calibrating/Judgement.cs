@@ -45,31 +45,39 @@ internal static class Judgement
 
     internal static RecordedContribution[] Budget(CalibrationSetup setup, RecordedPoint point, RecordedZero zero, ProbeCalibration fit)
     {
-        double span = Math.Abs(fit.ResponseSpan);
         RecordedThermometer thermometer = setup.Probe.Thermometer;
         RecordedTemperatureCoefficient coefficient = setup.Probe.TemperatureCoefficient;
+        bool compensates = fit.Model.CompensatesTemperature;
         string unit = setup.Probe.SignalUnit.Length == 0 ? "signal" : setup.Probe.SignalUnit;
         List<RecordedContribution> lines =
         [
-            Line("thermometer offset", thermometer.CommonStandardUncertaintyCelsius, "K", fit.PerKelvinAtPoint * thermometer.CommonStandardUncertaintyCelsius, thermometer.Source),
-            Line("temperature at the point", point.Temperature.StandardUncertainty, "K", fit.PerKelvinAtPoint * point.Temperature.StandardUncertainty, "reading and scatter over the window"),
-            Line("pressure", point.Pressure.StandardUncertainty, "hPa", fit.PerHectopascalAtPoint * point.Pressure.StandardUncertainty, point.Pressure.UncertaintySource ?? "entered"),
-            Line("signal at the point", point.SignalStandardUncertainty, unit, fit.PointResponseUncertainty / span, "scatter, drift and resolution over the window"),
-            Line("zero", zero.SignalStandardUncertainty, unit, fit.ZeroResponseUncertainty / span, ZeroSource(zero)),
-            CoefficientLine(setup, coefficient, fit),
-            Line("state of the reference", setup.ReferenceStateRelative * 100, "%", setup.ReferenceStateRelative, ReferenceStateSource(setup)),
+            Line("thermometer offset", UncertaintySource.ThermometerOffset, thermometer.CommonStandardUncertaintyCelsius, "K", thermometer.Source),
+            Line("temperature at the point", UncertaintySource.TemperatureAtCalibration, point.Temperature.StandardUncertainty, "K", "reading and scatter over the window"),
+            Line("pressure", UncertaintySource.PressureAtCalibration, point.Pressure.StandardUncertainty, "hPa", point.Pressure.UncertaintySource ?? "entered"),
+            Line("signal at the point", UncertaintySource.SignalAtCalibration, point.SignalStandardUncertainty, unit, "scatter, drift and resolution over the window"),
+            Line("zero", UncertaintySource.Zero, zero.SignalStandardUncertainty, unit, ZeroSource(zero)),
+            Line("temperature coefficient", UncertaintySource.TemperatureCoefficient, coefficient.StandardUncertainty, coefficient.Unit,
+                compensates ? "acts only away from the temperature of the calibration" : coefficient.UncertaintySource ?? coefficient.Source),
+            Line("state of the reference", UncertaintySource.ReferenceState, setup.ReferenceStateRelative * 100, "%", ReferenceStateSource(setup)),
         ];
         if (setup.AirToWaterRatio is RecordedQuantity ratio)
         {
-            lines.Add(Line("air-to-water ratio", ratio.StandardUncertainty, "1", ratio.StandardUncertainty / ratio.Value, ratio.UncertaintySource ?? ratio.Source));
+            lines.Add(Line("air-to-water ratio", UncertaintySource.AirToWaterRatio, ratio.StandardUncertainty, "1", ratio.UncertaintySource ?? ratio.Source));
         }
 
         return [.. lines];
-    }
 
-    internal static double Combined(IEnumerable<RecordedContribution> budget)
-    {
-        return Math.Sqrt(budget.Sum(static line => line.SlopePercent * line.SlopePercent)) / 100;
+        RecordedContribution Line(string input, UncertaintySource what, double uncertainty, string itsUnit, string source)
+        {
+            return new RecordedContribution
+            {
+                Input = input,
+                StandardUncertainty = uncertainty,
+                Unit = itsUnit,
+                SlopePercent = Math.Abs(fit.SlopeContribution(what)) * 100,
+                Source = source,
+            };
+        }
     }
 
     internal static string ReferenceStateSource(CalibrationSetup setup)
@@ -158,34 +166,10 @@ internal static class Judgement
         };
     }
 
-    private static RecordedContribution CoefficientLine(CalibrationSetup setup, RecordedTemperatureCoefficient coefficient, ProbeCalibration fit)
-    {
-        // A meter that compensates by itself is right at the temperature of its calibration, whatever its coefficient.
-        bool compensates = setup.Probe.MeterSettings is { TemperatureCelsius: null };
-        return Line(
-            "temperature coefficient",
-            coefficient.StandardUncertainty,
-            coefficient.Unit,
-            compensates ? 0 : fit.PerCoefficientAtPoint * coefficient.StandardUncertainty,
-            compensates ? "acts only away from the temperature of the calibration" : coefficient.UncertaintySource ?? coefficient.Source);
-    }
-
     private static string ZeroSource(RecordedZero zero)
     {
         return zero.IsMeasured
             ? "scatter over the window, and oxygen left in the zero solution (our choice, no source)"
             : "residual current of up to 1 % of the 100 % signal, rectangular (from memory)";
-    }
-
-    private static RecordedContribution Line(string input, double uncertainty, string unit, double relative, string source)
-    {
-        return new RecordedContribution
-        {
-            Input = input,
-            StandardUncertainty = uncertainty,
-            Unit = unit,
-            SlopePercent = Math.Abs(relative) * 100,
-            Source = source,
-        };
     }
 }

@@ -57,7 +57,7 @@ internal static class RecordBuilder
             Result = new RecordedResult
             {
                 Slope = calibration.Slope,
-                SlopeStandardUncertainty = Math.Abs(calibration.Slope) * Judgement.Combined(budget),
+                SlopeStandardUncertainty = Math.Abs(calibration.Slope) * calibration.SlopeRelativeUncertainty(),
                 Zero = calibration.ZeroResponse,
                 ZeroStandardUncertainty = calibration.ZeroResponseUncertainty,
                 Pass = reasons.Length == 0,

@@ -130,6 +130,26 @@ public class CalibrationFitTests
         Assert.Equal(System.Math.Sqrt(squares), made.SlopeRelativeUncertainty(), 12);
     }
 
+    // The slope of a meter: its coefficient acts only where the temperature is set by hand, by the distance from the water's.
+    [Theory]
+    [InlineData(double.NaN, 0.0)]
+    [InlineData(18.0, 0.0)]
+    [InlineData(12.0, -6.0)]
+    public void SlopeContributionOfACoefficient_IsTheFitsDerivative(double temperatureSet, double perCoefficient)
+    {
+        ProbeCalibration Make(double coefficient)
+        {
+            var meter = new MeterDisplay(
+                MeterScale.MilligramsPerLitre, Equation, 0.0, double.NaN, temperatureSet, TemperatureCoefficientForm.Exponential, coefficient, 25.0, 0.0, 40.0);
+            return Bench.Calibrate(meter, Bench.WaterPoint(9.1, 18.0, 951.2), new ZeroPoint(true, 0.0, 0.0, 18.0, 951.2), 0.1, 0.0003);
+        }
+
+        ProbeCalibration made = Make(0.03);
+        double numeric = (Make(0.03001).Slope - Make(0.02999).Slope) / 0.00002 / made.Slope;
+        Assert.Equal(perCoefficient, numeric, 6);
+        Assert.Equal(perCoefficient * 0.0003, made.SlopeContribution(UncertaintySource.TemperatureCoefficient), 12);
+    }
+
     public static TheoryData<string, Status> BadPoints => new()
     {
         { "signal", Status.SignalNotFinite },
