@@ -83,8 +83,8 @@ public static class CalibrationFit
 
     /// <summary>The error of a probe as found at the 100 % point, with the slope and zero it came with.</summary>
     /// <param name="model">The probe.</param>
-    /// <param name="slope">Slope of the calibration in use; 1 for a meter's display.</param>
-    /// <param name="zeroResponse">Zero of the calibration in use; 0 for a meter's display.</param>
+    /// <param name="slope">Slope of the calibration in use, response per hPa; 1 for a meter's display.</param>
+    /// <param name="zeroResponse">Zero of the calibration in use, as a response; 0 for a meter's display.</param>
     /// <param name="point">The point just read.</param>
     /// <param name="equation">Equation for the error in mg/L.</param>
     /// <param name="salinity">Salinity of the water at the point; 0 in air.</param>
@@ -128,8 +128,8 @@ public static class CalibrationFit
 
     /// <summary>What a zero solution reads as found, which is its error.</summary>
     /// <param name="model">The probe.</param>
-    /// <param name="slope">Slope of the calibration in use; 1 for a meter's display.</param>
-    /// <param name="zeroResponse">Zero of the calibration in use; 0 for a meter's display.</param>
+    /// <param name="slope">Slope of the calibration in use, response per hPa; 1 for a meter's display.</param>
+    /// <param name="zeroResponse">Zero of the calibration in use, as a response; 0 for a meter's display.</param>
     /// <param name="zero">The zero just read.</param>
     /// <param name="equation">Equation for the value in mg/L.</param>
     /// <param name="milligramsPerLitre">Reading in fresh water, mg/L; NaN unless Ok.</param>

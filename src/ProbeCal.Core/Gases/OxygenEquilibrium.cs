@@ -4,6 +4,9 @@ namespace ProbeCal;
 /// Oxygen between water and water-saturated air: partial pressure (what a membrane senses) and concentration, in hPa and mg/L.
 /// </summary>
 /// <remarks>
+/// Dry air over its vapour (Dalton) with the fraction, the vapour formula and the pressure terms of Benson, B.B., Krause, D. (1980)
+/// Limnol. Oceanogr. 25(4), 662–671 and (1984) 29(3), 620–632. Accuracy: pO2 as good as P and T, the vapour formula adds less than
+/// 0.01 %; concentration as the equation chosen. Ranges stand with each function.
 /// pO2 at equilibrium = 0.20946·(P − u) with the vapour pressure u of fresh water; salinity never enters it. Sea water of S 35
 /// lowers u by 1.9 %, which would raise pO2 by 0.01 % at 0 °C, 0.06 % at 25 °C and 0.15 % at 40 °C; the equations are tied to
 /// the fresh-water form, so that it cancels between calibration and reading. Concentration and partial pressure belong together through

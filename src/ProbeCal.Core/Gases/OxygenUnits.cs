@@ -2,7 +2,8 @@ namespace ProbeCal;
 
 /// <summary>
 /// Units of oxygen concentration. Core carries mg/L; per litre means at the temperature of the water. The proportionalities
-/// refuse nothing (NaN gives NaN); those by mass take the density of the water and judge it.
+/// refuse nothing (NaN gives NaN); those by mass take the density of the water and judge it. Accuracy: rounding, and for mL/L
+/// the 0.001 % to which the volume is printed.
 /// </summary>
 public static class OxygenUnits
 {

@@ -111,7 +111,7 @@ public static class TemperatureCoefficient
     /// <param name="coefficient">1/K, or J/mol for <see cref="TemperatureCoefficientForm.Arrhenius"/>.</param>
     /// <param name="referenceCelsius">Temperature at which f is 1, °C.</param>
     /// <param name="temperatureCelsius">Temperature of the membrane, °C.</param>
-    /// <param name="perCoefficient">d ln f/d coefficient; NaN unless Ok.</param>
+    /// <param name="perCoefficient">d ln f/d coefficient, K or mol/J; NaN unless Ok.</param>
     /// <returns>As <see cref="Factor"/>, without the range.</returns>
     public static Status CoefficientDerivative(
         TemperatureCoefficientForm form,
