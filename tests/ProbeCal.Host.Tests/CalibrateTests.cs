@@ -82,6 +82,31 @@ public sealed class CalibrateTests : IDisposable
     }
 
     [Fact]
+    public async Task StabilityLimit_IsAQuarterOfTheEnteredLimit()
+    {
+        Ran ran = await RunAsync([.. Unattended(), "--limit", "0.004mg/L", "--give-up-after", "5min"]);
+        Assert.Equal(1, ran.Code);
+        Assert.Contains("(limit 0.001 mg/L)", ran.Error, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public async Task TypedTemperatureBesideALine_IsNotTheProbesThermometer()
+    {
+        CalibrationRecord byLine = await RecordAsync();
+        CalibrationRecord typed = await RecordAsync("--temperature", "20.0C");
+        CalibrationRecord named = await RecordAsync("--temperature", "20.0C", "--thermometer", "T-7");
+        Assert.Equal(["P-1", "not named", "T-7"], new[] { byLine, typed, named }.Select(record => record.Probe.Thermometer.Id));
+        Assert.Equal(["line", "typed", "typed"], new[] { byLine, typed, named }.Select(record => record.Points[0].Temperature.Source));
+
+        async Task<CalibrationRecord> RecordAsync(params string[] more)
+        {
+            Ran ran = await RunAsync([.. Unattended(), .. more, "--format", "json"]);
+            Assert.True(ran.Code == 0, ran.Error);
+            return RecordJson.Read(System.Text.Encoding.UTF8.GetBytes(ran.Output), "output");
+        }
+    }
+
+    [Fact]
     public async Task ZeroAndAirFromOneSimulatedLine()
     {
         string script = "simulated?seed=3&faster=0&temperature=20C&pressure=940hPa&phase=air:5min,zero:20min,air";

@@ -26,7 +26,7 @@ internal sealed class CalibrateOptions
         SignalResolution = Text("--signal-resolution", "X", "Smallest step of the signal, in its unit.");
         SignalRange = Text("--signal-range", "LOW..HIGH", "Ends of the input's range, in the signal's unit.");
         SignalUnit = Text("--signal-unit", "UNIT", "Unit of the signal, a label, where --line names none.");
-        Thermometer = Text("--thermometer", "ID", "Thermometer that gives the temperature (default: the probe's own).");
+        Thermometer = Text("--thermometer", "ID", "Thermometer that gives the temperature (default: the probe's own; for a --temperature typed beside live signals, one without a name).");
         ThermometerUncertainty = Text("--thermometer-uncertainty", "u", "Standard uncertainty of its offset, common to calibration and readings: 0.05K.");
 
         Method = Text("--method", "NAME", "air-saturated-water or water-saturated-air.");
@@ -51,7 +51,7 @@ internal sealed class CalibrateOptions
         SlopeWindow = Text("--slope-window", "LOW..HIGH", "Slope that the probe's maker allows, per hPa; none unless entered.");
         Window = Text("--window", "TIME", "Length of a steady window: 3min (default).");
         Samples = Text("--samples", "N", "Least number of samples in it: 30 (default).");
-        StableWithin = Text("--stable-within", "X", "What may still move over a window: 0.05mg/L (default).");
+        StableWithin = Text("--stable-within", "X", "What may still move over a window: by default a quarter of --limit, 0.05mg/L.");
         StableTemperature = Text("--stable-temperature", "X", "The same for temperature: 0.05K (default).");
         GiveUpAfter = Text("--give-up-after", "TIME", "Longest wait for one point: 30min (default).");
 

@@ -18,6 +18,8 @@ internal sealed class CalibrateSetup
 {
     private const double LongestWaitSeconds = 7 * 86_400;
 
+    private const string UnnamedThermometer = "not named";
+
     private static readonly string[] Methods = [CalibrationIds.AirSaturatedWater, CalibrationIds.WaterSaturatedAir];
     private static readonly string[] ZeroPlans = [CalibrationIds.ZeroKeep, CalibrationIds.ZeroAssume, CalibrationIds.ZeroCheck, CalibrationIds.ZeroAdjust];
     private static readonly string[] Stirrings = ["stirred", "still", "flow-insensitive"];
@@ -69,9 +71,10 @@ internal sealed class CalibrateSetup
         Stirring stirring = _reader.Given(_options.StirringOption) == null && air
             ? Stirring.Stirred
             : StirringOf(await _reader.NeedChoiceAsync(_options.StirringOption, "The water at the probe:", Stirrings, cancellationToken).ConfigureAwait(false));
+        CalibrationLimits limits = Limits();
         return new CalibrationSetup
         {
-            Probe = await ProbeAsync(probe, line, manual, cancellationToken).ConfigureAwait(false),
+            Probe = await ProbeAsync(probe, line, manual, temperature != null, cancellationToken).ConfigureAwait(false),
             Method = method,
             Readings = manual ? CalibrationIds.Typed : CalibrationIds.Live,
             Source = address?.ToString() ?? "the display of the meter",
@@ -87,8 +90,8 @@ internal sealed class CalibrateSetup
             ReferenceStateRelative = (_reader.NotNegative(_options.ReferenceUncertainty, QuantityKind.Percent) / 100)
                 ?? UncertaintyDefaults.ReferenceStateRelative(RecordNames.Method(method)),
             ZeroPlan = ZeroPlan(manual),
-            Limits = Limits(),
-            Waiting = Waiting(),
+            Limits = limits,
+            Waiting = Waiting(limits),
             Reasons = Reasons(),
             By = _reader.Given(_options.By),
             Site = _reader.Given(_options.Site),
@@ -183,7 +186,7 @@ internal sealed class CalibrateSetup
             : throw new InputException($"--altitude {Number.Print(altitude.Value)} m is outside the standard atmosphere ({Number.Print(StandardAtmosphere.LowestAltitudeMetres)} to {Number.Print(StandardAtmosphere.HighestAltitudeMetres)} m)");
     }
 
-    private async Task<RecordedProbe> ProbeAsync(string id, LineTemplate? line, bool manual, CancellationToken cancellationToken)
+    private async Task<RecordedProbe> ProbeAsync(string id, LineTemplate? line, bool manual, bool temperatureTyped, CancellationToken cancellationToken)
     {
         RecordedMeterSettings? meter = manual ? Meter(await _reader.NeedChoiceAsync(_options.MeterShows, "The meter shows (%local: 100 % at the pressure here, %1atm: 100 % at 1 atm):", Scales, cancellationToken).ConfigureAwait(false)) : null;
         RecordedTemperatureCoefficient coefficient = meter is { TemperatureCelsius: null } && _reader.Given(_options.Coefficient) == null
@@ -205,7 +208,8 @@ internal sealed class CalibrateSetup
             Membrane = _reader.Given(_options.Membrane) is string membrane ? new RecordedMembrane { Id = membrane, InstalledOn = _reader.Day(_options.MembraneInstalled) } : null,
             Thermometer = new RecordedThermometer
             {
-                Id = _reader.Given(_options.Thermometer) ?? id,
+                // A temperature typed beside live signals was read elsewhere; its offset is not that of the readings to come.
+                Id = _reader.Given(_options.Thermometer) ?? (temperatureTyped && !manual ? UnnamedThermometer : id),
                 CommonStandardUncertaintyCelsius = common ?? UncertaintyDefaults.ThermometerOffsetKelvin,
                 Source = common == null ? "passed a check of 0.2 C, rectangular (TM 9-A6.8)" : "entered",
             },
@@ -259,14 +263,14 @@ internal sealed class CalibrateSetup
         };
     }
 
-    private WaitingRules Waiting()
+    private WaitingRules Waiting(CalibrationLimits limits)
     {
         WaitingRules usual = new();
         WaitingRules waiting = new()
         {
             WindowSeconds = _reader.Given(_options.Window) is string window ? Quantity.Duration("--window", window).TotalSeconds : usual.WindowSeconds,
             LeastCount = _reader.Given(_options.Samples) is string samples ? (int)Number.ParseWhole("--samples", samples, 3, 1_000_000) : usual.LeastCount,
-            MilligramsPerLitre = _reader.AboveZero(_options.StableWithin, QuantityKind.MassConcentration) ?? usual.MilligramsPerLitre,
+            MilligramsPerLitre = _reader.AboveZero(_options.StableWithin, QuantityKind.MassConcentration) ?? QuarterOf(limits) ?? usual.MilligramsPerLitre,
             Kelvin = _reader.AboveZero(_options.StableTemperature, QuantityKind.TemperatureDifference) ?? usual.Kelvin,
             GiveUpAfterSeconds = _reader.Given(_options.GiveUpAfter) is string longest ? Quantity.Duration("--give-up-after", longest).TotalSeconds : usual.GiveUpAfterSeconds,
         };
@@ -278,6 +282,12 @@ internal sealed class CalibrateSetup
         return waiting.WindowSeconds < waiting.GiveUpAfterSeconds
             ? waiting
             : throw new InputException($"--window {Number.Print(waiting.WindowSeconds)} s does not fit into --give-up-after {Number.Print(waiting.GiveUpAfterSeconds)} s; make the wait longer than the window");
+    }
+
+    /// <summary>What may move follows the limit that the point is judged by; null where none in mg/L decides.</summary>
+    private static double? QuarterOf(CalibrationLimits limits)
+    {
+        return 0 < limits.SaturationMilligramsPerLitre ? limits.SaturationMilligramsPerLitre / 4 : null;
     }
 
     private Dictionary<string, string> Reasons()

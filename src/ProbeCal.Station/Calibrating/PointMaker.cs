@@ -26,7 +26,7 @@ internal static class PointMaker
         bool typed = setup.TypedTemperatureCelsius != null;
         Conditions conditions = new(
             setup.TypedTemperatureCelsius ?? watch.Temperature.Mean,
-            typed ? "typed" : "line",
+            typed ? "typed" : RecordNames.FromLine,
             setup.Pressure.Hectopascal ?? watch.MeanPressure);
         double step = (setup.Probe.SignalResolution ?? 0) * RectangularPerStep;
         double uncertainty = Combine(watch.Signal.MeanUncertainty, step);

@@ -5,6 +5,9 @@ namespace ProbeCal.Station.CalibrationLog;
 /// <summary>The names by which records call what Core calls by an enum, both ways. They never change.</summary>
 public static class RecordNames
 {
+    /// <summary>Source of a temperature that came with the signal.</summary>
+    internal const string FromLine = "line";
+
     /// <summary>The stirring's name.</summary>
     public static string Of(Stirring stirring)
     {

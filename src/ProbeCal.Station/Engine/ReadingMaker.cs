@@ -1,5 +1,6 @@
 using System;
 using System.Text;
+using ProbeCal.Station.CalibrationLog;
 using ProbeCal.Station.Configuration;
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Journal;
@@ -103,7 +104,7 @@ internal sealed class ReadingMaker
         ReadingConditions conditions = new(
             configuration.Equation,
             configuration.SignalUncertainty ?? calibration.SignalUncertainty,
-            thermometer.Id == null || thermometer.Id == calibration.Record.Probe.Thermometer.Id,
+            IsSameThermometer(thermometer, calibration.Record),
             thermometer.OffsetStandardUncertaintyKelvin,
             thermometer.StandardUncertaintyKelvin,
             configuration.Pressure.StandardUncertainty,
@@ -113,6 +114,21 @@ internal sealed class ReadingMaker
             UncertaintyDefaults.StirringRelative(configuration.Stirring));
         Status status = conditions.Check();
         return status == Status.Ok ? conditions : throw new InputException("the station's uncertainties make no conditions for a reading: " + status);
+    }
+
+    /// <summary>
+    /// Whether the thermometer of the calibration reads the water, so that its offset largely cancels. Where the configuration
+    /// names none, the line does: it is the same when the calibration went by the line too, or by the probe's own display.
+    /// </summary>
+    private static bool IsSameThermometer(ThermometerConfiguration thermometer, CalibrationRecord record)
+    {
+        if (thermometer.Id != null)
+        {
+            return thermometer.Id == record.Probe.Thermometer.Id;
+        }
+
+        bool fromLine = Array.Exists(record.Points, point => point.Role == record.SlopeFrom && point.Temperature.Source == RecordNames.FromLine);
+        return fromLine || record.Probe.Thermometer.Id == record.Probe.Id;
     }
 
     internal static string Words(Stirring stirring)

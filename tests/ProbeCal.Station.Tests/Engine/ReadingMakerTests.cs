@@ -5,6 +5,7 @@ using System.Text;
 using System.Text.Json;
 using System.Text.Json.Nodes;
 using Json.Schema;
+using ProbeCal.Station.CalibrationLog;
 using ProbeCal.Station.Configuration;
 using ProbeCal.Station.Engine;
 using ProbeCal.Station.Journal;
@@ -198,6 +199,26 @@ public class ReadingMakerTests
         double other = Uncertainty(StationParts.Configuration(("thermometer", "{ \"id\": \"T-9\", \"standardUncertainty\": \"0.03 K\", \"offsetStandardUncertainty\": \"0.5 K\" }")));
         Assert.Equal(same, named);
         Assert.True(same < other);
+    }
+
+    [Fact]
+    public void TemperatureTypedFromAnotherThermometer_DoesNotCancel()
+    {
+        CalibrationRecord Typed(CalibrationRecord record, string thermometer) => record with
+        {
+            Points = [.. record.Points.Select(point => point with { Temperature = point.Temperature with { Source = "typed" } })],
+            Probe = record.Probe with { Thermometer = record.Probe.Thermometer with { Id = thermometer } },
+        };
+        double Of(string thermometer, params (string, string)[] changes) => (double)Make(
+            StationParts.Sample, StationParts.Configuration(changes), StationParts.Calibration(record => Typed(record, thermometer)))["mgPerL"]!["standardUncertainty"]!;
+        double same = Uncertainty(StationParts.Configuration());
+        double other = Uncertainty(StationParts.Configuration(("thermometer", "{ \"id\": \"T-9\", \"standardUncertainty\": \"0.03 K\" }")));
+
+        // Typed from the display of the probe itself: the line says the same later.
+        Assert.Equal(same, Of("do-1"));
+        // Typed from a thermometer that does not read the line: nothing is common, unless the configuration says so.
+        Assert.Equal(other, Of("T-1"));
+        Assert.Equal(same, Of("T-1", ("thermometer", "{ \"id\": \"T-1\", \"standardUncertainty\": \"0.03 K\" }")));
     }
 
     [Fact]
