@@ -87,6 +87,8 @@ public class JudgementTests
     [InlineData(1013.25, 1000.0, false)]
     [InlineData(900.0, 1000.0, false)]
     [InlineData(700.0, 50.0, false)]
+    // Below sea level (about 1,062 hPa at -400 m) a usual pressure is higher than sea level ever sees.
+    [InlineData(1060.0, -400.0, false)]
     public void Pressure_ThatMayBeASeaLevelValue_IsSaidToBe(double pressure, double altitude, bool expected)
     {
         Assert.Equal(expected, PressurePlausibility.MayBeSeaLevelValue(pressure, altitude));
