@@ -9,13 +9,13 @@ namespace ProbeCal.Station.Calibrating;
 public sealed record CalibrationLimits
 {
     /// <summary>Source of the published limits.</summary>
-    public const string FieldManual = "USGS 2020, National Field Manual A6.2 (TM 9-A6.2), read";
+    public const string FieldManual = "USGS 2020, National Field Manual A6.2 (TM 9-A6.2)";
 
     /// <summary>Source of a limit that the person entered.</summary>
     public const string Entered = "entered for this calibration";
 
     /// <summary>Source of the band before adjustment.</summary>
-    public const string OceanPractice = "OceanGliders oxygen practice, read";
+    public const string OceanPractice = "OceanGliders oxygen SOP";
 
     /// <summary>Limit of the as-left and as-found error in mg/L.</summary>
     public double SaturationMilligramsPerLitre { get; init; } = AcceptanceLimit.SaturationMilligramsPerLitre;

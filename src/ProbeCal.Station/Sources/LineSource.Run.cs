@@ -190,7 +190,7 @@ internal sealed partial class LineSource
                     happened = sample with { ReceivedUtc = source._time.GetUtcNow() };
                 }
 
-                await events.WriteAsync(happened, stop).ConfigureAwait(false);
+                await DeliverAsync(happened).ConfigureAwait(false);
             }
         }
 
@@ -198,8 +198,15 @@ internal sealed partial class LineSource
         {
             _lastReason = reason;
             LogLevel level = state is SourceState.Lost or SourceState.Suspect ? LogLevel.Warning : LogLevel.Information;
+            // Delivered first: whoever reads of it in the log and stops the stream finds it in the journal.
+            await DeliverAsync(new SourceStateChanged(source._time.GetUtcNow(), state, reason)).ConfigureAwait(false);
             source._logger.Log(level, SourceEventIds.State, "{Source}: {State}: {Reason}", source.Description, state, reason);
-            await events.WriteAsync(new SourceStateChanged(source._time.GetUtcNow(), state, reason), stop).ConfigureAwait(false);
+        }
+
+        /// <summary>What has happened is handed on even when the stop has come, as long as there is room; only waiting for room ends with it.</summary>
+        private ValueTask DeliverAsync(SourceEvent happened)
+        {
+            return events.TryWrite(happened) ? ValueTask.CompletedTask : events.WriteAsync(happened, stop);
         }
 
         private async Task CloseAsync(IByteChannel channel)
