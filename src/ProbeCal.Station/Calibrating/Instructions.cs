@@ -62,7 +62,16 @@ internal static class Instructions
     internal static string SetMeter(CalibrationSetup setup, RecordedPoint span)
     {
         (double value, double uncertainty) = Fitting.ValueToSet(setup, span);
-        string unit = setup.Probe.MeterSettings?.Shows ?? "";
-        return $"Set the meter to {Number.Fixed(value, 2)} {unit} (standard uncertainty {Number.Fixed(uncertainty, 2)} {unit}), wait until it is steady, and read it again.";
+        RecordedMeterSettings? meter = setup.Probe.MeterSettings;
+        string unit = meter?.Shows switch
+        {
+            "%local" => "% of local saturation",
+            "%1atm" => "% of saturation at 1 atm",
+            string other => other,
+            null => "",
+        };
+        // No digit that the display does not have.
+        int decimals = meter is { Resolution: >= 0.1 } ? 1 : 2;
+        return $"Set the meter to {Number.Fixed(value, decimals)} {unit} (standard uncertainty {Number.Fixed(uncertainty, 2)}), wait until it is steady, and read it again.";
     }
 }

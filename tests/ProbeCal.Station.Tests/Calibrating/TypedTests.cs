@@ -39,15 +39,15 @@ public class TypedTests
     }
 
     [Theory]
-    [InlineData("%local", 100.0)]
+    [InlineData("%local", 100.0, "% of local saturation")]
     // 750 mmHg is 98.68 % of 1 atm; without the water vapour at 20 °C, 98.65 %.
-    [InlineData("%1atm", 98.65)]
-    public async Task PercentMeters_AreSetToTheirOwnHundred(string shows, double set)
+    [InlineData("%1atm", 98.65, "% of saturation at 1 atm")]
+    public async Task PercentMeters_AreSetToTheirOwnHundred(string shows, double set, string words)
     {
         using Bench bench = new();
         ScriptedDialogue answers = Reads(96, set);
         CalibrationRecord record = await bench.TypedAsync(Meter(shows), answers);
-        Assert.Contains(answers.Shown, line => line.StartsWith($"Set the meter to {Number.Fixed(set, 2)} {shows}", StringComparison.Ordinal));
+        Assert.Contains(answers.Shown, line => line.StartsWith($"Set the meter to {Number.Fixed(set, 2)} {words}", StringComparison.Ordinal));
         Assert.Equal(1, record.Result.Slope, 0.001);
     }
 
