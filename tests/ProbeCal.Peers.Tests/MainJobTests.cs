@@ -190,7 +190,8 @@ public class MainJobTests(ITestOutputHelper output)
         using StreamReader reader = new(stream);
         List<(DateTimeOffset, string, double, double, double)> rows = [];
         string[]? header = null;
-        while (reader.ReadLine() is string text)
+        // What stands behind the last line end may be half a row: the simulation goes on writing.
+        foreach (string text in reader.ReadToEnd().Split('\n')[..^1])
         {
             string[] cells = text.Split(',');
             if (text.StartsWith('#'))

@@ -17,11 +17,15 @@ internal sealed class DemoTruth(string file) : IDisposable
     private readonly Dictionary<DateTimeOffset, double> _known = [];
     private bool _formatSeen;
     private string[]? _header;
+    private string _unfinished = "";
 
     /// <summary>True concentration at a time, mg/L; null when the simulation has no line of that time.</summary>
     internal double? At(DateTimeOffset time)
     {
-        while (_reader.ReadLine() is string row)
+        // The last row may still be half written: it waits for its line end.
+        string[] rows = (_unfinished + _reader.ReadToEnd()).Split('\n');
+        _unfinished = rows[^1];
+        foreach (string row in rows.AsSpan(0, rows.Length - 1))
         {
             if (!_formatSeen)
             {
