@@ -49,7 +49,7 @@ internal sealed class CalibrateSetup
         bool manual = address == null;
         string method = await _reader.NeedChoiceAsync(_options.Method, "Method:", Methods, cancellationToken).ConfigureAwait(false);
         bool air = method == CalibrationIds.WaterSaturatedAir;
-        string probe = await _reader.NeedAsync(_options.Probe, "Probe id?", OptionReader.NotEmpty(_options.Probe), cancellationToken).ConfigureAwait(false);
+        string probe = await _reader.NeedAsync(_options.Probe, "Probe id?", OptionReader.Id(_options.Probe), cancellationToken).ConfigureAwait(false);
         double? temperature = Temperature(line, manual);
         if (temperature == null && line is not { HasTemperature: true })
         {
@@ -205,7 +205,7 @@ internal sealed class CalibrateSetup
             SignalResolution = _reader.Positive(_options.SignalResolution),
             SignalLow = range?.Low,
             SignalHigh = range?.High,
-            Membrane = _reader.Given(_options.Membrane) is string membrane ? new RecordedMembrane { Id = membrane, InstalledOn = _reader.Day(_options.MembraneInstalled) } : null,
+            Membrane = Membrane(),
             Thermometer = new RecordedThermometer
             {
                 // A temperature typed beside live signals was read elsewhere; its offset is not that of the readings to come.
@@ -214,6 +214,17 @@ internal sealed class CalibrateSetup
                 Source = common == null ? "passed a check of 0.2 C, rectangular (TM 9-A6.8)" : "entered",
             },
         };
+    }
+
+    private RecordedMembrane? Membrane()
+    {
+        DateOnly? installed = _reader.Day(_options.MembraneInstalled);
+        if (_reader.Given(_options.Membrane) is string id)
+        {
+            return new RecordedMembrane { Id = id, InstalledOn = installed };
+        }
+
+        return installed == null ? null : throw new InputException("--membrane-installed: say which one it is as well, for example --membrane M-4");
     }
 
     private RecordedMeterSettings Meter(string shows)

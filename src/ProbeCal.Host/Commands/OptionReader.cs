@@ -38,10 +38,10 @@ internal sealed class OptionReader
         return _parsed.GetValue(option) ?? [];
     }
 
-    /// <summary>What was given, or null.</summary>
+    /// <summary>What was given, one line of it, or null.</summary>
     internal string? Given(Option<string> option)
     {
-        return _parsed.GetValue(option);
+        return _parsed.GetValue(option) is string given ? PlainText.OneLine(option.Name, given) : null;
     }
 
     /// <summary>What was given, or the answer to the question; refused when nobody can answer.</summary>
@@ -204,6 +204,12 @@ internal sealed class OptionReader
     /// <summary>Reads any text but an empty one.</summary>
     internal static Func<string, string> NotEmpty(Option<string> option)
     {
-        return text => text.Trim().Length == 0 ? throw Wrong.Input(option.Name, text, "write something") : text.Trim();
+        return text => text.Trim().Length == 0 ? throw Wrong.Input(option.Name, text, "write something") : PlainText.OneLine(option.Name, text.Trim());
+    }
+
+    /// <summary>Reads the id of a probe.</summary>
+    internal static Func<string, string> Id(Option<string> option)
+    {
+        return text => PlainText.Id(option.Name, text.Trim());
     }
 }

@@ -1,5 +1,4 @@
 using System;
-using System.Buffers;
 using System.Globalization;
 using System.IO;
 using ProbeCal.Station.Entry;
@@ -16,9 +15,6 @@ public static class ConfigurationFile
     private const int UsualKeepDays = 400;
     private const int UsualRejectedLines = 10_000;
     private const int UsualBrokerPort = 1883;
-
-    private static readonly SearchValues<char> _idCharacters =
-        SearchValues.Create("ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz0123456789-_.");
 
     /// <summary>Reads a file.</summary>
     /// <param name="path">The file. Paths in it are relative to its folder.</param>
@@ -37,7 +33,7 @@ public static class ConfigurationFile
         }
         catch (Exception fault) when (fault is IOException or UnauthorizedAccessException or ArgumentException)
         {
-            throw new InputException($"--config {path}: {fault.Message}", fault);
+            throw new InputException($"--config {Wrong.Shown(path)}: {Wrong.OneLine(fault.Message)}", fault);
         }
     }
 
@@ -53,7 +49,7 @@ public static class ConfigurationFile
         root.AllowKeys(ConfigurationKeys.Root);
         ConfigurationNode? site = Section(root, "site");
         LineTemplate line = Line(root);
-        double? altitude = Find(site, "altitude", QuantityKind.Altitude);
+        double? altitude = Altitude(site);
         StationConfiguration configuration = new()
         {
             Station = Id(root, "station", "\"north-pier\""),
@@ -126,15 +122,22 @@ public static class ConfigurationFile
     private static string Id(ConfigurationNode root, string key, string example)
     {
         ConfigurationNode node = root.Require(key, example);
-        string id = node.AsText();
-        bool fits = id.Length <= 64 && id.AsSpan().IndexOfAnyExcept(_idCharacters) < 0;
-        return fits ? id : throw Wrong.Input(node.What, id, "an id has letters a to z, digits, - _ and . only, at most 64 of them: it becomes part of a topic");
+        return PlainText.Id(node.What, node.AsText());
     }
 
     private static SourceAddress Source(ConfigurationNode root)
     {
         ConfigurationNode node = root.Require("source", "\"serial:/dev/ttyUSB0?baud=9600\"");
         return SourceAddress.Parse(node.What, node.AsText());
+    }
+
+    private static double? Altitude(ConfigurationNode? site)
+    {
+        double? metres = Find(site, "altitude", QuantityKind.Altitude);
+        return metres is null or (>= StandardAtmosphere.LowestAltitudeMetres and <= StandardAtmosphere.HighestAltitudeMetres)
+            ? metres
+            : throw Wrong.Input(site!.Find("altitude")!.What, site.Find("altitude")!.Text, "pressures are judged by the standard atmosphere, which is used from "
+                + Number.Print(StandardAtmosphere.LowestAltitudeMetres) + " to " + Number.Print(StandardAtmosphere.HighestAltitudeMetres) + " m");
     }
 
     private static LineTemplate Line(ConfigurationNode root)

@@ -120,7 +120,7 @@ internal sealed class ConfigurationNode
             throw new InputException(What + (_members == null ? " " + Text : "") + ": a text in double quotes belongs here");
         }
 
-        return Text.AsSpan().Trim().IsEmpty ? throw new InputException(What + ": the text is empty") : Text;
+        return Text.AsSpan().Trim().IsEmpty ? throw new InputException(What + ": the text is empty") : PlainText.OneLine(What, Text);
     }
 
     /// <summary>A quantity as it stands: a text, or a bare number, whose unit the reader of quantities will ask for.</summary>

@@ -26,15 +26,26 @@ public static class Wrong
             return "''";
         }
 
+        bool isLong = LongestShown < text.Length;
+        string shown = OneLine(isLong ? text[..LongestShown] : text);
+        return isLong ? shown + "..." : shown;
+    }
+
+    /// <summary>
+    /// A whole text as one line that a terminal shows and does not obey: control characters, line ends and the marks that
+    /// turn the direction of writing are written as <c>\x1B</c>.
+    /// </summary>
+    public static string OneLine(string text)
+    {
+        if (!Array.Exists(text.ToCharArray(), MovesTheScreen))
+        {
+            return text;
+        }
+
         StringBuilder shown = new();
         foreach (char c in text)
         {
-            if (LongestShown <= shown.Length)
-            {
-                return shown.Append("...").ToString();
-            }
-
-            if (char.IsControl(c) || c is '\u2028' or '\u2029')
+            if (MovesTheScreen(c))
             {
                 shown.Append(CultureInfo.InvariantCulture, $"\\x{(int)c:X2}");
             }
@@ -45,5 +56,10 @@ public static class Wrong
         }
 
         return shown.ToString();
+    }
+
+    private static bool MovesTheScreen(char c)
+    {
+        return char.IsControl(c) || c is '\u2028' or '\u2029' or (>= '\u202A' and <= '\u202E') or (>= '\u2066' and <= '\u2069');
     }
 }

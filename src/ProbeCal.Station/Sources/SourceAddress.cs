@@ -22,6 +22,7 @@ public abstract record SourceAddress
     /// <exception cref="InputException">It is none; the message says what is wrong.</exception>
     public static SourceAddress Parse(string what, string text)
     {
+        PlainText.OneLine(what, text);
         int question = text.IndexOf('?', StringComparison.Ordinal);
         string body = (question < 0 ? text : text[..question]).Trim();
         int colon = body.IndexOf(':', StringComparison.Ordinal);
