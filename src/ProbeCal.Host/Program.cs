@@ -1,5 +1,6 @@
 using System;
 using System.CommandLine;
+using System.IO;
 using System.Runtime.InteropServices;
 using System.Threading;
 using System.Threading.Tasks;
@@ -54,8 +55,7 @@ internal static class Program
         ParseResult parsed = root.Parse(args);
         if (parsed.Errors.Count != 0)
         {
-            terminal.Error.WriteLine("probecal: " + UsageErrors.Line(parsed));
-            return ExitCode.InputWrong;
+            return Say(terminal, ExitCode.InputWrong, UsageErrors.Line(parsed));
         }
 
         InvocationConfiguration configuration = new()
@@ -72,19 +72,37 @@ internal static class Program
         }
         catch (InputException wrong)
         {
-            terminal.Error.WriteLine("probecal: " + wrong.Message);
-            return ExitCode.InputWrong;
+            return Say(terminal, ExitCode.InputWrong, wrong.Message);
         }
         catch (WorkFailedException failed)
         {
-            terminal.Error.WriteLine("probecal: " + failed.Message);
-            return ExitCode.WorkFailed;
+            return Say(terminal, ExitCode.WorkFailed, failed.Message);
         }
         catch (OperationCanceledException)
         {
-            terminal.Error.WriteLine("probecal: stopped before the work was finished");
-            return ExitCode.WorkFailed;
+            return Say(terminal, ExitCode.WorkFailed, "stopped before the work was finished");
         }
+        catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
+        {
+            // Standard output on a full disk, a file beside the work that could not be written.
+            return Say(terminal, ExitCode.WorkFailed, "the system refused to read or write: " + fault.Message);
+        }
+    }
+
+    /// <summary>Says why it ended, in one line that shows what was given and does not obey it.</summary>
+    private static int Say(Terminal terminal, int code, string message)
+    {
+        try
+        {
+            terminal.Error.WriteLine("probecal: " + Wrong.OneLine(message));
+        }
+        catch (IOException)
+        {
+            // Nothing is left to say it on; the exit code still does.
+            return code;
+        }
+
+        return code;
     }
 }
 

@@ -3,6 +3,7 @@ using System.Globalization;
 using System.IO;
 using System.Threading;
 using Microsoft.Extensions.Logging;
+using ProbeCal.Station.Entry;
 
 namespace ProbeCal.Host;
 
@@ -15,6 +16,7 @@ internal sealed class TerminalLog : ILoggerProvider
     private readonly TextWriter _error;
     private readonly TimeProvider _time;
     private readonly Lock _line = new();
+    private long _dropped;
 
     internal TerminalLog(Terminal terminal)
     {
@@ -35,6 +37,28 @@ internal sealed class TerminalLog : ILoggerProvider
 
     public void Dispose()
     {
+    }
+
+    private void Write(string line)
+    {
+        lock (_line)
+        {
+            try
+            {
+                if (_dropped != 0)
+                {
+                    _error.WriteLine(string.Create(CultureInfo.InvariantCulture, $"({_dropped} lines of this log could not be written)"));
+                    _dropped = 0;
+                }
+
+                _error.WriteLine(line);
+            }
+            catch (IOException)
+            {
+                // A log on a full disk must not end the stream whose state it tells; how much is missing is told when there is room.
+                _dropped++;
+            }
+        }
     }
 
     private static string Word(LogLevel level)
@@ -66,10 +90,9 @@ internal sealed class TerminalLog : ILoggerProvider
             string time = log._time.GetUtcNow().UtcDateTime.ToString("yyyy-MM-dd'T'HH:mm:ss.fff'Z'", CultureInfo.InvariantCulture);
             string text = formatter(state, exception).ReplaceLineEndings(" ");
             string cause = exception == null ? "" : " (" + exception.GetType().Name + ": " + exception.Message.ReplaceLineEndings(" ") + ")";
-            lock (log._line)
-            {
-                log._error.WriteLine(string.Create(CultureInfo.InvariantCulture, $"{time} {Word(logLevel)} {eventId.Id} {name}: {text}{cause}"));
-            }
+
+            // A line of a device or a broker may be quoted in it: the terminal shows that and does not obey it.
+            log.Write(Wrong.OneLine(string.Create(CultureInfo.InvariantCulture, $"{time} {Word(logLevel)} {eventId.Id} {name}: {text}{cause}")));
         }
     }
 }

@@ -1,7 +1,5 @@
 using System;
 using System.CommandLine;
-using System.IO;
-using System.Text;
 using System.Threading;
 using System.Threading.Tasks;
 using Microsoft.Extensions.Logging;
@@ -60,16 +58,10 @@ internal static class StationCommand
             Software = Software(),
             Environment = Environment.GetEnvironmentVariable,
             StandardInput = terminal.Input,
-            Reading = print ? payload => Print(terminal.Output, payload) : static _ => { },
+            Reading = print ? new ReadingPrinter(terminal.Output, logs.CreateLogger("print")).Print : static _ => { },
         };
         await StationRun.RunAsync(configuration, folder, around, length, stop).ConfigureAwait(false);
         return ExitCode.Done;
-    }
-
-    private static void Print(TextWriter output, ReadOnlyMemory<byte> payload)
-    {
-        output.WriteLine(Encoding.UTF8.GetString(payload.Span));
-        output.Flush();
     }
 
     private static string Software()
