@@ -34,7 +34,7 @@ public sealed class DataDirectory : IDisposable
     /// <exception cref="WorkFailedException">Another program writes there, or the folder cannot be made.</exception>
     public static DataDirectory OpenForWriting(string path)
     {
-        string full = System.IO.Path.GetFullPath(path);
+        string full = Absolute(path);
         try
         {
             Directory.CreateDirectory(full);
@@ -45,13 +45,13 @@ public sealed class DataDirectory : IDisposable
         {
             throw new WorkFailedException($"--data {path}: no permission to write there; choose a folder that you own", fault);
         }
-        catch (IOException fault) when (File.Exists(System.IO.Path.Combine(full, "lock")))
+        catch (IOException fault) when (File.Exists(System.IO.Path.Combine(full, "lock")) && !IsReadOnly(fault))
         {
             throw new WorkFailedException($"--data {path}: another probecal is writing there; stop it first or choose another folder", fault);
         }
         catch (IOException fault)
         {
-            throw new WorkFailedException($"--data {path}: {fault.Message}", fault);
+            throw new WorkFailedException($"--data {path}: {fault.Message}; name a folder that can be written", fault);
         }
     }
 
@@ -59,13 +59,27 @@ public sealed class DataDirectory : IDisposable
     /// <exception cref="InputException">There is no such folder.</exception>
     public static DataDirectory OpenForReading(string path)
     {
-        string full = System.IO.Path.GetFullPath(path);
+        string full = Absolute(path);
         if (!Directory.Exists(full))
         {
             throw new InputException($"--data {path}: there is no such folder; name the one a calibration or a station has written to");
         }
 
         return new DataDirectory(full, null);
+    }
+
+    private static string Absolute(string path)
+    {
+        return path.Length == 0 || path.Contains('\0', StringComparison.Ordinal)
+            ? throw Wrong.Input("--data", path, "name a folder, for example ./north-pier")
+            : System.IO.Path.GetFullPath(path);
+    }
+
+    /// <summary>A disk that is mounted for reading only holds the lock file too, and nobody need be writing there.</summary>
+    private static bool IsReadOnly(IOException fault)
+    {
+        const int ReadOnlyFileSystem = 30; // EROFS, the same number on Linux and macOS; Windows answers with a refused access
+        return fault.HResult == ReadOnlyFileSystem;
     }
 
     /// <inheritdoc/>

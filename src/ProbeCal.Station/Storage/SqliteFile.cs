@@ -81,7 +81,7 @@ internal sealed class SqliteFile : IDisposable
         try
         {
             RefuseForeign(full, format);
-            connection = Connect(full, SqliteOpenMode.ReadOnly);
+            connection = ConnectForReading(full);
             int version = ReadVersion(connection, full, format);
             if (version != format.Version)
             {
@@ -146,7 +146,7 @@ internal sealed class SqliteFile : IDisposable
             }
 
             // A plain read-only connection would leave log files beside a file that is then refused.
-            string source = SqliteHeader.HasLog(full) ? full : new Uri(full).AbsoluteUri + "?immutable=1";
+            string source = SqliteHeader.HasLog(full) ? full : Immutable(full);
             using SqliteConnection connection = Connect(source, SqliteOpenMode.ReadOnly);
             ReadVersion(connection, full, format);
             string verdict = Convert.ToString(Scalar(connection, "PRAGMA quick_check(1);"), CultureInfo.InvariantCulture) ?? "";
@@ -297,6 +297,36 @@ internal sealed class SqliteFile : IDisposable
             connection.Dispose();
             throw;
         }
+    }
+
+    /// <summary>
+    /// Opens for reading, also where nothing may be written: a file with a write-ahead log wants its shared memory beside it,
+    /// which a copy on a disk for reading only, or a folder of somebody else, does not let be made.
+    /// </summary>
+    private static SqliteConnection ConnectForReading(string full)
+    {
+        SqliteConnection connection = Connect(full, SqliteOpenMode.ReadOnly);
+        try
+        {
+            Scalar(connection, "PRAGMA user_version;");
+            return connection;
+        }
+        catch (SqliteException fault) when (SqliteFaults.KindOf(fault) is StorageFault.InputOutput or StorageFault.ReadOnly && !SqliteHeader.HasLog(full))
+        {
+            // Without a log there is no writer, and the file alone is the whole of it.
+            connection.Dispose();
+            return Connect(Immutable(full), SqliteOpenMode.ReadOnly);
+        }
+        catch
+        {
+            connection.Dispose();
+            throw;
+        }
+    }
+
+    private static string Immutable(string full)
+    {
+        return new Uri(full).AbsoluteUri + "?immutable=1";
     }
 
     private static object? Scalar(SqliteConnection connection, string sql)
