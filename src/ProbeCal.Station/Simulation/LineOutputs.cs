@@ -63,6 +63,11 @@ public sealed class PseudoTerminalOutput : ILineOutput
     /// <exception cref="WorkFailedException">The pair or the link cannot be made.</exception>
     public static PseudoTerminalOutput Open(string what, string link)
     {
+        if (link.Length == 0)
+        {
+            throw Wrong.Input(what, link, "the path of the link is missing; write for example ./probe");
+        }
+
         FileInfo there = new(link);
         if (there.LinkTarget is null && (there.Exists || Directory.Exists(link)))
         {

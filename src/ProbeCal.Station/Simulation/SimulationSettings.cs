@@ -75,6 +75,11 @@ public sealed record SimulationSettings
             throw Wrong.Input(what + " pressure", Number.Print(PressureHectopascal) + " hPa", "simulated air has from 550 to 1080 hPa");
         }
 
+        if (Faster != 0 && Faster < 0.001)
+        {
+            throw Wrong.Input(what + " faster", Number.Print(Faster), "slower than a thousandth of real time is not waited for; write 1 for real time, or 0 to wait for nothing");
+        }
+
         if (Faster != 0 && Interval / Faster < TimeSpan.FromMilliseconds(1))
         {
             throw Wrong.Input(what + " faster", Number.Print(Faster), "that would be more than 1000 lines a second; go slower, or write 0 to wait for nothing");
