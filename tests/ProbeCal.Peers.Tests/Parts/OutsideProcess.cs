@@ -65,6 +65,11 @@ internal sealed class OutsideProcess : IDisposable
         return WaitAsync(() => _error.Exists(line => line.Contains(part, StringComparison.Ordinal)), "a line on standard error with '" + part + "'", deadline);
     }
 
+    internal Task WaitForErrorAsync(Func<IReadOnlyList<string>, bool> enough, string what, TimeSpan deadline)
+    {
+        return WaitAsync(() => enough(_error), what, deadline);
+    }
+
     internal Task WaitForOutputAsync(Func<IReadOnlyList<string>, bool> enough, string what, TimeSpan deadline)
     {
         return WaitAsync(() => enough(_output), what, deadline);

@@ -20,10 +20,17 @@ internal static class Programs
     /// <summary>Starts <c>probecal</c> as a person does, from the build the tests were made with.</summary>
     internal static OutsideProcess ProbeCal(IEnumerable<string> arguments, IReadOnlyDictionary<string, string>? environment = null)
     {
+        string[] line = CommandLine(arguments);
+        return OutsideProcess.Start(line[0], line[1..], environment);
+    }
+
+    /// <summary>The words that start <c>probecal</c>, for a test that starts it through a shell.</summary>
+    internal static string[] CommandLine(IEnumerable<string> arguments)
+    {
         string dotnet = Find("dotnet") ?? throw new InvalidOperationException("dotnet is not on PATH");
         string program = Path.Combine(AppContext.BaseDirectory, "probecal.dll");
         Assert.True(File.Exists(program), program + " was not built");
-        return OutsideProcess.Start(dotnet, [program, .. arguments], environment);
+        return [dotnet, program, .. arguments];
     }
 }
 
