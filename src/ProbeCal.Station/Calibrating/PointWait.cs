@@ -62,7 +62,8 @@ internal sealed class PointWait
                     return PointMaker.FromWindow(CalibrationRun.RoleOf(_step), _setup, _watch);
                 }
 
-                if (deadline.IsCompleted)
+                // A stop ends the wait as well, and is told as a stop the next time round.
+                if (deadline.IsCompletedSuccessfully)
                 {
                     throw GaveUp();
                 }
