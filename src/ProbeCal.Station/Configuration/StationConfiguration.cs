@@ -1,4 +1,5 @@
 using System;
+using System.Net;
 using ProbeCal.Station.Sources;
 
 namespace ProbeCal.Station.Configuration;
@@ -97,6 +98,9 @@ public sealed record BrokerConfiguration
     /// <summary>True for TLS.</summary>
     public required bool UseTls { get; init; }
 
+    /// <summary>True when a user's password leaves this machine without encryption.</summary>
+    internal bool ExposesPassword => User != null && !UseTls && !IsLoopback(Host);
+
     /// <summary>User name, or null.</summary>
     public string? User { get; init; }
 
@@ -111,4 +115,9 @@ public sealed record BrokerConfiguration
 
     /// <summary>True to ask whether the broker's certificate was withdrawn.</summary>
     public bool CheckRevocation { get; init; }
+
+    private static bool IsLoopback(string host)
+    {
+        return host == "localhost" || (IPAddress.TryParse(host, out IPAddress? address) && IPAddress.IsLoopback(address));
+    }
 }

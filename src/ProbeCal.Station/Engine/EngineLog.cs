@@ -25,4 +25,7 @@ internal static partial class EngineLog
 
     [LoggerMessage(EventId = 2207, Level = LogLevel.Warning, Message = "old samples and events could not be deleted: {Reason}")]
     internal static partial void ExpiryFailed(ILogger log, string reason);
+
+    [LoggerMessage(EventId = 2208, Level = LogLevel.Warning, Message = "user and password go to {Host} unencrypted, and so does every reading; write broker.address with mqtts://")]
+    internal static partial void Unencrypted(ILogger log, string host);
 }

@@ -81,6 +81,11 @@ public static class StationRun
                         Committed = around.Reading,
                     };
                     EngineLog.Started(log, configuration.Station, configuration.Probe, source.Description, calibration?.Record.Id ?? "none", journal.Path);
+                    if (configuration.Broker is { ExposesPassword: true } exposed)
+                    {
+                        EngineLog.Unencrypted(log, exposed.Host);
+                    }
+
                     publisher.Announce(messages.Calibration());
                     using CancellationTokenSource timeUp = new(duration ?? Timeout.InfiniteTimeSpan, around.Time);
                     using CancellationTokenSource either = CancellationTokenSource.CreateLinkedTokenSource(timeUp.Token, stop);

@@ -145,6 +145,31 @@ public sealed class StationRunTests : IDisposable
         Assert.DoesNotContain(_log.Lines, line => line.Contains("not this one"));
     }
 
+    [Theory]
+    [InlineData("mqtt://broker.example", true)]
+    [InlineData("mqtt://192.0.2.7:1883", true)]
+    [InlineData("mqtts://broker.example", false)]
+    [InlineData("mqtt://127.0.0.1:1883", false)]
+    [InlineData("mqtt://localhost", false)]
+    [InlineData("mqtt://[::1]", false)]
+    public void PasswordIsExposed_OnlyUnencryptedToAnotherMachine(string address, bool exposed)
+    {
+        StationConfiguration withUser = Configuration(("broker", $$"""{ "address": "{{address}}", "user": "tarn", "passwordEnvironment": "PASSWORD" }"""));
+        StationConfiguration without = Configuration(("broker", $$"""{ "address": "{{address}}" }"""));
+        Assert.Equal(exposed, withUser.Broker!.ExposesPassword);
+        Assert.False(without.Broker!.ExposesPassword);
+    }
+
+    [Fact]
+    public async Task ExposedPassword_IsWarnedOf()
+    {
+        // This machine by an address that is not a loopback one; nobody listens.
+        Task run = RunAsync(Configuration(("broker", """{ "address": "mqtt://0.0.0.0:1", "user": "tarn", "passwordEnvironment": "PASSWORD" }""")));
+        await _log.SeenAsync("user and password go to 0.0.0.0 unencrypted");
+        await _stop.CancelAsync();
+        await run.WaitAsync(Deadline.Generous);
+    }
+
     [Fact]
     public void BrokerSettings_AreThoseOfTheConfiguration_AndTheWillSaysLost()
     {
