@@ -152,7 +152,7 @@ public class ProbeInWaterTests
     [Fact]
     public async Task Source_FollowsTheClockAndReadsItsOwnLines()
     {
-        FakeTimeProvider time = new(Start);
+        PacedTime time = new(Start);
         SimulationSettings settings = new() { Script = SimulationScript.Parse("p", "zero") };
         SimulatedSource source = new(settings, LineTemplate.Parse("l", LineTemplate.UsualText), time);
         List<SimulatedLine> made = [];

@@ -3,7 +3,6 @@ using System.IO;
 using System.Linq;
 using System.Threading.Tasks;
 using Microsoft.Extensions.Logging.Abstractions;
-using Microsoft.Extensions.Time.Testing;
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Sources;
 using Xunit;
@@ -12,7 +11,7 @@ namespace ProbeCal.Station.Tests.Sources;
 
 public class LineSourceTests
 {
-    private readonly FakeTimeProvider _time = new(new DateTimeOffset(2026, 6, 1, 12, 0, 0, TimeSpan.Zero));
+    private readonly PacedTime _time = new(new DateTimeOffset(2026, 6, 1, 12, 0, 0, TimeSpan.Zero));
 
     [Fact]
     public async Task Lines_BecomeSamplesAndTheBadOnesAreKept()

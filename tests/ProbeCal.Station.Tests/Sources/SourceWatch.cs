@@ -3,7 +3,6 @@ using System.Collections.Generic;
 using System.Diagnostics;
 using System.Threading;
 using System.Threading.Tasks;
-using Microsoft.Extensions.Time.Testing;
 using ProbeCal.Station.Sources;
 using Xunit.Sdk;
 
@@ -14,11 +13,11 @@ internal sealed class SourceWatch : IAsyncDisposable
 {
     private static readonly TimeSpan Deadline = TimeSpan.FromSeconds(30);
 
-    private readonly FakeTimeProvider? _time;
+    private readonly PacedTime? _time;
     private readonly CancellationTokenSource _stop = new();
     private readonly IAsyncEnumerator<SourceEvent> _events;
 
-    internal SourceWatch(ISampleSource source, FakeTimeProvider? time = null)
+    internal SourceWatch(ISampleSource source, PacedTime? time = null)
     {
         _time = time;
         _events = source.ReadAsync(_stop.Token).GetAsyncEnumerator();
@@ -34,6 +33,7 @@ internal sealed class SourceWatch : IAsyncDisposable
     /// <summary>The next event; null when the source has ended.</summary>
     internal async Task<SourceEvent?> NextAsync()
     {
+        _time?.BeginWait();
         Task<bool> next = _events.MoveNextAsync().AsTask();
         if (_time is null)
         {
@@ -49,8 +49,7 @@ internal sealed class SourceWatch : IAsyncDisposable
                     throw new XunitException("no event came; seen so far:\n" + string.Join('\n', Seen));
                 }
 
-                _time.Advance(TimeSpan.FromMilliseconds(250));
-                await Task.Yield();
+                await _time.StepAsync(TimeSpan.FromMilliseconds(250));
             }
         }
 
