@@ -1,7 +1,6 @@
 using System;
 using System.CommandLine;
 using System.Linq;
-using System.Reflection;
 using System.Threading;
 using System.Threading.Tasks;
 using Microsoft.Extensions.Logging.Abstractions;
@@ -70,13 +69,13 @@ internal static class CalibrateCommand
         {
             if (address == null)
             {
-                stored = await run.RunTypedAsync(Software, cancellationToken).ConfigureAwait(false);
+                stored = await run.RunTypedAsync(ProgramIdentity.Text, cancellationToken).ConfigureAwait(false);
             }
             else
             {
                 await using ISampleSource source = SourceFactory.Create(address, line!, terminal.Time, NullLogger.Instance, terminal.Input, mustOpen: true);
                 bool goesOnByItself = address is SerialAddress or TcpAddress;
-                stored = await run.RunAsync(source, goesOnByItself, Software, cancellationToken).ConfigureAwait(false);
+                stored = await run.RunAsync(source, goesOnByItself, ProgramIdentity.Text, cancellationToken).ConfigureAwait(false);
             }
         }
         catch (OperationCanceledException stopped)
@@ -88,16 +87,6 @@ internal static class CalibrateCommand
 
         Print(stored, json, log, terminal);
         return stored.Record.Result.Pass ? ExitCode.Done : ExitCode.WorkFailed;
-    }
-
-    /// <summary>Program and version, as records keep them.</summary>
-    private static string Software
-    {
-        get
-        {
-            string version = typeof(CalibrateCommand).Assembly.GetCustomAttribute<AssemblyInformationalVersionAttribute>()?.InformationalVersion ?? "unknown";
-            return "probecal " + version;
-        }
     }
 
     private static void Print(StoredCalibration stored, bool json, CalibrationLogStore log, Terminal terminal)

@@ -55,18 +55,12 @@ internal static class StationCommand
             Time = terminal.Time,
             Random = Random.Shared,
             Logs = logs,
-            Software = Software(),
+            Software = ProgramIdentity.Text,
             Environment = Environment.GetEnvironmentVariable,
             StandardInput = terminal.Input,
             Reading = print ? new ReadingPrinter(terminal.Output, logs.CreateLogger("print")).Print : static _ => { },
         };
         await StationRun.RunAsync(configuration, folder, around, length, stop).ConfigureAwait(false);
         return ExitCode.Done;
-    }
-
-    private static string Software()
-    {
-        Version version = typeof(StationCommand).Assembly.GetName().Version!;
-        return "probecal " + version.ToString(3);
     }
 }

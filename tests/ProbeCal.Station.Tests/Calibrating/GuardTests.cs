@@ -93,7 +93,7 @@ public class GuardTests
         Assert.Equal(FindingSeverity.Refuse, finding.Severity);
         Assert.Contains("write 68F (20.0 C)", finding.Saw, StringComparison.Ordinal);
         Assert.Null(Look(GuardNames.TemperatureRange, At(38, 940)));
-        Assert.NotNull(Look(GuardNames.TemperatureRange, At(-1, 940)));
+        Assert.Equal(FindingSeverity.Refuse, Look(GuardNames.TemperatureRange, At(-1, 940))?.Severity);
     }
 
     [Theory]
