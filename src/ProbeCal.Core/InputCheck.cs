@@ -6,13 +6,17 @@ namespace ProbeCal;
 /// </summary>
 internal static class InputCheck
 {
-    /// <summary>True when the value must be NaN: a NaN or unknown input always, a range fault unless extrapolation was asked for.</summary>
+    /// <summary>How far outside its range a temperature still counts as near the edge, K (common practice, no source).</summary>
+    internal const double NearEdgeKelvin = 0.2;
+
+    /// <summary>True when the value must be NaN: a NaN or unknown input always, a range fault unless the rule lets it pass.</summary>
     internal static bool Refuses(Status status, RangeRule rule)
     {
         if (status == Status.Ok) { return false; }
-        if (rule != RangeRule.Extrapolate) { return true; }
+        if (rule != RangeRule.Extrapolate && rule != RangeRule.NearEdge) { return true; }
         RefusalReason reason = StatusParts.Reason(status);
-        return reason != RefusalReason.BelowRange && reason != RefusalReason.AboveRange;
+        if (reason == RefusalReason.JustBelowRange || reason == RefusalReason.JustAboveRange) { return false; }
+        return rule == RangeRule.NearEdge || (reason != RefusalReason.BelowRange && reason != RefusalReason.AboveRange);
     }
 
     /// <summary>What an extrapolation may hand out: a finite number or NaN, never an infinity.</summary>
@@ -41,8 +45,16 @@ internal static class InputCheck
     internal static Status Temperature(double celsius, double lowest, double highest)
     {
         if (NotFinite(celsius)) { return Status.TemperatureNotFinite; }
-        if (celsius < lowest) { return Status.TemperatureBelowRange; }
-        if (highest < celsius) { return Status.TemperatureAboveRange; }
+        if (celsius < lowest)
+        {
+            return celsius < lowest - NearEdgeKelvin ? Status.TemperatureBelowRange : Status.TemperatureJustBelowRange;
+        }
+
+        if (highest < celsius)
+        {
+            return highest + NearEdgeKelvin < celsius ? Status.TemperatureAboveRange : Status.TemperatureJustAboveRange;
+        }
+
         return Status.Ok;
     }
 
@@ -83,17 +95,35 @@ internal static class InputCheck
         return Status.Ok;
     }
 
-    /// <summary>The graver of two findings: not finite (or unknown) before out of range, and the first before the second.</summary>
-    internal static Status Graver(Status first, Status second)
+    internal static Status MoleFraction(double fraction)
     {
-        if (first == Status.Ok) { return second; }
-        if (second == Status.Ok) { return first; }
-        return IsRangeFault(first) && !IsRangeFault(second) ? second : first;
+        if (NotFinite(fraction)) { return Status.MoleFractionNotFinite; }
+        if (fraction < 0.0) { return Status.MoleFractionBelowRange; }
+        if (1.0 < fraction) { return Status.MoleFractionAboveRange; }
+        return Status.Ok;
     }
 
-    private static bool IsRangeFault(Status status)
+    internal static Status Humidity(double percent)
     {
+        if (NotFinite(percent)) { return Status.HumidityNotFinite; }
+        if (percent < 0.0) { return Status.HumidityBelowRange; }
+        if (100.0 < percent) { return Status.HumidityAboveRange; }
+        return Status.Ok;
+    }
+
+    /// <summary>
+    /// The graver of two findings: not finite (or unknown) before out of range, out of range before just outside it, and the first before the second.
+    /// </summary>
+    internal static Status Graver(Status first, Status second)
+    {
+        return Gravity(second) <= Gravity(first) ? first : second;
+    }
+
+    private static int Gravity(Status status)
+    {
+        if (status == Status.Ok) { return 0; }
         RefusalReason reason = StatusParts.Reason(status);
-        return reason == RefusalReason.BelowRange || reason == RefusalReason.AboveRange;
+        if (reason == RefusalReason.JustBelowRange || reason == RefusalReason.JustAboveRange) { return 1; }
+        return reason == RefusalReason.BelowRange || reason == RefusalReason.AboveRange ? 2 : 3;
     }
 }

@@ -20,6 +20,10 @@ public enum Status
     TemperatureBelowRange = 0x0102,
     /// <summary>Temperature is above the range of the equation.</summary>
     TemperatureAboveRange = 0x0103,
+    /// <summary>Temperature is below the range of the equation by no more than the 0.2 K of <see cref="RangeRule.NearEdge"/>.</summary>
+    TemperatureJustBelowRange = 0x0105,
+    /// <summary>Temperature is above the range of the equation by no more than the 0.2 K of <see cref="RangeRule.NearEdge"/>.</summary>
+    TemperatureJustAboveRange = 0x0106,
 
     /// <summary>Salinity is NaN or infinite.</summary>
     SalinityNotFinite = 0x0201,
@@ -125,6 +129,33 @@ public enum Status
     ConductanceBelowRange = 0x1002,
     /// <summary>Specific conductance is above the range of the relation.</summary>
     ConductanceAboveRange = 0x1003,
+
+    /// <summary>Mole fraction is NaN or infinite, or the gas has no usual one.</summary>
+    MoleFractionNotFinite = 0x1101,
+    /// <summary>Mole fraction is negative.</summary>
+    MoleFractionBelowRange = 0x1102,
+    /// <summary>Mole fraction is above 1.</summary>
+    MoleFractionAboveRange = 0x1103,
+
+    /// <summary>Relative humidity is NaN or infinite.</summary>
+    HumidityNotFinite = 0x1201,
+    /// <summary>Relative humidity is negative.</summary>
+    HumidityBelowRange = 0x1202,
+    /// <summary>Relative humidity is above 100 %.</summary>
+    HumidityAboveRange = 0x1203,
+
+    /// <summary>Depth or hydrostatic pressure is NaN or infinite.</summary>
+    DepthNotFinite = 0x1301,
+    /// <summary>Depth or hydrostatic pressure is negative.</summary>
+    DepthBelowRange = 0x1302,
+    /// <summary>Depth or hydrostatic pressure is above what the relation takes.</summary>
+    DepthAboveRange = 0x1303,
+
+    /// <summary>The gas is not one of those that Core knows, or the function has no data for it.</summary>
+    GasUnknown = 0x1404,
+
+    /// <summary>The ion is not one of those that the salting-out constants cover.</summary>
+    IonUnknown = 0x1504,
 }
 
 /// <summary>Which input a <see cref="Status"/> is about: its high byte.</summary>
@@ -164,6 +195,16 @@ public enum InputQuantity
     Saturation = 15,
     /// <summary>Specific conductance of the water.</summary>
     Conductance = 16,
+    /// <summary>Mole fraction of the gas in the dry gas phase.</summary>
+    MoleFraction = 17,
+    /// <summary>Relative humidity of the gas phase.</summary>
+    Humidity = 18,
+    /// <summary>Depth or hydrostatic pressure.</summary>
+    Depth = 19,
+    /// <summary>The gas asked for.</summary>
+    Gas = 20,
+    /// <summary>The dissolved ion asked for.</summary>
+    Ion = 21,
 }
 
 /// <summary>Why an input was refused: the low byte of a <see cref="Status"/>.</summary>
@@ -179,6 +220,10 @@ public enum RefusalReason
     AboveRange = 3,
     /// <summary>Neither below nor above: unknown, or not enough to determine the result.</summary>
     Unusable = 4,
+    /// <summary>Below the stated range by no more than the near-edge margin.</summary>
+    JustBelowRange = 5,
+    /// <summary>Above the stated range by no more than the near-edge margin.</summary>
+    JustAboveRange = 6,
 }
 
 /// <summary>Takes a <see cref="Status"/> apart.</summary>
@@ -204,4 +249,9 @@ public enum RangeRule
     Refuse = 0,
     /// <summary>Compute all the same: the status still names the input, so that the value stays flagged.</summary>
     Extrapolate = 1,
+    /// <summary>
+    /// Compute a temperature up to 0.2 K outside the range (a thermistor at 0 °C in winter) and refuse what lies further: the status says
+    /// just below or just above, so that the value stays flagged, and its uncertainty is enlarged.
+    /// </summary>
+    NearEdge = 2,
 }

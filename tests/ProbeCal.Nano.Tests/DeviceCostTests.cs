@@ -89,7 +89,7 @@ public class DeviceCostTests
 
     private Value Conditions()
     {
-        return Create("ReadingConditions", OxygenEquation.BensonKrause1984, 0.02, true, 0.05, 0.1, 1.0, 0.1, Stirring.Stirred, 1.0, 0.005);
+        return Create("ReadingConditions", SolubilityEquation.BensonKrause1984, 0.02, true, 0.05, 0.1, 1.0, 0.1, Stirring.Stirred, 1.0, 0.005);
     }
 
     private Value Create(string type, params object[] arguments)

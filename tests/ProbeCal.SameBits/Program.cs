@@ -26,7 +26,7 @@ Digest equilibrium = new();
 for (int i = 0; i < count; i++)
 {
     double t = inputs.Between(0, 40), s = inputs.Between(0, 40), p = inputs.Between(510, 1110);
-    foreach (OxygenEquation equation in new[] { OxygenEquation.BensonKrause1984, OxygenEquation.GarciaGordon1992 })
+    foreach (SolubilityEquation equation in new[] { SolubilityEquation.BensonKrause1984, SolubilityEquation.GarciaGordon1992 })
     {
         equilibrium.Add(OxygenEquilibrium.MilligramsPerLitre(equation, t, s, p, RangeRule.Refuse, out double milligrams), milligrams);
         equilibrium.Add(OxygenUncertainty.MilligramsPerLitre(equation, t, s, p, 0.1, 0.1, 1, RangeRule.Refuse, out double u), u);
@@ -49,7 +49,7 @@ if (made != Status.Ok || calibration is null)
     return 1;
 }
 
-ReadingConditions conditions = new(OxygenEquation.BensonKrause1984, 0.03, true, 0.1, 0.03, 0.8, 0.1, Stirring.Stirred, 1, 0.01);
+ReadingConditions conditions = new(SolubilityEquation.BensonKrause1984, 0.03, true, 0.1, 0.03, 0.8, 0.1, Stirring.Stirred, 1, 0.01);
 Reading reading = new();
 for (int i = 0; i < count; i++)
 {

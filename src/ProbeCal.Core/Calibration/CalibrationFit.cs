@@ -58,7 +58,7 @@ public static class CalibrationFit
     public static Status SignalSize(
         IProbeModel model,
         double slope,
-        OxygenEquation equation,
+        SolubilityEquation equation,
         double temperatureCelsius,
         double pressureHectopascal,
         double salinity,
@@ -96,7 +96,7 @@ public static class CalibrationFit
         double slope,
         double zeroResponse,
         CalibrationPoint point,
-        OxygenEquation equation,
+        SolubilityEquation equation,
         double salinity,
         out double milligramsPerLitre,
         out double percent)
@@ -139,7 +139,7 @@ public static class CalibrationFit
         double slope,
         double zeroResponse,
         ZeroPoint zero,
-        OxygenEquation equation,
+        SolubilityEquation equation,
         out double milligramsPerLitre)
     {
         milligramsPerLitre = double.NaN;

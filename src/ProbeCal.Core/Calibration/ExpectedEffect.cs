@@ -17,7 +17,7 @@ public static class ExpectedEffect
     /// <param name="milligramsPerLitre">Reference used less true reference, mg/L; NaN unless Ok.</param>
     /// <returns>The input at fault, or Ok.</returns>
     public static Status ReferenceError(
-        OxygenEquation equation,
+        SolubilityEquation equation,
         double salinity,
         double rightCelsius,
         double rightHectopascal,

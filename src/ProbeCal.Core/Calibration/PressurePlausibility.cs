@@ -91,7 +91,7 @@ public static class PressurePlausibility
     /// </param>
     /// <returns>The input at fault, or Ok.</returns>
     public static Status SeaLevelValueError(
-        OxygenEquation equation,
+        SolubilityEquation equation,
         double temperatureCelsius,
         double salinity,
         double pressureHectopascal,

@@ -31,7 +31,7 @@ public static partial class OxygenEquilibrium
     /// <param name="perSalinity">∂C/∂S, mg/L per unit of salinity; NaN unless Ok or extrapolated.</param>
     /// <param name="perHectopascal">∂C/∂P, mg/L per hPa; NaN unless Ok or extrapolated.</param>
     public static Status MilligramsPerLitreSensitivities(
-        OxygenEquation equation, double celsius, double salinity, double pressureHectopascal, RangeRule rule,
+        SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal, RangeRule rule,
         out double perKelvin, out double perSalinity, out double perHectopascal)
     {
         perKelvin = double.NaN;
@@ -58,7 +58,7 @@ public static partial class OxygenEquilibrium
     /// <param name="perHectopascal">∂C/∂P at constant pO2, mg/L per hPa (small); NaN unless Ok or extrapolated.</param>
     /// <param name="perPartialPressure">∂C/∂pO2, mg/L per hPa; NaN unless Ok or extrapolated.</param>
     public static Status ConcentrationSensitivities(
-        OxygenEquation equation, double celsius, double salinity, double pressureHectopascal,
+        SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal,
         double partialPressureHectopascal, RangeRule rule,
         out double perKelvin, out double perSalinity, out double perHectopascal, out double perPartialPressure)
     {
@@ -94,7 +94,7 @@ public static partial class OxygenEquilibrium
     /// <param name="perHectopascal">∂pO2/∂P at constant concentration, hPa per hPa (small); NaN unless Ok or extrapolated.</param>
     /// <param name="perMilligramPerLitre">∂pO2/∂C, hPa per mg/L; NaN unless Ok or extrapolated.</param>
     public static Status PartialPressureFromConcentrationSensitivities(
-        OxygenEquation equation, double celsius, double salinity, double pressureHectopascal,
+        SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal,
         double milligramsPerLitre, RangeRule rule,
         out double perKelvin, out double perSalinity, out double perHectopascal, out double perMilligramPerLitre)
     {
@@ -138,7 +138,7 @@ public static partial class OxygenEquilibrium
     }
 
     private static void SolubilityLogarithmicSlopes(
-        OxygenEquation equation, double celsius, double salinity, double pressureHectopascal,
+        SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal,
         out double perKelvin, out double perSalinity, out double perHectopascal)
     {
         perHectopascal = double.NaN;

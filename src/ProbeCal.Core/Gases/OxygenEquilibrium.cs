@@ -46,7 +46,7 @@ public static partial class OxygenEquilibrium
     /// <param name="rule">Refuse or extrapolate outside the range.</param>
     /// <param name="milligramsPerLitre">Concentration, mg/L; NaN unless Ok or extrapolated. With Garcia and Gordon by way of EOS-80 density.</param>
     public static Status MilligramsPerLitre(
-        OxygenEquation equation, double celsius, double salinity, double pressureHectopascal, RangeRule rule,
+        SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal, RangeRule rule,
         out double milligramsPerLitre)
     {
         milligramsPerLitre = double.NaN;
@@ -66,7 +66,7 @@ public static partial class OxygenEquilibrium
     /// <param name="rule">Refuse or extrapolate outside the range.</param>
     /// <param name="milligramsPerLitre">Concentration, mg/L; NaN unless Ok or extrapolated.</param>
     public static Status ConcentrationFromPartialPressure(
-        OxygenEquation equation, double celsius, double salinity, double pressureHectopascal,
+        SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal,
         double partialPressureHectopascal, RangeRule rule, out double milligramsPerLitre)
     {
         milligramsPerLitre = double.NaN;
@@ -88,7 +88,7 @@ public static partial class OxygenEquilibrium
     /// <param name="rule">Refuse or extrapolate outside the range.</param>
     /// <param name="partialPressureHectopascal">Partial pressure, hPa; NaN unless Ok or extrapolated.</param>
     public static Status PartialPressureFromConcentration(
-        OxygenEquation equation, double celsius, double salinity, double pressureHectopascal,
+        SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal,
         double milligramsPerLitre, RangeRule rule, out double partialPressureHectopascal)
     {
         partialPressureHectopascal = double.NaN;
@@ -115,7 +115,7 @@ public static partial class OxygenEquilibrium
     }
 
     /// <summary>mg/L per hPa of oxygen, without a range; NaN where it does not exist.</summary>
-    internal static double Solubility(OxygenEquation equation, double celsius, double salinity, double pressureHectopascal)
+    internal static double Solubility(SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal)
     {
         double theta = OxygenPressureFactor.Theta(celsius);
         double atmospheres = PressureUnits.AtmospheresFromHectopascal(pressureHectopascal);
@@ -126,7 +126,7 @@ public static partial class OxygenEquilibrium
 
     /// <summary>The ranges of a concentration, and the solubility (NaN when the status refuses it or it cannot divide).</summary>
     private static Status CheckConcentration(
-        OxygenEquation equation, double celsius, double salinity, double pressureHectopascal,
+        SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal,
         double milligramsPerLitre, RangeRule rule, out double solubility)
     {
         solubility = double.NaN;

@@ -6,30 +6,30 @@ internal static class OxygenSolubility
     // µmol/kg · kg/m³ = µmol/m³; times g/mol · 10⁻⁶ = mg/L.
     private const double MilligramsPerLitreScale = OxygenUnits.GramsPerMole * 1.0e-6;
 
-    internal static Status Check(OxygenEquation equation, double celsius, double salinity, double pressureHectopascal)
+    internal static Status Check(SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal)
     {
-        if (equation == OxygenEquation.BensonKrause1984)
+        if (equation == SolubilityEquation.BensonKrause1984)
         {
             return BensonKrause1984.Check(celsius, salinity, pressureHectopascal);
         }
-        if (equation == OxygenEquation.GarciaGordon1992)
+        if (equation == SolubilityEquation.GarciaGordon1992)
         {
             return GarciaGordon1992.Check(celsius, salinity, pressureHectopascal);
         }
         return Status.EquationUnknown;
     }
 
-    internal static double OneAtmosphere(OxygenEquation equation, double celsius, double salinity)
+    internal static double OneAtmosphere(SolubilityEquation equation, double celsius, double salinity)
     {
-        if (equation == OxygenEquation.BensonKrause1984) { return BensonKrause1984.OneAtmosphere(celsius, salinity); }
+        if (equation == SolubilityEquation.BensonKrause1984) { return BensonKrause1984.OneAtmosphere(celsius, salinity); }
         double perKilogram = GarciaGordon1992.OneAtmosphere(celsius, salinity);
         return perKilogram * DensityEos80.Value(celsius, salinity) * MilligramsPerLitreScale;
     }
 
     internal static void LogarithmicSlopes(
-        OxygenEquation equation, double celsius, double salinity, out double perKelvin, out double perSalinity)
+        SolubilityEquation equation, double celsius, double salinity, out double perKelvin, out double perSalinity)
     {
-        if (equation == OxygenEquation.BensonKrause1984)
+        if (equation == SolubilityEquation.BensonKrause1984)
         {
             BensonKrause1984.LogarithmicSlopes(celsius, salinity, out perKelvin, out perSalinity);
             return;

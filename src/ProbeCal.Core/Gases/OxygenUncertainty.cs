@@ -23,7 +23,7 @@ public static class OxygenUncertainty
     /// <param name="salinity">Practical salinity, 0 to the highest of the equation.</param>
     /// <param name="rule">Refuse or extrapolate outside the range.</param>
     /// <param name="relative">Relative standard uncertainty, a fraction; NaN unless Ok or extrapolated.</param>
-    public static Status EquationRelative(OxygenEquation equation, double salinity, RangeRule rule, out double relative)
+    public static Status EquationRelative(SolubilityEquation equation, double salinity, RangeRule rule, out double relative)
     {
         relative = double.NaN;
         Status status = CheckSalinity(equation, salinity);
@@ -43,7 +43,7 @@ public static class OxygenUncertainty
     /// <param name="rule">Refuse or extrapolate outside the range.</param>
     /// <param name="milligramsPerLitre">Combined standard uncertainty, mg/L; NaN unless Ok or extrapolated.</param>
     public static Status MilligramsPerLitre(
-        OxygenEquation equation, double celsius, double salinity, double pressureHectopascal,
+        SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal,
         double temperatureUncertaintyKelvin, double salinityUncertainty, double pressureUncertaintyHectopascal, RangeRule rule,
         out double milligramsPerLitre)
     {
@@ -99,13 +99,13 @@ public static class OxygenUncertainty
         return EquationRelativeFresh + ((EquationRelativeSaline - EquationRelativeFresh) * salinity / SalineReference);
     }
 
-    private static Status CheckSalinity(OxygenEquation equation, double salinity)
+    private static Status CheckSalinity(SolubilityEquation equation, double salinity)
     {
-        if (equation == OxygenEquation.BensonKrause1984)
+        if (equation == SolubilityEquation.BensonKrause1984)
         {
             return InputCheck.Salinity(salinity, BensonKrause1984.HighestSalinity);
         }
-        if (equation == OxygenEquation.GarciaGordon1992)
+        if (equation == SolubilityEquation.GarciaGordon1992)
         {
             return InputCheck.Salinity(salinity, GarciaGordon1992.HighestSalinity);
         }

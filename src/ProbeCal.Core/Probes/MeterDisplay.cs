@@ -42,7 +42,7 @@ public sealed class MeterDisplay : IProbeModel
     /// <param name="highestCelsius">Upper end of that range, °C.</param>
     public MeterDisplay(
         MeterScale scale,
-        OxygenEquation equation,
+        SolubilityEquation equation,
         double salinitySet,
         double pressureSetHectopascal,
         double temperatureSetCelsius,
@@ -70,7 +70,7 @@ public sealed class MeterDisplay : IProbeModel
     public MeterScale Scale { get; }
 
     /// <summary>The solubility equation the meter uses.</summary>
-    public OxygenEquation Equation { get; }
+    public SolubilityEquation Equation { get; }
 
     /// <summary>Salinity set in the meter.</summary>
     public double SalinitySet { get; }
@@ -115,7 +115,7 @@ public sealed class MeterDisplay : IProbeModel
     /// <returns>The input at fault; <see cref="Status.CoefficientUnknown"/> for an unknown scale.</returns>
     public static Status PartialPressurePerUnit(
         MeterScale scale,
-        OxygenEquation equation,
+        SolubilityEquation equation,
         double temperatureCelsius,
         double salinity,
         double pressureHectopascal,

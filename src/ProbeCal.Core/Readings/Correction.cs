@@ -90,7 +90,7 @@ public static class Correction
     }
 
     private static void SetConcentrations(
-        OxygenEquation equation,
+        SolubilityEquation equation,
         double temperatureCelsius,
         double pressureHectopascal,
         double salinity,

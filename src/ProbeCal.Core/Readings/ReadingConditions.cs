@@ -18,7 +18,7 @@ public sealed class ReadingConditions
     /// <param name="flowFactor">Flow factor, 1 when stirred.</param>
     /// <param name="stirringUncertainty">Relative standard uncertainty of the flow factor against the calibration's (<see cref="UncertaintyDefaults.StirringRelative"/>).</param>
     public ReadingConditions(
-        OxygenEquation equation,
+        SolubilityEquation equation,
         double signalUncertainty,
         bool hasSameThermometer,
         double thermometerOffsetUncertaintyKelvin,
@@ -42,7 +42,7 @@ public sealed class ReadingConditions
     }
 
     /// <summary>Solubility equation.</summary>
-    public OxygenEquation Equation { get; }
+    public SolubilityEquation Equation { get; }
 
     /// <summary>Standard uncertainty of one signal.</summary>
     public double SignalUncertainty { get; }

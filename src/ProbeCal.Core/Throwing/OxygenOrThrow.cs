@@ -11,7 +11,7 @@ public static class OxygenOrThrow
 {
     /// <summary><see cref="OxygenEquilibrium.MilligramsPerLitre"/>.</summary>
     /// <exception cref="InputRefusedException">An input is not finite or out of range.</exception>
-    public static double MilligramsPerLitre(OxygenEquation equation, double celsius, double salinity, double pressureHectopascal)
+    public static double MilligramsPerLitre(SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal)
     {
         Status status = OxygenEquilibrium.MilligramsPerLitre(
             equation, celsius, salinity, pressureHectopascal, RangeRule.Refuse, out double value);
@@ -26,7 +26,7 @@ public static class OxygenOrThrow
             celsius, salinity, pressureHectopascal, RangeRule.Refuse, out double value);
         return status == Status.Ok
             ? value
-            : throw Refusal(status, OxygenEquation.GarciaGordon1992, celsius, salinity, pressureHectopascal);
+            : throw Refusal(status, SolubilityEquation.GarciaGordon1992, celsius, salinity, pressureHectopascal);
     }
 
     /// <summary><see cref="OxygenEquilibrium.PartialPressure"/>.</summary>
@@ -40,7 +40,7 @@ public static class OxygenOrThrow
     /// <summary><see cref="OxygenEquilibrium.ConcentrationFromPartialPressure"/>.</summary>
     /// <exception cref="InputRefusedException">An input is not finite or out of range.</exception>
     public static double ConcentrationFromPartialPressure(
-        OxygenEquation equation, double celsius, double salinity, double pressureHectopascal, double partialPressureHectopascal)
+        SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal, double partialPressureHectopascal)
     {
         Status status = OxygenEquilibrium.ConcentrationFromPartialPressure(
             equation, celsius, salinity, pressureHectopascal, partialPressureHectopascal, RangeRule.Refuse, out double value);
@@ -52,7 +52,7 @@ public static class OxygenOrThrow
     /// <summary><see cref="OxygenEquilibrium.PartialPressureFromConcentration"/>.</summary>
     /// <exception cref="InputRefusedException">An input is not finite or out of range.</exception>
     public static double PartialPressureFromConcentration(
-        OxygenEquation equation, double celsius, double salinity, double pressureHectopascal, double milligramsPerLitre)
+        SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal, double milligramsPerLitre)
     {
         Status status = OxygenEquilibrium.PartialPressureFromConcentration(
             equation, celsius, salinity, pressureHectopascal, milligramsPerLitre, RangeRule.Refuse, out double value);
@@ -89,7 +89,7 @@ public static class OxygenOrThrow
     }
 
     private static InputRefusedException Refusal(
-        Status status, OxygenEquation equation, double celsius, double salinity, double pressureHectopascal, double amount = double.NaN)
+        Status status, SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal, double amount = double.NaN)
     {
         double fault = StatusParts.Input(status) switch
         {
@@ -99,7 +99,7 @@ public static class OxygenOrThrow
             InputQuantity.Equation => (double)equation,
             _ => amount,
         };
-        FormattableString allowed = equation == OxygenEquation.GarciaGordon1992
+        FormattableString allowed = equation == SolubilityEquation.GarciaGordon1992
             ? (FormattableString)$"freezing point or {GarciaGordon1992.LowestCelsius} to {GarciaGordon1992.HighestCelsius} °C, salinity 0 to {GarciaGordon1992.HighestSalinity}, {AirPressures()}"
             : $"{BensonKrause1984.LowestCelsius} to {BensonKrause1984.HighestCelsius} °C, salinity 0 to {BensonKrause1984.HighestSalinity}, {AirPressures()}";
         string text = StatusParts.Input(status) == InputQuantity.Equation

@@ -79,7 +79,7 @@ public sealed record CalibrationSetup
     public required bool Simulated { get; init; }
 
     /// <summary>The solubility equation.</summary>
-    public required OxygenEquation Equation { get; init; }
+    public required SolubilityEquation Equation { get; init; }
 
     /// <summary>Pressure and its source.</summary>
     public required EnteredPressure Pressure { get; init; }

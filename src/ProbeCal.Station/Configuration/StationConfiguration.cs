@@ -50,7 +50,7 @@ public sealed record StationConfiguration
     public required CalibrationChoice Calibration { get; init; }
 
     /// <summary>Solubility equation.</summary>
-    public required OxygenEquation Equation { get; init; }
+    public required SolubilityEquation Equation { get; init; }
 
     /// <summary>The broker, or null for the embedded one.</summary>
     public BrokerConfiguration? Broker { get; init; }

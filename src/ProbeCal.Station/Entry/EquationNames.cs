@@ -9,16 +9,16 @@ namespace ProbeCal.Station.Entry;
 public static class EquationNames
 {
     /// <summary>The equation taken where none is named: the one behind the tables of the public field standards.</summary>
-    public const OxygenEquation Default = OxygenEquation.BensonKrause1984;
+    public const SolubilityEquation Default = SolubilityEquation.BensonKrause1984;
 
-    private static readonly (string Name, OxygenEquation Equation)[] Known =
+    private static readonly (string Name, SolubilityEquation Equation)[] Known =
     [
-        ("benson-krause-1984", OxygenEquation.BensonKrause1984),
-        ("garcia-gordon-1992", OxygenEquation.GarciaGordon1992),
+        ("benson-krause-1984", SolubilityEquation.BensonKrause1984),
+        ("garcia-gordon-1992", SolubilityEquation.GarciaGordon1992),
     ];
 
     /// <summary>The name of an equation.</summary>
-    public static string NameOf(OxygenEquation equation)
+    public static string NameOf(SolubilityEquation equation)
     {
         return Known.First(known => known.Equation == equation).Name;
     }
@@ -27,9 +27,9 @@ public static class EquationNames
     /// <param name="what">The option or key that it was given for.</param>
     /// <param name="name">What was given.</param>
     /// <exception cref="InputException">There is no such equation; the message lists those that there are.</exception>
-    public static OxygenEquation Parse(string what, string name)
+    public static SolubilityEquation Parse(string what, string name)
     {
-        foreach ((string known, OxygenEquation equation) in Known)
+        foreach ((string known, SolubilityEquation equation) in Known)
         {
             if (string.Equals(known, name, StringComparison.OrdinalIgnoreCase))
             {

@@ -26,7 +26,7 @@ public sealed record OxygenAtEquilibrium
     private OxygenAtEquilibrium() { }
 
     /// <summary>The solubility equation.</summary>
-    public required OxygenEquation Equation { get; init; }
+    public required SolubilityEquation Equation { get; init; }
 
     /// <summary>What it was computed for.</summary>
     public required WaterConditions Conditions { get; init; }
@@ -69,7 +69,7 @@ public sealed record OxygenAtEquilibrium
 
     /// <summary>Computes it.</summary>
     /// <exception cref="InputException">A condition is outside the range of the equation; nothing is extrapolated.</exception>
-    public static OxygenAtEquilibrium Compute(OxygenEquation equation, WaterConditions conditions)
+    public static OxygenAtEquilibrium Compute(SolubilityEquation equation, WaterConditions conditions)
     {
         double t = conditions.TemperatureCelsius;
         double s = conditions.Salinity;
@@ -105,7 +105,7 @@ public sealed record OxygenAtEquilibrium
         };
     }
 
-    private static void Expect(Status status, OxygenEquation equation, WaterConditions conditions)
+    private static void Expect(Status status, SolubilityEquation equation, WaterConditions conditions)
     {
         if (status != Status.Ok)
         {
@@ -113,10 +113,10 @@ public sealed record OxygenAtEquilibrium
         }
     }
 
-    private static string Refusal(Status status, OxygenEquation equation, WaterConditions c)
+    private static string Refusal(Status status, SolubilityEquation equation, WaterConditions c)
     {
         string name = EquationNames.NameOf(equation);
-        bool bensonKrause = equation == OxygenEquation.BensonKrause1984;
+        bool bensonKrause = equation == SolubilityEquation.BensonKrause1984;
         switch (StatusParts.Input(status))
         {
             case InputQuantity.Temperature:

@@ -132,7 +132,7 @@ internal sealed class ProbeInWater
         OxygenEquilibrium.PartialPressure(temperature, pressure, RangeRule.Refuse, out double saturated);
         double partial = saturated * percent / 100;
         OxygenEquilibrium.ConcentrationFromPartialPressure(
-            OxygenEquation.BensonKrause1984, temperature, salinity, pressure, partial, RangeRule.Refuse, out double milligrams);
+            SolubilityEquation.BensonKrause1984, temperature, salinity, pressure, partial, RangeRule.Refuse, out double milligrams);
         return new SimulatedTruth(
             TimeUtc, phase, temperature, pressure, salinity, partial, milligrams, percent, Signal(partial, temperature, phase));
     }

@@ -5,7 +5,7 @@ namespace ProbeCal.Core.Tests.Calibration;
 
 public class CalibrationFitTests
 {
-    private const OxygenEquation Equation = OxygenEquation.BensonKrause1984;
+    private const SolubilityEquation Equation = SolubilityEquation.BensonKrause1984;
 
     [Fact]
     public void Slope_IsTheSpanOverGainFlowRatioAndReference()

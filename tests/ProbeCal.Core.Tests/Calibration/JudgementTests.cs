@@ -7,7 +7,7 @@ namespace ProbeCal.Core.Tests.Calibration;
 /// <summary>Limits, plausible pressures and the size of usual slips.</summary>
 public class JudgementTests
 {
-    private const OxygenEquation Equation = OxygenEquation.BensonKrause1984;
+    private const SolubilityEquation Equation = SolubilityEquation.BensonKrause1984;
 
     [Theory]
     [InlineData(8.0, 0.2, AppliedLimit.Absolute)]

@@ -23,7 +23,7 @@ public class AllocationTests
         for (int i = 0; i < count; i++)
         {
             double celsius = 40.0 * i / count;
-            foreach (OxygenEquation equation in stackalloc[] { OxygenEquation.BensonKrause1984, OxygenEquation.GarciaGordon1992 })
+            foreach (SolubilityEquation equation in stackalloc[] { SolubilityEquation.BensonKrause1984, SolubilityEquation.GarciaGordon1992 })
             {
                 OxygenEquilibrium.PartialPressure(celsius, 980.0, RangeRule.Refuse, out double partial);
                 OxygenEquilibrium.ConcentrationFromPartialPressure(equation, celsius, 20.0, 980.0, partial, RangeRule.Refuse, out double milligrams);

@@ -47,8 +47,8 @@ internal static class CoreFunctions
 
         yield return One("OxygenEquilibrium.PartialPressure", [AirCelsius, Total], (double[] x, RangeRule r, out double v) => OxygenEquilibrium.PartialPressure(x[0], x[1], r, out v));
         yield return new("OxygenEquilibrium.PartialPressureSensitivities", true, [AirCelsius, Total], (x, r) => (OxygenEquilibrium.PartialPressureSensitivities(x[0], x[1], r, out double a, out double b), [a, b]));
-        foreach (CoreFunction function in Equilibrium(OxygenEquation.BensonKrause1984, Celsius, Salt)) { yield return function; }
-        foreach (CoreFunction function in Equilibrium(OxygenEquation.GarciaGordon1992, SeaCelsius, SeaSalt)) { yield return function; }
+        foreach (CoreFunction function in Equilibrium(SolubilityEquation.BensonKrause1984, Celsius, Salt)) { yield return function; }
+        foreach (CoreFunction function in Equilibrium(SolubilityEquation.GarciaGordon1992, SeaCelsius, SeaSalt)) { yield return function; }
 
         yield return One("Saturation.PercentLocal", [Partial, AirCelsius, Total], (double[] x, RangeRule r, out double v) => ProbeCal.Saturation.PercentLocal(x[0], x[1], x[2], r, out v));
         yield return One("Saturation.PercentOneAtmosphere", [Partial, AirCelsius], (double[] x, RangeRule r, out double v) => ProbeCal.Saturation.PercentOneAtmosphere(x[0], x[1], r, out v));
@@ -66,7 +66,7 @@ internal static class CoreFunctions
         yield return One("OxygenUncertainty.PartialPressure", [AirCelsius, Total, Spread, Spread], (double[] x, RangeRule r, out double v) => OxygenUncertainty.PartialPressure(x[0], x[1], x[2], x[3], r, out v));
     }
 
-    private static IEnumerable<CoreFunction> Equilibrium(OxygenEquation e, Input t, Input s)
+    private static IEnumerable<CoreFunction> Equilibrium(SolubilityEquation e, Input t, Input s)
     {
         yield return One("OxygenEquilibrium.MilligramsPerLitre, " + e, [t, s, Total], (double[] x, RangeRule r, out double v) => OxygenEquilibrium.MilligramsPerLitre(e, x[0], x[1], x[2], r, out v));
         yield return new("OxygenEquilibrium.MilligramsPerLitreSensitivities, " + e, true, [t, s, Total], (x, r) => (OxygenEquilibrium.MilligramsPerLitreSensitivities(e, x[0], x[1], x[2], r, out double a, out double b, out double c), [a, b, c]));

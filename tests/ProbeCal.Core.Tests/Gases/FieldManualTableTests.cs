@@ -85,7 +85,7 @@ public class FieldManualTableTests(ITestOutputHelper output)
         Assert.Equal(7.30m, Rounded(compensated, 2));
 
         Assert.Equal(Status.Ok, OxygenEquilibrium.PartialPressureFromConcentration(
-            OxygenEquation.BensonKrause1984, 20.0, salinity, pressure, compensated, RangeRule.Refuse, out double partialPressure));
+            SolubilityEquation.BensonKrause1984, 20.0, salinity, pressure, compensated, RangeRule.Refuse, out double partialPressure));
         Assert.Equal(Status.Ok, Saturation.PercentLocal(partialPressure, 20.0, pressure, RangeRule.Refuse, out double percent));
         Assert.Equal(83.6m, Rounded(percent, 1));
     }

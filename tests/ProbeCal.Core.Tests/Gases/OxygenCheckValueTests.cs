@@ -28,15 +28,15 @@ public class OxygenCheckValueTests(ITestOutputHelper output)
     }
 
     [Theory]
-    [InlineData(OxygenEquation.BensonKrause1984)]
-    [InlineData(OxygenEquation.GarciaGordon1992)]
-    public void StandardTable_RecalledFromMemory(OxygenEquation equation)
+    [InlineData(SolubilityEquation.BensonKrause1984)]
+    [InlineData(SolubilityEquation.GarciaGordon1992)]
+    public void StandardTable_RecalledFromMemory(SolubilityEquation equation)
     {
         Deviations deviations = new("standard table, " + equation, output);
         foreach (CheckRow row in CheckRow.Read("oxygen-standard-table.csv", 346).Where(r => r["equation"] == equation.ToString()))
         {
             // The table is older than ITS-90. Benson and Krause take the temperature as given, as their public tables do.
-            double celsius = equation == OxygenEquation.GarciaGordon1992
+            double celsius = equation == SolubilityEquation.GarciaGordon1992
                 ? TemperatureScale.Its90FromIpts68(row.Number("celsius"))
                 : row.Number("celsius");
             // 25 g/kg of chlorinity is a salinity of 45, beyond both equations: flagged, computed and compared all the same.

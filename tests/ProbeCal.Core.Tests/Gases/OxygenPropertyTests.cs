@@ -10,12 +10,12 @@ public class OxygenPropertyTests
 {
     private static readonly long Samples = Environment.GetEnvironmentVariable("PROBECAL_FULL") == "1" ? 1_000_000 : 20_000;
 
-    private static readonly Gen<OxygenEquation> Equation = Gen.Bool.Select(b => b ? OxygenEquation.BensonKrause1984 : OxygenEquation.GarciaGordon1992);
+    private static readonly Gen<SolubilityEquation> Equation = Gen.Bool.Select(b => b ? SolubilityEquation.BensonKrause1984 : SolubilityEquation.GarciaGordon1992);
     private static readonly Gen<double> Celsius = Gen.Double[0.0, 40.0];
     private static readonly Gen<double> Salinity = Gen.Double[0.0, 40.0];
     private static readonly Gen<double> Pressure = Gen.Double[506.625, 1114.575];
     private static readonly Gen<double> PartialPressure = Gen.Double[-50.0, 1000.0];
-    private static readonly Gen<(OxygenEquation E, double T, double S, double P)> Water = Gen.Select(Equation, Celsius, Salinity, Pressure);
+    private static readonly Gen<(SolubilityEquation E, double T, double S, double P)> Water = Gen.Select(Equation, Celsius, Salinity, Pressure);
 
     [Fact]
     public void AtTheEquilibriumPartialPressure_ConcentrationIsTheEquilibriumValue()
@@ -121,25 +121,25 @@ public class OxygenPropertyTests
     {
         Gen.Select(Celsius, Salinity, Pressure).Sample((t, s, p) =>
         {
-            double ratio = Equilibrium(OxygenEquation.GarciaGordon1992, t, s, p) / Equilibrium(OxygenEquation.BensonKrause1984, t, s, p);
+            double ratio = Equilibrium(SolubilityEquation.GarciaGordon1992, t, s, p) / Equilibrium(SolubilityEquation.BensonKrause1984, t, s, p);
             return Math.Abs(ratio - 1.0) < 0.00031;
         }, iter: Samples);
     }
 
-    private static double Equilibrium(OxygenEquation equation, double celsius, double salinity, double pressure)
+    private static double Equilibrium(SolubilityEquation equation, double celsius, double salinity, double pressure)
     {
         Assert.Equal(Status.Ok, OxygenEquilibrium.MilligramsPerLitre(equation, celsius, salinity, pressure, RangeRule.Refuse, out double value));
         return value;
     }
 
-    private static double Extrapolated(OxygenEquation equation, double celsius, double salinity, double pressure)
+    private static double Extrapolated(SolubilityEquation equation, double celsius, double salinity, double pressure)
     {
         OxygenEquilibrium.MilligramsPerLitre(equation, celsius, salinity, pressure, RangeRule.Extrapolate, out double value);
         Assert.True(double.IsFinite(value));
         return value;
     }
 
-    private static double Concentration(OxygenEquation equation, double celsius, double salinity, double pressure, double partial)
+    private static double Concentration(SolubilityEquation equation, double celsius, double salinity, double pressure, double partial)
     {
         Assert.Equal(Status.Ok, OxygenEquilibrium.ConcentrationFromPartialPressure(
             equation, celsius, salinity, pressure, partial, RangeRule.Refuse, out double value));

@@ -11,11 +11,11 @@ public class OxygenUncertaintyTests(ITestOutputHelper output)
 
     /// <summary>The combined uncertainty against a Monte Carlo simulation of the values themselves (JCGM 101), which knows nothing of derivatives.</summary>
     [Theory]
-    [InlineData(OxygenEquation.BensonKrause1984, 15.0, 0.0, 1000.0, 0.1, 0.0, 1.0)]
-    [InlineData(OxygenEquation.BensonKrause1984, 25.0, 30.0, 850.0, 0.3, 0.5, 10.0)]
-    [InlineData(OxygenEquation.GarciaGordon1992, 5.0, 35.0, 1013.25, 0.2, 0.2, 3.0)]
+    [InlineData(SolubilityEquation.BensonKrause1984, 15.0, 0.0, 1000.0, 0.1, 0.0, 1.0)]
+    [InlineData(SolubilityEquation.BensonKrause1984, 25.0, 30.0, 850.0, 0.3, 0.5, 10.0)]
+    [InlineData(SolubilityEquation.GarciaGordon1992, 5.0, 35.0, 1013.25, 0.2, 0.2, 3.0)]
     public void Combined_AgreesWithMonteCarlo(
-        OxygenEquation equation, double celsius, double salinity, double pressure, double uT, double uS, double uP)
+        SolubilityEquation equation, double celsius, double salinity, double pressure, double uT, double uS, double uP)
     {
         Assert.Equal(Status.Ok, OxygenUncertainty.MilligramsPerLitre(
             equation, celsius, salinity, pressure, uT, uS, uP, RangeRule.Refuse, out double combined));
@@ -50,9 +50,9 @@ public class OxygenUncertaintyTests(ITestOutputHelper output)
     [InlineData(0.1, 1.0, 0.26)]
     public void LakeBudget_InPercent(double uT, double uP, double percent)
     {
-        OxygenEquilibrium.MilligramsPerLitre(OxygenEquation.BensonKrause1984, 15.0, 0.0, 1013.25, RangeRule.Refuse, out double value);
+        OxygenEquilibrium.MilligramsPerLitre(SolubilityEquation.BensonKrause1984, 15.0, 0.0, 1013.25, RangeRule.Refuse, out double value);
         Assert.Equal(Status.Ok, OxygenUncertainty.MilligramsPerLitre(
-            OxygenEquation.BensonKrause1984, 15.0, 0.0, 1013.25, uT, 0.0, uP, RangeRule.Refuse, out double combined));
+            SolubilityEquation.BensonKrause1984, 15.0, 0.0, 1013.25, uT, 0.0, uP, RangeRule.Refuse, out double combined));
         Assert.Equal(percent, Math.Round(100.0 * combined / value, 2));
     }
 
@@ -72,7 +72,7 @@ public class OxygenUncertaintyTests(ITestOutputHelper output)
     [InlineData(40.0, 0.002)]
     public void Equation_GoesFromFreshToSaline(double salinity, double relative)
     {
-        foreach (OxygenEquation equation in Enum.GetValues<OxygenEquation>())
+        foreach (SolubilityEquation equation in Enum.GetValues<SolubilityEquation>())
         {
             Assert.Equal(Status.Ok, OxygenUncertainty.EquationRelative(equation, salinity, RangeRule.Refuse, out double value));
             Assert.Equal(relative, value, 1.0e-15);
@@ -83,7 +83,7 @@ public class OxygenUncertaintyTests(ITestOutputHelper output)
     public void NegativeUncertainty_IsRefusedEvenWhenExtrapolating()
     {
         Assert.Equal(Status.UncertaintyBelowRange, OxygenUncertainty.MilligramsPerLitre(
-            OxygenEquation.BensonKrause1984, 15.0, 0.0, 1000.0, 0.1, -0.1, 1.0, RangeRule.Extrapolate, out double value));
+            SolubilityEquation.BensonKrause1984, 15.0, 0.0, 1000.0, 0.1, -0.1, 1.0, RangeRule.Extrapolate, out double value));
         Assert.True(double.IsNaN(value));
         Assert.Equal(Status.UncertaintyNotFinite, OxygenUncertainty.PartialPressure(
             15.0, 1000.0, 0.1, double.NaN, RangeRule.Extrapolate, out value));

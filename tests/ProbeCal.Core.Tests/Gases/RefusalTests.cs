@@ -134,7 +134,7 @@ public class RefusalTests
     [InlineData(-1)]
     public void UnknownEquation_IsRefusedUnderEveryRule(int number)
     {
-        OxygenEquation equation = (OxygenEquation)number;
+        SolubilityEquation equation = (SolubilityEquation)number;
         foreach (RangeRule rule in Enum.GetValues<RangeRule>())
         {
             Assert.Equal(Status.EquationUnknown, OxygenEquilibrium.MilligramsPerLitre(equation, 10.0, 0.0, 1000.0, rule, out double a));
@@ -149,10 +149,10 @@ public class RefusalTests
     public void Amounts_AreLimitedByPureOxygen()
     {
         Assert.Equal(Status.ConcentrationAboveRange, OxygenEquilibrium.PartialPressureFromConcentration(
-            OxygenEquation.BensonKrause1984, 20.0, 0.0, 1000.0, 60.0, RangeRule.Refuse, out double refused));
+            SolubilityEquation.BensonKrause1984, 20.0, 0.0, 1000.0, 60.0, RangeRule.Refuse, out double refused));
         Assert.True(double.IsNaN(refused));
         Assert.Equal(Status.ConcentrationAboveRange, OxygenEquilibrium.PartialPressureFromConcentration(
-            OxygenEquation.BensonKrause1984, 20.0, 0.0, 1000.0, 60.0, RangeRule.Extrapolate, out double flagged));
+            SolubilityEquation.BensonKrause1984, 20.0, 0.0, 1000.0, 60.0, RangeRule.Extrapolate, out double flagged));
         Assert.InRange(flagged, 1200.0, 1500.0);
         Assert.Equal(Status.SaturationAboveRange, ProbeCal.Saturation.PartialPressureFromPercentLocal(600.0, 20.0, 1000.0, RangeRule.Refuse, out refused));
         Assert.True(double.IsNaN(refused));

@@ -11,7 +11,7 @@ public class ThrowingTests
     [Fact]
     public void Twins_ReturnTheValueOfTheFunction()
     {
-        foreach (OxygenEquation equation in Enum.GetValues<OxygenEquation>())
+        foreach (SolubilityEquation equation in Enum.GetValues<SolubilityEquation>())
         {
             OxygenEquilibrium.MilligramsPerLitre(equation, 12.0, 5.0, 950.0, RangeRule.Refuse, out double value);
             Assert.Equal(value, OxygenOrThrow.MilligramsPerLitre(equation, 12.0, 5.0, 950.0));
@@ -57,13 +57,13 @@ public class ThrowingTests
         {
             Thread.CurrentThread.CurrentCulture = CultureInfo.GetCultureInfo("de-DE");
             Refused(Status.TemperatureAboveRange, "Temperature 40.5 is above the range; allowed: 0 to 40 °C, salinity 0 to 40, total pressure 506.625 to 1114.575 hPa, oxygen at most 1114.575 hPa",
-                () => OxygenOrThrow.MilligramsPerLitre(OxygenEquation.BensonKrause1984, 40.5, 0.0, 1000.0));
+                () => OxygenOrThrow.MilligramsPerLitre(SolubilityEquation.BensonKrause1984, 40.5, 0.0, 1000.0));
             Refused(Status.SalinityBelowRange, "Salinity -1 is below the range; allowed: freezing point or -2 to 40 °C, salinity 0 to 42, total pressure 506.625 to 1114.575 hPa, oxygen at most 1114.575 hPa",
                 () => OxygenOrThrow.MicromolesPerKilogram(10.0, -1.0, 1000.0));
             Refused(Status.PressureNotFinite, "Pressure NaN is not a finite number; allowed: -2 to 40 °C, total pressure 506.625 to 1114.575 hPa, oxygen at most 1114.575 hPa",
                 () => OxygenOrThrow.PartialPressure(10.0, double.NaN));
             Refused(Status.EquationUnknown, "Equation 7 is not known; allowed: 1 (BensonKrause1984) or 2 (GarciaGordon1992)",
-                () => OxygenOrThrow.MilligramsPerLitre((OxygenEquation)7, 10.0, 0.0, 1000.0));
+                () => OxygenOrThrow.MilligramsPerLitre((SolubilityEquation)7, 10.0, 0.0, 1000.0));
             Refused(Status.AltitudeAboveRange, "Altitude 20000 is above the range; allowed: -610 to 11000 m, pressure above 0 hPa",
                 () => WaterOrThrow.StandardPressure(20000.0));
             Refused(Status.ConductanceBelowRange, "Conductance -0.5 is below the range; allowed: 0 to 59000 µS/cm",
@@ -78,8 +78,8 @@ public class ThrowingTests
     [Fact]
     public void EveryTwin_Refuses()
     {
-        Refused(Status.PartialPressureAboveRange, null, () => OxygenOrThrow.ConcentrationFromPartialPressure(OxygenEquation.BensonKrause1984, 10.0, 0.0, 1000.0, 2000.0));
-        Refused(Status.ConcentrationNotFinite, null, () => OxygenOrThrow.PartialPressureFromConcentration(OxygenEquation.BensonKrause1984, 10.0, 0.0, 1000.0, double.NaN));
+        Refused(Status.PartialPressureAboveRange, null, () => OxygenOrThrow.ConcentrationFromPartialPressure(SolubilityEquation.BensonKrause1984, 10.0, 0.0, 1000.0, 2000.0));
+        Refused(Status.ConcentrationNotFinite, null, () => OxygenOrThrow.PartialPressureFromConcentration(SolubilityEquation.BensonKrause1984, 10.0, 0.0, 1000.0, double.NaN));
         Refused(Status.PressureBelowRange, null, () => OxygenOrThrow.PercentLocal(150.0, 10.0, 1.0));
         Refused(Status.PartialPressureNotFinite, null, () => OxygenOrThrow.PercentOneAtmosphere(double.NaN, 10.0));
         Refused(Status.CoefficientBelowRange, null, () => OxygenOrThrow.HenryMolesPerLitre(0.0, 100.0));

@@ -52,7 +52,7 @@ public class TradeFactTests(ITestOutputHelper output)
     public void OxygenUnderOneAtmosphere_DeviationOfTheDefaultEquation()
     {
         Assert.Equal(Status.Ok, OxygenEquilibrium.ConcentrationFromPartialPressure(
-            OxygenEquation.BensonKrause1984, 25.0, 0.0, 1013.25, 1013.25, RangeRule.Refuse, out double milligramsPerLitre));
+            SolubilityEquation.BensonKrause1984, 25.0, 0.0, 1013.25, 1013.25, RangeRule.Refuse, out double milligramsPerLitre));
         double ratio = milligramsPerLitre / 1000.0 / PrintedGramsPerLitre;
         double overProduct = milligramsPerLitre / 1000.0 / GramsPerLitre(RoundedOxygenConstant, OxygenUnits.GramsPerMole);
         output.WriteLine(string.Create(CultureInfo.InvariantCulture, $"{milligramsPerLitre:F3} mg/L, {100.0 * (ratio - 1.0):F2} % and {100.0 * (overProduct - 1.0):F2} %"));

@@ -5,7 +5,7 @@ namespace ProbeCal.Core.Tests.Probes;
 
 public class MeterDisplayTests
 {
-    private const OxygenEquation Equation = OxygenEquation.BensonKrause1984;
+    private const SolubilityEquation Equation = SolubilityEquation.BensonKrause1984;
 
     // 20.0 °C, 750 mmHg: 8.97 mg/L in fresh water and 8.73 at 8,000 µS/cm; uncompensated 7.50 is 83.6 % (USGS 2020, TM 9-A6.2).
     [Fact]

@@ -46,7 +46,7 @@ internal static class Bench
 
     internal static ReadingConditions Conditions(
         double signalUncertainty = 0.0, bool sameThermometer = true, double offset = 0.0, double temperature = 0.0,
-        double pressure = 0.0, double salinity = 0.0, double stirring = 0.0, OxygenEquation equation = OxygenEquation.BensonKrause1984)
+        double pressure = 0.0, double salinity = 0.0, double stirring = 0.0, SolubilityEquation equation = SolubilityEquation.BensonKrause1984)
     {
         return new ReadingConditions(
             equation, signalUncertainty, sameThermometer, offset, temperature, pressure, salinity, Stirring.Stirred, 1.0, stirring);

@@ -30,7 +30,7 @@ public class ClosedLoopTests
 
         Assert.Equal(truth, reading.Value(ReadingQuantity.PartialPressure), 10);
         OxygenEquilibrium.ConcentrationFromPartialPressure(
-            OxygenEquation.BensonKrause1984, temperature, salinity, 1000.0, truth, RangeRule.Refuse, out double milligrams);
+            SolubilityEquation.BensonKrause1984, temperature, salinity, 1000.0, truth, RangeRule.Refuse, out double milligrams);
         Assert.Equal(milligrams, reading.Value(ReadingQuantity.MilligramsPerLitre), 11);
         Assert.Equal(milligrams * 1000.0 / 31.9988, reading.Value(ReadingQuantity.MicromolesPerLitre), 9);
         Assert.Equal(100.0 * truth / Bench.Air(temperature, 1000.0), reading.Value(ReadingQuantity.PercentLocal), 10);

@@ -141,7 +141,7 @@ public class CorrectionTests
         double raw = Bench.Signal(Bench.Probe(), Bench.Slope, Bench.Zero, 1.0, 10.0, 1013.25, Bench.Air(10.0, 1013.25));
         var reading = new Reading();
         Correction.Correct(
-            calibration, Bench.Conditions(equation: OxygenEquation.GarciaGordon1992), raw, 10.0, 1013.25, 35.0, RangeRule.Refuse, reading);
+            calibration, Bench.Conditions(equation: SolubilityEquation.GarciaGordon1992), raw, 10.0, 1013.25, 35.0, RangeRule.Refuse, reading);
         GarciaGordon1992.MicromolesPerKilogram(10.0, 35.0, 1013.25, RangeRule.Refuse, out double expected);
         Assert.Equal(1.0, reading.Value(ReadingQuantity.MicromolesPerKilogram) / expected, 12);
     }
@@ -178,7 +178,7 @@ public class CorrectionTests
 
     private static ReadingConditions Water(Stirring stirring)
     {
-        return new ReadingConditions(OxygenEquation.BensonKrause1984, 0.0, true, 0.0, 0.0, 0.0, 0.0, stirring, 1.0, 0.0);
+        return new ReadingConditions(SolubilityEquation.BensonKrause1984, 0.0, true, 0.0, 0.0, 0.0, 0.0, stirring, 1.0, 0.0);
     }
 
     private static ProbeCalibration Calibration()

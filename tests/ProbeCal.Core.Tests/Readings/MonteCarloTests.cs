@@ -100,7 +100,7 @@ public class MonteCarloTests
             "meter in mg/L" => new SimulatedChain { Meter = MeterScale.MilligramsPerLitre, UOffset = 0.3 },
             "meter in % local" => new SimulatedChain { Meter = MeterScale.PercentLocal, UOffset = 0.3 },
             "meter set to a temperature" => new SimulatedChain { Meter = MeterScale.MilligramsPerLitre, TemperatureSet = 15.0, UOffset = 0.3, SameThermometer = false },
-            "sea water, Garcia and Gordon" => new SimulatedChain { Equation = OxygenEquation.GarciaGordon1992, Salinity = 34.0, USalinity = 0.5, Temperature = 3.0 },
+            "sea water, Garcia and Gordon" => new SimulatedChain { Equation = SolubilityEquation.GarciaGordon1992, Salinity = 34.0, USalinity = 0.5, Temperature = 3.0 },
             "coefficient dominates" => new SimulatedChain { UCoefficient = 0.002, CalibrationTemperature = 30.0, Temperature = 4.0 },
             _ => throw new ArgumentOutOfRangeException(nameof(scenario)),
         };

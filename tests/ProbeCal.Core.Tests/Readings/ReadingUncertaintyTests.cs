@@ -38,11 +38,11 @@ public class ReadingUncertaintyTests
     private const double UStirring = 0.01;
 
     [Theory]
-    [InlineData(OxygenEquation.BensonKrause1984, TemperatureCoefficientForm.Exponential, 0.031)]
-    [InlineData(OxygenEquation.GarciaGordon1992, TemperatureCoefficientForm.Arrhenius, 22000.0)]
-    [InlineData(OxygenEquation.BensonKrause1984, TemperatureCoefficientForm.Linear, 0.02)]
-    [InlineData(OxygenEquation.BensonKrause1984, TemperatureCoefficientForm.Compound, 0.04)]
-    public void Contributions_AreTheChainsDerivatives(OxygenEquation equation, TemperatureCoefficientForm form, double coefficient)
+    [InlineData(SolubilityEquation.BensonKrause1984, TemperatureCoefficientForm.Exponential, 0.031)]
+    [InlineData(SolubilityEquation.GarciaGordon1992, TemperatureCoefficientForm.Arrhenius, 22000.0)]
+    [InlineData(SolubilityEquation.BensonKrause1984, TemperatureCoefficientForm.Linear, 0.02)]
+    [InlineData(SolubilityEquation.BensonKrause1984, TemperatureCoefficientForm.Compound, 0.04)]
+    public void Contributions_AreTheChainsDerivatives(SolubilityEquation equation, TemperatureCoefficientForm form, double coefficient)
     {
         double uCoefficient = coefficient * (UCoefficient / 0.031);
         foreach (double signal in new[] { 35.0, 0.2 })
@@ -104,8 +104,8 @@ public class ReadingUncertaintyTests
     public void CommonThermometer_AddsLinearly_AnotherOneInSquares()
     {
         // JCGM 100:2008, 5.2.2: inputs that share one error add by their values, not by their squares.
-        Reading same = Chain(OxygenEquation.BensonKrause1984, TemperatureCoefficientForm.Exponential, i => { }, UCoefficient, true);
-        Reading other = Chain(OxygenEquation.BensonKrause1984, TemperatureCoefficientForm.Exponential, i => { }, UCoefficient, false);
+        Reading same = Chain(SolubilityEquation.BensonKrause1984, TemperatureCoefficientForm.Exponential, i => { }, UCoefficient, true);
+        Reading other = Chain(SolubilityEquation.BensonKrause1984, TemperatureCoefficientForm.Exponential, i => { }, UCoefficient, false);
         foreach (ReadingQuantity quantity in Enum.GetValues<ReadingQuantity>())
         {
             double atPoint = same.Contribution(UncertaintySource.TemperatureAtCalibration, quantity) / UTemperatureAtPoint;
@@ -152,7 +152,7 @@ public class ReadingUncertaintyTests
     public void PublishedBudget_IsReproduced_WithTheZeroWhereItActs()
     {
         var meter = new MeterDisplay(
-            MeterScale.MilligramsPerLitre, OxygenEquation.BensonKrause1984, 0.0, double.NaN, double.NaN,
+            MeterScale.MilligramsPerLitre, SolubilityEquation.BensonKrause1984, 0.0, double.NaN, double.NaN,
             TemperatureCoefficientForm.Exponential, 0.03, 25.0, 0.0, 40.0);
         Assert.Equal(Status.Ok, meter.Signal(Bench.Air(20.65, 1013.25), 20.65, 1013.25, RangeRule.Refuse, out double shown));
         Assert.Equal(8.97, shown, 0.02);
@@ -183,7 +183,7 @@ public class ReadingUncertaintyTests
     }
 
     private static Reading Chain(
-        OxygenEquation equation, TemperatureCoefficientForm form, Action<Inputs> change, double uCoefficient, bool sameThermometer)
+        SolubilityEquation equation, TemperatureCoefficientForm form, Action<Inputs> change, double uCoefficient, bool sameThermometer)
     {
         var inputs = new Inputs();
         change(inputs);

@@ -18,7 +18,7 @@ internal sealed class SimulatedChain
     public double TemperatureSet { get; init; } = double.NaN;
     public bool SameThermometer { get; init; } = true;
     public bool ZeroMeasured { get; init; } = true;
-    public OxygenEquation Equation { get; init; } = OxygenEquation.BensonKrause1984;
+    public SolubilityEquation Equation { get; init; } = SolubilityEquation.BensonKrause1984;
     public double CalibrationTemperature { get; init; } = 21.0;
     public double CalibrationPressure { get; init; } = 985.0;
     public double Temperature { get; init; } = 9.0;

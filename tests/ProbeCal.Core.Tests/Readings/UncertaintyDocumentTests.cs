@@ -106,7 +106,7 @@ public class UncertaintyDocumentTests
     private static Reading Read(ProbeCalibration calibration, double raw, bool sameThermometer)
     {
         var conditions = new ReadingConditions(
-            OxygenEquation.BensonKrause1984, 0.05, sameThermometer, UncertaintyDefaults.ThermometerOffsetKelvin,
+            SolubilityEquation.BensonKrause1984, 0.05, sameThermometer, UncertaintyDefaults.ThermometerOffsetKelvin,
             UncertaintyDefaults.TemperatureKelvin, UncertaintyDefaults.BarometerHectopascal, UncertaintyDefaults.Salinity,
             Stirring.Stirred, 1.0, UncertaintyDefaults.StirredRelative);
         var reading = new Reading();

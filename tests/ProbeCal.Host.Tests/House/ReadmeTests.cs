@@ -18,7 +18,7 @@ public sealed class ReadmeTests
         var zero = new ZeroPoint(false, 0.0, 0.37, 18.2, 939.1);                              // assumed, not measured
         Status fitted = ProbeCalibration.Create(probe, point, zero, 0.12, 0.00024, out ProbeCalibration? calibration);
 
-        var conditions = new ReadingConditions(OxygenEquation.BensonKrause1984, 0.05, true, 0.0, 0.03, 0.8, 0.1, Stirring.Stirred, 1.0, 0.0);
+        var conditions = new ReadingConditions(SolubilityEquation.BensonKrause1984, 0.05, true, 0.0, 0.03, 0.8, 0.1, Stirring.Stirred, 1.0, 0.0);
         var reading = new Reading();   // made once, filled for every sample
         Status corrected = Correction.Correct(calibration!, conditions, 45.2, 12.4, 941.0, 0.0, RangeRule.Refuse, reading);
         double oxygen = reading.Value(ReadingQuantity.MilligramsPerLitre);

@@ -58,7 +58,7 @@ internal sealed class Bench : IDisposable
         Readings = CalibrationIds.Live,
         Source = "simulated",
         Simulated = true,
-        Equation = OxygenEquation.BensonKrause1984,
+        Equation = SolubilityEquation.BensonKrause1984,
         Pressure = new EnteredPressure { Source = "barometer:B-12", StandardUncertaintyHectopascal = 0.77 },
         Salinity = new RecordedQuantity { Value = 0, Unit = "1", StandardUncertainty = 0.1, Source = "typed" },
         Altitude = new RecordedQuantity { Value = 640, Unit = "m", StandardUncertainty = 5, Source = "typed" },

@@ -41,7 +41,7 @@ public class ConfigurationFileTests
         Assert.Equal(new InputConfiguration(false, 0.2, "conductivity survey of May", 0.1), read.Salinity);
         Assert.Equal(Stirring.Stirred, read.Stirring);
         Assert.Equal(new CalibrationChoice(false, null), read.Calibration);
-        Assert.Equal(OxygenEquation.BensonKrause1984, read.Equation);
+        Assert.Equal(SolubilityEquation.BensonKrause1984, read.Equation);
         Assert.Equal(
             new BrokerConfiguration
             {

@@ -75,7 +75,7 @@ public class ProbeInWaterTests
         (SimulatedTruth truth, SimulatedInstruments instruments) = Run(settings, 1)[0];
         Assert.Equal(Status.Ok, OxygenEquilibrium.PartialPressure(celsius, hectopascal, RangeRule.Refuse, out double saturated));
         Assert.Equal(saturated, truth.PartialPressureHectopascal, 9);
-        Assert.Equal(Status.Ok, OxygenEquilibrium.MilligramsPerLitre(OxygenEquation.BensonKrause1984, celsius, 0, hectopascal, RangeRule.Refuse, out double milligrams));
+        Assert.Equal(Status.Ok, OxygenEquilibrium.MilligramsPerLitre(SolubilityEquation.BensonKrause1984, celsius, 0, hectopascal, RangeRule.Refuse, out double milligrams));
         Assert.Equal(milligrams, truth.MilligramsPerLitre, 9);
 
         // 22 kJ/mol over 8.314 J/(mol K) is 2646.0 K; the factor at 20 °C against 25 °C is exp(-2646.0 × 5/(293.15 × 298.15)) = 0.8595.

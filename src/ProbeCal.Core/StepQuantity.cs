@@ -1,0 +1,111 @@
+namespace ProbeCal;
+
+/// <summary>
+/// The quantities that a computation passes on its way. A coefficient is a step too: the equation hands out what it used, so that no table of
+/// coefficients stands beside it. How a step is written and computed by hand is the catalogue's matter.
+/// </summary>
+public enum StepQuantity
+{
+    /// <summary>No step.</summary>
+    None = 0,
+
+    /// <summary>Temperature as given, °C (ITS-90).</summary>
+    Celsius = 1,
+    /// <summary>Practical salinity as given.</summary>
+    Salinity = 2,
+    /// <summary>Total pressure as given, hPa.</summary>
+    PressureHectopascal = 3,
+    /// <summary>Mole fraction of the gas in the dry gas phase as given.</summary>
+    MoleFraction = 4,
+    /// <summary>Relative humidity of the gas phase as given, %.</summary>
+    HumidityPercent = 5,
+    /// <summary>Partial pressure of the gas as given, hPa.</summary>
+    GivenPartialPressureHectopascal = 6,
+    /// <summary>Concentration as given, mg/L.</summary>
+    GivenMilligramsPerLitre = 7,
+
+    /// <summary>Temperature on IPTS-68, °C.</summary>
+    CelsiusIpts68 = 10,
+    /// <summary>Absolute temperature on the scale of the equation, K.</summary>
+    Kelvin = 11,
+    /// <summary>1/T, 1/K.</summary>
+    ReciprocalKelvin = 12,
+    /// <summary>T/100 K.</summary>
+    HundredKelvin = 13,
+    /// <summary>ln[(298.15 − t)/(273.15 + t)].</summary>
+    ScaledTemperature = 14,
+    /// <summary>The fresh-water part of ln C.</summary>
+    FreshTerm = 15,
+    /// <summary>The part of ln C that salinity adds.</summary>
+    SaltTerm = 16,
+    /// <summary>Natural logarithm of the equation's value.</summary>
+    LogarithmOfEquation = 17,
+    /// <summary>The equation's value in its own unit.</summary>
+    EquationValue = 18,
+
+    /// <summary>Density of the water, kg/m³.</summary>
+    Density = 20,
+    /// <summary>Molar mass of the gas, g/mol.</summary>
+    GramsPerMole = 21,
+    /// <summary>Molar volume of the gas at 0 °C and 1 atm, L/mol.</summary>
+    LitresPerMole = 22,
+    /// <summary>Concentration at the reference of the equation, mg/L.</summary>
+    ReferenceMilligramsPerLitre = 23,
+    /// <summary>Solubility, mg/L per hPa of the gas.</summary>
+    Solubility = 24,
+    /// <summary>Dry-air mole fraction that the equation is tied to.</summary>
+    ReferenceMoleFraction = 25,
+
+    /// <summary>Total pressure, atm.</summary>
+    Atmospheres = 30,
+    /// <summary>Vapour pressure over the water, atm.</summary>
+    VapourAtmospheres = 31,
+    /// <summary>Vapour pressure over the water, hPa.</summary>
+    VapourHectopascal = 32,
+    /// <summary>The virial term of oxygen, 1/atm.</summary>
+    Theta = 33,
+    /// <summary>Pressure factor on the value at 1 atm.</summary>
+    PressureFactor = 34,
+    /// <summary>Second virial coefficient of the gas, cm³/mol.</summary>
+    SecondVirial = 35,
+    /// <summary>Cross-virial term δ, cm³/mol.</summary>
+    CrossVirial = 36,
+    /// <summary>Fugacity coefficient.</summary>
+    FugacityCoefficient = 37,
+    /// <summary>Poynting factor: what pressure does to the dissolved gas above 1.1 atm.</summary>
+    PoyntingFactor = 38,
+    /// <summary>Fugacity of the gas, hPa.</summary>
+    FugacityHectopascal = 39,
+    /// <summary>Partial molar volume of the dissolved gas, cm³/mol.</summary>
+    PartialMolarVolume = 40,
+
+    /// <summary>Partial pressure of the gas, hPa.</summary>
+    PartialPressureHectopascal = 50,
+    /// <summary>Concentration, mg/L.</summary>
+    MilligramsPerLitre = 51,
+    /// <summary>Saturation against water in equilibrium with air under the local pressure, %.</summary>
+    PercentLocal = 52,
+
+    /// <summary>Coefficient A0 of the equation. A1 to A5 follow.</summary>
+    CoefficientA0 = 100,
+    /// <summary>Coefficient A1.</summary>
+    CoefficientA1 = 101,
+    /// <summary>Coefficient A2.</summary>
+    CoefficientA2 = 102,
+    /// <summary>Coefficient A3.</summary>
+    CoefficientA3 = 103,
+    /// <summary>Coefficient A4.</summary>
+    CoefficientA4 = 104,
+    /// <summary>Coefficient A5.</summary>
+    CoefficientA5 = 105,
+    /// <summary>Coefficient B0 of the salinity term. B1 to B3 follow.</summary>
+    CoefficientB0 = 110,
+    /// <summary>Coefficient B1.</summary>
+    CoefficientB1 = 111,
+    /// <summary>Coefficient B2.</summary>
+    CoefficientB2 = 112,
+    /// <summary>Coefficient B3.</summary>
+    CoefficientB3 = 113,
+    /// <summary>Coefficient C0 (or C1) of the squared salinity.</summary>
+    CoefficientC0 = 120,
+}
