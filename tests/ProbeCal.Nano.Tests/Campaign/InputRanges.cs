@@ -15,8 +15,13 @@ internal static class InputRanges
     private static readonly (string Pattern, double Lowest, double Highest)[] Rows =
     [
         ("[uU]ncertainty", 0.0, 0.5),
-        ("^lowestCelsius$", -5.0, 5.0),
-        ("^highestCelsius$", 30.0, 50.0),
+        ("^(lowest|first)Celsius$", -5.0, 5.0),
+        ("^(highest|last)Celsius$", 30.0, 50.0),
+        ("^firstSalinity$", 0.0, 5.0),
+        ("^lastSalinity$", 30.0, 42.0),
+        ("^firstHectopascal$", 500.0, 700.0),
+        ("^lastHectopascal$", 900.0, 1200.0),
+        ("^columns$", 1.0, 8.0),
         ("[cC]elsius$", 0.0, 40.0),
         ("[sS]alinity", 0.0, 42.0),
         ("^partialPressure|^reference.*Hectopascal$|^oxygen.*Hectopascal$", 0.0, 250.0),
