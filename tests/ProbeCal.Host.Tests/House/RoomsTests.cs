@@ -53,6 +53,7 @@ public class RoomsTests
         ["Entry"] = [],
         ["Equilibrium"] = ["Entry"],
         ["Storage"] = ["Entry"],
+        ["Uncertainty"] = [],
         ["Simulation"] = ["Entry", "Sources"],
         ["Sources"] = ["Entry", "Simulation"],
         ["CalibrationLog"] = ["Entry", "Storage"],
