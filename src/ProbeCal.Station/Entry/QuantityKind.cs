@@ -79,8 +79,46 @@ public sealed class QuantityKind
         "concentration", "a", "280umol/L",
         new QuantityUnit("µmol/L", 1, 1, 0, "umol/L", "umol/l", "µmol/l", "μmol/L", "μmol/l", "mmol/m3", "mmol/m³"),
         new QuantityUnit("nmol/L", 1, 1000, 0, "nmol/l"),
+        new QuantityUnit("pmol/L", 1, 1e6, 0, "pmol/l"),
         new QuantityUnit("mmol/L", 1000, 1, 0, "mmol/l"),
         new QuantityUnit("mol/L", 1e6, 1, 0, "mol/l"));
+
+    /// <summary>Amount per kilogram of water, canonical µmol/kg. The unit must be given.</summary>
+    public static QuantityKind AmountPerKilogram { get; } = WithUnit(
+        "concentration", "a", "280umol/kg",
+        new QuantityUnit("µmol/kg", 1, 1, 0, "umol/kg", "μmol/kg"),
+        new QuantityUnit("nmol/kg", 1, 1000, 0),
+        new QuantityUnit("pmol/kg", 1, 1e6, 0),
+        new QuantityUnit("mmol/kg", 1000, 1, 0),
+        new QuantityUnit("mol/kg", 1e6, 1, 0));
+
+    /// <summary>Volume of the gas (0 °C, 1 atm) per litre of water, canonical mL/L. The unit must be given.</summary>
+    public static QuantityKind VolumeConcentration { get; } = WithUnit(
+        "concentration", "a", "6.3mL/L",
+        new QuantityUnit("mL/L", 1, 1, 0, "ml/L", "ml/l", "cm3/dm3"),
+        new QuantityUnit("µL/L", 1, 1000, 0, "uL/L", "ul/L", "ul/l", "μL/L"));
+
+    /// <summary>Mole fraction, canonical mol/mol. A bare number is the fraction itself: 0.21. Parts per trillion are written pmol/mol, for ppt also means parts per thousand.</summary>
+    public static QuantityKind MoleFraction { get; } = WithBare(
+        "mole fraction", "a", "420ppm or 21%",
+        new QuantityUnit("", 1, 1, 0, "mol/mol"),
+        new QuantityUnit("%", 1, 100, 0, "percent"),
+        new QuantityUnit("ppm", 1, 1e6, 0, "umol/mol", "µmol/mol", "μmol/mol"),
+        new QuantityUnit("ppb", 1, 1e9, 0, "nmol/mol"),
+        new QuantityUnit("pmol/mol", 1, 1e12, 0));
+
+    /// <summary>Electrical conductivity, canonical mS/cm. The unit must be given: mS and µS differ a thousandfold.</summary>
+    public static QuantityKind Conductivity { get; } = WithUnit(
+        "conductivity", "a", "42mS/cm or 500uS/cm",
+        new QuantityUnit("mS/cm", 1, 1, 0, "ms/cm", "dS/m"),
+        new QuantityUnit("µS/cm", 1, 1000, 0, "uS/cm", "us/cm", "μS/cm"),
+        new QuantityUnit("mS/m", 1, 100, 0),
+        new QuantityUnit("S/m", 10, 1, 0));
+
+    /// <summary>Chlorinity, canonical g/kg. A bare number is g/kg.</summary>
+    public static QuantityKind Chlorinity { get; } = WithBare(
+        "chlorinity", "a", "19.4",
+        new QuantityUnit("g/kg", 1, 1, 0, "‰"));
 
     /// <summary>A share in percent, canonical %. The sign must be given, or else 1.5 could mean 150 %.</summary>
     public static QuantityKind Percent { get; } = WithUnit(
