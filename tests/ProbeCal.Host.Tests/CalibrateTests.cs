@@ -142,7 +142,7 @@ public sealed class CalibrateTests : IDisposable
     [InlineData("--limit", "0.2", "carries its unit")]
     [InlineData("--slope-window", "0.6..0.5", "runs from low to high")]
     [InlineData("--membrane-installed", "1.5.2026", "write the day as 2026-05-01")]
-    [InlineData("--equation", "weiss", "--equation 'weiss': no such equation")]
+    [InlineData("--equation", "weiss", "--equation weiss: there is no such equation")]
     [InlineData("--source", "serail:/dev/x", "did you mean serial")]
     [InlineData("--line", "{signal", "--line")]
     [InlineData("--confirm", "nothing=because", "there is no guard 'nothing'")]

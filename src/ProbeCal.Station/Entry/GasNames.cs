@@ -1,39 +1,15 @@
-using System;
 using System.Collections.Generic;
 using System.Linq;
 
 namespace ProbeCal.Station.Entry;
 
-/// <summary>How a gas is called in commands, files and messages: by its formula, or by its English name.</summary>
+/// <summary>How a gas is called in commands, files, records and messages: by its formula, or by its English name. The names are the catalogue's.</summary>
 public static class GasNames
 {
-    private static readonly (Gas Gas, string Formula, string English)[] Known =
-    [
-        (Gas.Oxygen, "O2", "oxygen"),
-        (Gas.Nitrogen, "N2", "nitrogen"),
-        (Gas.Argon, "Ar", "argon"),
-        (Gas.Neon, "Ne", "neon"),
-        (Gas.Helium, "He", "helium"),
-        (Gas.Krypton, "Kr", "krypton"),
-        (Gas.Xenon, "Xe", "xenon"),
-        (Gas.CarbonDioxide, "CO2", "carbon dioxide"),
-        (Gas.NitrousOxide, "N2O", "nitrous oxide"),
-        (Gas.Methane, "CH4", "methane"),
-        (Gas.CarbonMonoxide, "CO", "carbon monoxide"),
-        (Gas.Hydrogen, "H2", "hydrogen"),
-        (Gas.SulfurHexafluoride, "SF6", "sulfur hexafluoride"),
-        (Gas.Cfc11, "CFC-11", "trichlorofluoromethane"),
-        (Gas.Cfc12, "CFC-12", "dichlorodifluoromethane"),
-        (Gas.HydrogenSulfide, "H2S", "hydrogen sulfide"),
-        (Gas.Ozone, "O3", "ozone"),
-        (Gas.Ammonia, "NH3", "ammonia"),
-        (Gas.Ethane, "C2H6", "ethane"),
-    ];
-
-    /// <summary>The formula: <c>O2</c>.</summary>
+    /// <summary>The name of a gas: its formula, or CFC-11 and CFC-12.</summary>
     public static string NameOf(Gas gas)
     {
-        return Known.First(known => known.Gas == gas).Formula;
+        return Catalogue.Gas(gas).Symbol;
     }
 
     /// <summary>The gas of a formula or an English name, whatever the case.</summary>
@@ -43,15 +19,18 @@ public static class GasNames
     public static Gas Parse(string what, string name)
     {
         string given = name.Trim();
-        foreach ((Gas gas, string formula, string english) in Known)
+        if (Catalogue.Gases.FirstOrDefault(gas => gas.IsCalled(given)) is GasEntry found)
         {
-            if (string.Equals(formula, given, StringComparison.OrdinalIgnoreCase) || string.Equals(english, given, StringComparison.OrdinalIgnoreCase))
-            {
-                return gas;
-            }
+            return found.Gas;
         }
 
-        IEnumerable<string> names = Known.Select(static known => known.English).Concat(Known.Select(static known => known.Formula));
-        throw new InputException($"{what} '{Wrong.Shown(given)}': no such gas{NearestName.DidYouMean(given, names)}; there are {string.Join(", ", Known.Select(static known => known.Formula))}");
+        string symbols = string.Join(", ", Catalogue.Gases.Select(static gas => gas.Symbol));
+        throw Wrong.Input(what, given, "no such gas is known here" + NearestName.DidYouMean(given, Spellings()) + "; there are " + symbols);
+    }
+
+    /// <summary>English names first: a formula of two or three letters is near to anything.</summary>
+    private static IEnumerable<string> Spellings()
+    {
+        return Catalogue.Gases.Select(static gas => gas.Name).Concat(Catalogue.Gases.Select(static gas => gas.Symbol));
     }
 }

@@ -108,7 +108,7 @@ public sealed record EquilibriumEntry
         return new EquilibriumCase
         {
             Gas = gas,
-            Equation = Equation is null ? GasDefaults.Equation(gas) : EquationNames.Parse("--equation", Equation),
+            Equation = EquationNames.ParseOrDefault("--equation", Equation, gas),
             EquationAssumed = Equation is null,
             Temperature = temperature,
             Water = water,
