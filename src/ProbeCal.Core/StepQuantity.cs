@@ -43,6 +43,9 @@ public enum StepQuantity
     /// <summary>The equation's value in its own unit.</summary>
     EquationValue = 18,
 
+    /// <summary>T over the critical temperature of water, 647.096 K.</summary>
+    ReducedTemperature = 19,
+
     /// <summary>Density of the water, kg/m³.</summary>
     Density = 20,
     /// <summary>Molar mass of the gas, g/mol.</summary>
@@ -55,6 +58,13 @@ public enum StepQuantity
     Solubility = 24,
     /// <summary>Dry-air mole fraction that the equation is tied to.</summary>
     ReferenceMoleFraction = 25,
+
+    /// <summary>Mass of one mL of the gas at 0 °C and 1 atm, mg.</summary>
+    MilligramsPerMillilitre = 26,
+    /// <summary>Power of ten and unit factor between the equation's unit and mg/L, apart from molar mass or gas density, and water density.</summary>
+    UnitFactor = 27,
+    /// <summary>mg/L per hPa of fugacity (of partial pressure where the equation knows no fugacity), up to 1.1 atm.</summary>
+    ReferenceSolubility = 28,
 
     /// <summary>Total pressure, atm.</summary>
     Atmospheres = 30,
@@ -78,6 +88,23 @@ public enum StepQuantity
     FugacityHectopascal = 39,
     /// <summary>Partial molar volume of the dissolved gas, cm³/mol.</summary>
     PartialMolarVolume = 40,
+
+    /// <summary>Vapour pressure of pure water within an equation, Pa (Wagner and Pruss 1993).</summary>
+    PureWaterVapourPascal = 41,
+    /// <summary>Absolute temperature as given (ITS-90) in the fugacity and Poynting terms, K.</summary>
+    GasKelvin = 42,
+    /// <summary>Fugacity coefficient at 1 atm, in which a moist-air equation is contained.</summary>
+    ReferenceFugacityCoefficient = 43,
+    /// <summary>Mole fraction of the gas in the gas phase with its vapour: partial over total pressure.</summary>
+    WetMoleFraction = 44,
+    /// <summary>Critical temperature of the gas, K.</summary>
+    CriticalKelvin = 45,
+    /// <summary>Critical pressure of the gas, atm.</summary>
+    CriticalAtmospheres = 46,
+    /// <summary>Acentric factor of the gas.</summary>
+    AcentricFactor = 47,
+    /// <summary>Total pressure above 1.1 atm, atm.</summary>
+    ExcessAtmospheres = 48,
 
     /// <summary>Partial pressure of the gas, hPa.</summary>
     PartialPressureHectopascal = 50,
@@ -108,4 +135,23 @@ public enum StepQuantity
     CoefficientB3 = 113,
     /// <summary>Coefficient C0 (or C1) of the squared salinity.</summary>
     CoefficientC0 = 120,
+
+    /// <summary>Coefficient 0 of the second virial coefficient. 1 to 3 follow.</summary>
+    VirialCoefficient0 = 130,
+    /// <summary>Coefficient 1 of the second virial coefficient.</summary>
+    VirialCoefficient1 = 131,
+    /// <summary>Coefficient 2 of the second virial coefficient.</summary>
+    VirialCoefficient2 = 132,
+    /// <summary>Coefficient 3 of the second virial coefficient.</summary>
+    VirialCoefficient3 = 133,
+    /// <summary>Coefficient 0 of the cross-virial term.</summary>
+    CrossVirialCoefficient0 = 140,
+    /// <summary>Coefficient 1 of the cross-virial term.</summary>
+    CrossVirialCoefficient1 = 141,
+    /// <summary>Coefficient 0 of θ. 1 and 2 follow.</summary>
+    ThetaCoefficient0 = 150,
+    /// <summary>Coefficient 1 of θ.</summary>
+    ThetaCoefficient1 = 151,
+    /// <summary>Coefficient 2 of θ.</summary>
+    ThetaCoefficient2 = 152,
 }

@@ -102,13 +102,16 @@ public static class BensonKrause1984
     }
 
     /// <summary>Eq. 32 at 1 atm, mg/L, without a range; NaN at or below absolute zero.</summary>
-    internal static double OneAtmosphere(double celsius, double salinity)
+    internal static double OneAtmosphere(double celsius, double salinity, CalculationSteps? steps = null)
     {
         double kelvin = celsius + TemperatureScale.KelvinAtZeroCelsius;
         if (kelvin <= 0.0) { return double.NaN; }
         double r = 1.0 / kelvin;
         double fresh = A0 + (r * (A1 + (r * (A2 + (r * (A3 + (r * A4)))))));
-        return Numerics.Exp(fresh - (salinity * (B0 + (r * (B1 + (r * B2))))));
+        double salt = salinity * (B0 + (r * (B1 + (r * B2))));
+        double logarithm = fresh - salt;
+        if (steps != null) { AddSteps(steps, kelvin, r, fresh, -salt, logarithm); }
+        return Numerics.Exp(logarithm);
     }
 
     /// <summary>∂(ln C)/∂T and ∂(ln C)/∂S at 1 atm, without a range.</summary>
@@ -123,5 +126,22 @@ public static class BensonKrause1984
         double salt = B1 + (2.0 * B2 * r);
         perKelvin = -r * r * (fresh - (salinity * salt));
         perSalinity = -(B0 + (r * (B1 + (r * B2))));
+    }
+
+    private static void AddSteps(CalculationSteps steps, double kelvin, double r, double fresh, double salt, double logarithm)
+    {
+        steps.Add(StepQuantity.CoefficientA0, A0);
+        steps.Add(StepQuantity.CoefficientA1, A1);
+        steps.Add(StepQuantity.CoefficientA2, A2);
+        steps.Add(StepQuantity.CoefficientA3, A3);
+        steps.Add(StepQuantity.CoefficientA4, A4);
+        steps.Add(StepQuantity.CoefficientB0, B0);
+        steps.Add(StepQuantity.CoefficientB1, B1);
+        steps.Add(StepQuantity.CoefficientB2, B2);
+        steps.Add(StepQuantity.Kelvin, kelvin);
+        steps.Add(StepQuantity.ReciprocalKelvin, r);
+        steps.Add(StepQuantity.FreshTerm, fresh);
+        steps.Add(StepQuantity.SaltTerm, salt);
+        steps.Add(StepQuantity.LogarithmOfEquation, logarithm);
     }
 }

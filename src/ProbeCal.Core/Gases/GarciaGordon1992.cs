@@ -79,21 +79,31 @@ public static class GarciaGordon1992
     internal static Status Check(double celsius, double salinity, double pressureHectopascal)
     {
         Status salinityStatus = InputCheck.Salinity(salinity, HighestSalinity);
-        double lowest = salinityStatus == Status.Ok ? FreezingPoint.Value(salinity) : 0.0;
-        if (lowest < LowestCelsius) { lowest = LowestCelsius; }
+        double lowest = LowestLiquidCelsius(salinity);
         Status status = InputCheck.Graver(InputCheck.Temperature(celsius, lowest, HighestCelsius), salinityStatus);
         return InputCheck.Graver(
             status,
             InputCheck.Pressure(pressureHectopascal, BensonKrause1984.LowestHectopascal, BensonKrause1984.HighestHectopascal));
     }
 
+    /// <summary>The freezing point, not below −2 °C; 0 °C for a salinity outside the range.</summary>
+    internal static double LowestLiquidCelsius(double salinity)
+    {
+        if (InputCheck.Salinity(salinity, HighestSalinity) != Status.Ok) { return 0.0; }
+        double lowest = FreezingPoint.Value(salinity);
+        return lowest < LowestCelsius ? LowestCelsius : lowest;
+    }
+
     /// <summary>The fit at 1 atm, µmol/kg, without a range; NaN where the scaled temperature does not exist.</summary>
-    internal static double OneAtmosphere(double celsius, double salinity)
+    internal static double OneAtmosphere(double celsius, double salinity, CalculationSteps? steps = null)
     {
         double ts = ScaledTemperature(celsius);
         double fresh = A0 + (ts * (A1 + (ts * (A2 + (ts * (A3 + (ts * (A4 + (ts * A5)))))))));
-        double salt = B0 + (ts * (B1 + (ts * (B2 + (ts * B3)))));
-        return Numerics.Exp(fresh + (salinity * (salt + (C0 * salinity))));
+        double saltSlope = B0 + (ts * (B1 + (ts * (B2 + (ts * B3)))));
+        double salt = salinity * (saltSlope + (C0 * salinity));
+        double logarithm = fresh + salt;
+        if (steps != null) { AddSteps(steps, TemperatureScale.Ipts68FromIts90(celsius), ts, fresh, salt, logarithm); }
+        return Numerics.Exp(logarithm);
     }
 
     /// <summary>∂(ln C)/∂T and ∂(ln C)/∂S at 1 atm, without a range.</summary>
@@ -120,5 +130,25 @@ public static class GarciaGordon1992
         double kelvin = TemperatureScale.KelvinAtZeroCelsius + t;
         if (above <= 0.0 || kelvin <= 0.0) { return double.NaN; }
         return Numerics.Ln(above / kelvin);
+    }
+
+    private static void AddSteps(CalculationSteps steps, double t, double ts, double fresh, double salt, double logarithm)
+    {
+        steps.Add(StepQuantity.CelsiusIpts68, t);
+        steps.Add(StepQuantity.CoefficientA0, A0);
+        steps.Add(StepQuantity.CoefficientA1, A1);
+        steps.Add(StepQuantity.CoefficientA2, A2);
+        steps.Add(StepQuantity.CoefficientA3, A3);
+        steps.Add(StepQuantity.CoefficientA4, A4);
+        steps.Add(StepQuantity.CoefficientA5, A5);
+        steps.Add(StepQuantity.CoefficientB0, B0);
+        steps.Add(StepQuantity.CoefficientB1, B1);
+        steps.Add(StepQuantity.CoefficientB2, B2);
+        steps.Add(StepQuantity.CoefficientB3, B3);
+        steps.Add(StepQuantity.CoefficientC0, C0);
+        steps.Add(StepQuantity.ScaledTemperature, ts);
+        steps.Add(StepQuantity.FreshTerm, fresh);
+        steps.Add(StepQuantity.SaltTerm, salt);
+        steps.Add(StepQuantity.LogarithmOfEquation, logarithm);
     }
 }

@@ -62,4 +62,25 @@ internal static class HundredKelvinForm
 
         return logarithm;
     }
+
+    /// <summary>The same with a temperature on ITS-90 for an equation on IPTS-68; the slope is per kelvin of ITS-90.</summary>
+    internal static double LogarithmIpts68(
+        double celsius, double salinity,
+        double a1, double a2, double a3, double a4, bool squared, double b1, double b2, double b3, double c1,
+        CalculationSteps? steps, out double perKelvin, out double perSalinity)
+    {
+        double t = TemperatureScale.Ipts68FromIts90(celsius);
+        steps?.Add(StepQuantity.CelsiusIpts68, t);
+        double logarithm = Logarithm(t, salinity, a1, a2, a3, a4, squared, b1, b2, b3, c1, steps, out perKelvin, out perSalinity);
+        perKelvin *= TemperatureScale.Ipts68PerIts90;
+        return logarithm;
+    }
+
+    /// <summary>What an equation gives for a gas that it does not cover.</summary>
+    internal static double None(out double perKelvin, out double perSalinity)
+    {
+        perKelvin = double.NaN;
+        perSalinity = double.NaN;
+        return double.NaN;
+    }
 }

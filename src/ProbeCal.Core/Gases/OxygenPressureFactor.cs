@@ -11,9 +11,18 @@ internal static class OxygenPressureFactor
     private const double Theta2 = 6.436e-8;
 
     /// <summary>θ in 1/atm.</summary>
-    internal static double Theta(double celsius)
+    internal static double Theta(double celsius, CalculationSteps? steps = null)
     {
-        return Theta0 + (celsius * (Theta1 + (celsius * Theta2)));
+        double theta = Theta0 + (celsius * (Theta1 + (celsius * Theta2)));
+        if (steps != null)
+        {
+            steps.Add(StepQuantity.ThetaCoefficient0, Theta0);
+            steps.Add(StepQuantity.ThetaCoefficient1, Theta1);
+            steps.Add(StepQuantity.ThetaCoefficient2, Theta2);
+            steps.Add(StepQuantity.Theta, theta);
+        }
+
+        return theta;
     }
 
     /// <summary>dθ/dT in 1/(atm·K).</summary>

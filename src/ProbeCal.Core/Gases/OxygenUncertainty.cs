@@ -94,7 +94,8 @@ public static class OxygenUncertainty
         return InputCheck.Deliver(Numerics.Sqrt(squares), status, Status.UncertaintyAboveRange, out hectopascal);
     }
 
-    private static double Relative(double salinity)
+    /// <summary>The figure without a range.</summary>
+    internal static double Relative(double salinity)
     {
         return EquationRelativeFresh + ((EquationRelativeSaline - EquationRelativeFresh) * salinity / SalineReference);
     }

@@ -33,14 +33,23 @@ public static class VapourWagnerPruss1993
         hectopascal = double.NaN;
         Status status = InputCheck.Temperature(celsius, LowestCelsius, HighestCelsius);
         if (InputCheck.Refuses(status, rule)) { return status; }
+        hectopascal = InputCheck.FiniteOrNaN(Value(celsius, out _));
+        return status;
+    }
+
+    /// <summary>The formula in hPa with d(ln p)/dT, 1/K, without a range; NaN at or below absolute zero and above the critical point.</summary>
+    internal static double Value(double celsius, out double logPerKelvin)
+    {
+        logPerKelvin = double.NaN;
         double kelvin = celsius + TemperatureScale.KelvinAtZeroCelsius;
-        if (kelvin <= 0.0) { return status; }
+        if (kelvin <= 0.0) { return double.NaN; }
         double v = 1.0 - (kelvin / CriticalKelvin);
         // Above the critical point there is no saturation; the root gives NaN there.
         double root = Numerics.Sqrt(v);
         double v3 = v * v * v;
         double sum = (A1 * v) + (A2 * v * root) + (A3 * v3) + (A4 * v3 * root) + (A5 * v3 * v) + (A6 * v3 * v3 * v * root);
-        hectopascal = InputCheck.FiniteOrNaN(CriticalHectopascal * Numerics.Exp(CriticalKelvin / kelvin * sum));
-        return status;
+        double slope = A1 + (1.5 * A2 * root) + (3.0 * A3 * v * v) + (3.5 * A4 * v * v * root) + (4.0 * A5 * v3) + (7.5 * A6 * v3 * v3 * root);
+        logPerKelvin = -((CriticalKelvin / kelvin * sum) + slope) / kelvin;
+        return CriticalHectopascal * Numerics.Exp(CriticalKelvin / kelvin * sum);
     }
 }
