@@ -111,6 +111,15 @@ internal static class InputCheck
         return Status.Ok;
     }
 
+    /// <summary>A depth or a hydrostatic pressure, from 0 on.</summary>
+    internal static Status Depth(double depth, double highest)
+    {
+        if (NotFinite(depth)) { return Status.DepthNotFinite; }
+        if (depth < 0.0) { return Status.DepthBelowRange; }
+        if (highest < depth) { return Status.DepthAboveRange; }
+        return Status.Ok;
+    }
+
     /// <summary>
     /// The graver of two findings: not finite (or unknown) before out of range, out of range before just outside it, and the first before the second.
     /// </summary>

@@ -113,6 +113,13 @@ public enum StepQuantity
     /// <summary>Saturation against water in equilibrium with air under the local pressure, %.</summary>
     PercentLocal = 52,
 
+    /// <summary>Conductivity over that of sea water of S 35 at 15 °C and the surface.</summary>
+    ConductivityRatio = 60,
+    /// <summary>The conductivity ratio freed of the effects of pressure and temperature on sea water of S 35.</summary>
+    ConductivityRatioAtSurface = 61,
+    /// <summary>Salinity by the scale of 1978 alone, before the low-salinity extension.</summary>
+    PracticalScaleSalinity = 62,
+
     /// <summary>Coefficient A0 of the equation. A1 to A5 follow.</summary>
     CoefficientA0 = 100,
     /// <summary>Coefficient A1.</summary>

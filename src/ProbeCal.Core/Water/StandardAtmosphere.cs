@@ -19,10 +19,10 @@ public static class StandardAtmosphere
     /// <summary>Highest altitude taken, metres above sea level.</summary>
     public const double HighestAltitudeMetres = 11000.0;
 
-    private const double LapseKelvinPerMetre = 0.0065;
-    private const double SeaLevelKelvin = 288.15;
+    internal const double LapseKelvinPerMetre = 0.0065;
+    internal const double SeaLevelKelvin = 288.15;
     // 9.80665 · 0.0289644 / (8.31432 · 0.0065): the constants of the 1976 standard.
-    private const double Exponent = 9.80665 * 0.0289644 / (8.31432 * LapseKelvinPerMetre);
+    internal const double Exponent = 9.80665 * 0.0289644 / (8.31432 * LapseKelvinPerMetre);
     private const double EarthRadiusMetres = 6356766.0;
 
     /// <summary>Standard pressure at an altitude.</summary>
@@ -68,11 +68,23 @@ public static class StandardAtmosphere
     // Inside the range the base lies between 0.75 and 1.02, so the ratio is never zero.
     private static double Ratio(double altitudeMetres)
     {
-        double geopotential = EarthRadiusMetres * altitudeMetres / (EarthRadiusMetres + altitudeMetres);
-        return Numerics.Pow(1.0 - (LapseKelvinPerMetre * geopotential / SeaLevelKelvin), Exponent);
+        return Numerics.Pow(1.0 - (LapseKelvinPerMetre * Geopotential(altitudeMetres) / SeaLevelKelvin), Exponent);
     }
 
-    private static Status CheckAltitude(double metres)
+    /// <summary>Geopotential height in m of an altitude inside the range.</summary>
+    internal static double Geopotential(double altitudeMetres)
+    {
+        return EarthRadiusMetres * altitudeMetres / (EarthRadiusMetres + altitudeMetres);
+    }
+
+    /// <summary>m of geopotential height per m of altitude.</summary>
+    internal static double GeopotentialSlope(double altitudeMetres)
+    {
+        double share = EarthRadiusMetres / (EarthRadiusMetres + altitudeMetres);
+        return share * share;
+    }
+
+    internal static Status CheckAltitude(double metres)
     {
         if (InputCheck.NotFinite(metres)) { return Status.AltitudeNotFinite; }
         if (metres < LowestAltitudeMetres) { return Status.AltitudeBelowRange; }
@@ -80,7 +92,7 @@ public static class StandardAtmosphere
         return Status.Ok;
     }
 
-    private static Status CheckPressure(double hectopascal)
+    internal static Status CheckPressure(double hectopascal)
     {
         if (InputCheck.NotFinite(hectopascal)) { return Status.PressureNotFinite; }
         if (hectopascal <= 0.0) { return Status.PressureBelowRange; }

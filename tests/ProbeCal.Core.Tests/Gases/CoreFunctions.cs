@@ -27,6 +27,13 @@ internal static class CoreFunctions
     private static readonly Input Rho = new(Density, 998.0, None, None);
     private static readonly Input Spread = new(Uncertainty, 0.1, 0.0, None);
 
+    private static readonly Input Boiling = new(Temperature, 15.0, 0.0, 100.0);
+    private static readonly Input SaltCelsius = new(Temperature, 15.0, -2.0, 35.0);
+    private static readonly Input Conductivity = new(Conductance, 21.0, 0.0, None);
+    private static readonly Input Decibar = new(Depth, 120.0, 0.0, 10000.0);
+    private static readonly Input OutdoorCelsius = new(Temperature, 11.0, -80.0, 60.0);
+    private static readonly Input Above = new(Depth, 2100.0, 0.0, 101325.0);
+
     internal static IEnumerable<CoreFunction> All()
     {
         yield return One("VapourBensonKrause1980.Pressure", [Celsius], (double[] x, RangeRule r, out double v) => VapourBensonKrause1980.Pressure(x[0], r, out v));
@@ -35,6 +42,30 @@ internal static class CoreFunctions
         yield return new("DensityEos80.Sensitivities", true, [AirCelsius, SeaSalt], (x, r) => (DensityEos80.Sensitivities(x[0], x[1], r, out double a, out double b), [a, b]));
         yield return One("FreezingPoint.Celsius", [SeaSalt], (double[] x, RangeRule r, out double v) => FreezingPoint.Celsius(x[0], r, out v));
         yield return One("SpecificConductance.Salinity", [new Input(Conductance, 800.0, 0.0, 59000.0)], (double[] x, RangeRule r, out double v) => SpecificConductance.Salinity(x[0], r, out v));
+        yield return One("DensityTanaka2001.Density", [Celsius], (double[] x, RangeRule r, out double v) => DensityTanaka2001.Density(x[0], r, out v));
+        yield return One("DensityKell1975.Density", [new Input(Temperature, 15.0, 0.0, 150.0)], (double[] x, RangeRule r, out double v) => DensityKell1975.Density(x[0], r, out v));
+        yield return One("VapourHardy1998.Pressure", [Boiling], (double[] x, RangeRule r, out double v) => VapourHardy1998.Pressure(x[0], r, out v));
+        yield return One("VapourBuck1981.Pressure", [new Input(Temperature, 15.0, -20.0, 50.0)], (double[] x, RangeRule r, out double v) => VapourBuck1981.Pressure(x[0], r, out v));
+        yield return One("VapourBuck1996.Pressure", [Boiling], (double[] x, RangeRule r, out double v) => VapourBuck1996.Pressure(x[0], r, out v));
+        yield return One("VapourSonntag1990.Pressure", [new Input(Temperature, 15.0, -45.0, 60.0)], (double[] x, RangeRule r, out double v) => VapourSonntag1990.Pressure(x[0], r, out v));
+        yield return One("VapourMurray1967.Pressure", [new Input(Temperature, 15.0, -20.0, 50.0)], (double[] x, RangeRule r, out double v) => VapourMurray1967.Pressure(x[0], r, out v));
+        yield return One("VapourAntoine8111.Pressure", [new Input(Temperature, 15.0, 0.0, 60.0)], (double[] x, RangeRule r, out double v) => VapourAntoine8111.Pressure(x[0], r, out v));
+        yield return One("VapourDickson2007.Pressure", [Celsius, Salt], (double[] x, RangeRule r, out double v) => VapourDickson2007.Pressure(x[0], x[1], r, out v));
+        yield return One("VapourWeissPrice1980.Pressure", [Celsius, Salt], (double[] x, RangeRule r, out double v) => VapourWeissPrice1980.Pressure(x[0], x[1], r, out v));
+        yield return One("VapourGreenCarritt1967.Pressure", [Celsius, Salt], (double[] x, RangeRule r, out double v) => VapourGreenCarritt1967.Pressure(x[0], x[1], r, out v));
+        yield return One("VapourPressure.Hectopascal, WeissPrice1980", [Celsius, Salt], (double[] x, RangeRule r, out double v) => VapourPressure.Hectopascal(VapourEquation.WeissPrice1980, x[0], x[1], r, out v));
+        yield return One("PracticalSalinity.FromConductivity", [Conductivity, SaltCelsius, Decibar], (double[] x, RangeRule r, out double v) => PracticalSalinity.FromConductivity(x[0], x[1], x[2], r, out v));
+        yield return new("PracticalSalinity.Sensitivities", true, [Conductivity, SaltCelsius, Decibar], (x, r) => (PracticalSalinity.Sensitivities(x[0], x[1], x[2], r, out double a, out double b), [a, b]));
+        yield return One("Chlorinity.Salinity", [new Input(Salinity, 8.0, 0.0, 42.0 / 1.80655)], (double[] x, RangeRule r, out double v) => Chlorinity.Salinity(x[0], r, out v));
+        yield return One("ConductivityCompensation.Linear", [new Input(Conductance, 400.0, 0.0, None), Celsius], (double[] x, RangeRule r, out double v) => ConductivityCompensation.Linear(x[0], x[1], r, out v));
+        yield return One("ConductivityCompensation.NaturalWater", [new Input(Conductance, 400.0, 60.0, 1000.0), new Input(Temperature, 15.0, 0.0, 35.0)], (double[] x, RangeRule r, out double v) => ConductivityCompensation.NaturalWater(x[0], x[1], r, out v));
+        yield return Strict("SeaLevelReduction.StandardCelsius", [Altitude], (double[] x, RangeRule r, out double v) => SeaLevelReduction.StandardCelsius(x[0], out v));
+        yield return Strict("SeaLevelReduction.StationPressure", [AnyPressure, Altitude, OutdoorCelsius], (double[] x, RangeRule r, out double v) => SeaLevelReduction.StationPressure(x[0], x[1], x[2], out v));
+        yield return new("SeaLevelReduction.Sensitivities", false, [AnyPressure, Altitude, OutdoorCelsius], (x, r) => (SeaLevelReduction.Sensitivities(x[0], x[1], x[2], out double a, out double b, out double c), [a, b, c]));
+        yield return Strict("SeaLevelReduction.StandardUncertainty", [AnyPressure, Altitude, OutdoorCelsius, Spread, Spread, Spread], (double[] x, RangeRule r, out double v) => SeaLevelReduction.StandardUncertainty(x[0], x[1], x[2], x[3], x[4], x[5], out v));
+        yield return One("HydrostaticPressure.Hectopascal", [new Input(Depth, 12.0, 0.0, 1000.0), Rho], (double[] x, RangeRule r, out double v) => HydrostaticPressure.Hectopascal(x[0], x[1], r, out v));
+        yield return One("Enns1965.Factor", [Celsius, Above], (double[] x, RangeRule r, out double v) => Enns1965.Factor(Gas.Oxygen, x[0], x[1], r, out v));
+        yield return new("Enns1965.Sensitivities", true, [Celsius, Above], (x, r) => (Enns1965.Sensitivities(Gas.Nitrogen, x[0], x[1], r, out double a, out double b), [a, b]));
         yield return Strict("StandardAtmosphere.Pressure", [Altitude], (double[] x, RangeRule r, out double v) => StandardAtmosphere.Pressure(x[0], out v));
         yield return Strict("StandardAtmosphere.ReduceToSeaLevel", [AnyPressure, Altitude], (double[] x, RangeRule r, out double v) => StandardAtmosphere.ReduceToSeaLevel(x[0], x[1], out v));
         yield return Strict("StandardAtmosphere.FromSeaLevel", [AnyPressure, Altitude], (double[] x, RangeRule r, out double v) => StandardAtmosphere.FromSeaLevel(x[0], x[1], out v));

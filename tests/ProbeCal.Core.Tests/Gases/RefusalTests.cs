@@ -76,19 +76,33 @@ public class RefusalTests
             Input input = function.Inputs[i];
             if (!double.IsNaN(input.Highest))
             {
-                OutOfRange(function, i, Math.BitIncrement(input.Highest), RefusalReason.AboveRange, finiteWhenExtrapolated: true);
-                OutOfRange(function, i, input.Highest + (0.01 * Math.Abs(input.Highest)), RefusalReason.AboveRange, finiteWhenExtrapolated: !name.StartsWith("VapourWagner", StringComparison.Ordinal));
+                // A vapour formula has no value above the critical point.
+                bool goesOn = !name.StartsWith("VapourWagner", StringComparison.Ordinal);
+                OutOfRange(function, i, Math.BitIncrement(input.Highest), Above(input), finiteWhenExtrapolated: true);
+                OutOfRange(function, i, input.Highest + Math.Max(0.01 * Math.Abs(input.Highest), 0.3), RefusalReason.AboveRange, goesOn);
+                if (input.Quantity == InputQuantity.Temperature)
+                {
+                    OutOfRange(function, i, input.Highest + 0.199, RefusalReason.JustAboveRange, goesOn);
+                    OutOfRange(function, i, input.Highest + 0.201, RefusalReason.AboveRange, goesOn);
+                }
             }
 
             if (!double.IsNaN(input.Lowest))
             {
-                // A negative salinity has no square root, and a negative uncertainty no meaning.
+                // A negative salinity or conductivity has no square root, and a negative uncertainty no meaning.
                 bool finite = input.Quantity != InputQuantity.Uncertainty
+                    && !(input.Quantity == InputQuantity.Conductance && name.StartsWith("PracticalSalinity", StringComparison.Ordinal))
                     && !(input.Quantity == InputQuantity.Salinity && name.Contains("Density", StringComparison.Ordinal))
                     && !(input.Quantity == InputQuantity.Salinity && name.Contains("Freezing", StringComparison.Ordinal))
                     && !(input.Quantity == InputQuantity.Salinity && name.Contains("GarciaGordon", StringComparison.Ordinal) && !name.StartsWith("GarciaGordon", StringComparison.Ordinal)
                         && !name.Contains("EquationRelative", StringComparison.Ordinal));
-                OutOfRange(function, i, input.Lowest - 0.01, RefusalReason.BelowRange, finite);
+                bool edge = input.Quantity == InputQuantity.Temperature;
+                OutOfRange(function, i, input.Lowest - 0.01, edge ? RefusalReason.JustBelowRange : RefusalReason.BelowRange, finite);
+                if (edge)
+                {
+                    OutOfRange(function, i, input.Lowest - 0.199, RefusalReason.JustBelowRange, finite);
+                    OutOfRange(function, i, input.Lowest - 0.201, RefusalReason.BelowRange, finite);
+                }
             }
         }
     }
@@ -119,13 +133,15 @@ public class RefusalTests
     {
         Assert.Equal(Status.Ok, FreezingPoint.Celsius(35.0, RangeRule.Refuse, out double freezing));
         Assert.Equal(Status.Ok, GarciaGordon1992.MicromolesPerKilogram(freezing, 35.0, 1013.25, RangeRule.Refuse, out _));
-        Assert.Equal(Status.TemperatureBelowRange, GarciaGordon1992.MicromolesPerKilogram(
+        Assert.Equal(Status.TemperatureJustBelowRange, GarciaGordon1992.MicromolesPerKilogram(
             Math.BitDecrement(freezing), 35.0, 1013.25, RangeRule.Refuse, out double refused));
         Assert.True(double.IsNaN(refused));
         Assert.Equal(Status.Ok, GarciaGordon1992.MicromolesPerKilogram(-2.0, 42.0, 1013.25, RangeRule.Refuse, out _));
-        Assert.Equal(Status.TemperatureBelowRange, GarciaGordon1992.MicromolesPerKilogram(-2.01, 42.0, 1013.25, RangeRule.Refuse, out _));
+        Assert.Equal(Status.TemperatureJustBelowRange, GarciaGordon1992.MicromolesPerKilogram(-2.01, 42.0, 1013.25, RangeRule.Refuse, out _));
         Assert.Equal(Status.Ok, GarciaGordon1992.MicromolesPerKilogram(0.0, 0.0, 1013.25, RangeRule.Refuse, out _));
-        Assert.Equal(Status.TemperatureBelowRange, GarciaGordon1992.MicromolesPerKilogram(-0.01, 0.0, 1013.25, RangeRule.Refuse, out _));
+        Assert.Equal(Status.TemperatureJustBelowRange, GarciaGordon1992.MicromolesPerKilogram(-0.01, 0.0, 1013.25, RangeRule.Refuse, out _));
+        Assert.Equal(Status.TemperatureBelowRange, GarciaGordon1992.MicromolesPerKilogram(-0.21, 0.0, 1013.25, RangeRule.NearEdge, out refused));
+        Assert.True(double.IsNaN(refused));
     }
 
     [Theory]
@@ -173,6 +189,8 @@ public class RefusalTests
         Assert.Equal(Status.DensityBelowRange, OxygenUnits.MilligramsPerKilogramFromMilligramsPerLitre(8.0, value, out _));
         Assert.Equal(Status.PressureBelowRange, StandardAtmosphere.ReduceToSeaLevel(value, 100.0, out _));
         Assert.Equal(Status.PressureBelowRange, StandardAtmosphere.FromSeaLevel(value, 100.0, out _));
+        Assert.Equal(Status.PressureBelowRange, SeaLevelReduction.StationPressure(value, 100.0, 15.0, out _));
+        Assert.Equal(Status.DensityBelowRange, HydrostaticPressure.Hectopascal(10.0, value, RangeRule.Extrapolate, out _));
     }
 
     private static void OutOfRange(CoreFunction function, int index, double value, RefusalReason reason, bool finiteWhenExtrapolated)
@@ -188,6 +206,18 @@ public class RefusalTests
         bool finite = function.Extrapolates && finiteWhenExtrapolated;
         if (finite) { Assert.All(values, v => Assert.True(double.IsFinite(v), function.Name + " at " + value)); }
         else { Assert.Contains(values, double.IsNaN); }
+
+        // Near the edge gives what extrapolating gives, bit for bit, and nothing further out.
+        (Status near, double[] nearby) = function.Call(inputs, RangeRule.NearEdge);
+        Assert.Equal(refused, near);
+        bool just = reason is RefusalReason.JustBelowRange or RefusalReason.JustAboveRange;
+        if (just) { Assert.Equal(values, nearby); }
+        else { Assert.All(nearby, v => Assert.True(double.IsNaN(v), function.Name + " at " + value)); }
+    }
+
+    private static RefusalReason Above(Input input)
+    {
+        return input.Quantity == InputQuantity.Temperature ? RefusalReason.JustAboveRange : RefusalReason.AboveRange;
     }
 
     private static CoreFunction Find(string name)
