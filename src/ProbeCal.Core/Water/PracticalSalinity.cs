@@ -175,6 +175,13 @@ public static class PracticalSalinity
         double first = 1.0 + (big * (1.5 + big));
         double root = 10.0 * x;
         double second = 1.0 + (root * (1.0 + (root * (1.0 + root))));
+        if (second <= 0.0)
+        {
+            perX = double.NaN;
+            perF = double.NaN;
+            return double.NaN;
+        }
+
         perF = B0 / second;
         perX = -(A0 / first / first * (1.5 + (2.0 * big)) * 800.0 * x)
             - (f * perF / second * 10.0 * (1.0 + (root * (2.0 + (3.0 * root)))));

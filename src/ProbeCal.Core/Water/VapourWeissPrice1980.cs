@@ -6,7 +6,7 @@ namespace ProbeCal;
 /// </summary>
 /// <remarks>
 /// Weiss, R.F., Price, B.A. (1980) Mar. Chem. 8, 347–359, doi:10.1016/0304-4203(80)90024-9, Eq. 10; coefficients seen in four second-hand
-/// places. Range 0–40 °C, S 0–40; stated accuracy 0.015 % as a fit to Goff and Gratch. It lies 0.12–0.14 % below Wagner and Pruss 1993.
+/// places. Range 0–40 °C, S 0–40; stated accuracy 0.015 % as a fit to Goff and Gratch. It lies 0.08–0.12 % below Wagner and Pruss 1993.
 /// The ITS-90 input is converted.
 /// </remarks>
 public static class VapourWeissPrice1980
