@@ -106,6 +106,9 @@ public enum StepQuantity
     /// <summary>Total pressure above 1.1 atm, atm.</summary>
     ExcessAtmospheres = 48,
 
+    /// <summary>Absolute temperature in the vapour formula, on its own scale, K.</summary>
+    VapourKelvin = 49,
+
     /// <summary>Partial pressure of the gas, hPa.</summary>
     PartialPressureHectopascal = 50,
     /// <summary>Concentration, mg/L.</summary>
@@ -119,6 +122,17 @@ public enum StepQuantity
     ConductivityRatioAtSurface = 61,
     /// <summary>Salinity by the scale of 1978 alone, before the low-salinity extension.</summary>
     PracticalScaleSalinity = 62,
+
+    /// <summary>1 − T over the critical temperature of water.</summary>
+    CriticalDistance = 70,
+    /// <summary>Critical pressure of water, Pa.</summary>
+    CriticalPascal = 71,
+    /// <summary>Density of pure water in the density of sea water, kg/m³.</summary>
+    PureWaterDensity = 72,
+    /// <summary>What multiplies S in the density of sea water, kg/m³.</summary>
+    DensityTermA = 73,
+    /// <summary>What multiplies S^1.5 in the density of sea water, kg/m³.</summary>
+    DensityTermB = 74,
 
     /// <summary>Coefficient A0 of the equation. A1 to A5 follow.</summary>
     CoefficientA0 = 100,
@@ -161,4 +175,60 @@ public enum StepQuantity
     ThetaCoefficient1 = 151,
     /// <summary>Coefficient 2 of θ.</summary>
     ThetaCoefficient2 = 152,
+
+    /// <summary>Coefficient 0 of the logarithm of the vapour pressure. 1 to 3 follow.</summary>
+    VapourCoefficient0 = 160,
+    /// <summary>Coefficient 1 of the logarithm of the vapour pressure.</summary>
+    VapourCoefficient1 = 161,
+    /// <summary>Coefficient 2 of the logarithm of the vapour pressure.</summary>
+    VapourCoefficient2 = 162,
+    /// <summary>Coefficient 3 of the logarithm of the vapour pressure.</summary>
+    VapourCoefficient3 = 163,
+
+    /// <summary>Coefficient 0 of the density of pure water. 1 to 5 follow.</summary>
+    DensityCoefficientW0 = 170,
+    /// <summary>Coefficient 1 of the density of pure water.</summary>
+    DensityCoefficientW1 = 171,
+    /// <summary>Coefficient 2 of the density of pure water.</summary>
+    DensityCoefficientW2 = 172,
+    /// <summary>Coefficient 3 of the density of pure water.</summary>
+    DensityCoefficientW3 = 173,
+    /// <summary>Coefficient 4 of the density of pure water.</summary>
+    DensityCoefficientW4 = 174,
+    /// <summary>Coefficient 5 of the density of pure water.</summary>
+    DensityCoefficientW5 = 175,
+
+    /// <summary>Coefficient 0 of the first salinity term of the density. 1 to 4 follow.</summary>
+    DensityCoefficientA0 = 180,
+    /// <summary>Coefficient 1 of the first salinity term of the density.</summary>
+    DensityCoefficientA1 = 181,
+    /// <summary>Coefficient 2 of the first salinity term of the density.</summary>
+    DensityCoefficientA2 = 182,
+    /// <summary>Coefficient 3 of the first salinity term of the density.</summary>
+    DensityCoefficientA3 = 183,
+    /// <summary>Coefficient 4 of the first salinity term of the density.</summary>
+    DensityCoefficientA4 = 184,
+
+    /// <summary>Coefficient 0 of the second salinity term of the density. 1 to 2 follow.</summary>
+    DensityCoefficientB0 = 185,
+    /// <summary>Coefficient 1 of the second salinity term of the density.</summary>
+    DensityCoefficientB1 = 186,
+    /// <summary>Coefficient 2 of the second salinity term of the density.</summary>
+    DensityCoefficientB2 = 187,
+
+    /// <summary>Coefficient 0 of the squared salinity in the density.</summary>
+    DensityCoefficientC0 = 188,
+
+    /// <summary>Coefficient 1 of the logarithm of the vapour pressure of pure water. 2 to 6 follow.</summary>
+    PureVapourCoefficient1 = 190,
+    /// <summary>Coefficient 2 of the logarithm of the vapour pressure of pure water.</summary>
+    PureVapourCoefficient2 = 191,
+    /// <summary>Coefficient 3 of the logarithm of the vapour pressure of pure water.</summary>
+    PureVapourCoefficient3 = 192,
+    /// <summary>Coefficient 4 of the logarithm of the vapour pressure of pure water.</summary>
+    PureVapourCoefficient4 = 193,
+    /// <summary>Coefficient 5 of the logarithm of the vapour pressure of pure water.</summary>
+    PureVapourCoefficient5 = 194,
+    /// <summary>Coefficient 6 of the logarithm of the vapour pressure of pure water.</summary>
+    PureVapourCoefficient6 = 195,
 }

@@ -18,6 +18,21 @@ public static class Catalogue
     /// <summary>Each gas by each equation that covers it, the default of each gas first.</summary>
     public static IReadOnlyList<SolubilityEntry> Solubilities => SolubilityList.All;
 
+    /// <summary>The published relations about water, its vapour, its salt and the pressure on it.</summary>
+    public static IReadOnlyList<WaterEntry> Relations => WaterList.All;
+
+    /// <summary>A relation about water by its name or an alias.</summary>
+    /// <exception cref="ArgumentOutOfRangeException">There is no such relation.</exception>
+    public static WaterEntry Relation(string name)
+    {
+        foreach (WaterEntry entry in WaterList.All)
+        {
+            if (CatalogueText.Same(name, entry.Name) || CatalogueText.IsOneOf(name, entry.Aliases)) { return entry; }
+        }
+
+        throw new ArgumentOutOfRangeException(nameof(name));
+    }
+
     /// <summary>What is known of a gas.</summary>
     /// <exception cref="ArgumentOutOfRangeException">It is none of the gases of Core.</exception>
     public static GasEntry Gas(Gas gas)

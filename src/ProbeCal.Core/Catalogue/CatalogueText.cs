@@ -1,3 +1,4 @@
+using System.Collections.Generic;
 using System.Globalization;
 
 namespace ProbeCal;
@@ -15,7 +16,7 @@ internal static class CatalogueText
         return string.Equals(one, other, System.StringComparison.OrdinalIgnoreCase);
     }
 
-    internal static bool IsOneOf(string text, string[] names)
+    internal static bool IsOneOf(string text, IReadOnlyList<string> names)
     {
         foreach (string name in names)
         {

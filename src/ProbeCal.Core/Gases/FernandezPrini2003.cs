@@ -106,12 +106,6 @@ internal static class FernandezPrini2003
         double reduced = kelvin / CriticalKelvin;
         double rest = 1.0 - reduced;
         if (reduced <= 0.0 || rest <= 0.0) { return double.NaN; }
-        double vapour = VapourWagnerPruss1993.Value(celsius, out double vapourSlope) * PascalPerHectopascal;
-        double root = Numerics.Pow(rest, 0.355);
-        double power = c * Numerics.Pow(reduced, -0.41) * Numerics.Exp(rest);
-        double logarithm = -(((a + (b * root)) / reduced) + power + Numerics.Ln(vapour));
-        double reducedSlope = (-(a + (b * root) + (0.355 * b * reduced * root / rest)) / reduced / reduced) - (power * ((0.41 / reduced) + 1.0));
-        perKelvin = -((reducedSlope / CriticalKelvin) + vapourSlope);
         if (steps != null)
         {
             steps.Add(StepQuantity.CoefficientA0, a);
@@ -119,6 +113,16 @@ internal static class FernandezPrini2003
             steps.Add(StepQuantity.CoefficientA2, c);
             steps.Add(StepQuantity.Kelvin, kelvin);
             steps.Add(StepQuantity.ReducedTemperature, reduced);
+        }
+
+        double vapour = VapourWagnerPruss1993.Value(celsius, out double vapourSlope, steps) * PascalPerHectopascal;
+        double root = Numerics.Pow(rest, 0.355);
+        double power = c * Numerics.Pow(reduced, -0.41) * Numerics.Exp(rest);
+        double logarithm = -(((a + (b * root)) / reduced) + power + Numerics.Ln(vapour));
+        double reducedSlope = (-(a + (b * root) + (0.355 * b * reduced * root / rest)) / reduced / reduced) - (power * ((0.41 / reduced) + 1.0));
+        perKelvin = -((reducedSlope / CriticalKelvin) + vapourSlope);
+        if (steps != null)
+        {
             steps.Add(StepQuantity.PureWaterVapourPascal, vapour);
             steps.Add(StepQuantity.LogarithmOfEquation, logarithm);
         }

@@ -45,12 +45,8 @@ public static partial class GasEquilibrium
         Gas gas, double celsius, double salinity, double pressureHectopascal, double moleFraction, double humidityPercent, RangeRule rule,
         out double partialPressureHectopascal)
     {
-        partialPressureHectopascal = double.NaN;
-        Status status = CheckPhase(gas, celsius, salinity, pressureHectopascal, moleFraction, humidityPercent);
-        if (InputCheck.Refuses(status, rule)) { return status; }
-        partialPressureHectopascal = InputCheck.FiniteOrNaN(GasPhase.PartialPressure(
-            gas, celsius, salinity, pressureHectopascal, moleFraction, humidityPercent, null, out _, out _, out _, out _));
-        return status;
+        return PartialPressureSteps(
+            gas, celsius, salinity, pressureHectopascal, moleFraction, humidityPercent, rule, null, out partialPressureHectopascal);
     }
 
     /// <summary>Concentration of water in equilibrium with the gas phase.</summary>
@@ -84,13 +80,8 @@ public static partial class GasEquilibrium
         Gas gas, SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal,
         double partialPressureHectopascal, RangeRule rule, out double milligramsPerLitre)
     {
-        milligramsPerLitre = double.NaN;
-        Status status = CheckGiven(gas, equation, celsius, salinity, pressureHectopascal, partialPressureHectopascal);
-        if (InputCheck.Refuses(status, rule)) { return status; }
-        double solubility = Solubility(
-            gas, equation, celsius, salinity, pressureHectopascal, partialPressureHectopascal, null, out _, out _, out _, out _);
-        milligramsPerLitre = InputCheck.FiniteOrNaN(solubility * partialPressureHectopascal);
-        return status;
+        return ConcentrationFromPartialPressureSteps(
+            gas, equation, celsius, salinity, pressureHectopascal, partialPressureHectopascal, rule, null, out milligramsPerLitre);
     }
 
     /// <summary>Partial pressure of the gas in water of a given concentration: the inverse of <see cref="ConcentrationFromPartialPressure"/>.</summary>
@@ -108,6 +99,39 @@ public static partial class GasEquilibrium
     {
         return PartialPressureFromConcentration(
             gas, equation, celsius, salinity, pressureHectopascal, milligramsPerLitre, rule, null, out partialPressureHectopascal);
+    }
+
+    /// <summary>The public function with its steps.</summary>
+    internal static Status PartialPressureSteps(
+        Gas gas, double celsius, double salinity, double pressureHectopascal, double moleFraction, double humidityPercent, RangeRule rule,
+        CalculationSteps? steps, out double partialPressureHectopascal)
+    {
+        partialPressureHectopascal = double.NaN;
+        Status status = CheckPhase(gas, celsius, salinity, pressureHectopascal, moleFraction, humidityPercent);
+        if (InputCheck.Refuses(status, rule)) { return status; }
+        AddInputs(steps, celsius, salinity, pressureHectopascal);
+        steps?.Add(StepQuantity.MoleFraction, moleFraction);
+        steps?.Add(StepQuantity.HumidityPercent, humidityPercent);
+        partialPressureHectopascal = InputCheck.FiniteOrNaN(GasPhase.PartialPressure(
+            gas, celsius, salinity, pressureHectopascal, moleFraction, humidityPercent, steps, out _, out _, out _, out _));
+        return status;
+    }
+
+    /// <summary>The public function with its steps.</summary>
+    internal static Status ConcentrationFromPartialPressureSteps(
+        Gas gas, SolubilityEquation equation, double celsius, double salinity, double pressureHectopascal,
+        double partialPressureHectopascal, RangeRule rule, CalculationSteps? steps, out double milligramsPerLitre)
+    {
+        milligramsPerLitre = double.NaN;
+        Status status = CheckGiven(gas, equation, celsius, salinity, pressureHectopascal, partialPressureHectopascal);
+        if (InputCheck.Refuses(status, rule)) { return status; }
+        AddInputs(steps, celsius, salinity, pressureHectopascal);
+        steps?.Add(StepQuantity.GivenPartialPressureHectopascal, partialPressureHectopascal);
+        double solubility = Solubility(
+            gas, equation, celsius, salinity, pressureHectopascal, partialPressureHectopascal, steps, out _, out _, out _, out _);
+        milligramsPerLitre = InputCheck.FiniteOrNaN(solubility * partialPressureHectopascal);
+        steps?.Add(StepQuantity.MilligramsPerLitre, milligramsPerLitre);
+        return status;
     }
 
     /// <summary>The public function with its steps.</summary>

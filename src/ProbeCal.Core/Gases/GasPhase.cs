@@ -17,11 +17,11 @@ internal static class GasPhase
         {
             logPerKelvin = VapourBensonKrause1980.LogarithmicSlope(celsius);
             logPerSalinity = 0.0;
-            vapour = VapourBensonKrause1980.Atmospheres(celsius);
+            vapour = VapourBensonKrause1980.Atmospheres(celsius, steps);
         }
         else
         {
-            vapour = VapourWeissPrice1980.Atmospheres(celsius, salinity, out logPerKelvin, out logPerSalinity);
+            vapour = VapourWeissPrice1980.Atmospheres(celsius, salinity, out logPerKelvin, out logPerSalinity, steps);
         }
 
         steps?.Add(StepQuantity.VapourAtmospheres, vapour);

@@ -226,7 +226,7 @@ internal static class GasSolubility
         double value = EquationValue(gas, equation, celsius, salinity, steps, out logPerKelvin, out logPerSalinity);
         if (IsPerKilogram(equation))
         {
-            double density = DensityEos80.Value(celsius, salinity);
+            double density = DensityEos80.Value(celsius, salinity, steps);
             steps?.Add(StepQuantity.Density, density);
             DensityEos80.Slopes(celsius, salinity, out double densityPerKelvin, out double densityPerSalinity);
             // Far outside the range the polynomial can reach zero, where a logarithm has no slope.

@@ -68,12 +68,13 @@ public static class DensityEos80
     }
 
     /// <summary>The polynomial without a range.</summary>
-    internal static double Value(double celsius, double salinity)
+    internal static double Value(double celsius, double salinity, CalculationSteps? steps = null)
     {
         double t = TemperatureScale.Ipts68FromIts90(celsius);
         double water = W0 + (t * (W1 + (t * (W2 + (t * (W3 + (t * (W4 + (t * W5)))))))));
         double a = A0 + (t * (A1 + (t * (A2 + (t * (A3 + (t * A4)))))));
         double b = B0 + (t * (B1 + (t * B2)));
+        if (steps != null) { AddSteps(steps, t, water, a, b); }
         return water + (salinity * (a + (b * Numerics.Sqrt(salinity)) + (C0 * salinity)));
     }
 
@@ -89,6 +90,29 @@ public static class DensityEos80
         double aSlope = A1 + (t * ((2.0 * A2) + (t * ((3.0 * A3) + (t * 4.0 * A4)))));
         double bSlope = B1 + (t * 2.0 * B2);
         perKelvin = (waterSlope + (salinity * (aSlope + (bSlope * root)))) * TemperatureScale.Ipts68PerIts90;
+    }
+
+    private static void AddSteps(CalculationSteps steps, double t, double water, double a, double b)
+    {
+        steps.Add(StepQuantity.DensityCoefficientW0, W0);
+        steps.Add(StepQuantity.DensityCoefficientW1, W1);
+        steps.Add(StepQuantity.DensityCoefficientW2, W2);
+        steps.Add(StepQuantity.DensityCoefficientW3, W3);
+        steps.Add(StepQuantity.DensityCoefficientW4, W4);
+        steps.Add(StepQuantity.DensityCoefficientW5, W5);
+        steps.Add(StepQuantity.DensityCoefficientA0, A0);
+        steps.Add(StepQuantity.DensityCoefficientA1, A1);
+        steps.Add(StepQuantity.DensityCoefficientA2, A2);
+        steps.Add(StepQuantity.DensityCoefficientA3, A3);
+        steps.Add(StepQuantity.DensityCoefficientA4, A4);
+        steps.Add(StepQuantity.DensityCoefficientB0, B0);
+        steps.Add(StepQuantity.DensityCoefficientB1, B1);
+        steps.Add(StepQuantity.DensityCoefficientB2, B2);
+        steps.Add(StepQuantity.DensityCoefficientC0, C0);
+        steps.Add(StepQuantity.CelsiusIpts68, t);
+        steps.Add(StepQuantity.PureWaterDensity, water);
+        steps.Add(StepQuantity.DensityTermA, a);
+        steps.Add(StepQuantity.DensityTermB, b);
     }
 
     private static Status Check(double celsius, double salinity)

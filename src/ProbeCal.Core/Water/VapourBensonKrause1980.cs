@@ -34,11 +34,19 @@ public static class VapourBensonKrause1980
     }
 
     /// <summary>The formula in atmospheres, without a range; NaN at or below absolute zero.</summary>
-    internal static double Atmospheres(double celsius)
+    internal static double Atmospheres(double celsius, CalculationSteps? steps = null)
     {
         double kelvin = celsius + TemperatureScale.KelvinAtZeroCelsius;
         if (kelvin <= 0.0) { return double.NaN; }
         double r = 1.0 / kelvin;
+        if (steps != null)
+        {
+            steps.Add(StepQuantity.VapourCoefficient0, W0);
+            steps.Add(StepQuantity.VapourCoefficient1, W1);
+            steps.Add(StepQuantity.VapourCoefficient2, W2);
+            steps.Add(StepQuantity.VapourKelvin, kelvin);
+        }
+
         return Numerics.Exp(W0 + (r * (W1 + (r * W2))));
     }
 

@@ -38,7 +38,7 @@ public static class VapourWagnerPruss1993
     }
 
     /// <summary>The formula in hPa with d(ln p)/dT, 1/K, without a range; NaN at or below absolute zero and above the critical point.</summary>
-    internal static double Value(double celsius, out double logPerKelvin)
+    internal static double Value(double celsius, out double logPerKelvin, CalculationSteps? steps = null)
     {
         logPerKelvin = double.NaN;
         double kelvin = celsius + TemperatureScale.KelvinAtZeroCelsius;
@@ -46,6 +46,18 @@ public static class VapourWagnerPruss1993
         double v = 1.0 - (kelvin / CriticalKelvin);
         // Above the critical point there is no saturation; the root gives NaN there.
         double root = Numerics.Sqrt(v);
+        if (steps != null)
+        {
+            steps.Add(StepQuantity.PureVapourCoefficient1, A1);
+            steps.Add(StepQuantity.PureVapourCoefficient2, A2);
+            steps.Add(StepQuantity.PureVapourCoefficient3, A3);
+            steps.Add(StepQuantity.PureVapourCoefficient4, A4);
+            steps.Add(StepQuantity.PureVapourCoefficient5, A5);
+            steps.Add(StepQuantity.PureVapourCoefficient6, A6);
+            steps.Add(StepQuantity.CriticalPascal, CriticalHectopascal * 100.0);
+            steps.Add(StepQuantity.CriticalDistance, v);
+        }
+
         double v3 = v * v * v;
         double sum = (A1 * v) + (A2 * v * root) + (A3 * v3) + (A4 * v3 * root) + (A5 * v3 * v) + (A6 * v3 * v3 * v * root);
         double slope = A1 + (1.5 * A2 * root) + (3.0 * A3 * v * v) + (3.5 * A4 * v * v * root) + (4.0 * A5 * v3) + (7.5 * A6 * v3 * v3 * root);

@@ -41,13 +41,23 @@ public static class VapourWeissPrice1980
     }
 
     /// <summary>The formula in atmospheres with ∂(ln u)/∂T, 1/K, and ∂(ln u)/∂S, without a range; NaN at or below absolute zero.</summary>
-    internal static double Atmospheres(double celsius, double salinity, out double logPerKelvin, out double logPerSalinity)
+    internal static double Atmospheres(
+        double celsius, double salinity, out double logPerKelvin, out double logPerSalinity, CalculationSteps? steps = null)
     {
         logPerKelvin = double.NaN;
         logPerSalinity = W3;
         double kelvin = TemperatureScale.Ipts68FromIts90(celsius) + TemperatureScale.KelvinAtZeroCelsius;
         if (kelvin <= 0.0) { return double.NaN; }
         double r = KelvinPerUnit / kelvin;
+        if (steps != null)
+        {
+            steps.Add(StepQuantity.VapourCoefficient0, W0);
+            steps.Add(StepQuantity.VapourCoefficient1, W1);
+            steps.Add(StepQuantity.VapourCoefficient2, W2);
+            steps.Add(StepQuantity.VapourCoefficient3, W3);
+            steps.Add(StepQuantity.VapourKelvin, kelvin);
+        }
+
         logPerKelvin = TemperatureScale.Ipts68PerIts90 * r * (W2 - (W1 * r)) / KelvinPerUnit;
         return Numerics.Exp(W0 + (W1 * r) + (W2 * Numerics.Ln(kelvin / KelvinPerUnit)) + (W3 * salinity));
     }

@@ -29,6 +29,45 @@ public class CatalogueTests
     }
 
     [Fact]
+    public void Pairs_and_ranges_are_those_that_the_functions_hold_to()
+    {
+        foreach (GasEntry gas in Catalogue.Gases)
+        {
+            foreach (EquationEntry equation in Catalogue.Equations)
+            {
+                SolubilityEntry? entry = Catalogue.Solubility(gas.Gas, equation.Equation);
+                Assert.Equal(entry is null, StatusAt(gas.Gas, equation.Equation, 20.0, 0.0, 1013.25) == Status.EquationUnknown);
+                if (entry is null)
+                {
+                    continue;
+                }
+
+                foreach (double salinity in new[] { 0.0, entry.HighestSalinity })
+                {
+                    double lowest = entry.LowestCelsius(salinity);
+                    Assert.Equal(Status.Ok, StatusAt(entry, lowest, salinity, 1013.25));
+                    Assert.Equal(Status.Ok, StatusAt(entry, entry.HighestCelsius, salinity, entry.HighestHectopascal));
+                    Assert.Equal(Status.TemperatureJustBelowRange, StatusAt(entry, Math.BitDecrement(lowest), salinity, 1013.25));
+                    Assert.Equal(Status.TemperatureJustAboveRange, StatusAt(entry, Math.BitIncrement(entry.HighestCelsius), salinity, 1013.25));
+                    Assert.Equal(Status.PressureAboveRange, StatusAt(entry, 20.0, salinity, Math.BitIncrement(entry.HighestHectopascal)));
+                }
+
+                Assert.Equal(Status.SalinityAboveRange, StatusAt(entry, 20.0, Math.BitIncrement(entry.HighestSalinity), 1013.25));
+            }
+        }
+    }
+
+    private static Status StatusAt(SolubilityEntry entry, double celsius, double salinity, double hectopascal)
+    {
+        return StatusAt(entry.Gas, entry.Equation, celsius, salinity, hectopascal);
+    }
+
+    private static Status StatusAt(Gas gas, SolubilityEquation equation, double celsius, double salinity, double hectopascal)
+    {
+        return GasEquilibrium.MilligramsPerLitre(gas, equation, celsius, salinity, hectopascal, 1e-4, 100.0, RangeRule.Refuse, out _);
+    }
+
+    [Fact]
     public void Names_are_author_and_year_and_citations_name_the_same_year()
     {
         foreach (EquationEntry entry in Catalogue.Equations)
