@@ -30,23 +30,22 @@ internal static class GswPeer
         return Run(Found.Value!, "import gsw; print(gsw.__version__)", "").Trim();
     }
 
-    /// <summary>Evaluates an expression over the columns a, b (numpy arrays) with gsw imported.</summary>
-    internal static double[] Evaluate(string expression, double[] a, double[] b)
+    /// <summary>Evaluates an expression over columns of numbers, called a, b, c (numpy arrays), with gsw imported.</summary>
+    internal static double[] Evaluate(string expression, params double[][] columns)
     {
         StringBuilder input = new();
-        for (int i = 0; i < a.Length; i++)
+        for (int i = 0; i < columns[0].Length; i++)
         {
-            input.Append(a[i].ToString("R", CultureInfo.InvariantCulture)).Append(' ')
-                .Append(b[i].ToString("R", CultureInfo.InvariantCulture)).Append('\n');
+            input.AppendJoin(' ', columns.Select(column => column[i].ToString("R", CultureInfo.InvariantCulture))).Append('\n');
         }
 
         string program = "import sys, numpy, gsw\n"
-            + "a, b = numpy.loadtxt(sys.stdin, ndmin=2).T\n"
+            + string.Join(", ", "abc"[..columns.Length].AsEnumerable()) + " = numpy.loadtxt(sys.stdin, ndmin=2).T\n"
             + "for v in " + expression + ": print(repr(float(v)))\n";
         double[] values = Run(Found.Value!, program, input.ToString())
             .Split('\n', StringSplitOptions.RemoveEmptyEntries)
             .Select(v => double.Parse(v, NumberStyles.Float, CultureInfo.InvariantCulture)).ToArray();
-        Assert.Equal(a.Length, values.Length);
+        Assert.Equal(columns[0].Length, values.Length);
         return values;
     }
 

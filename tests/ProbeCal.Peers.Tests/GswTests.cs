@@ -5,7 +5,10 @@ using Xunit.Abstractions;
 
 namespace ProbeCal.Peers.Tests;
 
-/// <summary>Oxygen, density and freezing point against the Gibbs-SeaWater toolbox over random water.</summary>
+/// <summary>
+/// Oxygen, density, practical salinity and freezing point against the Gibbs-SeaWater toolbox over random water. The toolbox's Python package has no other gas; its
+/// worked examples for N2, Ar and Kr stand among the check values of Core.
+/// </summary>
 public class GswTests(ITestOutputHelper output)
 {
     private const int DefaultSeed = 19920637;
@@ -74,6 +77,61 @@ public class GswTests(ITestOutputHelper output)
 
         Report("EOS-80 against gsw.rho_t_exact, S up to " + highestSalinity.ToString(CultureInfo.InvariantCulture), worst, "kg/m3");
         Assert.InRange(worst, 0.0, allowed);
+    }
+
+    /// <summary>The same scale and the same low-salinity extension: agreement to rounding, under pressure too, from fresh water to S 42.</summary>
+    [SkippableFact]
+    public void PracticalSalinity_IsTheSameFunction()
+    {
+        GswPeer.Require();
+        Random random = new(Seed);
+        double[] conductivity = new double[Count];
+        double[] celsius = new double[Count];
+        double[] decibar = new double[Count];
+        for (int i = 0; i < Count; i++)
+        {
+            // Half of them in the low-salinity extension (below about 4 mS/cm), half of them at the surface.
+            conductivity[i] = (random.NextDouble() < 0.5 ? 4.0 : 65.0) * random.NextDouble();
+            celsius[i] = -2.0 + (37.0 * random.NextDouble());
+            decibar[i] = random.NextDouble() < 0.5 ? 0.0 : 10_000.0 * random.NextDouble();
+        }
+
+        double[] peer = GswPeer.Evaluate("gsw.SP_from_C(a, b, c)", conductivity, celsius, decibar);
+        double worstLow = 0.0;
+        double worst = 0.0;
+        int low = 0;
+        int compared = 0;
+        for (int i = 0; i < Count; i++)
+        {
+            Status status = PracticalSalinity.FromConductivity(conductivity[i], celsius[i], decibar[i], RangeRule.Refuse, out double value);
+            if (double.IsNaN(peer[i]))
+            {
+                // Here and there the toolbox has no value for water purer than distilled.
+                Assert.True(conductivity[i] < 0.003 && status == Status.Ok && 0.0 <= value);
+                continue;
+            }
+
+            // The scale ends at 42; beyond it the toolbox goes on and Core refuses.
+            Assert.Equal(peer[i] <= 42.0 ? Status.Ok : Status.ConductanceAboveRange, status);
+            if (status != Status.Ok) { continue; }
+            double difference = Math.Abs(value - peer[i]);
+            compared++;
+            if (peer[i] < 2.0)
+            {
+                low++;
+                worstLow = Math.Max(worstLow, difference);
+            }
+            else
+            {
+                worst = Math.Max(worst, difference);
+            }
+        }
+
+        Report($"PSS-78 over gsw.SP_from_C, {compared - low} values from S 2 to 42", worst, "(S)");
+        Report($"low-salinity extension over gsw.SP_from_C, {low} values below S 2", worstLow, "(S)");
+        Assert.True(Count / 4 < low && Count / 4 < compared - low);
+        Assert.InRange(worst, 0.0, 1.0e-12);
+        Assert.InRange(worstLow, 0.0, 1.0e-12);
     }
 
     /// <summary>The freezing point against the peer's for air-saturated water; the old formula is stated to 0.004 K.</summary>
