@@ -6,6 +6,7 @@ Lines out: vapour (hPa), partial pressure (hPa), mg/L, umol/L, umol/kg, mL/L, an
 import csv
 import math
 import os
+import re
 import sys
 
 ATM = 1013.25
@@ -26,12 +27,11 @@ CRITICAL = {'N2': (126.2, 33.5, 0.038), 'Ar': (150.9, 48.3, 0.0), 'He': (10.3, 6
 
 
 def molar_mass(gas):
-    import re
     return sum(WEIGHT[e] * int(n or 1) for e, n in re.findall('([A-Z][a-z]?)([0-9]*)', FORMULA[gas]))
 
 
 def density(t90, s):
-    """EOS-80 at the surface, kg/m3; Horner from the other end than usual: sums of powers."""
+    """EOS-80 at the surface, kg/m3, as sums of powers."""
     t = 1.00024 * t90
     pure = (999.842594, 6.793952e-2, -9.095290e-3, 1.001685e-4, -1.120083e-6, 6.536332e-9)
     a = (8.24493e-1, -4.0899e-3, 7.6438e-5, -8.2467e-7, 5.3875e-9)
@@ -123,16 +123,12 @@ def milligrams(row, t90, s, hpa, x, humidity):
     real = fugacity(gas, t90, atm, p / atm) * poynting(gas, t90, atm)
     c = moles_per_litre(row, t90, s)
     if row['kind'] == 'gas':
-        # Sander's constants and those of SF6 belong to the ideal gas; so does a Bunsen coefficient, where fugacity differs by less than its error.
-        moles = c * p * (real if row['equation'] not in IDEAL else 1.0)
+        moles = c * p * real
     else:
+        # Where fugacity depends on the fraction of the gas, the equation is one for traces.
         tied = 1.0 if row['kind'] == 'air1' else TIED[gas]
-        moles = c * p / (tied * (1 - u)) * real / fugacity(gas, t90, 1.0, TRACE.get(gas, tied) * (1 - u))
+        moles = c * p / (tied * (1 - u)) * real / fugacity(gas, t90, 1.0, 0.0)
     return moles * molar_mass(gas) * 1000
-
-
-IDEAL = set()
-TRACE = {'CO2': 0.0, 'N2O': 0.0}
 
 
 def main():

@@ -1,0 +1,92 @@
+using System;
+using System.Collections.Generic;
+using System.Globalization;
+using System.Linq;
+using Xunit;
+using Xunit.Abstractions;
+
+namespace ProbeCal.Peers.Tests.ByHand;
+
+/// <summary>Every gas by every equation, worked out once more outside the library (by_hand.py, formulas and coefficients of its own).</summary>
+public class ByHandTests(ITestOutputHelper output)
+{
+    private const int DefaultSeed = 20260412;
+    private static readonly int CountPerPair = Environment.GetEnvironmentVariable("PROBECAL_FULL") == "1" ? 500 : 20;
+    private static readonly int Seed =
+        int.TryParse(Environment.GetEnvironmentVariable("PROBECAL_SEED"), NumberStyles.Integer, CultureInfo.InvariantCulture, out int seed) ? seed : DefaultSeed;
+
+    /// <summary>
+    /// Values agree to rounding, units too where the molar masses are printed alike; uncertainties to what a difference quotient is good for. Molar masses come from rounded atomic
+    /// weights on either side and differ in the last printed digit: 2e-6.
+    /// </summary>
+    [SkippableFact]
+    public void EveryGasByEveryEquation_ComesOutByHand()
+    {
+        ByHandScript.Require();
+        Random random = new(Seed);
+        List<(SolubilityEntry Pair, ByHandCase Case)> cases = [.. Catalogue.Solubilities.SelectMany(pair =>
+            Enumerable.Range(0, CountPerPair).Select(i => (pair, Draw(pair, random))))];
+        List<ByHandAnswer> answers = ByHandScript.Ask([.. cases.Select(static c => c.Case)]);
+        Dictionary<string, double> worst = [];
+        for (int i = 0; i < cases.Count; i++)
+        {
+            (SolubilityEntry pair, ByHandCase c) = cases[i];
+            Assert.Equal(Status.Ok, GasEquilibrium.MilligramsPerLitre(
+                pair.Gas, pair.Equation, c.Celsius, c.Salinity, c.Hectopascal, c.MoleFraction, c.HumidityPercent, RangeRule.Refuse, out double milligrams));
+            Assert.Equal(Status.Ok, GasEquilibrium.PartialPressure(
+                pair.Gas, c.Celsius, c.Salinity, c.Hectopascal, c.MoleFraction, c.HumidityPercent, RangeRule.Refuse, out double partial));
+            GasEquilibrium.MilligramsPerLitreSensitivities(
+                pair.Gas, pair.Equation, c.Celsius, c.Salinity, c.Hectopascal, c.MoleFraction, c.HumidityPercent, RangeRule.Refuse,
+                out double t, out double s, out double p, out _, out _);
+            GasUncertainty.Combined(t * c.UCelsius, s * c.USalinity, p * c.UHectopascal, 0.0, 0.0, milligrams * c.UEquation, out double u);
+            GasEquilibrium.PartialPressureSensitivities(
+                pair.Gas, c.Celsius, c.Salinity, c.Hectopascal, c.MoleFraction, c.HumidityPercent, RangeRule.Refuse,
+                out double partialT, out double partialS, out double partialP, out _, out _);
+            GasUncertainty.Combined(partialT * c.UCelsius, partialS * c.USalinity, partialP * c.UHectopascal, 0.0, 0.0, 0.0, out double uPartial);
+            DensityEos80.Density(c.Celsius, c.Salinity, RangeRule.Extrapolate, out double density);
+            double micromoles = GasUnits.MicromolesPerLitreFromMilligramsPerLitre(pair.Gas, milligrams);
+
+            ByHandAnswer hand = answers[i];
+            Compare(worst, "partial pressure", partial, hand.PartialHectopascal, 1.0e-12, c);
+            Compare(worst, "mg/L", milligrams, hand.MilligramsPerLitre, 2.0e-6, c);
+            Compare(worst, "µmol/L", micromoles, hand.MicromolesPerLitre, 1.0e-12 + (IsMass(pair) ? 2.0e-6 : 0.0), c);
+            Compare(worst, "µmol/kg", micromoles * 1000.0 / density, hand.MicromolesPerKilogram, 1.0e-12 + (IsMass(pair) ? 2.0e-6 : 0.0), c);
+            Compare(worst, "mL/L", GasUnits.MillilitresPerLitreFromMilligramsPerLitre(pair.Gas, milligrams), hand.MillilitresPerLitre, 2.0e-6, c);
+            Compare(worst, "u of mg/L", u, hand.MilligramsUncertainty, 1.0e-4, c);
+            Compare(worst, "u of partial pressure", uPartial, hand.PartialUncertainty, 1.0e-6, c);
+        }
+
+        output.WriteLine($"{cases.Count} conditions, {Catalogue.Solubilities.Count} pairs of gas and equation, seed {Seed}");
+        foreach ((string quantity, double difference) in worst)
+        {
+            output.WriteLine(string.Create(CultureInfo.InvariantCulture, $"{quantity}: {difference:E1} at most, relative"));
+        }
+    }
+
+    /// <summary>Where the equation counts moles, moles agree to rounding; where it counts mass or gas volume the molar mass is in between.</summary>
+    private static bool IsMass(SolubilityEntry pair)
+    {
+        return !pair.Unit.Contains("mol", StringComparison.Ordinal);
+    }
+
+    private static ByHandCase Draw(SolubilityEntry pair, Random random)
+    {
+        double salinity = random.NextDouble() < 0.3 ? 0.0 : pair.HighestSalinity * random.NextDouble();
+        double lowest = Math.Max(pair.LowestCelsius(salinity), GasEquilibrium.LowestCelsius);
+        double celsius = lowest + ((pair.HighestCelsius - lowest) * random.NextDouble());
+        // Half of the gases with fugacity data above 1.1 atm.
+        double highest = random.NextDouble() < 0.5 ? pair.HighestHectopascal : 1114.0;
+        double pressure = GasEquilibrium.LowestHectopascal + ((highest - GasEquilibrium.LowestHectopascal) * random.NextDouble());
+        double fraction = random.NextDouble() < 0.5 && !double.IsNaN(DryAir.MoleFraction(pair.Gas)) ? DryAir.MoleFraction(pair.Gas) : random.NextDouble();
+        return new ByHandCase(
+            Catalogue.Gas(pair.Gas).Symbol, pair.Source.Name, celsius, salinity, pressure, fraction, 100.0 * random.NextDouble(),
+            0.1, salinity == 0.0 ? 0.0 : 0.2, 1.5, 0.002);
+    }
+
+    private static void Compare(Dictionary<string, double> worst, string quantity, double actual, double expected, double relative, ByHandCase at)
+    {
+        double difference = expected == 0.0 ? Math.Abs(actual) : Math.Abs((actual / expected) - 1.0);
+        Assert.True(difference <= relative, string.Create(CultureInfo.InvariantCulture, $"{quantity}: {actual:R}, by hand {expected:R} ({difference:E2}) at {at.Line()}"));
+        worst[quantity] = Math.Max(difference, worst.GetValueOrDefault(quantity));
+    }
+}
