@@ -122,6 +122,10 @@ public enum StepQuantity
     ConductivityRatioAtSurface = 61,
     /// <summary>Salinity by the scale of 1978 alone, before the low-salinity extension.</summary>
     PracticalScaleSalinity = 62,
+    /// <summary>Partial pressure left for nitrogen and argon, hPa.</summary>
+    NitrogenArgonHectopascal = 63,
+    /// <summary>Partial pressure of nitrogen and argon in air under the local pressure, hPa.</summary>
+    NitrogenArgonInAirHectopascal = 64,
 
     /// <summary>1 − T over the critical temperature of water.</summary>
     CriticalDistance = 70,

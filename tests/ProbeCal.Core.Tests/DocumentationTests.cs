@@ -44,6 +44,9 @@ public class DocumentationTests
     [InlineData(typeof(SeaLevelReduction))]
     [InlineData(typeof(HydrostaticPressure))]
     [InlineData(typeof(Enns1965))]
+    [InlineData(typeof(TotalDissolvedGas))]
+    [InlineData(typeof(TotalDissolvedGasUncertainty))]
+    [InlineData(typeof(SaltingOutWeisenbergerSchumpe1996))]
     public void Equation_StatesSourceAndAccuracy(Type type)
     {
         string text = Members.Single(member => (string?)member.Attribute("name") == "T:" + type.FullName).Value;

@@ -23,7 +23,7 @@ public enum PressureVerdict
 /// Bands on the reduced pressure: above 1050 hPa refused, 1035–1050 confirmed; below 950 confirmed, below 870 refused. Only
 /// strong cold anticyclones pass 1050, and 870 is the lowest sea-level pressure on record, in a typhoon (both from memory);
 /// 950 is a deep storm, in which hardly anyone calibrates (our choice, no source). The reduction uses the standard
-/// temperature: a day 15 K colder at 1000 m shifts the reduced value by about +0.6 %.
+/// temperature: a day 15 K colder at 1000 m shifts the reduced value by about +0.7 %.
 /// </remarks>
 public static class PressurePlausibility
 {

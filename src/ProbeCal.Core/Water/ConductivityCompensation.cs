@@ -48,20 +48,20 @@ public static class ConductivityCompensation
     }
 
     /// <summary>Specific conductance at 25 °C of a natural water (lake, river, ground water).</summary>
-    /// <param name="microsiemensPerCentimetre">Conductivity at the temperature of the water, 60–1000 µS/cm.</param>
+    /// <param name="conductivityMicrosiemensPerCentimetre">Conductivity at the temperature of the water, 60–1000 µS/cm.</param>
     /// <param name="celsius">Temperature of the water, 0–35 °C.</param>
     /// <param name="rule">Refuse, near edge or extrapolate.</param>
     /// <param name="at25MicrosiemensPerCentimetre">Specific conductance at 25 °C, µS/cm; NaN unless Ok or let pass by the rule.</param>
-    public static Status NaturalWater(double microsiemensPerCentimetre, double celsius, RangeRule rule, out double at25MicrosiemensPerCentimetre)
+    public static Status NaturalWater(double conductivityMicrosiemensPerCentimetre, double celsius, RangeRule rule, out double at25MicrosiemensPerCentimetre)
     {
         at25MicrosiemensPerCentimetre = double.NaN;
         Status status = Check(
-            microsiemensPerCentimetre, LowestNaturalMicrosiemensPerCentimetre, HighestNaturalMicrosiemensPerCentimetre,
+            conductivityMicrosiemensPerCentimetre, LowestNaturalMicrosiemensPerCentimetre, HighestNaturalMicrosiemensPerCentimetre,
             celsius, HighestNaturalCelsius);
         if (InputCheck.Refuses(status, rule)) { return status; }
         double d = celsius - 25.0;
         double factor = Numerics.Exp(d * (F1 + (d * (F2 + (d * (F3 + (d * F4)))))));
-        at25MicrosiemensPerCentimetre = InputCheck.FiniteOrNaN(microsiemensPerCentimetre * factor);
+        at25MicrosiemensPerCentimetre = InputCheck.FiniteOrNaN(conductivityMicrosiemensPerCentimetre * factor);
         return status;
     }
 

@@ -22,23 +22,6 @@ public static class Enns1965
     private const double GasConstant = 8.314462618;
     private const double JoulePerCubicCentimetreHectopascal = 1.0e-4;
 
-    /// <summary>Partial molar volume of the dissolved gas.</summary>
-    /// <param name="gas">Oxygen, nitrogen, argon, helium or carbon dioxide.</param>
-    /// <param name="cubicCentimetresPerMole">Volume, cm³/mol; NaN for a gas that was not measured.</param>
-    public static Status PartialMolarVolume(Gas gas, out double cubicCentimetresPerMole)
-    {
-        cubicCentimetresPerMole = gas switch
-        {
-            Gas.Oxygen => 31.7,
-            Gas.Nitrogen => 33.1,
-            Gas.Argon => 31.7,
-            Gas.Helium => 29.7,
-            Gas.CarbonDioxide => 31.2,
-            _ => double.NaN,
-        };
-        return double.IsNaN(cubicCentimetresPerMole) ? Status.GasUnknown : Status.Ok;
-    }
-
     /// <summary>Partial pressure at depth over that at the surface, the same water brought down.</summary>
     /// <param name="gas">Oxygen, nitrogen, argon, helium or carbon dioxide.</param>
     /// <param name="celsius">Temperature, 0–40 °C.</param>
@@ -70,9 +53,9 @@ public static class Enns1965
         factor = double.NaN;
         perKelvin = double.NaN;
         perHectopascal = double.NaN;
-        Status status = PartialMolarVolume(gas, out double volume);
-        if (status != Status.Ok) { return status; }
-        status = InputCheck.Graver(
+        double volume = PartialMolarVolume.CubicCentimetresPerMole(gas);
+        if (double.IsNaN(volume)) { return Status.GasUnknown; }
+        Status status = InputCheck.Graver(
             InputCheck.Temperature(celsius, LowestCelsius, HighestCelsius),
             InputCheck.Depth(hydrostaticHectopascal, HighestHydrostaticHectopascal));
         double kelvin = celsius + TemperatureScale.KelvinAtZeroCelsius;

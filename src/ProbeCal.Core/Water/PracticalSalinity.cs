@@ -152,7 +152,7 @@ public static class PracticalSalinity
         status = InputCheck.Graver(status, InputCheck.Depth(seaPressureDecibar, HighestSeaPressureDecibar));
         if (InputCheck.Refuses(status, rule)) { return status; }
         double value = Value(millisiemensPerCentimetre, celsius, seaPressureDecibar, out double perMillisiemens, out double slope);
-        if (HighestSalinity < value) { status = InputCheck.Graver(status, Status.ConductanceAboveRange); }
+        if (HighestSalinity < value || double.IsNaN(value)) { status = InputCheck.Graver(status, Status.ConductanceAboveRange); }
         if (InputCheck.Refuses(status, rule)) { return status; }
         salinity = InputCheck.FiniteOrNaN(value);
         perConductivity = InputCheck.FiniteOrNaN(perMillisiemens);

@@ -42,7 +42,7 @@ public static class StandardAtmosphere
     /// <param name="altitudeMetres">Altitude of the station, −610 to 11 000 m.</param>
     /// <param name="hectopascal">Sea-level pressure, hPa; NaN unless the status is Ok.</param>
     /// <remarks>
-    /// Weather services reduce with the temperature of the day: at 1000 m a day 15 K colder than standard gives about 0.6 %
+    /// Weather services reduce with the temperature of the day: at 1000 m a day 15 K colder than standard gives about 0.7 %
     /// more. This function judges whether a pressure is possible at an altitude; it does not replace a barometer.
     /// </remarks>
     public static Status ReduceToSeaLevel(double stationHectopascal, double altitudeMetres, out double hectopascal)

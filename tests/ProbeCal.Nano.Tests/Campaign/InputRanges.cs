@@ -39,6 +39,7 @@ internal static class InputRanges
         ("^molesPerLitreAtmosphere$", 1e-4, 0.1),
         ("^gramsPerMole$", 2.0, 100.0),
         ("[dD]ensity", 990.0, 1030.0),
+        ("^conductivityMicrosiemensPerCentimetre$", 60.0, 1000.0),
         ("[mM]icrosiemensPerCentimetre$", 0.0, 59000.0),
         ("^millisiemensPerCentimetre$", 0.0, 50.0),
         ("[dD]ecibar$", 0.0, 200.0),
