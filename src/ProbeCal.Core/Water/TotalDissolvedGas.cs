@@ -15,8 +15,11 @@ public static class TotalDissolvedGas
     /// <summary>Mole fraction of nitrogen and argon together in dry air (Glueckauf 1951).</summary>
     public const double NitrogenArgonMoleFraction = 0.78084 + 0.00934;
 
+    /// <summary>Greatest ΔP taken, either way, hPa: 10 atm.</summary>
+    public const double GreatestDeltaHectopascal = 10.0 * PressureUnits.HectopascalPerAtmosphere;
+
     /// <summary>Total gas pressure in % of the air's: 100·(BP + ΔP)/BP.</summary>
-    /// <param name="deltaHectopascal">ΔP, hPa, negative in water that holds less than the air; above −BP.</param>
+    /// <param name="deltaHectopascal">ΔP, hPa, negative in water that holds less than the air; above −BP, at most 10 132.5.</param>
     /// <param name="barometricHectopascal">Absolute station pressure BP, hPa, above zero.</param>
     /// <param name="percent">Total gas pressure, %; NaN unless the status is Ok.</param>
     public static Status Percent(double deltaHectopascal, double barometricHectopascal, out double percent)
@@ -37,7 +40,9 @@ public static class TotalDissolvedGas
         depthMetres = double.NaN;
         Status status = InputCheck.Graver(CheckDelta(deltaHectopascal), InputCheck.Density(densityKilogramsPerCubicMetre));
         double perMetre = HydrostaticPressure.PerMetre(densityKilogramsPerCubicMetre);
-        if (status != Status.Ok || perMetre <= 0.0) { return status; }
+        if (status != Status.Ok) { return status; }
+        // A density so small that the product is zero.
+        if (perMetre <= 0.0) { return Status.DensityBelowRange; }
         return InputCheck.Deliver(deltaHectopascal / perMetre, status, Status.PressureAboveRange, out depthMetres);
     }
 
@@ -136,7 +141,7 @@ public static class TotalDissolvedGas
 
     internal static Status CheckDelta(double delta)
     {
-        return InputCheck.NotFinite(delta) ? Status.PressureNotFinite : Status.Ok;
+        return InputCheck.Pressure(delta, -GreatestDeltaHectopascal, GreatestDeltaHectopascal);
     }
 
     /// <summary>What is left for nitrogen and argon, what air holds of them, and the slopes of the vapour; values even when the status names a range.</summary>

@@ -32,7 +32,7 @@ internal static class CoreFunctions
     private static readonly Input Conductivity = new(Conductance, 21.0, 0.0, None);
     private static readonly Input Decibar = new(Depth, 120.0, 0.0, 10000.0);
     private static readonly Input OutdoorCelsius = new(Temperature, 11.0, -80.0, 60.0);
-    private static readonly Input Delta = new(Pressure, 70.0, None, None);
+    private static readonly Input Delta = new(Pressure, 70.0, None, 10132.5);
     private static readonly Input Little = new(PartialPressure, 1.2, None, None);
     private static readonly Input Brine = new(Temperature, 35.0, 0.0, 90.0);
     private static readonly Input Molar = new(Concentration, 0.8, 0.0, 5.0);
