@@ -22,6 +22,29 @@ public class ReleasedOutputTests
     }
 
     [Theory]
+    [InlineData("version-2.json")]
+    [InlineData("version-2-mixture.json")]
+    public void Version2_of_equilibrium_fits_the_published_schema_and_nothing_may_be_added(string sample)
+    {
+        string text = File.ReadAllText(Sample("equilibrium", sample));
+        using JsonDocument released = JsonDocument.Parse(text);
+        Assert.Equal(2, released.RootElement.GetProperty("version").GetInt32());
+        Assert.True(Schemas.Of("equilibrium").Evaluate(released.RootElement).IsValid);
+        foreach ((string good, string bad) in new[]
+        {
+            ("{\"format\"", "{\"more\":1,\"format\""),
+            ("\"perKelvin\"", "\"perCelsius\""),
+            ("\"version\":2", "\"version\":1"),
+            ("\"doi\":", "\"link\":"),
+        })
+        {
+            Assert.Contains(good, text, StringComparison.Ordinal);
+            using JsonDocument changed = JsonDocument.Parse(text.Replace(good, bad, StringComparison.Ordinal));
+            Assert.False(Schemas.Of("equilibrium").Evaluate(changed.RootElement).IsValid, bad);
+        }
+    }
+
+    [Theory]
     [InlineData("equilibrium", "\"version\":1", "\"version\":2")]
     [InlineData("calibration-list", "\"count\": 2", "\"count\": \"two\"")]
     public void Schema_refuses_what_is_something_else(string kind, string good, string bad)

@@ -1,26 +1,32 @@
+using System;
+using System.Collections.Generic;
 using System.CommandLine;
-using System.IO;
+using System.Globalization;
+using System.Threading;
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Equilibrium;
 
 namespace ProbeCal.Host.Commands;
 
-/// <summary><c>probecal equilibrium</c>: what water in equilibrium with air holds there.</summary>
+/// <summary><c>probecal equilibrium</c>: what water in equilibrium with a gas phase holds there, and how far a measured concentration is from it.</summary>
 internal static class EquilibriumCommand
 {
+    private const int UsualTrials = 1_000_000;
+    private const int FewestTrials = 1_000;
+    private const int MostTrials = 100_000_000;
+
+    /// <summary>The seed where none is given: any will do, and a fixed one gives the same figures tomorrow.</summary>
+    private const int UsualSeed = 1;
+
+    private static readonly TimeSpan QuietTime = TimeSpan.FromSeconds(2);
+
     private static readonly string[] Formats = ["text", "json"];
 
     internal static Command Create(Terminal terminal)
     {
-        Option<string> gas = new("--gas") { Description = "The gas. Oxygen (O2) so far.", DefaultValueFactory = static _ => "O2", HelpName = "O2" };
-        Option<string> temperature = new("--temperature") { Description = "Water temperature: 20, 20C, 68F.", Required = true, HelpName = "T" };
-        Option<string> salinity = new("--salinity") { Description = "Practical salinity; 0 for fresh water.", Required = true, HelpName = "S" };
-        Option<string> pressure = new("--pressure") { Description = "Absolute station pressure with its unit: 760mmHg, 938hPa, 27.7inHg. Not the sea-level value of a weather service.", HelpName = "P" };
-        Option<string> altitude = new("--altitude") { Description = "Altitude with its unit: 640m, 2100ft. Stands in for a barometer where --pressure is missing; with it, the pressure is judged.", HelpName = "Z" };
-        Option<string> equation = new("--equation") { Description = "benson-krause-1984 or garcia-gordon-1992.", DefaultValueFactory = static _ => EquationNames.NameOf(EquationNames.Default), HelpName = "NAME" };
-        Option<string> temperatureUncertainty = new("--temperature-uncertainty") { Description = "Standard uncertainty of the temperature: 0.1K.", HelpName = "u" };
-        Option<string> salinityUncertainty = new("--salinity-uncertainty") { Description = "Standard uncertainty of the salinity: 0.1.", HelpName = "u" };
-        Option<string> pressureUncertainty = new("--pressure-uncertainty") { Description = "Standard uncertainty of the pressure: 1hPa.", HelpName = "u" };
+        EquilibriumOptions options = new();
+        Option<string> monteCarlo = new("--monte-carlo") { Description = "Check the uncertainty by so many random trials (JCGM 101); 1000000 when no number is given.", HelpName = "N", Arity = ArgumentArity.ZeroOrOne };
+        Option<string> seed = new("--seed") { Description = "Seed of the random trials; the same seed gives the same figures.", HelpName = "N" };
         Option<string> format = new("--format") { Description = "text or json.", DefaultValueFactory = static _ => "text", HelpName = "text|json" };
         Command command = new(
             "equilibrium",
@@ -31,47 +37,46 @@ internal static class EquilibriumCommand
               probecal equilibrium --temperature 20 --salinity 0 --pressure 760mmHg
               probecal equilibrium --temperature 68F --salinity 35 --pressure 1009hPa --temperature-uncertainty 0.1K
               probecal equilibrium --temperature 8.4 --salinity 0 --altitude 640m --format json
-            """)
-        {
-            gas, temperature, salinity, pressure, altitude, equation, temperatureUncertainty, salinityUncertainty, pressureUncertainty, format,
-        };
+              probecal equilibrium --gas CO2 --mole-fraction 425ppm --temperature 12 --salinity 35 --pressure 1013hPa
+              probecal equilibrium --mixture "O2=5%, N2=95%" --temperature 25 --salinity 0 --pressure 1000hPa
+              probecal equilibrium --concentration 8.1mg/L --concentration-uncertainty 0.1mg/L --temperature 18 --salinity 0 --pressure 938hPa
+              probecal equilibrium --temperature 20 --temperature-within 0.2K --salinity 0 --pressure 938hPa --monte-carlo
+            """);
+        options.AddTo(command);
+        command.Options.Add(monteCarlo);
+        command.Options.Add(seed);
+        command.Options.Add(format);
         command.SetAction(parsed =>
         {
-            string gasName = parsed.GetValue(gas)!;
-            if (!string.Equals(gasName, "O2", System.StringComparison.OrdinalIgnoreCase))
-            {
-                throw new InputException($"--gas '{gasName}': no equation for it yet; there is O2");
-            }
-
             string shape = parsed.GetValue(format)!;
-            if (System.Array.IndexOf(Formats, shape) < 0)
+            if (Array.IndexOf(Formats, shape) < 0)
             {
-                throw new InputException($"--format '{shape}': there are text and json");
+                throw new InputException($"--format '{Wrong.Shown(shape)}': there are text and json");
             }
 
-            StationPressure air = StationPressure.Parse(parsed.GetValue(pressure), parsed.GetValue(altitude), parsed.GetValue(pressureUncertainty));
-            WaterConditions conditions = new(
-                Quantity.TemperatureCelsius("--temperature", parsed.GetValue(temperature)!),
-                Quantity.Salinity("--salinity", parsed.GetValue(salinity)!),
-                air.Hectopascal,
-                air.Source,
-                Uncertainty(QuantityKind.TemperatureDifference, "--temperature-uncertainty", parsed.GetValue(temperatureUncertainty)),
-                Uncertainty(QuantityKind.Salinity, "--salinity-uncertainty", parsed.GetValue(salinityUncertainty)),
-                air.UncertaintyHectopascal);
-            OxygenAtEquilibrium result = OxygenAtEquilibrium.Compute(EquationNames.Parse("--equation", parsed.GetValue(equation)!), conditions);
-            if (air.Note is string note)
+            bool wantsCheck = parsed.GetResult(monteCarlo) is not null;
+            int trials = wantsCheck && parsed.GetValue(monteCarlo) is string text ? (int)Number.ParseWhole("--monte-carlo", text, FewestTrials, MostTrials) : UsualTrials;
+            string? seedText = parsed.GetValue(seed);
+            if (seedText is not null && !wantsCheck)
+            {
+                throw new InputException("--seed belongs to --monte-carlo, which is not given");
+            }
+
+            int seedNumber = seedText is null ? UsualSeed : (int)Number.ParseWhole("--seed", seedText, 0, int.MaxValue);
+            GasAtEquilibrium result = GasAtEquilibrium.Compute(options.Entry(parsed).Read());
+            foreach (string note in result.Asked.Notes)
             {
                 terminal.Error.WriteLine("note: " + note);
             }
 
-            TextWriter output = terminal.Output;
+            MonteCarloReport? check = wantsCheck ? Check(terminal, result, trials, seedNumber) : null;
             if (shape == "json")
             {
-                output.WriteLine(EquilibriumJson.Of(result));
+                terminal.Output.WriteLine(EquilibriumJson.Of(result, check));
             }
             else
             {
-                EquilibriumText.Write(output, result);
+                EquilibriumText.Write(terminal.Output, result, check);
             }
 
             return ExitCode.Done;
@@ -79,14 +84,40 @@ internal static class EquilibriumCommand
         return command;
     }
 
-    private static double Uncertainty(QuantityKind kind, string option, string? text)
+    /// <summary>Checks the values that matter most: the concentration and the partial pressure, or what was made of a measured one.</summary>
+    private static MonteCarloReport Check(Terminal terminal, GasAtEquilibrium result, int trials, int seed)
     {
-        if (text is null)
+        EquilibriumQuantity[] wanted = result.Asked.Measured is null
+            ? [EquilibriumQuantity.MilligramsPerLitre, EquilibriumQuantity.PartialPressure]
+            : [EquilibriumQuantity.MeasuredPartialPressure, EquilibriumQuantity.PercentLocal];
+        List<EquilibriumCheck> checks = [];
+        long begun = terminal.Time.GetTimestamp();
+        TimeSpan said = TimeSpan.Zero;
+        foreach (EquilibriumQuantity quantity in wanted)
         {
-            return 0;
+            if (result.Find(quantity) is not null)
+            {
+                int before = checks.Count;
+                checks.Add(result.Check(quantity, trials, seed, done => Progress(before, done), terminal.Stop));
+            }
         }
 
-        double value = Quantity.Parse(kind, option, text);
-        return 0 <= value ? value : throw new InputException($"{option} {text}: a standard uncertainty is zero or above");
+        return new MonteCarloReport(seed, checks);
+
+        void Progress(int before, int done)
+        {
+            TimeSpan elapsed = terminal.Time.GetElapsedTime(begun);
+            if (QuietTime < elapsed - said)
+            {
+                said = elapsed;
+                terminal.Error.WriteLine(string.Create(CultureInfo.InvariantCulture,
+                    $"Monte Carlo: {100.0 * (((double)before * trials) + done) / ((double)wanted.Length * trials):F0} % of {wanted.Length} × {trials} trials"));
+            }
+        }
     }
 }
+
+/// <summary>What the random trials gave.</summary>
+/// <param name="Seed">Where the random numbers began.</param>
+/// <param name="Checks">One for each value that was checked.</param>
+internal sealed record MonteCarloReport(int Seed, IReadOnlyList<EquilibriumCheck> Checks);

@@ -17,6 +17,11 @@ internal sealed class EquilibriumOptions
     private readonly Option<string> _salinity = Of("--salinity", "S", "Practical salinity; 0 for fresh water.");
     private readonly Option<string> _salinityUncertainty = Of("--salinity-uncertainty", "u", "Standard uncertainty of the salinity: 0.1.");
     private readonly Option<string> _salinityWithin = Of("--salinity-within", "a", "Or its limits to either side.");
+    private readonly Option<string> _conductivity = Of("--conductivity", "C", "In place of a salinity: conductivity as measured, 42mS/cm (PSS-78).");
+    private readonly Option<string> _conductivityTemperature = Of("--conductivity-temperature", "T", "The temperature it was measured at, where it is not the water's.");
+    private readonly Option<string> _conductivityTemperatureUncertainty = Of("--conductivity-temperature-uncertainty", "u", "Standard uncertainty of that temperature: 0.1K.");
+    private readonly Option<string> _chlorinity = Of("--chlorinity", "CL", "In place of a salinity: chlorinity of sea water in g/kg, 19.4.");
+    private readonly Option<string> _chlorinityUncertainty = Of("--chlorinity-uncertainty", "u", "Standard uncertainty of the chlorinity: 0.01.");
     private readonly Option<string> _specificConductance = Of("--specific-conductance", "SC", "In place of a salinity: conductivity at 25 °C of field water, 500uS/cm.");
     private readonly Option<string> _conductivityUncertainty = Of("--conductivity-uncertainty", "u", "Standard uncertainty of the conductivity: 5uS/cm.");
     private readonly Option<string> _pressure = Of("--pressure", "P", "Absolute station pressure with its unit: 760mmHg, 938hPa, 27.7inHg. Not the sea-level value of a weather service.");
@@ -40,9 +45,9 @@ internal sealed class EquilibriumOptions
     {
         foreach (Option<string> option in new[]
         {
-            _gas, _equation, _temperature, _salinity, _specificConductance, _pressure, _altitude,
+            _gas, _equation, _temperature, _salinity, _conductivity, _conductivityTemperature, _specificConductance, _chlorinity, _pressure, _altitude,
             _moleFraction, _mixture, _partialPressure, _humidity, _concentration,
-            _temperatureUncertainty, _temperatureWithin, _salinityUncertainty, _salinityWithin, _conductivityUncertainty,
+            _temperatureUncertainty, _temperatureWithin, _salinityUncertainty, _salinityWithin, _conductivityUncertainty, _conductivityTemperatureUncertainty, _chlorinityUncertainty,
             _pressureUncertainty, _pressureWithin, _moleFractionUncertainty, _moleFractionWithin, _partialPressureUncertainty,
             _humidityUncertainty, _humidityWithin, _concentrationUncertainty,
         })
@@ -64,6 +69,11 @@ internal sealed class EquilibriumOptions
             Salinity = parsed.GetValue(_salinity),
             SalinityUncertainty = parsed.GetValue(_salinityUncertainty),
             SalinityWithin = parsed.GetValue(_salinityWithin),
+            Conductivity = parsed.GetValue(_conductivity),
+            ConductivityTemperature = parsed.GetValue(_conductivityTemperature),
+            ConductivityTemperatureUncertainty = parsed.GetValue(_conductivityTemperatureUncertainty),
+            Chlorinity = parsed.GetValue(_chlorinity),
+            ChlorinityUncertainty = parsed.GetValue(_chlorinityUncertainty),
             SpecificConductance = parsed.GetValue(_specificConductance),
             ConductivityUncertainty = parsed.GetValue(_conductivityUncertainty),
             Pressure = parsed.GetValue(_pressure),

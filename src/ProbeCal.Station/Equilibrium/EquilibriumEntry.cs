@@ -33,6 +33,21 @@ public sealed record EquilibriumEntry
     /// <summary>Or its limits: half the width.</summary>
     public string? SalinityWithin { get; init; }
 
+    /// <summary>Conductivity as measured, in place of a salinity.</summary>
+    public string? Conductivity { get; init; }
+
+    /// <summary>The temperature it was measured at; that of the water when not said.</summary>
+    public string? ConductivityTemperature { get; init; }
+
+    /// <summary>Standard uncertainty of that temperature.</summary>
+    public string? ConductivityTemperatureUncertainty { get; init; }
+
+    /// <summary>Chlorinity of sea water, in place of a salinity.</summary>
+    public string? Chlorinity { get; init; }
+
+    /// <summary>Its standard uncertainty.</summary>
+    public string? ChlorinityUncertainty { get; init; }
+
     /// <summary>Conductivity at 25 °C in place of a salinity.</summary>
     public string? SpecificConductance { get; init; }
 
@@ -96,7 +111,7 @@ public sealed record EquilibriumEntry
 
         double celsius = Quantity.TemperatureCelsius("--temperature", Temperature);
         UncertainQuantity temperature = UncertainQuantity.Read(celsius, QuantityKind.TemperatureDifference, "--temperature", TemperatureUncertainty, TemperatureWithin);
-        WaterSalinity water = WaterSalinity.Read(this);
+        WaterSalinity water = WaterSalinity.Read(this, celsius);
         StationPressure pressure = StationPressure.Parse(Pressure, Altitude, PressureUncertainty);
         UncertainQuantity stated = UncertainQuantity.Read(pressure.Hectopascal, QuantityKind.Pressure, "--pressure", PressureUncertainty, PressureWithin);
         List<string> notes = [];

@@ -23,7 +23,7 @@ public class ReleasedFormatsTests
         // Written and read by this program alone: no schema is published.
         ["probecal-calibration-session"] = ("calibration-session-v1.json", null),
         ["probecal-station-configuration"] = ("station-configuration/version-1.json", "station-configuration"),
-        ["probecal-equilibrium"] = ("equilibrium/version-1.json", "equilibrium"),
+        ["probecal-equilibrium"] = ("equilibrium/version-2.json", "equilibrium"),
         ["probecal-truth"] = ("truth/version-1.csv", null),
     };
 

@@ -51,7 +51,7 @@ public class RoomsTests
     private static readonly Dictionary<string, string[]> StationRooms = new()
     {
         ["Entry"] = [],
-        ["Equilibrium"] = ["Entry"],
+        ["Equilibrium"] = ["Entry", "Uncertainty"],
         ["Storage"] = ["Entry"],
         ["Uncertainty"] = [],
         ["Simulation"] = ["Entry", "Sources"],
