@@ -39,6 +39,7 @@ internal static class Program
         RootCommand root = new("ProbeCal: what the water holds at equilibrium, the probe calibrated in it, and corrected readings sent home.")
         {
             EquilibriumCommand.Create(terminal),
+            TablesCommand.Create(terminal),
             CalibrateCommand.Create(terminal),
             CalibrationsCommand.Create(terminal),
             StationCommand.Create(terminal),

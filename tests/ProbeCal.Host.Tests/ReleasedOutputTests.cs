@@ -14,6 +14,7 @@ public class ReleasedOutputTests
     [Theory]
     [InlineData("equilibrium")]
     [InlineData("calibration-list")]
+    [InlineData("table")]
     public void Version1_fits_the_published_schema(string kind)
     {
         using JsonDocument released = JsonDocument.Parse(File.ReadAllText(Sample(kind, "version-1.json")));
@@ -46,6 +47,7 @@ public class ReleasedOutputTests
 
     [Theory]
     [InlineData("equilibrium", "\"version\":1", "\"version\":2")]
+    [InlineData("table", "\"bilinear\"", "\"cubic\"")]
     [InlineData("calibration-list", "\"count\": 2", "\"count\": \"two\"")]
     public void Schema_refuses_what_is_something_else(string kind, string good, string bad)
     {

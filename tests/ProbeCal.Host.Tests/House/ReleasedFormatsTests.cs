@@ -24,6 +24,7 @@ public class ReleasedFormatsTests
         ["probecal-calibration-session"] = ("calibration-session-v1.json", null),
         ["probecal-station-configuration"] = ("station-configuration/version-1.json", "station-configuration"),
         ["probecal-equilibrium"] = ("equilibrium/version-2.json", "equilibrium"),
+        ["probecal-table"] = ("table/version-1.json", "table"),
         ["probecal-truth"] = ("truth/version-1.csv", null),
     };
 

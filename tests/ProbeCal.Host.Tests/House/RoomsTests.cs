@@ -53,6 +53,7 @@ public class RoomsTests
         ["Entry"] = [],
         ["Equilibrium"] = ["Entry", "Uncertainty"],
         ["Storage"] = ["Entry"],
+        ["TableWriting"] = ["Entry"],
         ["Uncertainty"] = [],
         ["Simulation"] = ["Entry", "Sources"],
         ["Sources"] = ["Entry", "Simulation"],
