@@ -19,6 +19,8 @@ public class DocumentationTests
     [InlineData(typeof(GarciaGordon1992))]
     [InlineData(typeof(OxygenEquilibrium))]
     [InlineData(typeof(HenryLaw))]
+    [InlineData(typeof(HenryConversion))]
+    [InlineData(typeof(VapourWeissPrice1980))]
     [InlineData(typeof(DensityEos80))]
     [InlineData(typeof(FreezingPoint))]
     [InlineData(typeof(SpecificConductance))]

@@ -108,6 +108,7 @@ public static partial class GasEquilibrium
             gas, equation, celsius, salinity, pressureHectopascal, partialPressureHectopascal, null,
             out double logPerKelvin, out double logPerSalinity, out double logPerHectopascal, out double logPerPartialPressure);
         double concentration = solubility * partialPressureHectopascal;
+        if (InputCheck.NotFinite(concentration)) { return status == Status.Ok ? Status.PartialPressureBelowRange : status; }
         perKelvin = InputCheck.FiniteOrNaN(concentration * logPerKelvin);
         perSalinity = InputCheck.FiniteOrNaN(concentration * logPerSalinity);
         perHectopascal = InputCheck.FiniteOrNaN(concentration * logPerHectopascal);

@@ -8,7 +8,7 @@ namespace ProbeCal;
 /// Moist-air equations: C = C*·[(P − h·u)·φ(P)]/[(1 atm − u)·φ(1 atm)]·(x/xref). Solubility, Bunsen and Henry equations: C = K·p·φ(P), p = x·(P − h·u).
 /// u is the vapour pressure over the water (oxygen: fresh water, Benson and Krause 1980; others: Weiss and Price 1980), φ the fugacity coefficient, and above 1.1 atm a Poynting factor is added
 /// (volumes of Enns 1965), for oxygen, nitrogen, argon, helium and carbon dioxide; other gases end at 1.1 atm. For oxygen in water-saturated air up to 1.1 atm
-/// all of it is <see cref="OxygenEquilibrium"/> to the bit. The mole fraction in φ is p/P. Accuracy: <see cref="GasUncertainty"/>. Ranges are those of the equation (docs/methods.md);
+/// all of it is <see cref="OxygenEquilibrium"/> to the bit. The mole fraction in φ is p/P, within 0 and 1. Accuracy: <see cref="GasUncertainty"/>. Ranges are those of the equation (docs/methods.md);
 /// partial pressures: −2 to 40 °C, S 0–42. Negative partial pressures and concentrations pass through and are never clipped.
 /// </remarks>
 public static partial class GasEquilibrium
@@ -129,7 +129,8 @@ public static partial class GasEquilibrium
         steps?.Add(StepQuantity.GivenPartialPressureHectopascal, partialPressureHectopascal);
         double solubility = Solubility(
             gas, equation, celsius, salinity, pressureHectopascal, partialPressureHectopascal, steps, out _, out _, out _, out _);
-        milligramsPerLitre = InputCheck.FiniteOrNaN(solubility * partialPressureHectopascal);
+        status = InputCheck.Deliver(
+            solubility * partialPressureHectopascal, status, Status.PartialPressureBelowRange, out milligramsPerLitre);
         steps?.Add(StepQuantity.MilligramsPerLitre, milligramsPerLitre);
         return status;
     }
@@ -208,9 +209,8 @@ public static partial class GasEquilibrium
         logPerKelvin += phiPerKelvin + poyntingPerKelvin;
         logPerHectopascal = (phiPerAtmosphere + poyntingPerAtmosphere) / PressureUnits.HectopascalPerAtmosphere;
         logPerPartialPressure = 0.0;
-        if (phiPerMoleFraction != 0.0)
+        if (0.0 < wetMoleFraction && 0.0 < pressureHectopascal)
         {
-            if (pressureHectopascal <= 0.0) { return double.NaN; }
             logPerPartialPressure = phiPerMoleFraction / pressureHectopascal;
             logPerHectopascal -= logPerPartialPressure * wetMoleFraction;
         }
@@ -327,10 +327,14 @@ public static partial class GasEquilibrium
         return factor;
     }
 
+    /// <summary>
+    /// p/P for φ, within 0 and 1: water may hold more gas than the total pressure carries (the gas phase that φ speaks of is the pure gas then), and a measured value may lie below zero.
+    /// </summary>
     private static double WetMoleFraction(Gas gas, double pressureHectopascal, double partialPressureHectopascal)
     {
-        if (!FugacityCoefficient.DependsOnMoleFraction(gas) || pressureHectopascal <= 0.0) { return 0.0; }
-        return partialPressureHectopascal / pressureHectopascal;
+        if (!FugacityCoefficient.DependsOnMoleFraction(gas) || pressureHectopascal <= 0.0 || partialPressureHectopascal <= 0.0) { return 0.0; }
+        double fraction = partialPressureHectopascal / pressureHectopascal;
+        return 1.0 < fraction ? 1.0 : fraction;
     }
 
     private static void AddInputs(CalculationSteps? steps, double celsius, double salinity, double pressureHectopascal)

@@ -244,7 +244,7 @@ internal static class GasSolubility
     }
 
     /// <summary>True where the equation counts per kilogram of water.</summary>
-    private static bool IsPerKilogram(SolubilityEquation equation)
+    internal static bool IsPerKilogram(SolubilityEquation equation)
     {
         switch (equation)
         {

@@ -55,12 +55,12 @@ public static class GasUncertainty
 
     /// <summary>Root of the sum of squares of a value's contributions (JCGM 100:2008, independent inputs).</summary>
     /// <param name="fromTemperature">Sensitivity times standard uncertainty, in the unit of the value; so the others.</param>
-    /// <param name="fromSalinity">Part of the salinity.</param>
-    /// <param name="fromPressure">Part of the pressure.</param>
-    /// <param name="fromMoleFraction">Part of the mole fraction.</param>
-    /// <param name="fromHumidity">Part of the humidity.</param>
-    /// <param name="fromEquation">Part of the equation.</param>
-    /// <param name="standardUncertainty">Combined standard uncertainty; NaN unless Ok.</param>
+    /// <param name="fromSalinity">Part of the salinity, in the same unit.</param>
+    /// <param name="fromPressure">Part of the pressure, in the same unit.</param>
+    /// <param name="fromMoleFraction">Part of the mole fraction, in the same unit.</param>
+    /// <param name="fromHumidity">Part of the humidity, in the same unit.</param>
+    /// <param name="fromEquation">Part of the equation, in the same unit.</param>
+    /// <param name="standardUncertainty">Combined standard uncertainty, in the same unit; NaN unless Ok.</param>
     public static Status Combined(
         double fromTemperature, double fromSalinity, double fromPressure, double fromMoleFraction, double fromHumidity, double fromEquation,
         out double standardUncertainty)

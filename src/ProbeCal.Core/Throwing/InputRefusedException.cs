@@ -45,6 +45,8 @@ public sealed class InputRefusedException : ArgumentException
             RefusalReason.NotFinite => "not a finite number",
             RefusalReason.BelowRange => "below the range",
             RefusalReason.AboveRange => "above the range",
+            RefusalReason.JustBelowRange => "just below the range",
+            RefusalReason.JustAboveRange => "just above the range",
             _ => "not known",
         };
     }

@@ -186,8 +186,10 @@ public class CalibrationFitTests
     }
 
     [Theory]
-    [InlineData(-0.1, 950.0, Status.TemperatureBelowRange)]
-    [InlineData(40.1, 950.0, Status.TemperatureAboveRange)]
+    [InlineData(-0.1, 950.0, Status.TemperatureJustBelowRange)]
+    [InlineData(-0.3, 950.0, Status.TemperatureBelowRange)]
+    [InlineData(40.1, 950.0, Status.TemperatureJustAboveRange)]
+    [InlineData(40.3, 950.0, Status.TemperatureAboveRange)]
     [InlineData(17.0, 400.0, Status.PressureBelowRange)]
     [InlineData(17.0, 1150.0, Status.PressureAboveRange)]
     public void Create_OutsideARange_IsRefused(double temperature, double pressure, Status expected)

@@ -1,5 +1,6 @@
 using System;
 using System.Collections.Generic;
+using System.Linq;
 using static ProbeCal.InputQuantity;
 
 namespace ProbeCal.Core.Tests.Gases;
@@ -20,6 +21,8 @@ internal static class CoreFunctions
     private static readonly Input Partial = new(PartialPressure, 190.0, None, High);
     private static readonly Input Milligrams = new(Concentration, 7.5, None, None);
     private static readonly Input Percent = new(InputQuantity.Saturation, 90.0, None, None);
+    private static readonly Input Fraction = new(MoleFraction, 0.2, 0.0, 1.0);
+    private static readonly Input Relative = new(Humidity, 60.0, 0.0, 100.0);
     private static readonly Input Altitude = new(InputQuantity.Altitude, 640.0, -610.0, 11000.0);
     private static readonly Input AnyPressure = new(Pressure, 940.0, None, None);
     private static readonly Input AnyPartial = new(PartialPressure, 190.0, None, None);
@@ -37,6 +40,13 @@ internal static class CoreFunctions
     private static readonly Input Brine = new(Temperature, 35.0, 0.0, 90.0);
     private static readonly Input Molar = new(Concentration, 0.8, 0.0, 5.0);
     private static readonly Input Above = new(Depth, 2100.0, 0.0, 101325.0);
+
+    private static readonly Lazy<Dictionary<string, CoreFunction>> ByName = new(() => All().ToDictionary(f => f.Name));
+
+    internal static CoreFunction Find(string name)
+    {
+        return ByName.Value[name];
+    }
 
     internal static IEnumerable<CoreFunction> All()
     {
@@ -108,7 +118,65 @@ internal static class CoreFunctions
         yield return Strict("OxygenUnits.MicromolesPerKilogramFromMilligramsPerLitre", [Milligrams, Rho], (double[] x, RangeRule r, out double v) => OxygenUnits.MicromolesPerKilogramFromMilligramsPerLitre(x[0], x[1], out v));
         yield return Strict("OxygenUnits.MilligramsPerLitreFromMicromolesPerKilogram", [Milligrams, Rho], (double[] x, RangeRule r, out double v) => OxygenUnits.MilligramsPerLitreFromMicromolesPerKilogram(x[0], x[1], out v));
         yield return Strict("OxygenUnits.MilligramsPerKilogramFromMilligramsPerLitre", [Milligrams, Rho], (double[] x, RangeRule r, out double v) => OxygenUnits.MilligramsPerKilogramFromMilligramsPerLitre(x[0], x[1], out v));
+        yield return One("VapourWeissPrice1980.Pressure", [Celsius, Salt], (double[] x, RangeRule r, out double v) => VapourWeissPrice1980.Pressure(x[0], x[1], r, out v));
+        foreach (Gas gas in Enum.GetValues<Gas>())
+        {
+            foreach (CoreFunction function in GasPhase(gas)) { yield return function; }
+        }
+
+        foreach ((Gas gas, SolubilityEquation equation) in Pairs())
+        {
+            foreach (CoreFunction function in GasPair(gas, equation)) { yield return function; }
+        }
+
+        yield return Strict("HenryConversion.Convert", [Constant, new Input(Temperature, 15.0, None, None), Rho], (double[] x, RangeRule r, out double v) => HenryConversion.Convert(HenryForm.Hcp, HenryForm.Kpx, x[0], x[1], x[2], out v));
         yield return One("OxygenUncertainty.PartialPressure", [AirCelsius, Total, Spread, Spread], (double[] x, RangeRule r, out double v) => OxygenUncertainty.PartialPressure(x[0], x[1], x[2], x[3], r, out v));
+    }
+
+    /// <summary>Every gas with every equation that covers it.</summary>
+    internal static IEnumerable<(Gas Gas, SolubilityEquation Equation)> Pairs()
+    {
+        foreach (Gas gas in Enum.GetValues<Gas>())
+        {
+            foreach (SolubilityEquation equation in Enum.GetValues<SolubilityEquation>())
+            {
+                if (GasSolubility.Covers(gas, equation)) { yield return (gas, equation); }
+            }
+        }
+    }
+
+    private static IEnumerable<CoreFunction> GasPhase(Gas gas)
+    {
+        Input total = Total with { Highest = GasEquilibrium.HighestHectopascal(gas) };
+        Input[] inputs = [AirCelsius, SeaSalt, total, Fraction, Relative];
+        yield return One("GasEquilibrium.PartialPressure, " + gas, inputs, (double[] x, RangeRule r, out double v) => GasEquilibrium.PartialPressure(gas, x[0], x[1], x[2], x[3], x[4], r, out v));
+        yield return new("GasEquilibrium.PartialPressureSensitivities, " + gas, true, inputs, (x, r) => (GasEquilibrium.PartialPressureSensitivities(gas, x[0], x[1], x[2], x[3], x[4], r, out double a, out double b, out double c, out double d, out double e), [a, b, c, d, e]));
+    }
+
+    private static IEnumerable<CoreFunction> GasPair(Gas gas, SolubilityEquation e)
+    {
+        double highestSalinity = GasSolubility.HighestSalinity(e);
+        double ordinarySalinity = highestSalinity / 2.0;
+        double highest = GasEquilibrium.HighestHectopascal(gas);
+        // The lower end of Garcia and Gordon moves with the salinity: it is the one at the ordinary salinity.
+        Input t = new(Temperature, 15.0, GasSolubility.LowestCelsius(gas, e, ordinarySalinity), GasSolubility.HighestCelsius(e));
+        Input s = new(Salinity, ordinarySalinity, 0.0, highestSalinity);
+        Input total = Total with { Highest = highest };
+        Input partial = Partial with { Highest = highest };
+        GasEquilibrium.ConcentrationFromPartialPressure(gas, e, 15.0, ordinarySalinity, 980.0, 190.0, RangeRule.Refuse, out double ordinary);
+        Input amount = Milligrams with { Ordinary = ordinary };
+        string pair = ", " + gas + " " + e;
+        Input[] mixture = [t, s, total, Fraction, Relative];
+        Input[] given = [t, s, total, partial];
+        Input[] found = [t, s, total, amount];
+        yield return One("GasEquilibrium.MilligramsPerLitre" + pair, mixture, (double[] x, RangeRule r, out double v) => GasEquilibrium.MilligramsPerLitre(gas, e, x[0], x[1], x[2], x[3], x[4], r, out v));
+        yield return new("GasEquilibrium.MilligramsPerLitreSensitivities" + pair, true, mixture, (x, r) => (GasEquilibrium.MilligramsPerLitreSensitivities(gas, e, x[0], x[1], x[2], x[3], x[4], r, out double a, out double b, out double c, out double d, out double f), [a, b, c, d, f]));
+        yield return One("GasEquilibrium.ConcentrationFromPartialPressure" + pair, given, (double[] x, RangeRule r, out double v) => GasEquilibrium.ConcentrationFromPartialPressure(gas, e, x[0], x[1], x[2], x[3], r, out v));
+        yield return new("GasEquilibrium.ConcentrationSensitivities" + pair, true, given, (x, r) => (GasEquilibrium.ConcentrationSensitivities(gas, e, x[0], x[1], x[2], x[3], r, out double a, out double b, out double c, out double d), [a, b, c, d]));
+        yield return One("GasEquilibrium.PartialPressureFromConcentration" + pair, found, (double[] x, RangeRule r, out double v) => GasEquilibrium.PartialPressureFromConcentration(gas, e, x[0], x[1], x[2], x[3], r, out v));
+        yield return new("GasEquilibrium.PartialPressureFromConcentrationSensitivities" + pair, true, found, (x, r) => (GasEquilibrium.PartialPressureFromConcentrationSensitivities(gas, e, x[0], x[1], x[2], x[3], r, out double a, out double b, out double c, out double d), [a, b, c, d]));
+        yield return One("GasUncertainty.EquationRelative" + pair, [t, s, total], (double[] x, RangeRule r, out double v) => GasUncertainty.EquationRelative(gas, e, x[0], x[1], x[2], r, out v));
+        yield return One("HenryLaw.Constant" + pair, [t, s], (double[] x, RangeRule r, out double v) => HenryLaw.Constant(gas, e, x[0], x[1], r, out v));
     }
 
     private static IEnumerable<CoreFunction> Equilibrium(SolubilityEquation e, Input t, Input s)

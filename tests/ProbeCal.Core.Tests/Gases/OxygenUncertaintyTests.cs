@@ -72,7 +72,7 @@ public class OxygenUncertaintyTests(ITestOutputHelper output)
     [InlineData(40.0, 0.002)]
     public void Equation_GoesFromFreshToSaline(double salinity, double relative)
     {
-        foreach (SolubilityEquation equation in Enum.GetValues<SolubilityEquation>())
+        foreach (SolubilityEquation equation in new[] { SolubilityEquation.BensonKrause1984, SolubilityEquation.GarciaGordon1992 })
         {
             Assert.Equal(Status.Ok, OxygenUncertainty.EquationRelative(equation, salinity, RangeRule.Refuse, out double value));
             Assert.Equal(relative, value, 1.0e-15);

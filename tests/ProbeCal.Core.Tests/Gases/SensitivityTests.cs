@@ -31,8 +31,8 @@ public class SensitivityTests(ITestOutputHelper output)
     [MemberData(nameof(Pairs))]
     public void Derivative_AgreesWithCentralDifference(string valueName, string slopeName, int[] order)
     {
-        CoreFunction value = CoreFunctions.All().Single(f => f.Name == valueName);
-        CoreFunction slope = CoreFunctions.All().Single(f => f.Name == slopeName);
+        CoreFunction value = CoreFunctions.Find(valueName);
+        CoreFunction slope = CoreFunctions.Find(slopeName);
         double worst = 0.0;
         int count = 0;
         foreach (double celsius in new[] { 0.5, 4.0, 11.0, 18.5, 25.0, 33.0, 39.5 })
@@ -57,7 +57,7 @@ public class SensitivityTests(ITestOutputHelper output)
                         for (int i = 0; i < order.Length; i++)
                         {
                             // The difference itself errs by step²/6 of the third derivative (about 1e-8 of the slope) and by rounding over the step (1e-12 of the value).
-                            double difference = CentralDifference(value, inputs, order[i]);
+                            double difference = CentralDifference(value, inputs, order[i], Step);
                             double allowed = (2.0e-8 * Math.Abs(difference)) + (2.0e-11 * size) + 1.0e-13;
                             double miss = Math.Abs(slopes[i] - difference);
                             Assert.True(miss <= allowed, $"{slope.Name}[{i}] at {string.Join(' ', inputs)}: {slopes[i]} for {difference}");
@@ -70,6 +70,78 @@ public class SensitivityTests(ITestOutputHelper output)
         }
 
         output.WriteLine($"{slopeName}: {count} derivatives, worst {worst:F3} of what is allowed");
+    }
+
+    /// <summary>Every gas with every equation: all derivatives of all three functions, over the range of the pair.</summary>
+    [Fact]
+    public void EveryPair_AgreesWithCentralDifference()
+    {
+        double worst = 0.0;
+        int count = 0;
+        string[][] functions =
+        [
+            ["GasEquilibrium.MilligramsPerLitre", "GasEquilibrium.MilligramsPerLitreSensitivities"],
+            ["GasEquilibrium.ConcentrationFromPartialPressure", "GasEquilibrium.ConcentrationSensitivities"],
+            ["GasEquilibrium.PartialPressureFromConcentration", "GasEquilibrium.PartialPressureFromConcentrationSensitivities"],
+        ];
+        foreach ((Gas gas, SolubilityEquation equation) in CoreFunctions.Pairs())
+        {
+            foreach (string[] names in functions)
+            {
+                count += Compare(CoreFunctions.Find($"{names[0]}, {gas} {equation}"), CoreFunctions.Find($"{names[1]}, {gas} {equation}"), ref worst);
+            }
+        }
+
+        foreach (Gas gas in Enum.GetValues<Gas>())
+        {
+            count += Compare(CoreFunctions.Find("GasEquilibrium.PartialPressure, " + gas), CoreFunctions.Find("GasEquilibrium.PartialPressureSensitivities, " + gas), ref worst);
+        }
+
+        Assert.True(20000 < count, "only " + count);
+        output.WriteLine($"{count} derivatives, worst {worst:F3} of what is allowed");
+    }
+
+    private static int Compare(CoreFunction value, CoreFunction slope, ref double worst)
+    {
+        int count = 0;
+        for (int point = 0; point < 48; point++)
+        {
+            // Each input at a place of its own: fractions of the range that repeat after 3, 4, 5, … points.
+            double[] inputs = new double[value.Inputs.Length];
+            double[] steps = new double[inputs.Length];
+            for (int i = 0; i < inputs.Length; i++)
+            {
+                Input input = value.Inputs[i];
+                double place = 0.05 + (0.9 * (point % (i + 4)) / (i + 3));
+                bool open = double.IsNaN(input.Lowest) || double.IsNaN(input.Highest);
+                inputs[i] = open ? input.Ordinary * ((2.0 * place) - 0.3) : input.Lowest + (place * (input.Highest - input.Lowest));
+                steps[i] = input.Quantity switch
+                {
+                    InputQuantity.Concentration => 1.0e-4 * input.Ordinary,
+                    InputQuantity.MoleFraction => 1.0e-4,
+                    InputQuantity.Pressure or InputQuantity.PartialPressure => 1.0e-2,
+                    _ => 1.0e-3,
+                };
+            }
+
+            (Status status, double[] slopes) = slope.Call(inputs, RangeRule.Refuse);
+            Assert.Equal(Status.Ok, status);
+            double size = Math.Abs(value.Call(inputs, RangeRule.Refuse).Values[0]);
+            for (int i = 0; i < inputs.Length; i++)
+            {
+                // Fresh water only: no salinity on either side.
+                if (value.Inputs[i].Quantity == InputQuantity.Salinity && value.Inputs[i].Highest == 0.0) { continue; }
+                double difference = CentralDifference(value, inputs, i, steps[i]);
+                // step²/6 of the third derivative (below 1e-7 of the slope, or of the value per unit where the slope passes zero), and rounding over the step.
+                double allowed = (1.0e-7 * Math.Abs(difference)) + (size * (1.0e-10 + (2.0e-14 / steps[i])));
+                double miss = Math.Abs(slopes[i] - difference);
+                Assert.True(miss <= allowed, $"{slope.Name}[{i}] at {string.Join(' ', inputs)}: {slopes[i]} for {difference}");
+                worst = Math.Max(worst, miss / allowed);
+                count++;
+            }
+        }
+
+        return count;
     }
 
     /// <summary>At S = 0 the S^1.5 term has a one-sided slope; the functions give it.</summary>
@@ -101,12 +173,12 @@ public class SensitivityTests(ITestOutputHelper output)
         Assert.Equal(perMillimetre, Math.Round(100.0 * dP / fresh * PressureUnits.HectopascalPerMillimetreOfMercury, 3));
     }
 
-    private static double CentralDifference(CoreFunction function, double[] inputs, int index)
+    private static double CentralDifference(CoreFunction function, double[] inputs, int index, double step)
     {
         double[] above = (double[])inputs.Clone();
         double[] below = (double[])inputs.Clone();
-        above[index] += Step;
-        below[index] -= Step;
+        above[index] += step;
+        below[index] -= step;
         double up = function.Call(above, RangeRule.Extrapolate).Values[0];
         double down = function.Call(below, RangeRule.Extrapolate).Values[0];
         return (up - down) / (above[index] - below[index]);

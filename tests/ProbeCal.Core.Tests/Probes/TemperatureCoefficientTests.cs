@@ -96,9 +96,13 @@ public class TemperatureCoefficientTests
     [Fact]
     public void OutsideTheFittedRange_IsRefusedOrFlagged()
     {
-        Assert.Equal(Status.TemperatureBelowRange, Factor(TemperatureCoefficientForm.Exponential, 0.03, -0.001, out double factor));
+        Assert.Equal(Status.TemperatureJustBelowRange, Factor(TemperatureCoefficientForm.Exponential, 0.03, -0.001, out double factor));
         Assert.True(double.IsNaN(factor));
-        Assert.Equal(Status.TemperatureAboveRange, Factor(TemperatureCoefficientForm.Exponential, 0.03, 40.001, out factor));
+        Assert.Equal(Status.TemperatureBelowRange, Factor(TemperatureCoefficientForm.Exponential, 0.03, -0.201, out factor));
+        Assert.True(double.IsNaN(factor));
+        Assert.Equal(Status.TemperatureJustAboveRange, Factor(TemperatureCoefficientForm.Exponential, 0.03, 40.001, out factor));
+        Assert.True(double.IsNaN(factor));
+        Assert.Equal(Status.TemperatureAboveRange, Factor(TemperatureCoefficientForm.Exponential, 0.03, 40.201, out factor));
         Assert.True(double.IsNaN(factor));
         Assert.Equal(Status.Ok, Factor(TemperatureCoefficientForm.Exponential, 0.03, 40.0, out _));
         Assert.Equal(Status.TemperatureAboveRange, TemperatureCoefficient.Factor(
