@@ -41,6 +41,7 @@ internal sealed class Generator
     private readonly Dictionary<TypeDefinition, List<Pair>> pools = [];
     private double[] ends = [];
     private double[] codeConstants = [];
+    private Gas lastGas = Gas.Oxygen;
 
     public Generator(Machine machine)
     {
@@ -52,6 +53,7 @@ internal sealed class Generator
     public void Prepare(MethodDefinition method)
     {
         codeConstants = CodeConstants.Of(method);
+        lastGas = Gas.Oxygen;
     }
 
     /// <summary>The parameters that this generator cannot make values for.</summary>
@@ -223,13 +225,20 @@ internal sealed class Generator
         };
     }
 
-    private static Pair EnumValue(TypeDefinition type, Strangeness strangeness, Random random)
+    private Pair EnumValue(TypeDefinition type, Strangeness strangeness, Random random)
     {
         Type desktop = Surface.DesktopOf(type);
         Array values = Enum.GetValues(desktop);
         object value = strangeness == Strangeness.Wide && random.Next(2) == 0
             ? Enum.ToObject(desktop, random.Next(-2, 20))
             : values.GetValue(random.Next(values.Length))!;
+        if (value is Gas gas) { lastGas = gas; }
+        // Of all pairs of gas and equation one in six is published: every other ordinary equation is one that fits the gas before it (oxygen where none is named).
+        if (value is SolubilityEquation && strangeness == Strangeness.Ordinary && random.Next(2) == 0)
+        {
+            value = lastGas == Gas.Oxygen && random.Next(2) == 0 ? SolubilityEquation.GarciaGordon1992 : GasDefaults.Equation(lastGas);
+        }
+
         return new Pair(value, Value.OfInteger(Comparison.ToBits(value)));
     }
 
