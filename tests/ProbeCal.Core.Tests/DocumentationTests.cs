@@ -35,7 +35,6 @@ public class DocumentationTests
     [InlineData(typeof(VapourMurray1967))]
     [InlineData(typeof(VapourAntoine8111))]
     [InlineData(typeof(VapourDickson2007))]
-    [InlineData(typeof(VapourWeissPrice1980))]
     [InlineData(typeof(VapourGreenCarritt1967))]
     [InlineData(typeof(VapourPressure))]
     [InlineData(typeof(DensityTanaka2001))]

@@ -118,7 +118,6 @@ internal static class CoreFunctions
         yield return Strict("OxygenUnits.MicromolesPerKilogramFromMilligramsPerLitre", [Milligrams, Rho], (double[] x, RangeRule r, out double v) => OxygenUnits.MicromolesPerKilogramFromMilligramsPerLitre(x[0], x[1], out v));
         yield return Strict("OxygenUnits.MilligramsPerLitreFromMicromolesPerKilogram", [Milligrams, Rho], (double[] x, RangeRule r, out double v) => OxygenUnits.MilligramsPerLitreFromMicromolesPerKilogram(x[0], x[1], out v));
         yield return Strict("OxygenUnits.MilligramsPerKilogramFromMilligramsPerLitre", [Milligrams, Rho], (double[] x, RangeRule r, out double v) => OxygenUnits.MilligramsPerKilogramFromMilligramsPerLitre(x[0], x[1], out v));
-        yield return One("VapourWeissPrice1980.Pressure", [Celsius, Salt], (double[] x, RangeRule r, out double v) => VapourWeissPrice1980.Pressure(x[0], x[1], r, out v));
         foreach (Gas gas in Enum.GetValues<Gas>())
         {
             foreach (CoreFunction function in GasPhase(gas)) { yield return function; }
