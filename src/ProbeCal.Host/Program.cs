@@ -40,6 +40,8 @@ internal static class Program
         {
             EquilibriumCommand.Create(terminal),
             TablesCommand.Create(terminal),
+            ExplainCommand.Create(terminal),
+            EquationsCommand.Create(terminal),
             CalibrateCommand.Create(terminal),
             CalibrationsCommand.Create(terminal),
             StationCommand.Create(terminal),

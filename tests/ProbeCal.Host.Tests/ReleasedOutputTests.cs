@@ -15,6 +15,8 @@ public class ReleasedOutputTests
     [InlineData("equilibrium")]
     [InlineData("calibration-list")]
     [InlineData("table")]
+    [InlineData("explanation")]
+    [InlineData("equations")]
     public void Version1_fits_the_published_schema(string kind)
     {
         using JsonDocument released = JsonDocument.Parse(File.ReadAllText(Sample(kind, "version-1.json")));
@@ -48,6 +50,9 @@ public class ReleasedOutputTests
     [Theory]
     [InlineData("equilibrium", "\"version\":1", "\"version\":2")]
     [InlineData("table", "\"bilinear\"", "\"cubic\"")]
+    [InlineData("explanation", "\"result\":\"sat\"", "\"result\":\"z\"")]
+    [InlineData("explanation", "\"kind\":\"iterated\"", "\"kind\":\"input\"")]
+    [InlineData("equations", "\"grade\":\"one place\"", "\"grade\":\"good\"")]
     [InlineData("calibration-list", "\"count\": 2", "\"count\": \"two\"")]
     public void Schema_refuses_what_is_something_else(string kind, string good, string bad)
     {

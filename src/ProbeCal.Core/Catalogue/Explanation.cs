@@ -198,16 +198,18 @@ public sealed class Explanation
             int end = at;
             while (end < formula.Length && (char.IsLetterOrDigit(formula[end]))) { end++; }
             string word = formula.Substring(at, end - at);
-            text += _symbols.TryGetValue(word, out double value) ? Bracketed(value) : word;
+            // A minus may stand bare at the beginning of a sum, but not before a power.
+            bool bare = (at == 0 || formula[at - 1] == '(') && (end == formula.Length || formula[end] != '^');
+            text += _symbols.TryGetValue(word, out double value) ? Number(value, bare) : word;
             at = end;
         }
 
         return text;
     }
 
-    private static string Bracketed(double value)
+    private static string Number(double value, bool bare)
     {
         string number = CatalogueText.Number(value);
-        return value < 0.0 ? "(" + number + ")" : number;
+        return number[0] != '-' || bare ? number : "(" + number + ")";
     }
 }

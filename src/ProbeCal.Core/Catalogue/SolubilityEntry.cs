@@ -52,7 +52,7 @@ public sealed class SolubilityEntry
         {
             double fresh = LowestCelsius(0.0);
             double salt = LowestCelsius(HighestSalinity);
-            string lowest = salt < fresh ? "freezing point (not below " + CatalogueText.Number(salt) + ")" : CatalogueText.Number(fresh);
+            string lowest = salt < fresh ? "freezing (≥ " + CatalogueText.Number(salt) + ")" : CatalogueText.Number(fresh);
             string salinity = HighestSalinity == 0.0 ? "fresh water" : "S 0 to " + CatalogueText.Number(HighestSalinity);
             return lowest + " to " + CatalogueText.Number(HighestCelsius) + " °C, " + salinity;
         }

@@ -58,6 +58,32 @@ public class ExplanationTests(ITestOutputHelper output)
         output.WriteLine(string.Create(CultureInfo.InvariantCulture, $"{_chains} chains, {_steps} computed steps, worst {_worst:F2} rounding bounds ({_worstStep})"));
     }
 
+    /// <summary>What the program tells people: ten digits at every step are enough for seven of the result.</summary>
+    [Fact]
+    public void Ten_digits_at_every_step_give_seven_of_the_result()
+    {
+        double worst = 0;
+        foreach (SolubilityEntry entry in Catalogue.Solubilities)
+        {
+            foreach (Conditions at in Grid(entry))
+            {
+                Explanation explanation = Explanation.OfEquilibrium(entry.Gas, entry.Equation, at.Celsius, at.Salinity, at.Hectopascal, at.Fraction, at.Humidity, RangeRule.Refuse);
+                Dictionary<string, double> symbols = [];
+                foreach (ExplainedStep step in explanation.Steps)
+                {
+                    double value = step.Kind == StepKind.Computed ? FormulaEvaluator.Evaluate(step.Formula, symbols).Value : step.Value;
+                    symbols[step.Symbol] = double.Parse(value.ToString("E9", CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
+                }
+
+                ExplainedStep last = explanation.Steps[^1];
+                worst = Math.Max(worst, Math.Abs((symbols[last.Symbol] / last.Value) - 1));
+            }
+        }
+
+        output.WriteLine(string.Create(CultureInfo.InvariantCulture, $"ten digits at every step: {worst:E1} of the result at most"));
+        Assert.True(worst < 0.5e-6, worst.ToString("E2", CultureInfo.InvariantCulture));
+    }
+
     [Fact]
     public void Saturation_of_oxygen_is_the_percentage_of_the_probe()
     {

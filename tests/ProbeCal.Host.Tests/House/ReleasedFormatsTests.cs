@@ -25,6 +25,8 @@ public class ReleasedFormatsTests
         ["probecal-station-configuration"] = ("station-configuration/version-1.json", "station-configuration"),
         ["probecal-equilibrium"] = ("equilibrium/version-2.json", "equilibrium"),
         ["probecal-table"] = ("table/version-1.json", "table"),
+        ["probecal-explanation"] = ("explanation/version-1.json", "explanation"),
+        ["probecal-equations"] = ("equations/version-1.json", "equations"),
         ["probecal-truth"] = ("truth/version-1.csv", null),
     };
 
