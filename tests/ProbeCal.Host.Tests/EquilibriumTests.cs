@@ -55,6 +55,7 @@ public class EquilibriumTests
         "--pressure 938hPa --conductivity 30mS/cm --conductivity-temperature 20 --conductivity-uncertainty 0.1mS/cm",
         "--pressure 938hPa --specific-conductance 500uS/cm",
         "--pressure 938hPa --chlorinity 12 --gas Ar",
+        "--pressure 938hPa --ions Na+=0.5mol/L,Cl-=0.5mol/L --concentration 8mg/L",
         "--pressure 1013hPa --altitude 230m --salinity 0",
         "--pressure 938hPa --salinity 0 --gas H2S --mole-fraction 1%",
         "--pressure 938hPa --salinity 0 --temperature-within 0.2K --monte-carlo 2000 --seed 7",
@@ -259,6 +260,14 @@ public class EquilibriumTests
     [InlineData("--pressure 1atm --chlorinity 30", "8.4", "0 to 23.25 g/kg")]
     [InlineData("--pressure 1atm --specific-conductance 60mS/cm", "8.4", "59000 uS/cm")]
     [InlineData("--pressure 1atm", "8.4", "--salinity is missing")]
+    [InlineData("--pressure 1atm --ions Na=0.5mol/L", "8.4", "did you mean Na+?")]
+    [InlineData("--pressure 1atm --ions Na+", "8.4", "Na+=0.5mol/L")]
+    [InlineData("--pressure 1atm --ions Na+=0.5", "8.4", "mol/L")]
+    [InlineData("--pressure 1atm --ions Na+=6mol/L", "8.4", "0 to 5 mol/L")]
+    [InlineData("--pressure 1atm --ions Na+=0.1mol/L,na+=0.1mol/L", "8.4", "twice")]
+    [InlineData("--pressure 1atm --ions Na+=0.1mol/L --concentration 250umol/kg", "8.4", "per litre")]
+    [InlineData("--pressure 1atm --ions Na+=0.1mol/L --gas SF6", "8.4", "25 °C alone")]
+    [InlineData("--pressure 1atm --ions Na+=0.1mol/L --gas CO", "8.4", "no salting-out constants for CO")]
     [InlineData("--pressure 1atm --salinity 0 --partial-pressure 20000hPa", "8.4", "10132.5")]
     [InlineData("--pressure 1atm --salinity 0 --partial-pressure 200hPa --humidity 50%", "8.4", "plays no part")]
     [InlineData("--pressure 1atm --salinity 0 --partial-pressure 200hPa --mole-fraction 5%", "8.4", "give one of them")]

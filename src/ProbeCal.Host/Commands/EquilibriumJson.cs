@@ -45,6 +45,11 @@ internal static class EquilibriumJson
         {
             w.WriteStartObject();
             Conditions(w, r.Asked);
+            if (r.SaltingOutFactor is double factor)
+            {
+                w.WriteNumber("saltingOutFactor", factor);
+            }
+
             Values(w, r, Equilibrium);
             StandardUncertainty(w, r);
             Intervals(w, r, Equilibrium);
@@ -86,7 +91,17 @@ internal static class EquilibriumJson
         w.WriteNumber("temperatureC", c.Temperature.Value);
         w.WriteNumber("salinity", c.Water.Salinity);
         w.WriteString("salinitySource", WaterWords.SourceName(c.Water.Source));
-        if (c.Water.Source != SalinitySource.Given)
+        if (c.Water.Brine is Brine brine)
+        {
+            w.WriteStartObject("ions");
+            foreach (BrineIon ion in brine.Ions)
+            {
+                w.WriteNumber(ion.Name, ion.MolesPerLitre);
+            }
+
+            w.WriteEndObject();
+        }
+        else if (c.Water.Source != SalinitySource.Given)
         {
             w.WriteStartObject("salinityFrom");
             w.WriteNumber("value", c.Water.Given.Value);
@@ -150,6 +165,11 @@ internal static class EquilibriumJson
         }
 
         w.WriteNumber("equationRelative", r.EquationRelative);
+        if (c.Water.Brine is not null)
+        {
+            w.WriteNumber("saltingOutRelative", r.SaltingOutRelative);
+        }
+
         w.WriteEndObject();
     }
 

@@ -22,6 +22,7 @@ internal sealed class EquilibriumOptions
     private readonly Option<string> _conductivityTemperatureUncertainty = Of("--conductivity-temperature-uncertainty", "u", "Standard uncertainty of that temperature: 0.1K.");
     private readonly Option<string> _chlorinity = Of("--chlorinity", "CL", "In place of a salinity: chlorinity of sea water in g/kg, 19.4.");
     private readonly Option<string> _chlorinityUncertainty = Of("--chlorinity-uncertainty", "u", "Standard uncertainty of the chlorinity: 0.01.");
+    private readonly Option<string> _ions = Of("--ions", "IONS", "In place of a salinity: the ions of a brine that is not sea salt, \"Na+=0.5mol/L, Cl-=0.5mol/L\".");
     private readonly Option<string> _specificConductance = Of("--specific-conductance", "SC", "In place of a salinity: conductivity at 25 °C of field water, 500uS/cm.");
     private readonly Option<string> _conductivityUncertainty = Of("--conductivity-uncertainty", "u", "Standard uncertainty of the conductivity: 5uS/cm.");
     private readonly Option<string> _pressure = Of("--pressure", "P", "Absolute station pressure with its unit: 760mmHg, 938hPa, 27.7inHg. Not the sea-level value of a weather service.");
@@ -45,7 +46,7 @@ internal sealed class EquilibriumOptions
     {
         foreach (Option<string> option in new[]
         {
-            _gas, _equation, _temperature, _salinity, _conductivity, _conductivityTemperature, _specificConductance, _chlorinity, _pressure, _altitude,
+            _gas, _equation, _temperature, _salinity, _conductivity, _conductivityTemperature, _specificConductance, _chlorinity, _ions, _pressure, _altitude,
             _moleFraction, _mixture, _partialPressure, _humidity, _concentration,
             _temperatureUncertainty, _temperatureWithin, _salinityUncertainty, _salinityWithin, _conductivityUncertainty, _conductivityTemperatureUncertainty, _chlorinityUncertainty,
             _pressureUncertainty, _pressureWithin, _moleFractionUncertainty, _moleFractionWithin, _partialPressureUncertainty,
@@ -74,6 +75,7 @@ internal sealed class EquilibriumOptions
             ConductivityTemperatureUncertainty = parsed.GetValue(_conductivityTemperatureUncertainty),
             Chlorinity = parsed.GetValue(_chlorinity),
             ChlorinityUncertainty = parsed.GetValue(_chlorinityUncertainty),
+            Ions = parsed.GetValue(_ions),
             SpecificConductance = parsed.GetValue(_specificConductance),
             ConductivityUncertainty = parsed.GetValue(_conductivityUncertainty),
             Pressure = parsed.GetValue(_pressure),

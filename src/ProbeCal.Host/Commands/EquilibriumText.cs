@@ -189,7 +189,8 @@ internal static class EquilibriumText
         EquilibriumResult milligrams = r.Value(EquilibriumQuantity.MilligramsPerLitre);
         UncertainNumber number = new(milligrams.Value, milligrams.StandardUncertainty, "mg/L");
         EquilibriumSensitivities s = r.ConcentrationSensitivities;
-        return $"°C: {Signed(s.PerKelvin * number.Factor)} {number.Unit}   hPa: {Signed(s.PerHectopascal * number.Factor)} {number.Unit}   of salinity: {Signed(s.PerSalinity * number.Factor)} {number.Unit}";
+        return $"°C: {Signed(s.PerKelvin * number.Factor)} {number.Unit}   hPa: {Signed(s.PerHectopascal * number.Factor)} {number.Unit}"
+            + (double.IsNaN(s.PerSalinity) ? "" : $"   of salinity: {Signed(s.PerSalinity * number.Factor)} {number.Unit}");
     }
 
     private static string Signed(double value)
@@ -204,7 +205,7 @@ internal static class EquilibriumText
         UncertainNumber number = new(main.Value, main.StandardUncertainty, EquilibriumUnits.Of(main.Quantity));
         string interval = string.Create(CultureInfo.InvariantCulture,
             $"95 %: {number.Beside(main.Low)} to {number.Beside(main.High)} {number.Unit} (k = {main.CoverageFactor:F2})");
-        IEnumerable<string> parts = main.Parts.Where(static part => 0.0005 <= part.Share).OrderByDescending(static part => part.Share).Select(part => Part(r, part));
+        IEnumerable<string> parts = main.Parts.Where(static part => 0.005 <= part.Share).OrderByDescending(static part => part.Share).Select(part => Part(r, part));
         string shares = string.Join(", ", parts);
         return interval + (shares.Length == 0 ? "" : "; variance: " + shares) + (main.Note is string note ? "; " + note : "");
     }
@@ -212,9 +213,9 @@ internal static class EquilibriumText
     private static string Part(GasAtEquilibrium r, EquilibriumPart part)
     {
         string share = string.Create(CultureInfo.InvariantCulture, $"{100 * part.Share:F0} % ");
-        if (part.Input == "equation")
+        if (part.Input is "equation" or "vapour formula" or "salting-out constants")
         {
-            return share + "equation";
+            return share + part.Input;
         }
 
         double half = part.IsRectangular ? part.StandardUncertainty * Math.Sqrt(3) : part.StandardUncertainty;
@@ -237,7 +238,16 @@ internal static class EquilibriumText
 
         Add(c.Temperature, "temperature", "--temperature-uncertainty");
         Add(c.Pressure, "pressure", "--pressure-uncertainty");
-        Add(c.Water.Given, c.Water.Source switch { SalinitySource.Given => "salinity", SalinitySource.Chlorinity => "chlorinity", _ => "conductivity" },
+        if (c.Water.Brine is not null)
+        {
+            exact.Add(("ions", "--temperature-uncertainty"));
+        }
+        else
+        {
+            AddWater();
+        }
+
+        void AddWater() => Add(c.Water.Given, c.Water.Source switch { SalinitySource.Given => "salinity", SalinitySource.Chlorinity => "chlorinity", _ => "conductivity" },
             c.Water.Source switch { SalinitySource.Given => "--salinity-uncertainty", SalinitySource.Chlorinity => "--chlorinity-uncertainty", _ => "--conductivity-uncertainty" });
         if (c.Phase.Kind == GasPhaseKind.PartialPressure)
         {

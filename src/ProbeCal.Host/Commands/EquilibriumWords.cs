@@ -1,4 +1,5 @@
 using System;
+using System.Linq;
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Equilibrium;
 
@@ -15,6 +16,7 @@ internal static class WaterWords
             SalinitySource.SpecificConductance => "specific-conductance",
             SalinitySource.Conductivity => "conductivity",
             SalinitySource.Chlorinity => "chlorinity",
+            SalinitySource.Ions => "ions",
             _ => throw new ArgumentOutOfRangeException(nameof(source)),
         };
     }
@@ -27,6 +29,7 @@ internal static class WaterWords
             SalinitySource.SpecificConductance => $"salinity {Number.Significant(water.Salinity, 4)} from specific conductance {Number.Print(water.Given.Value)} mS/cm at 25 °C (field manual TM 9-A6.2)",
             SalinitySource.Conductivity => $"salinity {Number.Significant(water.Salinity, 5)} from conductivity {Number.Print(water.Given.Value)} mS/cm at {(water.ConductivityTemperature is UncertainQuantity cell ? Number.Print(cell.Value) + " °C" : "the water's temperature")} (PSS-78)",
             SalinitySource.Chlorinity => $"salinity {Number.Significant(water.Salinity, 5)} from chlorinity {Number.Print(water.Given.Value)} g/kg (S = 1.80655 Cl)",
+            SalinitySource.Ions => "brine of " + string.Join(", ", water.Brine!.Ions.Select(static ion => $"{Number.Significant(ion.MolesPerLitre, 4)} mol/L {ion.Name}")),
             _ => throw new ArgumentOutOfRangeException(nameof(water)),
         };
     }

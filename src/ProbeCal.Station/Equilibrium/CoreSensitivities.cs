@@ -5,11 +5,28 @@ internal static class CoreSensitivities
 {
     internal static EquilibriumSensitivities OfConcentration(EquilibriumCase asked)
     {
+        EquilibriumSensitivities core = OfWater(asked, out double milligrams);
+        if (asked.Water.Brine is not Brine brine)
+        {
+            return core;
+        }
+
+        brine.Factor(asked.Gas, asked.Temperature.Value, RangeRule.NearEdge, out double factor, out double perKelvin);
+        return new EquilibriumSensitivities(
+            (core.PerKelvin * factor) + (milligrams * perKelvin), double.NaN, core.PerHectopascal * factor, core.PerMoleFraction * factor,
+            core.PerHumidityPercent * factor, core.PerPartialPressureHectopascal * factor);
+    }
+
+    private static EquilibriumSensitivities OfWater(EquilibriumCase asked, out double milligrams)
+    {
         double perKelvin;
         double perSalinity;
         double perHectopascal;
         if (asked.Phase.Kind == GasPhaseKind.PartialPressure)
         {
+            GasEquilibrium.ConcentrationFromPartialPressure(
+                asked.Gas, asked.Equation, asked.Temperature.Value, asked.Water.Salinity, asked.Pressure.Value,
+                asked.Phase.PartialPressureHectopascal.Value, RangeRule.NearEdge, out milligrams);
             GasEquilibrium.ConcentrationSensitivities(
                 asked.Gas, asked.Equation, asked.Temperature.Value, asked.Water.Salinity, asked.Pressure.Value,
                 asked.Phase.PartialPressureHectopascal.Value, RangeRule.NearEdge,
@@ -17,6 +34,9 @@ internal static class CoreSensitivities
             return new EquilibriumSensitivities(perKelvin, perSalinity, perHectopascal, double.NaN, double.NaN, perPartialPressure);
         }
 
+        GasEquilibrium.MilligramsPerLitre(
+            asked.Gas, asked.Equation, asked.Temperature.Value, asked.Water.Salinity, asked.Pressure.Value,
+            asked.Phase.MoleFraction.Value, asked.Phase.HumidityPercent.Value, RangeRule.NearEdge, out milligrams);
         GasEquilibrium.MilligramsPerLitreSensitivities(
             asked.Gas, asked.Equation, asked.Temperature.Value, asked.Water.Salinity, asked.Pressure.Value,
             asked.Phase.MoleFraction.Value, asked.Phase.HumidityPercent.Value, RangeRule.NearEdge,

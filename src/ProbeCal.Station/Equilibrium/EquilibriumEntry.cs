@@ -48,6 +48,9 @@ public sealed record EquilibriumEntry
     /// <summary>Its standard uncertainty.</summary>
     public string? ChlorinityUncertainty { get; init; }
 
+    /// <summary>The ions of a brine that is not sea salt, in place of a salinity: <c>Na+=0.5mol/L, Cl-=0.5mol/L</c>.</summary>
+    public string? Ions { get; init; }
+
     /// <summary>Conductivity at 25 °C in place of a salinity.</summary>
     public string? SpecificConductance { get; init; }
 
@@ -120,6 +123,11 @@ public sealed record EquilibriumEntry
             notes.Add(note);
         }
 
+        if (water.Brine?.Note is string charges)
+        {
+            notes.Add(charges);
+        }
+
         return new EquilibriumCase
         {
             Gas = gas,
@@ -131,7 +139,7 @@ public sealed record EquilibriumEntry
             Pressure = stated.StandardUncertainty < pressure.UncertaintyHectopascal ? new UncertainQuantity(pressure.Hectopascal, pressure.UncertaintyHectopascal) : stated,
             PressureSource = pressure.Source,
             Phase = GasPhase.Read(gas, this),
-            Measured = MeasuredConcentration.Read(this),
+            Measured = MeasuredConcentration.Read(this, water),
             Notes = notes,
         };
     }

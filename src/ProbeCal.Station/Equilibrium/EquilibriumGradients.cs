@@ -127,7 +127,7 @@ internal sealed class EquilibriumGradients
         }
 
         milligrams.Slopes[(int)EquilibriumInput.Equation] = milligrams.Value;
-        return milligrams;
+        return _asked.Water.Brine is Brine brine ? By(milligrams, SaltingOut(brine)) : milligrams;
     }
 
     private Sloped Measured()
@@ -144,7 +144,8 @@ internal sealed class EquilibriumGradients
 
     private Sloped MeasuredPartialPressure()
     {
-        Sloped measured = Measured();
+        // Against fresh water: what the ions leave divides what was measured.
+        Sloped measured = _asked.Water.Brine is Brine brine ? Over(Measured(), SaltingOut(brine)) : Measured();
         GasEquilibrium.PartialPressureFromConcentration(_asked.Gas, _asked.Equation, _celsius, _salinity, _pressure, measured.Value, NearEdge, out double value);
         GasEquilibrium.PartialPressureFromConcentrationSensitivities(
             _asked.Gas, _asked.Equation, _celsius, _salinity, _pressure, measured.Value, NearEdge,
@@ -157,6 +158,14 @@ internal sealed class EquilibriumGradients
 
         partial.Slopes[(int)EquilibriumInput.Equation] -= perMilligram * measured.Value;
         return partial;
+    }
+
+    private Sloped SaltingOut(Brine brine)
+    {
+        brine.Factor(_asked.Gas, _celsius, NearEdge, out double factor, out double perKelvin);
+        Sloped left = Of(factor, perKelvin, 0, 0);
+        left.Slopes[(int)EquilibriumInput.SaltingOut] = factor;
+        return left;
     }
 
     private Sloped PerKilogram(Sloped milligrams)

@@ -25,6 +25,8 @@ internal enum EquilibriumInput
     ConductivityTemperature = 9,
     /// <summary>Error of the relation that the salinity was got by, in salinity about 0.</summary>
     SalinityRelation = 10,
+    /// <summary>Error of what the ions leave: a factor about 1 on it.</summary>
+    SaltingOut = 11,
     /// <summary>How many there are.</summary>
-    Count = 11,
+    Count = 12,
 }

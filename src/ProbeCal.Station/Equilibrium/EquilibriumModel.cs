@@ -126,7 +126,19 @@ internal sealed class EquilibriumModel(EquilibriumCase asked)
                 : GasEquilibrium.MilligramsPerLitre(
                     asked.Gas, asked.Equation, _celsius, salinity, _pressure, _inputs[(int)EquilibriumInput.MoleFraction],
                     _inputs[(int)EquilibriumInput.Humidity], rule, out value);
-            return Noted(found, value * _inputs[(int)EquilibriumInput.Equation]);
+            return Noted(found, value * _inputs[(int)EquilibriumInput.Equation] * SaltingOut());
+        }
+
+        /// <summary>What the ions of a brine leave of the value of fresh water; 1 for any other water.</summary>
+        private double SaltingOut()
+        {
+            if (asked.Water.Brine is not Brine brine)
+            {
+                return 1;
+            }
+
+            Status found = brine.Factor(asked.Gas, _celsius, rule, out double factor, out _);
+            return Noted(found, factor) * _inputs[(int)EquilibriumInput.SaltingOut];
         }
 
         internal double Measured()
@@ -149,7 +161,7 @@ internal sealed class EquilibriumModel(EquilibriumCase asked)
         internal double MeasuredPartialPressure()
         {
             Status found = GasEquilibrium.PartialPressureFromConcentration(
-                asked.Gas, asked.Equation, _celsius, salinity, _pressure, Measured() / _inputs[(int)EquilibriumInput.Equation], rule, out double value);
+                asked.Gas, asked.Equation, _celsius, salinity, _pressure, Measured() / _inputs[(int)EquilibriumInput.Equation] / SaltingOut(), rule, out double value);
             return Noted(found, value);
         }
 

@@ -28,6 +28,11 @@ internal static class EquilibriumRefusal
         {
             case InputQuantity.Temperature:
                 double celsius = asked.Temperature.Value;
+                if (asked.Water.Brine is not null && range.LowestCelsius <= celsius && celsius <= range.HighestCelsius)
+                {
+                    return Invariant($"--temperature {celsius} °C is outside the salting-out constants of {gas} (weisenberger-schumpe-1996), which hold from {SaltingOutWeisenbergerSchumpe1996.LowestCelsius} to {SaltingOutWeisenbergerSchumpe1996.HighestCelsius} °C, for some gases at {SaltingOutWeisenbergerSchumpe1996.ReferenceCelsius} °C alone");
+                }
+
                 string advice = range.HighestCelsius < celsius && celsius is > 40 and < 110 ? "; if it was read in °F, write for example " + Number.Print(celsius) + "F" : "";
                 return Invariant($"--temperature {celsius} °C is outside {source} {range.Temperatures}{Instead(asked)}{advice}");
             case InputQuantity.Salinity:
@@ -44,6 +49,8 @@ internal static class EquilibriumRefusal
                 return $"--concentration {asked.Measured?.Text} is more than {equation} turns into a partial pressure of {gas}; look at its unit";
             case InputQuantity.Equation:
                 return $"--equation {equation} does not cover {gas}";
+            case InputQuantity.Gas when asked.Water.Brine is not null:
+                return $"--ions: there are no salting-out constants for {gas} (weisenberger-schumpe-1996)";
             case InputQuantity.Gas:
                 return $"--gas {gas}: there is no data for it here";
             default:

@@ -54,6 +54,7 @@ public sealed class GasAtEquilibrium
         _inputs[(int)EquilibriumInput.Concentration] = asked.Measured?.Given.Value ?? double.NaN;
         _inputs[(int)EquilibriumInput.ConductivityTemperature] = asked.Water.ConductivityTemperature?.Value ?? double.NaN;
         _inputs[(int)EquilibriumInput.SalinityRelation] = 0;
+        _inputs[(int)EquilibriumInput.SaltingOut] = 1;
         _inputs[(int)EquilibriumInput.Equation] = 1;
         _inputs[(int)EquilibriumInput.Vapour] = 1;
         _model = new EquilibriumModel(asked);
@@ -76,6 +77,24 @@ public sealed class GasAtEquilibrium
 
     /// <summary>Where the equation holds.</summary>
     public EquationRange Range => EquationRange.Of(Asked.Gas, Asked.Equation, Asked.Water.Salinity);
+
+    /// <summary>What the ions of a brine leave of the value of fresh water; null for any other water.</summary>
+    public double? SaltingOutFactor
+    {
+        get
+        {
+            if (Asked.Water.Brine is not Brine brine)
+            {
+                return null;
+            }
+
+            brine.Factor(Asked.Gas, Asked.Temperature.Value, RangeRule.NearEdge, out double factor, out _);
+            return factor;
+        }
+    }
+
+    /// <summary>Relative standard uncertainty of <see cref="SaltingOutFactor"/>; 0 for any other water.</summary>
+    public double SaltingOutRelative => Asked.Water.Brine?.RelativeUncertainty ?? 0;
 
     /// <summary>The quantities that there are, in the order in which they are printed.</summary>
     public IReadOnlyCollection<EquilibriumQuantity> Quantities => _results.Keys;
@@ -106,7 +125,7 @@ public sealed class GasAtEquilibrium
         EquilibriumGradients gradients = new(asked, result._inputs);
         foreach (EquilibriumQuantity quantity in Equilibrium)
         {
-            if (quantity != EquilibriumQuantity.PercentOfOneAtmosphere || result.HasPercentages)
+            if (result.Has(quantity))
             {
                 result.Add(quantity, gradients);
             }
@@ -116,7 +135,7 @@ public sealed class GasAtEquilibrium
         {
             foreach (EquilibriumQuantity quantity in Measurement)
             {
-                if (result.HasMeasured(quantity))
+                if (result.Has(quantity))
                 {
                     result.Add(quantity, gradients);
                 }
@@ -163,12 +182,13 @@ public sealed class GasAtEquilibrium
     /// <summary>A given partial pressure knows of no other pressure, and of nothing there is no percentage.</summary>
     private bool HasPercentages => Asked.Phase.Kind != GasPhaseKind.PartialPressure && Value(EquilibriumQuantity.PartialPressure).Value != 0;
 
-    private bool HasMeasured(EquilibriumQuantity quantity)
+    private bool Has(EquilibriumQuantity quantity)
     {
         return quantity switch
         {
             EquilibriumQuantity.PercentLocal => Value(EquilibriumQuantity.PartialPressure).Value != 0,
-            EquilibriumQuantity.PercentOneAtmosphere => HasPercentages,
+            EquilibriumQuantity.PercentOneAtmosphere or EquilibriumQuantity.PercentOfOneAtmosphere => HasPercentages,
+            EquilibriumQuantity.MicromolesPerKilogram or EquilibriumQuantity.MeasuredMicromolesPerKilogram => Asked.Water.Brine is null,
             _ => true,
         };
     }
@@ -228,7 +248,15 @@ public sealed class GasAtEquilibrium
     private IEnumerable<(EquilibriumInput Input, string Name, string Unit, UncertainQuantity Known)> Known()
     {
         yield return (EquilibriumInput.Temperature, "temperature", "K", Asked.Temperature);
-        yield return (EquilibriumInput.Water, Asked.Water.GivenName, Asked.Water.GivenUnit, Asked.Water.Given);
+        if (Asked.Water.Brine is Brine brine)
+        {
+            yield return (EquilibriumInput.SaltingOut, "salting-out constants", "", new UncertainQuantity(1, brine.RelativeUncertainty));
+        }
+        else
+        {
+            yield return (EquilibriumInput.Water, Asked.Water.GivenName, Asked.Water.GivenUnit, Asked.Water.Given);
+        }
+
         if (Asked.Water.ConductivityTemperature is UncertainQuantity cell)
         {
             yield return (EquilibriumInput.ConductivityTemperature, "temperature of the conductivity", "K", cell);
@@ -270,6 +298,12 @@ public sealed class GasAtEquilibrium
         {
             _flags.Add(new EquilibriumFlag("fugacity", string.Create(CultureInfo.InvariantCulture,
                 $"above {EquationRange.HighestMoistAirHectopascal} hPa (1.1 atm): computed with the fugacity of the gas and what the pressure does to the dissolved gas (Enns 1965)")));
+        }
+
+        if (Asked.Water.Brine is not null)
+        {
+            _flags.Add(new EquilibriumFlag("brine",
+                "brine: the value of fresh water with what the ions drive out (Weisenberger and Schumpe 1996); vapour as over fresh water, density unknown, so nothing per kilogram"));
         }
 
         if (Asked.Gas == Gas.CarbonDioxide && Asked.Phase.FractionAssumed)

@@ -18,7 +18,7 @@ public sealed record MeasuredConcentration(QuantityKind Kind, UncertainQuantity 
 
     /// <summary>Reads it; null when none is given.</summary>
     /// <exception cref="InputException">It cannot be read, or its uncertainty is of another kind.</exception>
-    public static MeasuredConcentration? Read(EquilibriumEntry entry)
+    public static MeasuredConcentration? Read(EquilibriumEntry entry, WaterSalinity water)
     {
         if (entry.Concentration is not string text)
         {
@@ -28,6 +28,11 @@ public sealed record MeasuredConcentration(QuantityKind Kind, UncertainQuantity 
         }
 
         QuantityKind kind = KindOf(text);
+        if (kind == QuantityKind.AmountPerKilogram && water.Brine is not null)
+        {
+            throw Wrong.Input(Option, text, "the density of a brine (--ions) is not known here; give the concentration per litre");
+        }
+
         double value = Quantity.Parse(kind, Option, text);
         return new MeasuredConcentration(kind, UncertainQuantity.Read(value, kind, Option, entry.ConcentrationUncertainty, null), text.Trim());
     }

@@ -15,6 +15,8 @@ public enum SalinitySource
     Conductivity = 3,
     /// <summary>From the chlorinity.</summary>
     Chlorinity = 4,
+    /// <summary>A brine of given ions, which act on the value of fresh water.</summary>
+    Ions = 5,
 }
 
 /// <summary>The salinity of the water and where it comes from.</summary>
@@ -48,6 +50,9 @@ public sealed record WaterSalinity
 
     /// <summary>Standard uncertainty of the relation between what was given and the salinity, in salinity.</summary>
     public double RelationUncertainty { get; private init; }
+
+    /// <summary>The ions where the water is a brine; its salinity is 0 then.</summary>
+    public Brine? Brine { get; private init; }
 
     /// <summary>Change of the salinity with what was given.</summary>
     internal double PerGiven { get; private init; } = 1;
@@ -99,9 +104,10 @@ public sealed record WaterSalinity
         Note("--conductivity", entry.Conductivity);
         Note("--specific-conductance", entry.SpecificConductance);
         Note("--chlorinity", entry.Chlorinity);
+        Note("--ions", entry.Ions);
         if (given.Count == 0)
         {
-            throw new InputException("--salinity is missing: 0 for fresh water; in its place --conductivity 42mS/cm, --specific-conductance 500uS/cm (at 25 °C) or --chlorinity 19.4");
+            throw new InputException("--salinity is missing: 0 for fresh water; in its place --conductivity 42mS/cm, --specific-conductance 500uS/cm (at 25 °C), --chlorinity 19.4 or --ions");
         }
 
         if (1 < given.Count)
@@ -116,6 +122,7 @@ public sealed record WaterSalinity
         return entry.Salinity is not null ? OfSalinity(entry)
             : entry.Conductivity is not null ? OfConductivity(entry, celsius)
             : entry.Chlorinity is not null ? OfChlorinity(entry)
+            : entry.Ions is not null ? OfIons(entry.Ions)
             : OfSpecificConductance(entry);
 
         void Note(string option, string? text)
@@ -160,6 +167,11 @@ public sealed record WaterSalinity
             Source = SalinitySource.Given,
             Given = UncertainQuantity.Read(salinity, QuantityKind.Salinity, "--salinity", entry.SalinityUncertainty, entry.SalinityWithin),
         };
+    }
+
+    private static WaterSalinity OfIons(string ions)
+    {
+        return new WaterSalinity { Salinity = 0, Source = SalinitySource.Ions, Given = new UncertainQuantity(0, 0), Brine = Brine.Read(ions) };
     }
 
     private static WaterSalinity OfConductivity(EquilibriumEntry entry, double waterCelsius)

@@ -24,7 +24,7 @@ public class GasAtEquilibriumTests
 
     // One of every way to say what stands over the water, how salty it is and what was measured.
     private static readonly string[] _cases = ["air O2", "air CO2", "air N2O by weiss-price-1980-moist-air", "mixture", "partial pressure", "conductivity", "own conductivity", "specific", "chlorinity",
-        "measured mg", "measured umol", "measured kg", "measured mL", "measured and partial pressure", "pressed N2", "bunsen"];
+        "measured mg", "measured umol", "measured kg", "measured mL", "measured and partial pressure", "pressed N2", "bunsen", "brine", "measured brine"];
 
     public static TheoryData<string> Cases => [.. _cases];
 
@@ -49,6 +49,8 @@ public class GasAtEquilibriumTests
             "measured and partial pressure" => _lake with { HumidityUncertainty = null, PartialPressure = "150hPa", PartialPressureUncertainty = "1hPa", Concentration = "8mg/L" },
             "pressed N2" => _lake with { Gas = "N2", Pressure = "4atm", Mixture = "N2=60%", Humidity = "10%", Concentration = "30mg/L" },
             "bunsen" => _lake with { Gas = "CO", Equation = "wiesenburg-guinasso-1979-bunsen", Concentration = "2nmol/L" },
+            "brine" => fresh with { Ions = "Na+=0.6mol/L, Cl-=0.4mol/L, SO4--=0.1mol/L" },
+            "measured brine" => fresh with { Gas = "CO2", Ions = "Mg2+=0.3mol/L, Cl-=0.6mol/L", Concentration = "25umol/L", ConcentrationUncertainty = "0.5umol/L", PressureWithin = "4hPa", PressureUncertainty = null },
             _ => throw new ArgumentOutOfRangeException(nameof(name)),
         };
     }
@@ -146,6 +148,32 @@ public class GasAtEquilibriumTests
         GasPhase phase = (_lake with { Mixture = text }).Read().Phase;
         Assert.Equal(fraction, phase.MoleFraction.Value, 1e-15);
         Assert.Equal(unnamed, phase.Unnamed, 1e-12);
+    }
+
+    [Fact]
+    public void A_brine_of_table_salt_holds_what_its_constants_leave()
+    {
+        // Weisenberger and Schumpe 1996, oxygen and sodium chloride at 25 °C: K = 0.1143 + 0.0318 = 0.1461 L/mol (ported value, second-hand).
+        EquilibriumEntry fresh = _lake with { Temperature = "25", Salinity = "0" };
+        EquilibriumEntry brine = fresh with { Salinity = null, SalinityUncertainty = null, Ions = "Na⁺=1mol/L; Cl-=1000mmol/L" };
+        double ratio = GasAtEquilibrium.Compute(brine.Read()).Value(EquilibriumQuantity.MilligramsPerLitre).Value
+            / GasAtEquilibrium.Compute(fresh.Read()).Value(EquilibriumQuantity.MilligramsPerLitre).Value;
+        Assert.Equal(Math.Pow(10, -0.1461), ratio, 1e-9);
+        Assert.Null(GasAtEquilibrium.Compute(brine.Read()).Find(EquilibriumQuantity.MicromolesPerKilogram));
+        Assert.Empty(brine.Read().Notes);
+        Assert.Contains("is an ion missing?", Assert.Single((brine with { Ions = "Na+=1mol/L" }).Read().Notes), StringComparison.Ordinal);
+    }
+
+    [Theory]
+    [InlineData("SO4 2-")]
+    [InlineData("SO42-")]
+    [InlineData("SO4--")]
+    [InlineData("so4^2-")]
+    [InlineData("SO4²⁻")]
+    public void An_ion_is_read_as_people_write_it(string text)
+    {
+        EquilibriumEntry brine = _lake with { Salinity = null, SalinityUncertainty = null, Ions = text + "=0.1mol/L" };
+        Assert.Equal("SO4 2-", Assert.Single(brine.Read().Water.Brine!.Ions).Name);
     }
 
     [Fact]
