@@ -1,3 +1,5 @@
+using System.Diagnostics;
+
 namespace ProbeCal;
 
 /// <summary>
@@ -26,6 +28,8 @@ internal sealed class CalculationSteps
         return _values[index];
     }
 
+    /// <summary>Notes a step. The device knows no steps: where the symbol is not defined, the calls are not compiled at all.</summary>
+    [Conditional("PROBECAL_STEPS")]
     internal void Add(StepQuantity quantity, double value)
     {
         if (Count == Capacity)

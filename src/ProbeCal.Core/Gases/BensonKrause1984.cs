@@ -1,3 +1,5 @@
+using System.Diagnostics;
+
 namespace ProbeCal;
 
 /// <summary>
@@ -128,6 +130,7 @@ public static class BensonKrause1984
         perSalinity = -(B0 + (r * (B1 + (r * B2))));
     }
 
+    [Conditional("PROBECAL_STEPS")]
     private static void AddSteps(CalculationSteps steps, double kelvin, double r, double fresh, double salt, double logarithm)
     {
         steps.Add(StepQuantity.CoefficientA0, A0);

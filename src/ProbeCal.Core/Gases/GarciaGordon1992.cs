@@ -1,3 +1,5 @@
+using System.Diagnostics;
+
 namespace ProbeCal;
 
 /// <summary>
@@ -132,6 +134,7 @@ public static class GarciaGordon1992
         return Numerics.Ln(above / kelvin);
     }
 
+    [Conditional("PROBECAL_STEPS")]
     private static void AddSteps(CalculationSteps steps, double t, double ts, double fresh, double salt, double logarithm)
     {
         steps.Add(StepQuantity.CelsiusIpts68, t);

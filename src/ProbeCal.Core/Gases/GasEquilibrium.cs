@@ -1,3 +1,5 @@
+using System.Diagnostics;
+
 namespace ProbeCal;
 
 /// <summary>
@@ -337,6 +339,7 @@ public static partial class GasEquilibrium
         return 1.0 < fraction ? 1.0 : fraction;
     }
 
+    [Conditional("PROBECAL_STEPS")]
     private static void AddInputs(CalculationSteps? steps, double celsius, double salinity, double pressureHectopascal)
     {
         if (steps == null) { return; }

@@ -1,3 +1,5 @@
+using System.Diagnostics;
+
 namespace ProbeCal;
 
 /// <summary>
@@ -92,6 +94,7 @@ public static class DensityEos80
         perKelvin = (waterSlope + (salinity * (aSlope + (bSlope * root)))) * TemperatureScale.Ipts68PerIts90;
     }
 
+    [Conditional("PROBECAL_STEPS")]
     private static void AddSteps(CalculationSteps steps, double t, double water, double a, double b)
     {
         steps.Add(StepQuantity.DensityCoefficientW0, W0);

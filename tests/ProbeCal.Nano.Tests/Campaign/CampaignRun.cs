@@ -60,10 +60,10 @@ public sealed class CampaignRun
     /// <summary>Methods of the device assembly that no input reached.</summary>
     public List<string> NeverCalled { get; }
 
-    /// <summary>The steps of a computation are the desktop's: no device code makes an object for them, so that nothing that fills it is ever called there.</summary>
+    /// <summary>The steps of a computation are the desktop's: what fills them is compiled there only.</summary>
     private static bool FillsSteps(MethodDefinition method)
     {
-        return method.DeclaringType.Name == "CalculationSteps" || method.Name == "AddSteps";
+        return method.DeclaringType.Name == "CalculationSteps" || method.CustomAttributes.Any(a => a.AttributeType.Name == "ConditionalAttribute");
     }
 
     public string Summary()
