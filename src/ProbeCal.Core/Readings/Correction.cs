@@ -8,7 +8,9 @@ namespace ProbeCal;
 /// What a bad input spoils follows from the physics: a membrane answers to partial pressure. Without a temperature nothing can
 /// be said. Without a salinity only the concentrations are lost, without a pressure only the saturation at local
 /// pressure; the concentrations then stand at 1 atm, which costs at most 0.05 %. A negative value (zero offset in anoxic
-/// water) is handed out as it is.
+/// water) is handed out as it is. With <see cref="RangeRule.NearEdge"/> the concentrations are held to the range of the solubility equation: a temperature up to
+/// 0.2 K outside is computed, named and has a larger uncertainty, what lies further is refused. Partial pressure and saturation, which rest on no such equation, are then
+/// computed wherever the probe's fit can be continued, and named.
 /// </remarks>
 public static class Correction
 {
@@ -19,7 +21,7 @@ public static class Correction
     /// <param name="temperatureCelsius">Water temperature at the probe, °C.</param>
     /// <param name="pressureHectopascal">Absolute station pressure, hPa; NaN when there is none.</param>
     /// <param name="salinity">Practical salinity; NaN when it is not known.</param>
-    /// <param name="rule">What to do outside a fitted or published range.</param>
+    /// <param name="rule">What to do outside a fitted or published range. Near edge holds the concentrations alone to theirs.</param>
     /// <param name="reading">Filled with values, statuses, uncertainties.</param>
     /// <returns>The status of the partial pressure, on which everything else rests.</returns>
     public static Status Correct(
@@ -33,8 +35,9 @@ public static class Correction
         Reading reading)
     {
         reading.Clear();
+        RangeRule probeRule = rule == RangeRule.NearEdge ? RangeRule.Extrapolate : rule;
         Status status = PartialPressure(
-            calibration, conditions.FlowFactor, signal, temperatureCelsius, pressureHectopascal, rule, out double partialPressure);
+            calibration, conditions.FlowFactor, signal, temperatureCelsius, pressureHectopascal, probeRule, out double partialPressure);
         reading.Set(ReadingQuantity.PartialPressure, status, partialPressure);
         if (double.IsNaN(partialPressure))
         {
@@ -44,13 +47,13 @@ public static class Correction
 
         double concentrationPressure = PressureForConcentration(pressureHectopascal);
         SetConcentrations(conditions.Equation, temperatureCelsius, concentrationPressure, salinity, partialPressure, status, rule, reading);
-        Status local = Saturation.PercentLocal(partialPressure, temperatureCelsius, pressureHectopascal, rule, out double percentLocal);
+        Status local = Saturation.PercentLocal(partialPressure, temperatureCelsius, pressureHectopascal, probeRule, out double percentLocal);
         reading.Set(ReadingQuantity.PercentLocal, InputCheck.Graver(status, local), percentLocal);
-        Status standard = Saturation.PercentOneAtmosphere(partialPressure, temperatureCelsius, rule, out double percentStandard);
+        Status standard = Saturation.PercentOneAtmosphere(partialPressure, temperatureCelsius, probeRule, out double percentStandard);
         reading.Set(ReadingQuantity.PercentOneAtmosphere, InputCheck.Graver(status, standard), percentStandard);
 
         reading.UncertaintyStatus = ReadingUncertainty.Fill(
-            calibration, conditions, temperatureCelsius, pressureHectopascal, salinity, partialPressure, rule, reading);
+            calibration, conditions, temperatureCelsius, pressureHectopascal, salinity, partialPressure, probeRule, rule, reading);
         return status;
     }
 

@@ -19,6 +19,7 @@ internal static class ReadingUncertainty
         double salinity,
         double partialPressure,
         RangeRule rule,
+        RangeRule concentrationRule,
         Reading reading)
     {
         Status status = conditions.Check();
@@ -28,7 +29,7 @@ internal static class ReadingUncertainty
 
         double offset = conditions.HasSameThermometer ? calibration.ThermometerOffsetUncertaintyKelvin : 0.0;
         double temperature = IndependentTemperature(conditions);
-        FillConcentrations(conditions, temperatureCelsius, pressureHectopascal, salinity, partialPressure, offset, temperature, rule, reading);
+        FillConcentrations(conditions, temperatureCelsius, pressureHectopascal, salinity, partialPressure, offset, temperature, concentrationRule, reading);
 
         Saturation.PercentLocalSensitivities(
             partialPressure, temperatureCelsius, pressureHectopascal, rule,
@@ -117,7 +118,9 @@ internal static class ReadingUncertainty
         OxygenEquilibrium.ConcentrationSensitivities(
             conditions.Equation, temperatureCelsius, salinity, concentrationPressure, partialPressure, rule,
             out double perKelvin, out double perSalinity, out double perHectopascal, out double perPartialPressure);
-        OxygenUncertainty.EquationRelative(conditions.Equation, salinity, rule, out double equation);
+        // Near the edge of the equation's range this grows with the distance outside.
+        GasUncertainty.EquationRelative(
+            Gas.Oxygen, conditions.Equation, temperatureCelsius, salinity, concentrationPressure, rule, out double equation);
         double milligrams = reading.Value(ReadingQuantity.MilligramsPerLitre);
         FillQuantity(
             reading, ReadingQuantity.MilligramsPerLitre, perPartialPressure, perKelvin * offset, perKelvin * temperature,

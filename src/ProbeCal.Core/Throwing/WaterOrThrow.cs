@@ -41,6 +41,45 @@ public static class WaterOrThrow
             $"{DensityEos80.LowestCelsius} to {DensityEos80.HighestCelsius} °C, salinity 0 to {DensityEos80.HighestSalinity}");
     }
 
+    /// <summary><see cref="DensityTanaka2001.Density"/>.</summary>
+    /// <exception cref="InputRefusedException">The temperature is not finite or out of range.</exception>
+    public static double PureDensity(double celsius)
+    {
+        Status status = DensityTanaka2001.Density(celsius, RangeRule.Refuse, out double value);
+        return status == Status.Ok
+            ? value
+            : throw Refusal(status, celsius, $"{DensityTanaka2001.LowestCelsius} to {DensityTanaka2001.HighestCelsius} °C");
+    }
+
+    /// <summary><see cref="VapourPressure.Hectopascal"/>.</summary>
+    /// <exception cref="InputRefusedException">The form is not known, or an input is not finite or out of its range.</exception>
+    public static double Vapour(VapourEquation equation, double celsius, double salinity)
+    {
+        Status status = VapourPressure.Hectopascal(equation, celsius, salinity, RangeRule.Refuse, out double value);
+        if (status == Status.Ok) { return value; }
+        throw StatusParts.Input(status) switch
+        {
+            InputQuantity.Salinity => Refusal(status, salinity, $"the range of {equation}; a form for pure water takes salinity 0 alone"),
+            InputQuantity.Temperature => Refusal(status, celsius, $"the range of {equation}"),
+            _ => Refusal(status, (int)equation, $"{(int)VapourEquation.WagnerPruss1993} ({VapourEquation.WagnerPruss1993}) to {(int)VapourEquation.Antoine8111} ({VapourEquation.Antoine8111})"),
+        };
+    }
+
+    /// <summary><see cref="PracticalSalinity.FromConductivity"/>.</summary>
+    /// <exception cref="InputRefusedException">An input is not finite or out of range.</exception>
+    public static double PracticalSalinityFromConductivity(double millisiemensPerCentimetre, double celsius, double seaPressureDecibar)
+    {
+        Status status = PracticalSalinity.FromConductivity(
+            millisiemensPerCentimetre, celsius, seaPressureDecibar, RangeRule.Refuse, out double value);
+        if (status == Status.Ok) { return value; }
+        throw StatusParts.Input(status) switch
+        {
+            InputQuantity.Temperature => Refusal(status, celsius, $"{PracticalSalinity.LowestCelsius} to {PracticalSalinity.HighestCelsius} °C"),
+            InputQuantity.Depth => Refusal(status, seaPressureDecibar, $"0 to {PracticalSalinity.HighestSeaPressureDecibar} dbar"),
+            _ => Refusal(status, millisiemensPerCentimetre, $"0 mS/cm to what gives salinity {PracticalSalinity.HighestSalinity}"),
+        };
+    }
+
     /// <summary><see cref="FreezingPoint.Celsius"/>.</summary>
     /// <exception cref="InputRefusedException">The salinity is not finite or out of range.</exception>
     public static double FreezingCelsius(double salinity)
@@ -81,6 +120,17 @@ public static class WaterOrThrow
     {
         Status status = StandardAtmosphere.FromSeaLevel(seaLevelHectopascal, altitudeMetres, out double value);
         return status == Status.Ok ? value : throw AltitudeRefusal(status, seaLevelHectopascal, altitudeMetres);
+    }
+
+    /// <summary><see cref="SeaLevelReduction.StationPressure"/>.</summary>
+    /// <exception cref="InputRefusedException">An input is not finite or out of range.</exception>
+    public static double StationPressure(double seaLevelHectopascal, double altitudeMetres, double airCelsius)
+    {
+        Status status = SeaLevelReduction.StationPressure(seaLevelHectopascal, altitudeMetres, airCelsius, out double value);
+        if (status == Status.Ok) { return value; }
+        throw StatusParts.Input(status) == InputQuantity.Temperature
+            ? Refusal(status, airCelsius, $"{SeaLevelReduction.LowestCelsius} to {SeaLevelReduction.HighestCelsius} °C")
+            : AltitudeRefusal(status, seaLevelHectopascal, altitudeMetres);
     }
 
     private static InputRefusedException AltitudeRefusal(Status status, double hectopascal, double altitudeMetres)

@@ -85,6 +85,8 @@ internal static class ReadingFlags
             RefusalReason.NotFinite => what + " is not a number",
             RefusalReason.BelowRange => what + " is below its range",
             RefusalReason.AboveRange => what + " is above its range",
+            RefusalReason.JustBelowRange => what + " is just below its range",
+            RefusalReason.JustAboveRange => what + " is just above its range",
             _ => what + " is unusable",
         };
     }

@@ -80,7 +80,7 @@ internal sealed class ReadingMaker
             inputs.Temperature.Value ?? double.NaN,
             inputs.UsablePressure,
             inputs.Salinity.Value ?? double.NaN,
-            RangeRule.Extrapolate,
+            RangeRule.NearEdge,
             _reading);
         return double.IsNaN(_reading.Value(ReadingQuantity.PartialPressure))
             ? ReadingFlags.Of(ReadingQuantity.PartialPressure, inputs, _reading, "").Reason

@@ -85,6 +85,70 @@ public class CorrectionTests
         }
     }
 
+    /// <summary>
+    /// A thermistor at the end of the equation's range: up to 0.2 K outside everything is computed and named, and the concentrations' uncertainty holds what the temperature alone would change
+    /// them by over the distance outside, in quadrature.
+    /// </summary>
+    [Theory]
+    [InlineData(-0.15, Status.TemperatureJustBelowRange, 0.15)]
+    [InlineData(-0.2, Status.TemperatureJustBelowRange, 0.2)]
+    [InlineData(40.12, Status.TemperatureJustAboveRange, 0.12)]
+    public void NearTheEdge_IsComputedNamedAndLessCertain(double temperature, Status expected, double outside)
+    {
+        Reading reading = Correct(50.0, temperature, 1000.0, 0.0, RangeRule.NearEdge);
+        Reading extrapolated = Correct(50.0, temperature, 1000.0, 0.0, RangeRule.Extrapolate);
+        foreach (ReadingQuantity quantity in All)
+        {
+            Assert.Equal(expected, reading.StatusOf(quantity));
+            Assert.Equal(extrapolated.Value(quantity), reading.Value(quantity));
+            Assert.True(reading.StandardUncertainty(quantity) > 0.0);
+        }
+
+        // The slope of ln(mg/L per hPa) by differences, at the reading.
+        OxygenEquilibrium.ConcentrationFromPartialPressure(SolubilityEquation.BensonKrause1984, temperature + 0.01, 0.0, 1000.0, 1.0, RangeRule.Extrapolate, out double up);
+        OxygenEquilibrium.ConcentrationFromPartialPressure(SolubilityEquation.BensonKrause1984, temperature - 0.01, 0.0, 1000.0, 1.0, RangeRule.Extrapolate, out double down);
+        BensonKrause1984.MilligramsPerLitre(temperature + 0.01, 0.0, 1013.25, RangeRule.Extrapolate, out double high);
+        BensonKrause1984.MilligramsPerLitre(temperature - 0.01, 0.0, 1013.25, RangeRule.Extrapolate, out double low);
+        double slope = Math.Log(high / low) / 0.02;
+        Assert.True(slope < 0.0 && up < down);
+        foreach (ReadingQuantity quantity in Concentrations)
+        {
+            double equation = reading.Contribution(UncertaintySource.Equation, quantity) / reading.Value(quantity);
+            Assert.Equal(Math.Sqrt((0.001 * 0.001) + (slope * outside * slope * outside)), equation, 1.0e-5);
+        }
+    }
+
+    /// <summary>Further outside the concentrations are refused with the input's name; partial pressure and saturation stay, as extrapolated before.</summary>
+    [Theory]
+    [InlineData(-0.21, Status.TemperatureBelowRange)]
+    [InlineData(40.5, Status.TemperatureAboveRange)]
+    public void BeyondTheEdge_ConcentrationsAreRefusedAndPartialPressureStays(double temperature, Status expected)
+    {
+        Reading reading = Correct(50.0, temperature, 1000.0, 0.0, RangeRule.NearEdge);
+        Reading extrapolated = Correct(50.0, temperature, 1000.0, 0.0, RangeRule.Extrapolate);
+        foreach (ReadingQuantity quantity in All)
+        {
+            if (Array.IndexOf(Concentrations, quantity) >= 0)
+            {
+                AssertRefused(reading, quantity, expected);
+                continue;
+            }
+
+            Assert.Equal(expected, reading.StatusOf(quantity));
+            Assert.Equal(extrapolated.Value(quantity), reading.Value(quantity));
+            Assert.Equal(extrapolated.StandardUncertainty(quantity), reading.StandardUncertainty(quantity));
+        }
+    }
+
+    /// <summary>Inside every range the rule changes nothing.</summary>
+    [Fact]
+    public void InRange_NearEdgeChangesNothing()
+    {
+        Reading refuse = Correct(50.0, 15.0, 1000.0, 0.0, RangeRule.Refuse);
+        Reading near = Correct(50.0, 15.0, 1000.0, 0.0, RangeRule.NearEdge);
+        foreach (ReadingQuantity quantity in All) { AssertSame(refuse, near, quantity); }
+    }
+
     [Fact]
     public void AnoxicWater_GivesANegativeValue_NotAClippedOne()
     {

@@ -77,8 +77,8 @@ public class ReadingMakerTests
     [InlineData("pressure missing", "191|111191", null)]
     [InlineData("salinity missing", "119|199911", null)]
     [InlineData("everything missing", "999|999999", "temperature is missing")]
-    [InlineData("temperature above range", "311|333333", null)]
-    [InlineData("salinity above range", "113|133311", null)]
+    [InlineData("temperature above range", "311|344433", null)]
+    [InlineData("salinity above range", "113|144411", null)]
     [InlineData("pressure impossible at the altitude", "141|111141", null)]
     [InlineData("pressure unusual at the altitude", "131|111131", null)]
     [InlineData("signal not a number", "111|444444", "signal is not a number")]
@@ -112,10 +112,42 @@ public class ReadingMakerTests
         Assert.Equal(noReading, (string?)json["noReadingReason"]);
         Assert.Equal(good.RawText, (string)json["raw"]!["text"]!);
         Assert.All(_quantities.Keys, name => Assert.Equal(json[name]!["value"] == null, json[name]!["standardUncertainty"] == null));
+        if (which == "temperature above range")
+        {
+            Assert.Equal("temperature is above its range", (string)json["mgPerL"]!["reason"]!);
+            Assert.True((double)json["partialPressureHPa"]!["value"]! > 0);
+        }
+
         if (which == "negative")
         {
             Assert.True((double)json["mgPerL"]!["value"]! < 0);
         }
+    }
+
+    /// <summary>A thermistor in ice water: the probe's fit goes on below 0 °C, the solubility equation ends there.</summary>
+    [Theory]
+    [InlineData(-0.1, "111|133311", "temperature is just below its range, extrapolated")]
+    [InlineData(-0.2, "111|133311", "temperature is just below its range, extrapolated")]
+    [InlineData(-0.3, "111|144411", "temperature is below its range")]
+    public void IceWater_IsComputedNearTheEdgeAndNoFurther(double celsius, string flags, string reason)
+    {
+        LoadedCalibration calibration = StationParts.Calibration(record => record with
+        {
+            Probe = record.Probe with
+            {
+                TemperatureCoefficient = record.Probe.TemperatureCoefficient! with { FittedLowCelsius = -5 },
+            },
+        });
+
+        JsonNode json = Make(StationParts.Sample with { TemperatureCelsius = celsius }, StationParts.Configuration(), calibration);
+
+        string[] inputs = ["temperatureC", "pressureHPa", "salinity"];
+        Assert.Equal(flags, string.Concat(inputs.Select(name => Flag(json, name))) + "|" + string.Concat(_quantities.Keys.Select(name => Flag(json, name))));
+        Assert.Equal(reason, (string)json["mgPerL"]!["reason"]!);
+        Assert.Equal(celsius < -0.2, json["mgPerL"]!["value"] == null);
+        Assert.True((double)json["partialPressureHPa"]!["value"]! > 0);
+        Assert.Equal(101.5, (double)json["raw"]!["signal"]!);
+        Assert.Null(json["noReadingReason"]);
     }
 
     [Fact]
