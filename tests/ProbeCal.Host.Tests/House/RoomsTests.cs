@@ -52,6 +52,8 @@ public class RoomsTests
     {
         ["Entry"] = [],
         ["Equilibrium"] = ["Entry", "Uncertainty"],
+        ["Equilibrium"] = ["Entry"],
+        ["WholeFiles"] = ["Entry"],
         ["Storage"] = ["Entry"],
         ["TableWriting"] = ["Entry"],
         ["Uncertainty"] = [],
