@@ -42,6 +42,7 @@ internal static class Program
             TablesCommand.Create(terminal),
             ExplainCommand.Create(terminal),
             EquationsCommand.Create(terminal),
+            WaterCommand.Create(terminal),
             CalibrateCommand.Create(terminal),
             CalibrationsCommand.Create(terminal),
             StationCommand.Create(terminal),

@@ -56,7 +56,7 @@ internal static class WaterText
         List<string[]> rows = [["vapour pressure by", "fresh, hPa", "against wagner-pruss-1993", salt.Salinity == 0 ? "" : "this water, hPa"]];
         foreach (VapourByForm form in w.VapourForms)
         {
-            rows.Add([form.Equation, Fixed(form.FreshHectopascal, 4), form.DeviationPercent is double d ? Signed(d) : "none", salt.Salinity == 0 ? "" : form.SaltHectopascal is double s ? Number.Fixed(s, 4) : "no term for salt"]);
+            rows.Add([form.Equation, Fixed(form.FreshHectopascal, 4), form.DeviationPercent is double d ? Signed(d) : "none", salt.Salinity == 0 ? "" : form.TakesSalt ? Fixed(form.SaltHectopascal, 4) : "no term for salt"]);
         }
 
         TextTable.Write(output, rows, "  ");

@@ -8,8 +8,9 @@ namespace ProbeCal.Station.Water;
 /// <param name="Equation">Its name by author and year.</param>
 /// <param name="FreshHectopascal">Over fresh water, hPa; null outside the range of the form.</param>
 /// <param name="DeviationPercent">Over fresh water against Wagner and Pruss 1993, %; null outside either range.</param>
-/// <param name="SaltHectopascal">Over this water, hPa, by a form that has a term for salt; null for the others, and for fresh water.</param>
-public sealed record VapourByForm(string Equation, double? FreshHectopascal, double? DeviationPercent, double? SaltHectopascal);
+/// <param name="TakesSalt">True when the form has a term for salt.</param>
+/// <param name="SaltHectopascal">Over this water, hPa, by a form that has a term for salt; null for the others, for fresh water and outside its range.</param>
+public sealed record VapourByForm(string Equation, double? FreshHectopascal, double? DeviationPercent, bool TakesSalt, double? SaltHectopascal);
 
 /// <summary>A value that may be absent outside the range of its equation.</summary>
 /// <param name="Value">The value; null outside the range.</param>
@@ -124,7 +125,7 @@ public sealed record WaterProperties
             ProbeCal.VapourPressure.Hectopascal(equation, celsius, salinity, NearEdge, out salt);
         }
 
-        return new VapourByForm(name, OrNull(fresh), OrNull(100 * (fresh - reference) / reference), OrNull(salt));
+        return new VapourByForm(name, OrNull(fresh), OrNull(100 * (fresh - reference) / reference), takesSalt, OrNull(salt));
     }
 
     /// <summary>A value of one input with what the input's uncertainty and the form's own make of it.</summary>
