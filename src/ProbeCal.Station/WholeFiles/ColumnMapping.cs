@@ -39,6 +39,9 @@ internal sealed class ColumnMapping
     /// <summary>Which column, from 0; of use after <see cref="Resolve"/>.</summary>
     internal int Index { get; private set; } = -1;
 
+    /// <summary>Name of the unit; of use after <see cref="Resolve"/>.</summary>
+    internal string UnitName => _unit!.Name;
+
     /// <summary>What was understood, for a person to look at.</summary>
     internal string Explanation => Quantity.Name + " from column " + (Index + 1).ToString(CultureInfo.InvariantCulture)
         + (_unit is null || _unit.Name.Length == 0 ? "" : ", " + _unit.Name);

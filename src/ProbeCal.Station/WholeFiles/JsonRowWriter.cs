@@ -13,16 +13,19 @@ internal sealed class JsonRowWriter : IRowWriter
     private readonly Stream _output;
     private readonly Utf8JsonWriter _writer;
     private readonly IReadOnlyList<ResultColumn> _results;
+    private readonly IReadOnlyList<(string Key, string Value)> _about;
     private string[] _names = [];
 
     /// <param name="output">Where to; left open.</param>
     /// <param name="results">Names of the results.</param>
-    internal JsonRowWriter(Stream output, IReadOnlyList<ResultColumn> results)
+    /// <param name="about">What holds for all rows.</param>
+    internal JsonRowWriter(Stream output, IReadOnlyList<ResultColumn> results, IReadOnlyList<(string Key, string Value)> about)
     {
         _output = new BufferedStream(output, 1 << 16);
         // Read by programs as a file of its own, never put into a page: µ and ° stay as they are.
         _writer = new Utf8JsonWriter(_output, new JsonWriterOptions { Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping });
         _results = results;
+        _about = about;
     }
 
     public void Header(TableHeader header)
@@ -49,6 +52,11 @@ internal sealed class JsonRowWriter : IRowWriter
         _writer.WriteString("format", "probecal-equilibrium-row");
         _writer.WriteNumber("version", 1);
         _writer.WriteNumber("line", row.Line);
+        foreach ((string key, string value) in _about)
+        {
+            _writer.WriteString(key, value);
+        }
+
         WriteInput(row);
         WriteResult(results, outcome);
         _writer.WriteString("status", StatusText.Word(outcome.State));

@@ -53,13 +53,17 @@ public interface IRowFormula
     /// <summary>What may come from columns.</summary>
     IReadOnlyList<ColumnQuantity> Quantities { get; }
 
-    /// <summary>What is appended.</summary>
+    /// <summary>What is appended; known after <see cref="Begin"/>.</summary>
     IReadOnlyList<ResultColumn> Results { get; }
+
+    /// <summary>What holds for all rows, by the name it has in JSON: the gas, the equation; known after <see cref="Begin"/>.</summary>
+    IReadOnlyList<(string Key, string Value)> About { get; }
 
     /// <summary>Told once which quantities come from columns, in the order in which their values will be given.</summary>
     /// <param name="quantities">Their names.</param>
+    /// <param name="units">Name of a unit of each, of the kind that its values come in.</param>
     /// <exception cref="InputException">With the other options they are too few, or say a thing twice.</exception>
-    void Begin(IReadOnlyList<string> quantities);
+    void Begin(IReadOnlyList<string> quantities, IReadOnlyList<string> units);
 
     /// <summary>Computes one row.</summary>
     /// <param name="values">The values of the columns with their units, as a person types them, in the order of <see cref="Begin"/>.</param>

@@ -66,10 +66,15 @@ public static class WholeFile
             mapping.Resolve(header.Names);
         }
 
-        formula.Begin([.. mappings.Select(static each => each.Quantity.Name)]);
+        formula.Begin([.. mappings.Select(static each => each.Quantity.Name)], [.. mappings.Select(static each => each.UnitName)]);
         using ResultFile output = ResultFile.Open(request.Output, request.Input, request.Force, surroundings.StandardOutput);
         surroundings.Say($"{name}: {header.Explanation}");
         surroundings.Say("  " + string.Join("; ", mappings.Select(static each => each.Explanation)));
+        if (formula.About.Count != 0)
+        {
+            surroundings.Say("  " + string.Join("; ", formula.About.Select(static each => each.Key + " " + each.Value)));
+        }
+
         RowCounts counts = new();
         using (IRowWriter writer = Writer(request, formula, header, output.Stream))
         {
@@ -140,7 +145,7 @@ public static class WholeFile
     {
         if (request.Output.EndsWith(".jsonl", StringComparison.OrdinalIgnoreCase))
         {
-            return new JsonRowWriter(output, formula.Results);
+            return new JsonRowWriter(output, formula.Results, formula.About);
         }
 
         // An output may be an input again: its columns keep their names, the new ones are numbered.

@@ -26,7 +26,9 @@ internal sealed class PlainFormula : IRowFormula
 
     internal long Rows { get; private set; }
 
-    public void Begin(IReadOnlyList<string> quantities)
+    public IReadOnlyList<(string Key, string Value)> About => [];
+
+    public void Begin(IReadOnlyList<string> quantities, IReadOnlyList<string> units)
     {
         _quantities = quantities;
     }
