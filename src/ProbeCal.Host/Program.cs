@@ -43,6 +43,7 @@ internal static class Program
             ExplainCommand.Create(terminal),
             EquationsCommand.Create(terminal),
             WaterCommand.Create(terminal),
+            TotalGasCommand.Create(terminal),
             CalibrateCommand.Create(terminal),
             CalibrationsCommand.Create(terminal),
             StationCommand.Create(terminal),

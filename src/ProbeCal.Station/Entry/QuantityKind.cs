@@ -62,6 +62,12 @@ public sealed class QuantityKind
         new QuantityUnit("ft", 0.3048, 1, 0, "foot", "feet"),
         new QuantityUnit("km", 1000, 1, 0));
 
+    /// <summary>Depth below the surface, canonical m. The unit must be given.</summary>
+    public static QuantityKind Depth { get; } = WithUnit(
+        "depth", "a", "15m or 50ft",
+        new QuantityUnit("m", 1, 1, 0, "metre", "metres", "meter", "meters"),
+        new QuantityUnit("ft", 0.3048, 1, 0, "foot", "feet"));
+
     /// <summary>Practical salinity (PSS-78). It has no unit; the letters PSU are allowed because many write them.</summary>
     public static QuantityKind Salinity { get; } = WithBare(
         "practical salinity", "a", "35",

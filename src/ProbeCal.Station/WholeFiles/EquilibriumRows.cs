@@ -29,7 +29,7 @@ public sealed class EquilibriumRows : IRowFormula
         (new("humidity", QuantityKind.Percent), static (e, text) => e with { Humidity = text }, static e => e.Humidity, "100"),
         (new("concentration", QuantityKind.MassConcentration, QuantityKind.AmountConcentration, QuantityKind.AmountPerKilogram, QuantityKind.VolumeConcentration),
             static (e, text) => e with { Concentration = text }, static e => e.Concentration, "0"),
-        (new("depth", QuantityKind.Altitude), static (e, text) => e with { Depth = text }, static e => e.Depth, "1"),
+        (new("depth", QuantityKind.Depth), static (e, text) => e with { Depth = text }, static e => e.Depth, "1"),
     ];
 
     /// <summary>Each result: its column, its key, and where it is in the result of a single value.</summary>
