@@ -12,6 +12,12 @@ internal sealed class Terminal
 {
     internal required TextReader Input { get; init; }
 
+    /// <summary>The bytes behind <see cref="Input"/>, for a command that reads a file from there.</summary>
+    internal Func<Stream> InputBytes { get; init; } = static () => Stream.Null;
+
+    /// <summary>The bytes behind <see cref="Output"/>, for a command that writes a file there.</summary>
+    internal Func<Stream> OutputBytes { get; init; } = static () => Stream.Null;
+
     /// <summary>Results only.</summary>
     internal required TextWriter Output { get; init; }
 
@@ -31,6 +37,8 @@ internal sealed class Terminal
         return new Terminal
         {
             Input = Console.In,
+            InputBytes = Console.OpenStandardInput,
+            OutputBytes = Console.OpenStandardOutput,
             Output = Console.Out,
             Error = Console.Error,
             Time = TimeProvider.System,

@@ -90,6 +90,11 @@ internal sealed record TotalGasJson
                 DeltaPAtDepthHPa = g.DeltaAtDepth?.StandardUncertainty,
             },
         };
-        return JsonSerializer.Serialize(json, WaterJsonContext.Default.TotalGasJson);
+        return JsonSerializer.Serialize(json, TotalGasJsonContext.Default.TotalGasJson);
     }
 }
+
+/// <summary>Generated at build time, so that the native program needs no reflection.</summary>
+[JsonSerializable(typeof(TotalGasJson))]
+[JsonSourceGenerationOptions(WriteIndented = false)]
+internal sealed partial class TotalGasJsonContext : JsonSerializerContext;

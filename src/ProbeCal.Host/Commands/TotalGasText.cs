@@ -76,7 +76,7 @@ internal static class TotalGasText
             TextTable.WriteWrapped(output, "  caution: ", "    ", caution);
         }
 
-        Line($"  ± is a standard uncertainty (k = 1){Exact(g)}");
+        TextTable.WriteWrapped(output, "  ", "    ", "± is a standard uncertainty (k = 1)" + Exact(g));
 
         void Pressure(string name, UncertainQuantity value)
         {

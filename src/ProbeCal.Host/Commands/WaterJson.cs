@@ -87,6 +87,5 @@ internal sealed record WaterJson
 
 /// <summary>Generated at build time, so that the native program needs no reflection.</summary>
 [JsonSerializable(typeof(WaterJson))]
-[JsonSerializable(typeof(TotalGasJson))]
 [JsonSourceGenerationOptions(WriteIndented = false)]
 internal sealed partial class WaterJsonContext : JsonSerializerContext;

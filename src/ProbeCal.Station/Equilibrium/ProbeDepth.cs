@@ -40,7 +40,7 @@ public sealed record ProbeDepth(double Metres, double HydrostaticHectopascal, do
     /// <exception cref="InputException">The volume of the gas in water is not known, or the water lies outside the ranges.</exception>
     internal static ProbeDepth Compute(Gas gas, double celsius, double salinity, double metres)
     {
-        if (Enns1965.PartialMolarVolume(gas, out _) != Status.Ok)
+        if (Enns1965.Factor(gas, 20, 0, RangeRule.Refuse, out _) == Status.GasUnknown)
         {
             throw new InputException($"--depth: what depth does to {GasNames.NameOf(gas)} is not known here; it is for O2, N2, Ar, He and CO2 (Enns 1965)");
         }
