@@ -17,6 +17,8 @@ public class ReleasedOutputTests
     [InlineData("table")]
     [InlineData("explanation")]
     [InlineData("equations")]
+    [InlineData("water")]
+    [InlineData("total-gas")]
     public void Version1_fits_the_published_schema(string kind)
     {
         using JsonDocument released = JsonDocument.Parse(File.ReadAllText(Sample(kind, "version-1.json")));
@@ -54,6 +56,8 @@ public class ReleasedOutputTests
     [InlineData("explanation", "\"kind\":\"iterated\"", "\"kind\":\"input\"")]
     [InlineData("equations", "\"grade\":\"one place\"", "\"grade\":\"good\"")]
     [InlineData("calibration-list", "\"count\": 2", "\"count\": \"two\"")]
+    [InlineData("water", "\"salinitySource\":\"conductivity\"", "\"salinitySource\":\"taste\"")]
+    [InlineData("total-gas", "\"version\":1", "\"version\":2")]
     public void Schema_refuses_what_is_something_else(string kind, string good, string bad)
     {
         string text = File.ReadAllText(Sample(kind, "version-1.json"));

@@ -28,6 +28,7 @@ internal static class EquilibriumCommand
         Option<string> monteCarlo = new("--monte-carlo") { Description = "Check the uncertainty by so many random trials (JCGM 101); 1000000 when no number is given.", HelpName = "N", Arity = ArgumentArity.ZeroOrOne };
         Option<string> seed = new("--seed") { Description = "Seed of the random trials; the same seed gives the same figures.", HelpName = "N" };
         Option<string> format = new("--format") { Description = "text or json.", DefaultValueFactory = static _ => "text", HelpName = "text|json" };
+        WholeFileOptions file = new();
         Command command = new(
             "equilibrium",
             """
@@ -41,13 +42,21 @@ internal static class EquilibriumCommand
               probecal equilibrium --mixture "O2=5%, N2=95%" --temperature 25 --salinity 0 --pressure 1000hPa
               probecal equilibrium --concentration 8.1mg/L --concentration-uncertainty 0.1mg/L --temperature 18 --salinity 0 --pressure 938hPa
               probecal equilibrium --temperature 20 --temperature-within 0.2K --salinity 0 --pressure 938hPa --monte-carlo
+              probecal equilibrium --temperature 8.4 --salinity 0 --sea-level-pressure 1021hPa --altitude 640m --air-temperature 12C
+              probecal equilibrium --input june.csv --output june-o2.csv --column "temperature=Water temp [C]" --column "pressure=Baro [mmHg]" --salinity 0
             """);
         options.AddTo(command);
         command.Options.Add(monteCarlo);
         command.Options.Add(seed);
         command.Options.Add(format);
+        file.AddTo(command);
         command.SetAction(parsed =>
         {
+            if (file.IsAsked(parsed, format, monteCarlo, seed))
+            {
+                return file.Run(parsed, options.Entry(parsed), terminal);
+            }
+
             string shape = parsed.GetValue(format)!;
             if (Array.IndexOf(Formats, shape) < 0)
             {

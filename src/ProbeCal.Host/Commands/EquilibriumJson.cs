@@ -57,6 +57,7 @@ internal static class EquilibriumJson
             Budget(w, r, Equilibrium);
             Saturation(w, r);
             Measured(w, r);
+            Depth(w, r);
             Source(w, r);
             Check(w, check);
             w.WriteStartArray("flags");
@@ -299,6 +300,31 @@ internal static class EquilibriumJson
         w.WriteEndObject();
         Intervals(w, r, Measurement);
         Budget(w, r, Measurement);
+        w.WriteEndObject();
+    }
+
+    /// <summary>What a probe feels under water: the same concentration, a higher partial pressure.</summary>
+    private static void Depth(Utf8JsonWriter w, GasAtEquilibrium r)
+    {
+        if (r.AtDepth is not ProbeDepth depth)
+        {
+            return;
+        }
+
+        w.WriteStartObject("depth");
+        w.WriteNumber("depthM", depth.Metres);
+        w.WriteNumber("hydrostaticPressureHPa", depth.HydrostaticHectopascal);
+        w.WriteNumber("factor", depth.Factor);
+        foreach ((EquilibriumQuantity quantity, string name) in new[] { (EquilibriumQuantity.PartialPressure, "partialPressureHPa"), (EquilibriumQuantity.MeasuredPartialPressure, "measuredPartialPressureHPa") })
+        {
+            if (r.Find(quantity) is EquilibriumResult surface)
+            {
+                UncertainQuantity felt = depth.Of(surface.Value, surface.StandardUncertainty);
+                w.WriteNumber(name, felt.Value);
+                w.WriteNumber(name + "StandardUncertainty", felt.StandardUncertainty);
+            }
+        }
+
         w.WriteEndObject();
     }
 

@@ -29,6 +29,9 @@ internal sealed class EquilibriumOptions
     private readonly Option<string> _pressureUncertainty = Of("--pressure-uncertainty", "u", "Standard uncertainty of the pressure: 1hPa.");
     private readonly Option<string> _pressureWithin = Of("--pressure-within", "a", "Or its limits to either side: 2hPa.");
     private readonly Option<string> _altitude = Of("--altitude", "Z", "Altitude with its unit: 640m, 2100ft. Stands in for a barometer where --pressure is missing; with it, the pressure is judged.");
+    private readonly Option<string> _seaLevelPressure = Of("--sea-level-pressure", "P", "Second best, with --altitude: a pressure reduced to sea level, as weather services tell it, 1021hPa.");
+    private readonly Option<string> _airTemperature = Of("--air-temperature", "T", "Air temperature at the station, for --sea-level-pressure; the standard atmosphere's when left out.");
+    private readonly Option<string> _depth = Of("--depth", "Z", "Depth of a probe under water: adds the partial pressure that it feels there, 15m.");
     private readonly Option<string> _moleFraction = Of("--mole-fraction", "X", "Fraction of the gas in dry air where it is not the usual one: 420ppm, 1.9ppm, 21%.");
     private readonly Option<string> _moleFractionUncertainty = Of("--mole-fraction-uncertainty", "u", "Standard uncertainty of the fraction: 5ppm.");
     private readonly Option<string> _moleFractionWithin = Of("--mole-fraction-within", "a", "Or its limits to either side: 10ppm.");
@@ -48,6 +51,8 @@ internal sealed class EquilibriumOptions
         {
             _gas, _equation, _temperature, _salinity, _conductivity, _conductivityTemperature, _specificConductance, _chlorinity, _ions, _pressure, _altitude,
             _moleFraction, _mixture, _partialPressure, _humidity, _concentration,
+            _gas, _equation, _temperature, _salinity, _conductivity, _conductivityTemperature, _specificConductance, _chlorinity, _pressure, _altitude, _seaLevelPressure, _airTemperature,
+            _moleFraction, _mixture, _partialPressure, _humidity, _concentration, _depth,
             _temperatureUncertainty, _temperatureWithin, _salinityUncertainty, _salinityWithin, _conductivityUncertainty, _conductivityTemperatureUncertainty, _chlorinityUncertainty,
             _pressureUncertainty, _pressureWithin, _moleFractionUncertainty, _moleFractionWithin, _partialPressureUncertainty,
             _humidityUncertainty, _humidityWithin, _concentrationUncertainty,
@@ -82,6 +87,9 @@ internal sealed class EquilibriumOptions
             PressureUncertainty = parsed.GetValue(_pressureUncertainty),
             PressureWithin = parsed.GetValue(_pressureWithin),
             Altitude = parsed.GetValue(_altitude),
+            SeaLevelPressure = parsed.GetValue(_seaLevelPressure),
+            AirTemperature = parsed.GetValue(_airTemperature),
+            Depth = parsed.GetValue(_depth),
             MoleFraction = parsed.GetValue(_moleFraction),
             MoleFractionUncertainty = parsed.GetValue(_moleFractionUncertainty),
             MoleFractionWithin = parsed.GetValue(_moleFractionWithin),

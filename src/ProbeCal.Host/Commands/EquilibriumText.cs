@@ -51,6 +51,11 @@ internal static class EquilibriumText
         output.WriteLine();
         Paragraph(output, "water", $"{Number.Print(c.Temperature.Value)} °C, {WaterWords.Of(c.Water)}");
         Paragraph(output, "gas phase", Phase(c));
+        if (r.AtDepth is ProbeDepth depth)
+        {
+            Paragraph(output, "at " + Number.Print(depth.Metres) + " m", Felt(r, depth));
+        }
+
         Paragraph(output, "equation", Equation(r));
         Paragraph(output, "one more", Steps(r));
         Paragraph(output, "uncertainty", Budget(r));
@@ -168,6 +173,15 @@ internal static class EquilibriumText
             : "mixture of " + string.Join(", ", c.Phase.Parts.Select(static part => Fraction(part.MoleFraction) + " " + GasNames.NameOf(part.Gas)))
                 + (c.Phase.Unnamed == 0 ? "" : $"; the rest, {Fraction(c.Phase.Unnamed)}, is unnamed and taken as inert") + ", when dry";
         return $"{what}, {humidity}, {pressure}";
+    }
+
+    /// <summary>What a probe feels under water.</summary>
+    private static string Felt(GasAtEquilibrium r, ProbeDepth depth)
+    {
+        EquilibriumResult surface = r.Find(EquilibriumQuantity.MeasuredPartialPressure) ?? r.Value(EquilibriumQuantity.PartialPressure);
+        UncertainQuantity felt = depth.Of(surface.Value, surface.StandardUncertainty);
+        return string.Create(CultureInfo.InvariantCulture,
+            $"a probe feels {Both(new UncertainNumber(felt.Value, felt.StandardUncertainty, "hPa"))} at the same concentration: × {depth.Factor:F5} under {depth.HydrostaticHectopascal:F1} hPa of water (Enns 1965)");
     }
 
     private static string Fraction(double fraction)

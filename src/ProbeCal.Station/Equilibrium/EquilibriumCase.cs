@@ -23,7 +23,7 @@ public sealed record EquilibriumCase
     /// <summary>Absolute station pressure, hPa.</summary>
     public required UncertainQuantity Pressure { get; init; }
 
-    /// <summary>Where the pressure came from: <c>given</c> or <c>altitude</c>.</summary>
+    /// <summary>Where the pressure came from: <c>given</c>, <c>sea-level</c> or <c>altitude</c>.</summary>
     public required string PressureSource { get; init; }
 
     /// <summary>What stands over the water.</summary>
@@ -31,6 +31,9 @@ public sealed record EquilibriumCase
 
     /// <summary>What was measured in the water; null when only the equilibrium is asked for.</summary>
     public MeasuredConcentration? Measured { get; init; }
+
+    /// <summary>Depth of a probe, m; null when it is not asked for.</summary>
+    public double? DepthMetres { get; init; }
 
     /// <summary>What a person should look at again, one line each.</summary>
     public IReadOnlyList<string> Notes { get; init; } = [];

@@ -69,6 +69,12 @@ public sealed record EquilibriumEntry
     /// <summary>Altitude with its unit.</summary>
     public string? Altitude { get; init; }
 
+    /// <summary>Pressure reduced to sea level, in place of a station pressure; takes the altitude with it.</summary>
+    public string? SeaLevelPressure { get; init; }
+
+    /// <summary>Air temperature at the station, for the sea-level pressure.</summary>
+    public string? AirTemperature { get; init; }
+
     /// <summary>Mole fraction of the gas in dry air, in place of the usual one.</summary>
     public string? MoleFraction { get; init; }
 
@@ -102,6 +108,9 @@ public sealed record EquilibriumEntry
     /// <summary>Its standard uncertainty, in a unit of the same kind.</summary>
     public string? ConcentrationUncertainty { get; init; }
 
+    /// <summary>Depth of a probe under water, for the partial pressure that it feels there.</summary>
+    public string? Depth { get; init; }
+
     /// <summary>Understands the words.</summary>
     /// <exception cref="InputException">Something is missing, cannot be read or contradicts something else; one line says what.</exception>
     public EquilibriumCase Read()
@@ -115,7 +124,7 @@ public sealed record EquilibriumEntry
         double celsius = Quantity.TemperatureCelsius("--temperature", Temperature);
         UncertainQuantity temperature = UncertainQuantity.Read(celsius, QuantityKind.TemperatureDifference, "--temperature", TemperatureUncertainty, TemperatureWithin);
         WaterSalinity water = WaterSalinity.Read(this, celsius);
-        StationPressure pressure = StationPressure.Parse(Pressure, Altitude, PressureUncertainty);
+        StationPressure pressure = StationPressure.Parse(Pressure, Altitude, PressureUncertainty, SeaLevelPressure, AirTemperature);
         UncertainQuantity stated = UncertainQuantity.Read(pressure.Hectopascal, QuantityKind.Pressure, "--pressure", PressureUncertainty, PressureWithin);
         List<string> notes = [];
         if (pressure.Note is string note)
@@ -140,6 +149,8 @@ public sealed record EquilibriumEntry
             PressureSource = pressure.Source,
             Phase = GasPhase.Read(gas, this),
             Measured = MeasuredConcentration.Read(this, water),
+            Measured = MeasuredConcentration.Read(this),
+            DepthMetres = Depth is null ? null : ProbeDepth.Read(Depth),
             Notes = notes,
         };
     }

@@ -42,7 +42,7 @@ public sealed record EquilibriumSensitivities(
     double PerKelvin, double PerSalinity, double PerHectopascal, double PerMoleFraction, double PerHumidityPercent, double PerPartialPressureHectopascal);
 
 /// <summary>Something unusual that was let pass, and what it costs.</summary>
-/// <param name="Code">For programs: <c>temperature-just-below-range</c>, <c>temperature-just-above-range</c>, <c>fugacity</c>, <c>pressure-from-altitude</c>.</param>
+/// <param name="Code">For programs: <c>temperature-just-below-range</c>, <c>temperature-just-above-range</c>, <c>fugacity</c>, <c>pressure-from-sea-level</c>, <c>pressure-from-altitude</c>.</param>
 /// <param name="Text">For people, one line.</param>
 public sealed record EquilibriumFlag(string Code, string Text);
 

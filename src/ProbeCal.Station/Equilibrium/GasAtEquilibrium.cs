@@ -75,6 +75,9 @@ public sealed class GasAtEquilibrium
     /// <summary>How the partial pressure in the gas phase (hPa) answers to its conditions.</summary>
     public required EquilibriumSensitivities PartialPressureSensitivities { get; init; }
 
+    /// <summary>What depth does to a probe; null when it is not asked for.</summary>
+    public ProbeDepth? AtDepth { get; private init; }
+
     /// <summary>Where the equation holds.</summary>
     public EquationRange Range => EquationRange.Of(Asked.Gas, Asked.Equation, Asked.Water.Salinity);
 
@@ -120,6 +123,7 @@ public sealed class GasAtEquilibrium
         {
             ConcentrationSensitivities = CoreSensitivities.OfConcentration(asked),
             PartialPressureSensitivities = CoreSensitivities.OfPartialPressure(asked),
+            AtDepth = asked.DepthMetres is double metres ? ProbeDepth.Compute(asked.Gas, asked.Temperature.Value, asked.Water.Salinity, metres) : null,
         };
         Status edge = result.ComputeEquationUncertainty();
         EquilibriumGradients gradients = new(asked, result._inputs);
@@ -310,6 +314,12 @@ public sealed class GasAtEquilibrium
         {
             _flags.Add(new EquilibriumFlag("usual-fraction", string.Create(CultureInfo.InvariantCulture,
                 $"the usual {Asked.Phase.MoleFraction.Value * 1e6:0.#} ppm of CO2 may be off by 50 ppm near the ground and the shore (from memory): --mole-fraction and --mole-fraction-uncertainty")));
+        }
+
+        if (Asked.PressureSource == "sea-level")
+        {
+            _flags.Add(new EquilibriumFlag("pressure-from-sea-level", string.Create(CultureInfo.InvariantCulture,
+                $"pressure recovered from one reduced to sea level: second best, taken as ± {Asked.Pressure.StandardUncertainty:F1} hPa; a barometer is better")));
         }
 
         if (Asked.PressureSource == "altitude")

@@ -112,7 +112,7 @@ public sealed record StationPressure(double Hectopascal, string Source, double U
             if (status == Status.Ok)
             {
                 bool rare = seaLevel is < PressurePlausibility.UsualLowestSeaLevelHectopascal or > PressurePlausibility.UsualHighestSeaLevelHectopascal;
-                return new StationPressure(hectopascal, "sea-level", u)
+                return new StationPressure(hectopascal, "sea-level", Math.Max(u, stated ?? 0))
                 {
                     Note = rare ? $"--sea-level-pressure {seaLevelPressure} is rare: make sure of the unit, and that it is reduced to sea level" : null,
                 };

@@ -19,6 +19,7 @@ public sealed class EquilibriumRows : IRowFormula
         (new("temperature", QuantityKind.Temperature), static (e, text) => e with { Temperature = text }, static e => e.Temperature, "20"),
         (new("salinity", QuantityKind.Salinity), static (e, text) => e with { Salinity = text }, static e => e.Salinity, "0"),
         (new("conductivity", QuantityKind.Conductivity), static (e, text) => e with { Conductivity = text }, static e => e.Conductivity, "0.1"),
+        (new("chlorinity", QuantityKind.Chlorinity), static (e, text) => e with { Chlorinity = text }, static e => e.Chlorinity, "0"),
         (new("specific-conductance", QuantityKind.Conductivity), static (e, text) => e with { SpecificConductance = text }, static e => e.SpecificConductance, "0.1"),
         (new("pressure", QuantityKind.Pressure), static (e, text) => e with { Pressure = text }, static e => e.Pressure, "1013.25"),
         (new("sea-level-pressure", QuantityKind.Pressure), static (e, text) => e with { SeaLevelPressure = text }, static e => e.SeaLevelPressure, "1013.25"),
@@ -135,10 +136,17 @@ public sealed class EquilibriumRows : IRowFormula
 
         if (_results.Length < _columns.Length)
         {
-            results[_results.Length] = result.AtDepth?.PartialPressureHectopascal ?? double.NaN;
+            results[_results.Length] = Felt(result);
         }
 
         return Outcome(result);
+    }
+
+    /// <summary>The partial pressure that a probe feels at its depth: of the water measured where something was measured.</summary>
+    private static double Felt(GasAtEquilibrium result)
+    {
+        EquilibriumResult? surface = result.Find(EquilibriumQuantity.MeasuredPartialPressure) ?? result.Find(EquilibriumQuantity.PartialPressure);
+        return surface is null || result.AtDepth is null ? double.NaN : result.AtDepth.Of(surface.Value, surface.StandardUncertainty).Value;
     }
 
     private static RowOutcome Outcome(GasAtEquilibrium result)

@@ -27,6 +27,9 @@ public class ReleasedFormatsTests
         ["probecal-table"] = ("table/version-1.json", "table"),
         ["probecal-explanation"] = ("explanation/version-1.json", "explanation"),
         ["probecal-equations"] = ("equations/version-1.json", "equations"),
+        ["probecal-equilibrium-row"] = ("equilibrium-row/version-1.jsonl", "equilibrium-row"),
+        ["probecal-water"] = ("water/version-1.json", "water"),
+        ["probecal-total-gas"] = ("total-gas/version-1.json", "total-gas"),
         ["probecal-truth"] = ("truth/version-1.csv", null),
     };
 

@@ -52,7 +52,6 @@ public class RoomsTests
     {
         ["Entry"] = [],
         ["Equilibrium"] = ["Entry", "Uncertainty"],
-        ["Equilibrium"] = ["Entry"],
         ["WholeFiles"] = ["Entry", "Equilibrium"],
         ["Water"] = ["Entry", "Equilibrium"],
         ["Storage"] = ["Entry"],
