@@ -33,7 +33,7 @@ internal static class WaterCommand
         command.SetAction(parsed =>
         {
             bool json = OutputShape.IsJson(parsed.GetValue(format)!);
-            WaterProperties water = new WaterEntry
+            WaterProperties water = new WaterDescription
             {
                 Temperature = parsed.GetValue(temperature),
                 TemperatureUncertainty = parsed.GetValue(temperatureUncertainty),

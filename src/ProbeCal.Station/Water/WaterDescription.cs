@@ -5,7 +5,7 @@ using ProbeCal.Station.Entry;
 namespace ProbeCal.Station.Water;
 
 /// <summary>The words in which a person describes a water: each as typed, with its unit; null for what was not said.</summary>
-public sealed record WaterEntry
+public sealed record WaterDescription
 {
     /// <summary>Water temperature: <c>20</c>, <c>68F</c>. Required.</summary>
     public string? Temperature { get; init; }
