@@ -36,7 +36,7 @@ public sealed class WholeFileCommandTests : IDisposable
         List<string[]> rows = [];
         for (int i = 0; i < 40; i++)
         {
-            rows.Add([Text(30 + (random.NextDouble() * 50)), Text(random.NextDouble() * 30), Text(600 + (random.NextDouble() * 200)), Text(1 + (random.NextDouble() * 12))]);
+            rows.Add([Text(33 + (random.NextDouble() * 48)), Text(random.NextDouble() * 30), Text(600 + (random.NextDouble() * 200)), Text(1 + (random.NextDouble() * 12))]);
         }
 
         string input = Write("in.csv", "T,S,P,C\n" + string.Concat(rows.Select(static row => string.Join(',', row) + "\n")));

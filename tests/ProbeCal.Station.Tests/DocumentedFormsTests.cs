@@ -65,7 +65,7 @@ public class DocumentedFormsTests
         (string Row, QuantityKind Kind)[] rows =
         [
             ("temperature", QuantityKind.Temperature), ("temperature difference", QuantityKind.TemperatureDifference),
-            ("pressure, absolute", QuantityKind.Pressure), ("altitude", QuantityKind.Altitude), ("mass concentration", QuantityKind.MassConcentration),
+            ("pressure, absolute", QuantityKind.Pressure), ("altitude", QuantityKind.Altitude), ("depth", QuantityKind.Depth), ("mass concentration", QuantityKind.MassConcentration),
             ("amount concentration", QuantityKind.AmountConcentration), ("share", QuantityKind.Percent), ("duration", QuantityKind.Duration),
             ("rate", QuantityKind.Frequency),
         ];

@@ -50,9 +50,9 @@ public sealed class EquilibriumRows : IRowFormula
         ("measured [mg/L]", "measuredMgPerL", EquilibriumQuantity.MeasuredMilligramsPerLitre, false),
         ("measured partial pressure [hPa]", "measuredPartialPressureHPa", EquilibriumQuantity.MeasuredPartialPressure, false),
         ("measured partial pressure u [hPa]", "measuredPartialPressureHPaUncertainty", EquilibriumQuantity.MeasuredPartialPressure, true),
-        ("saturation, local pressure [%]", "percentLocal", EquilibriumQuantity.PercentLocal, false),
-        ("saturation, local pressure u [%]", "percentLocalUncertainty", EquilibriumQuantity.PercentLocal, true),
-        ("saturation, 1 atm [%]", "percentOneAtmosphere", EquilibriumQuantity.PercentOneAtmosphere, false),
+        ("saturation local [%]", "percentLocal", EquilibriumQuantity.PercentLocal, false),
+        ("saturation local u [%]", "percentLocalUncertainty", EquilibriumQuantity.PercentLocal, true),
+        ("saturation at 1 atm [%]", "percentOneAtmosphere", EquilibriumQuantity.PercentOneAtmosphere, false),
         ("excess [mg/L]", "excessMgPerL", EquilibriumQuantity.ExcessMilligramsPerLitre, false),
     ];
 
