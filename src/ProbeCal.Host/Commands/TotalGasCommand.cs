@@ -1,5 +1,5 @@
 using System.CommandLine;
-using ProbeCal.Station.Water;
+using ProbeCal.Station.InWater;
 
 namespace ProbeCal.Host.Commands;
 

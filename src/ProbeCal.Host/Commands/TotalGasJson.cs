@@ -1,6 +1,6 @@
 using System.Text.Json;
 using System.Text.Json.Serialization;
-using ProbeCal.Station.Water;
+using ProbeCal.Station.InWater;
 
 namespace ProbeCal.Host.Commands;
 

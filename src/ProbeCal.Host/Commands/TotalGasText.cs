@@ -4,7 +4,7 @@ using System.Globalization;
 using System.IO;
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Equilibrium;
-using ProbeCal.Station.Water;
+using ProbeCal.Station.InWater;
 
 namespace ProbeCal.Host.Commands;
 

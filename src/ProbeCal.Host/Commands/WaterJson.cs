@@ -2,7 +2,7 @@ using System.Collections.Generic;
 using System.Linq;
 using System.Text.Json;
 using System.Text.Json.Serialization;
-using ProbeCal.Station.Water;
+using ProbeCal.Station.InWater;
 
 namespace ProbeCal.Host.Commands;
 

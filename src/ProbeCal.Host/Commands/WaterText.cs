@@ -3,7 +3,7 @@ using System.Collections.Generic;
 using System.Globalization;
 using System.IO;
 using ProbeCal.Station.Entry;
-using ProbeCal.Station.Water;
+using ProbeCal.Station.InWater;
 
 namespace ProbeCal.Host.Commands;
 

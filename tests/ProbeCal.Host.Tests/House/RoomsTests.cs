@@ -53,7 +53,7 @@ public class RoomsTests
         ["Entry"] = [],
         ["Equilibrium"] = ["Entry", "Uncertainty"],
         ["WholeFiles"] = ["Entry", "Equilibrium"],
-        ["Water"] = ["Entry", "Equilibrium"],
+        ["InWater"] = ["Entry", "Equilibrium"],
         ["Storage"] = ["Entry"],
         ["TableWriting"] = ["Entry"],
         ["Uncertainty"] = [],

@@ -2,7 +2,7 @@ using System.Globalization;
 using System.Linq;
 using ProbeCal.Station.Entry;
 
-namespace ProbeCal.Station.Water;
+namespace ProbeCal.Station.InWater;
 
 /// <summary>The words in which a person describes a water: each as typed, with its unit; null for what was not said.</summary>
 public sealed record WaterDescription

@@ -2,7 +2,7 @@ using System;
 using System.Globalization;
 using ProbeCal.Station.Entry;
 
-namespace ProbeCal.Station.Water;
+namespace ProbeCal.Station.InWater;
 
 /// <summary>How salty a water is, and what that was taken from.</summary>
 public sealed record WaterSalt

@@ -3,7 +3,7 @@ using System.Globalization;
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Equilibrium;
 
-namespace ProbeCal.Station.Water;
+namespace ProbeCal.Station.InWater;
 
 /// <summary>A total-gas reading as it was understood.</summary>
 public sealed record TotalGasReading

@@ -1,6 +1,6 @@
 using System.Collections.Generic;
 
-namespace ProbeCal.Station.Water;
+namespace ProbeCal.Station.InWater;
 
 /// <summary>The published forms of the vapour pressure with their names, in the order in which they are told.</summary>
 internal static class VapourForms

@@ -1,7 +1,7 @@
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Equilibrium;
 
-namespace ProbeCal.Station.Water;
+namespace ProbeCal.Station.InWater;
 
 /// <summary>The words in which a person describes a total-gas reading: each as typed, with its unit; null for what was not said.</summary>
 public sealed record TotalGasEntry

@@ -2,7 +2,7 @@ using System;
 using System.Collections.Generic;
 using System.Linq;
 
-namespace ProbeCal.Station.Water;
+namespace ProbeCal.Station.InWater;
 
 /// <summary>A vapour pressure by one published form.</summary>
 /// <param name="Equation">Its name by author and year.</param>
@@ -75,8 +75,8 @@ public sealed record WaterProperties
             // Stated accuracy 0.004 K (from memory).
             FreezingPoint = Propagated("freezing point", s => (ProbeCal.FreezingPoint.Celsius(s, RangeRule.Refuse, out double value), value), salinity, salt.Uncertainty, 0.004, notes),
             VapourPressure = VapourOf(form, celsius, uCelsius, salt, notes),
-            VapourEquation = Water.VapourForms.All.First(each => each.Equation == form).Name,
-            VapourForms = [.. Water.VapourForms.All.Select(each => ByForm(each.Equation, each.Name, each.TakesSalt, celsius, salinity))],
+            VapourEquation = InWater.VapourForms.All.First(each => each.Equation == form).Name,
+            VapourForms = [.. InWater.VapourForms.All.Select(each => ByForm(each.Equation, each.Name, each.TakesSalt, celsius, salinity))],
             Notes = notes,
         };
         if (properties.FreezingPoint.Value is double freezing && celsius < freezing)
