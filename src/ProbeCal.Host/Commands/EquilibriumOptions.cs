@@ -49,10 +49,8 @@ internal sealed class EquilibriumOptions
     {
         foreach (Option<string> option in new[]
         {
-            _gas, _equation, _temperature, _salinity, _conductivity, _conductivityTemperature, _specificConductance, _chlorinity, _ions, _pressure, _altitude,
-            _moleFraction, _mixture, _partialPressure, _humidity, _concentration,
-            _gas, _equation, _temperature, _salinity, _conductivity, _conductivityTemperature, _specificConductance, _chlorinity, _pressure, _altitude, _seaLevelPressure, _airTemperature,
-            _moleFraction, _mixture, _partialPressure, _humidity, _concentration, _depth,
+            _gas, _equation, _temperature, _salinity, _conductivity, _conductivityTemperature, _specificConductance, _chlorinity, _ions,
+            _pressure, _altitude, _seaLevelPressure, _airTemperature, _moleFraction, _mixture, _partialPressure, _humidity, _concentration, _depth,
             _temperatureUncertainty, _temperatureWithin, _salinityUncertainty, _salinityWithin, _conductivityUncertainty, _conductivityTemperatureUncertainty, _chlorinityUncertainty,
             _pressureUncertainty, _pressureWithin, _moleFractionUncertainty, _moleFractionWithin, _partialPressureUncertainty,
             _humidityUncertainty, _humidityWithin, _concentrationUncertainty,

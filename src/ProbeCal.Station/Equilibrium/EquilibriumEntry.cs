@@ -149,8 +149,7 @@ public sealed record EquilibriumEntry
             PressureSource = pressure.Source,
             Phase = GasPhase.Read(gas, this),
             Measured = MeasuredConcentration.Read(this, water),
-            Measured = MeasuredConcentration.Read(this),
-            DepthMetres = Depth is null ? null : ProbeDepth.Read(Depth),
+            DepthMetres = Depth is null ? null : ProbeDepth.Read(Depth, water),
             Notes = notes,
         };
     }

@@ -27,9 +27,14 @@ public sealed record ProbeDepth(double Metres, double HydrostaticHectopascal, do
     }
 
     /// <summary>Reads a depth, m.</summary>
-    /// <exception cref="InputException">It is none, negative, or deeper than is computed.</exception>
-    internal static double Read(string text)
+    /// <exception cref="InputException">It is none, negative, or deeper than is computed, or the density of the water is not known.</exception>
+    internal static double Read(string text, WaterSalinity water)
     {
+        if (water.Brine is not null)
+        {
+            throw Wrong.Input("--depth", text, "the density of a brine (--ions) is not known here, and with it not the pressure of the water");
+        }
+
         double metres = Quantity.Parse(QuantityKind.Depth, "--depth", text);
         return 0 <= metres && metres <= HydrostaticPressure.GreatestDepthMetres
             ? metres

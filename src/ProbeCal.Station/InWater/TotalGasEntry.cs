@@ -78,7 +78,10 @@ public sealed record TotalGasEntry
         StationPressure air = StationPressure.Parse(Pressure, Altitude, PressureUncertainty, SeaLevelPressure, AirTemperature);
         bool isTotal = TotalPressure is not null;
         double given = isTotal ? Quantity.PressureHectopascal("--total-pressure", TotalPressure!) : Quantity.PressureHectopascal("--delta-p", DeltaPressure!);
-        MeasuredConcentration? oxygen = MeasuredConcentration.Read(new EquilibriumEntry { Concentration = Concentration, ConcentrationUncertainty = ConcentrationUncertainty });
+        double celsius = Quantity.TemperatureCelsius("--temperature", Temperature);
+        EquilibriumEntry words = new() { Salinity = Salinity, SalinityUncertainty = SalinityUncertainty, Concentration = Concentration, ConcentrationUncertainty = ConcentrationUncertainty };
+        WaterSalinity water = WaterSalinity.Read(words, celsius);
+        MeasuredConcentration? oxygen = MeasuredConcentration.Read(words, water);
         double? carbonDioxide = CarbonDioxide is null ? null : NotNegative(QuantityKind.Pressure, "--carbon-dioxide", CarbonDioxide, "a partial pressure is zero or above");
         if (carbonDioxide is not null && oxygen is null)
         {
@@ -91,9 +94,8 @@ public sealed record TotalGasEntry
                 Air = air,
                 IsTotalMeasured = isTotal,
                 Delta = new UncertainQuantity(isTotal ? given - air.Hectopascal : given, Uncertainty(QuantityKind.Pressure, "--total-pressure-uncertainty", TotalPressureUncertainty)),
-                Temperature = new UncertainQuantity(
-                    Quantity.TemperatureCelsius("--temperature", Temperature), Uncertainty(QuantityKind.TemperatureDifference, "--temperature-uncertainty", TemperatureUncertainty)),
-                Salinity = new UncertainQuantity(Quantity.Salinity("--salinity", Salinity), Uncertainty(QuantityKind.Salinity, "--salinity-uncertainty", SalinityUncertainty)),
+                Temperature = new UncertainQuantity(celsius, Uncertainty(QuantityKind.TemperatureDifference, "--temperature-uncertainty", TemperatureUncertainty)),
+                Salinity = water.Given,
                 Oxygen = oxygen,
                 CarbonDioxideHectopascal = carbonDioxide,
                 DepthMetres = Depth is null ? null : NotNegative(QuantityKind.Depth, "--depth", Depth, "a depth is zero or above"),
