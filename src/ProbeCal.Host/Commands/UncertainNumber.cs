@@ -10,6 +10,9 @@ internal sealed class UncertainNumber
     /// <summary>Digits of a value that is taken as exact.</summary>
     private const int ExactDigits = 5;
 
+    /// <summary>What is left below this in the smallest unit is written with an exponent.</summary>
+    private const double Negligible = 1e-6;
+
     /// <summary>Most digits of any value: nobody reads more, and the JSON has them all.</summary>
     private const int MostDigits = 6;
 
@@ -35,7 +38,7 @@ internal sealed class UncertainNumber
         double sure = standardUncertainty * Factor;
         Decimals = sure == 0 ? DecimalsFor(scaled, static _ => ExactDigits) : DecimalsFor(sure, static leading => leading < '3' ? 2 : 1);
         Decimals = Math.Min(Decimals, scaled == 0 ? Decimals : DecimalsFor(scaled, static _ => MostDigits));
-        Value = Number.Fixed(scaled, Decimals);
+        Value = 0 < Math.Abs(scaled) && Math.Abs(scaled) < Negligible ? Number.Significant(scaled, ExactDigits) : Number.Fixed(scaled, Decimals);
         // Where the value is cut before its uncertainty begins, that is rounded up to the last digit.
         Uncertainty = sure == 0 ? null : Number.Fixed(Math.Max(sure, Math.Pow(10, -Decimals)), Decimals);
     }

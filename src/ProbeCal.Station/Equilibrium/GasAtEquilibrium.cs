@@ -236,7 +236,7 @@ public sealed class GasAtEquilibrium
             contributions.Add(new UncertaintyContribution("equation", "", 1, EquationRelative, Distribution.Normal, 0));
         }
 
-        UncertaintyBudget budget = UncertaintyBudget.Of(value, EquilibriumUnits.Of(quantity), contributions);
+        UncertaintyBudget budget = BudgetOf(value, EquilibriumUnits.Of(quantity), contributions);
         List<EquilibriumPart> parts = [];
         foreach (UncertaintyContribution c in budget.Contributions)
         {
@@ -246,6 +246,18 @@ public sealed class GasAtEquilibrium
         EquilibriumResult result = new(
             quantity, value, budget.StandardUncertainty, budget.CoverageFactor, budget.Low, budget.High, parts, budget.Note);
         _results.Add(quantity, (result, budget, [.. order]));
+    }
+
+    private static UncertaintyBudget BudgetOf(double value, string unit, List<UncertaintyContribution> contributions)
+    {
+        try
+        {
+            return UncertaintyBudget.Of(value, unit, contributions);
+        }
+        catch (ArgumentException none)
+        {
+            throw new InputException("the stated uncertainties are too large to be worked with; look at their units (" + none.Message + ")", none);
+        }
     }
 
     /// <summary>Every input of the case with its name and how well it is known, in the order of the budgets.</summary>
