@@ -282,6 +282,15 @@ public class EquilibriumTests
     }
 
     [Fact]
+    public async Task A_brine_is_not_explained_as_if_it_were_fresh()
+    {
+        Run run = await Run.OfAsync("explain", "--temperature", "20", "--pressure", "1atm", "--ions", "Na+=1mol/L, Cl-=1mol/L");
+        Assert.Equal((2, ""), (run.ExitCode, run.Output));
+        // log10 of what is left at 20 °C: 0.1143 + 0.0318 + 2·0.000334·5 (Weisenberger and Schumpe 1996, ported) = 0.14944.
+        Assert.Contains("0.7088", run.ErrorLine, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public async Task Text_fits_a_terminal_puts_the_number_first_and_says_what_was_assumed()
     {
         Run exact = await Run.OfAsync("equilibrium", "--temperature", "8.4", "--salinity", "0", "--pressure", "706mmHg");

@@ -17,6 +17,11 @@ public sealed record ExplainedEquilibrium(EquilibriumCase Asked, string What, Ex
     {
         // Refuses what it would not answer, with the range and the source that sets it, and turns a measured concentration into mg/L.
         GasAtEquilibrium answer = GasAtEquilibrium.Compute(asked);
+        if (answer.SaltingOutFactor is double factor)
+        {
+            throw new InputException($"--ions: the chain is explained for fresh and sea water; explain it with --salinity 0, and for this brine take the concentration times {Number.Significant(factor, 6)} (what the ions leave, weisenberger-schumpe-1996)");
+        }
+
         double t = asked.Temperature.Value;
         double s = asked.Water.Salinity;
         double p = asked.Pressure.Value;
