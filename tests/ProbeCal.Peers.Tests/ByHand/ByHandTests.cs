@@ -2,6 +2,9 @@ using System;
 using System.Collections.Generic;
 using System.Globalization;
 using System.Linq;
+using System.Text.Json;
+using System.Threading.Tasks;
+using ProbeCal.Peers.Tests.Parts;
 using Xunit;
 using Xunit.Abstractions;
 
@@ -61,6 +64,88 @@ public class ByHandTests(ITestOutputHelper output)
         {
             output.WriteLine(string.Create(CultureInfo.InvariantCulture, $"{quantity}: {difference:E1} at most, relative"));
         }
+    }
+
+    /// <summary>
+    /// The same with the real program: what it prints as JSON for each gas by its default, for each equation and above 1.1 atm, field by field, its standard uncertainties too.
+    /// </summary>
+    [SkippableFact]
+    public async Task WhatTheProgramPrints_ComesOutByHand()
+    {
+        ByHandScript.Require();
+        HashSet<SolubilityEquation> seen = [];
+        List<(SolubilityEntry Pair, ByHandCase Case)> cases = [];
+        Random random = new(Seed);
+        foreach (SolubilityEntry pair in Catalogue.Solubilities.OrderByDescending(static pair => pair.IsDefault))
+        {
+            if (pair.IsDefault | seen.Add(pair.Equation)) { cases.Add((pair, Rounded(Draw(pair, random)))); }
+        }
+
+        foreach (SolubilityEntry pair in Catalogue.Solubilities.Where(static pair => pair.IsDefault && 2000.0 < pair.HighestHectopascal))
+        {
+            cases.Add((pair, Rounded(Draw(pair, random)) with { Hectopascal = 3300.0 }));
+        }
+
+        List<JsonElement> printed = [];
+        foreach ((SolubilityEntry _, ByHandCase c) in cases) { printed.Add(await PrintedAsync(c)); }
+
+        // What the program takes the equation to be good for goes into the script: it is a statement, not a computation.
+        List<ByHandAnswer> answers = ByHandScript.Ask(
+            [.. cases.Zip(printed, static (c, json) => c.Case with { UEquation = json.GetProperty("standardUncertainty").GetProperty("equationRelative").GetDouble() })]);
+        Dictionary<string, double> worst = [];
+        for (int i = 0; i < cases.Count; i++)
+        {
+            (SolubilityEntry pair, ByHandCase c) = cases[i];
+            JsonElement json = printed[i];
+            ByHandAnswer hand = answers[i];
+            JsonElement u = json.GetProperty("standardUncertainty");
+            double mass = IsMass(pair) ? 2.0e-6 : 0.0;
+            Compare(worst, "vapourPressureHPa", json.GetProperty("vapourPressureHPa").GetDouble(), hand.VapourHectopascal, 1.0e-11, c);
+            Compare(worst, "partialPressureHPa", json.GetProperty("partialPressureHPa").GetDouble(), hand.PartialHectopascal, 1.0e-12, c);
+            Compare(worst, "mgPerL", json.GetProperty("mgPerL").GetDouble(), hand.MilligramsPerLitre, 2.0e-6, c);
+            Compare(worst, "umolPerL", json.GetProperty("umolPerL").GetDouble(), hand.MicromolesPerLitre, 1.0e-12 + mass, c);
+            Compare(worst, "umolPerKg", json.GetProperty("umolPerKg").GetDouble(), hand.MicromolesPerKilogram, 1.0e-12 + mass, c);
+            Compare(worst, "mLPerL", json.GetProperty("mLPerL").GetDouble(), hand.MillilitresPerLitre, 2.0e-6, c);
+            Compare(worst, "u of mgPerL", u.GetProperty("mgPerL").GetDouble(), hand.MilligramsUncertainty, 1.0e-4, c);
+            // The vapour formula's own 0.14 %, which the documents state, is added here.
+            double formula = 0.0014 * c.MoleFraction * c.HumidityPercent / 100.0 * hand.VapourHectopascal;
+            Compare(worst, "u of partialPressureHPa", u.GetProperty("partialPressureHPa").GetDouble(), double.Hypot(hand.PartialUncertainty, formula), 1.0e-6, c);
+        }
+
+        output.WriteLine($"{cases.Count} runs of the program, seed {Seed}");
+        foreach ((string quantity, double difference) in worst)
+        {
+            output.WriteLine(string.Create(CultureInfo.InvariantCulture, $"{quantity}: {difference:E1} at most, relative"));
+        }
+    }
+
+    private static async Task<JsonElement> PrintedAsync(ByHandCase c)
+    {
+        static string Text(double value, string unit = "") => value.ToString("F9", CultureInfo.InvariantCulture).TrimEnd('0').TrimEnd('.') + unit;
+
+        string[] arguments =
+        [
+            "equilibrium", "--gas", c.Gas, "--equation", c.Equation, "--temperature", Text(c.Celsius), "--salinity", Text(c.Salinity), "--pressure", Text(c.Hectopascal, "hPa"),
+            "--mole-fraction", Text(c.MoleFraction), "--humidity", Text(c.HumidityPercent, "%"), "--temperature-uncertainty", Text(c.UCelsius, "K"),
+            "--salinity-uncertainty", Text(c.USalinity), "--pressure-uncertainty", Text(c.UHectopascal, "hPa"), "--format", "json",
+        ];
+        using OutsideProcess program = Programs.ProbeCal(arguments);
+        Assert.True(await program.ExitCodeAsync(TimeSpan.FromMinutes(2)) == 0, string.Join(' ', arguments) + "\n" + program.Tail());
+        using JsonDocument document = JsonDocument.Parse(string.Join('\n', program.Output()));
+        return document.RootElement.Clone();
+    }
+
+    /// <summary>Numbers as a person types them, moved inwards so that none leaves its range.</summary>
+    private static ByHandCase Rounded(ByHandCase c)
+    {
+        return c with
+        {
+            Celsius = Math.Sign(c.Celsius) * Math.Floor(Math.Abs(c.Celsius) * 100.0) / 100.0,
+            Salinity = Math.Floor(c.Salinity * 100.0) / 100.0,
+            Hectopascal = Math.Min(1114.0, Math.Ceiling(c.Hectopascal * 10.0) / 10.0),
+            MoleFraction = Math.Ceiling(c.MoleFraction * 1.0e6) / 1.0e6,
+            HumidityPercent = Math.Floor(c.HumidityPercent * 10.0) / 10.0,
+        };
     }
 
     /// <summary>Where the equation counts moles, moles agree to rounding; where it counts mass or gas volume the molar mass is in between.</summary>
