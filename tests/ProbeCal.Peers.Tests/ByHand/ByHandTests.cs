@@ -1,6 +1,7 @@
 using System;
 using System.Collections.Generic;
 using System.Globalization;
+using System.IO;
 using System.Linq;
 using System.Text.Json;
 using System.Threading.Tasks;
@@ -116,6 +117,22 @@ public class ByHandTests(ITestOutputHelper output)
         foreach ((string quantity, double difference) in worst)
         {
             output.WriteLine(string.Create(CultureInfo.InvariantCulture, $"{quantity}: {difference:E1} at most, relative"));
+        }
+    }
+
+    /// <summary>The catalogue tells people the unit of the equation; the coefficient file of the script names the one that it computes with.</summary>
+    [Fact]
+    public void TheCatalogue_NamesTheUnitOfTheCoefficients()
+    {
+        Dictionary<string, string> unit = File.ReadLines(Path.Combine(AppContext.BaseDirectory, "ByHand", "coefficients.csv"))
+            .Where(static line => line[0] != '#').Skip(1).Select(static line => line.Split(','))
+            .ToDictionary(static f => f[0] + " " + f[1], static f => f[4]);
+        Assert.Equal(Catalogue.Solubilities.Count, unit.Count);
+        foreach (SolubilityEntry pair in Catalogue.Solubilities)
+        {
+            string plain = pair.Unit.Replace('µ', 'u').Replace('·', ' ').Replace("m³", "m3", StringComparison.Ordinal);
+            string expected = unit[Catalogue.Gas(pair.Gas).Symbol + " " + pair.Source.Name] switch { "bunsen" => "L/(L atm)", "Pa" => "1/Pa", string other => other };
+            Assert.True(plain == expected, $"{pair.Gas}, {pair.Source.Name}: the catalogue says {pair.Unit}, the coefficients are for {expected}");
         }
     }
 
