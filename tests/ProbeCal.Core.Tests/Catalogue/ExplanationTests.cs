@@ -81,7 +81,7 @@ public class ExplanationTests(ITestOutputHelper output)
         }
 
         output.WriteLine(string.Create(CultureInfo.InvariantCulture, $"ten digits at every step: {worst:E1} of the result at most"));
-        Assert.True(worst < 0.5e-6, worst.ToString("E2", CultureInfo.InvariantCulture));
+        Assert.True(worst < 0.5e-7, worst.ToString("E2", CultureInfo.InvariantCulture));
     }
 
     [Fact]

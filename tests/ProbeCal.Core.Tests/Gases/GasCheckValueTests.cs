@@ -12,7 +12,7 @@ namespace ProbeCal.Core.Tests.Gases;
 /// </summary>
 public class GasCheckValueTests(ITestOutputHelper output)
 {
-    private const int Rows = 234;
+    internal const int Rows = 234;
     private const double OneAtmosphere = 1013.25;
     private const double Vanishing = 1.0e-3;
     private const double MolesOfWaterPerKilogram = 1.0 / 0.018015268;
@@ -64,7 +64,7 @@ public class GasCheckValueTests(ITestOutputHelper output)
         Assert.DoesNotContain(CheckRow.Read("gas-equations.csv", Rows), static r => r["confidence"] is not ("paper" or "ported" or "gsw" or "memory"));
     }
 
-    private static double Value(Gas gas, SolubilityEquation equation, CheckRow row)
+    internal static double Value(Gas gas, SolubilityEquation equation, CheckRow row)
     {
         double celsius = row["scale"] == "ipts68" ? TemperatureScale.Its90FromIpts68(row.Number("celsius")) : row.Number("celsius");
         double salinity = row.Number("salinity");

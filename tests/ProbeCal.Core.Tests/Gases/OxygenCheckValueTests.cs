@@ -61,7 +61,7 @@ public class OxygenCheckValueTests(ITestOutputHelper output)
         Assert.True(0.1 < misprinted - 274.610);
     }
 
-    private static double Value(string function, CheckRow row)
+    internal static double Value(string function, CheckRow row)
     {
         double celsius = row["scale"] == "ipts68" ? TemperatureScale.Its90FromIpts68(row.Number("celsius")) : row.Number("celsius");
         double atmospheres = row.Number("atmospheres");

@@ -139,7 +139,7 @@ public class WaterCheckValueTests(ITestOutputHelper output)
         Assert.InRange(eos, 0.0, 0.0025);
     }
 
-    private static double Value(string function, CheckRow row)
+    internal static double Value(string function, CheckRow row)
     {
         double celsius = row["scale"] == "ipts68" ? TemperatureScale.Its90FromIpts68(row.Number("celsius")) : row.Number("celsius");
         double value;
