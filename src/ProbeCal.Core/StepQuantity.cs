@@ -116,17 +116,6 @@ public enum StepQuantity
     /// <summary>Saturation against water in equilibrium with air under the local pressure, %.</summary>
     PercentLocal = 52,
 
-    /// <summary>Conductivity over that of sea water of S 35 at 15 °C and the surface.</summary>
-    ConductivityRatio = 60,
-    /// <summary>The conductivity ratio freed of the effects of pressure and temperature on sea water of S 35.</summary>
-    ConductivityRatioAtSurface = 61,
-    /// <summary>Salinity by the scale of 1978 alone, before the low-salinity extension.</summary>
-    PracticalScaleSalinity = 62,
-    /// <summary>Partial pressure left for nitrogen and argon, hPa.</summary>
-    NitrogenArgonHectopascal = 63,
-    /// <summary>Partial pressure of nitrogen and argon in air under the local pressure, hPa.</summary>
-    NitrogenArgonInAirHectopascal = 64,
-
     /// <summary>1 − T over the critical temperature of water.</summary>
     CriticalDistance = 70,
     /// <summary>Critical pressure of water, Pa.</summary>

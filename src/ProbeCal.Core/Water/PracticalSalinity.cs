@@ -88,8 +88,7 @@ public static class PracticalSalinity
 
     /// <summary>Value and both derivatives without a range; NaN where the formula has no value.</summary>
     internal static double Value(
-        double millisiemensPerCentimetre, double celsius, double seaPressureDecibar, out double perConductivity, out double perKelvin,
-        CalculationSteps? steps = null)
+        double millisiemensPerCentimetre, double celsius, double seaPressureDecibar, out double perConductivity, out double perKelvin)
     {
         perConductivity = double.NaN;
         perKelvin = double.NaN;
@@ -108,14 +107,6 @@ public static class PracticalSalinity
         double f = (t - 15.0) / bend;
         double x = Numerics.Sqrt(relative);
         double salinity = Scale(x, f, out double perX, out double perF);
-        if (steps != null)
-        {
-            steps.Add(StepQuantity.CelsiusIpts68, t);
-            steps.Add(StepQuantity.ConductivityRatio, ratio);
-            steps.Add(StepQuantity.ConductivityRatioAtSurface, relative);
-            steps.Add(StepQuantity.PracticalScaleSalinity, salinity);
-        }
-
         if (salinity < Join)
         {
             salinity = Extension(salinity, x, f, ref perX, ref perF);

@@ -69,7 +69,7 @@ public static class TotalDissolvedGas
     /// <param name="barometricHectopascal">Absolute station pressure BP, 506.625–1114.575 hPa.</param>
     /// <param name="celsius">Temperature, 0–40 °C.</param>
     /// <param name="salinity">Practical salinity, 0–40.</param>
-    /// <param name="oxygenHectopascal">Partial pressure of oxygen, hPa.</param>
+    /// <param name="oxygenHectopascal">Partial pressure of oxygen, hPa, −1114.575 to 1114.575; a little below zero in anoxic water passes through.</param>
     /// <param name="carbonDioxideHectopascal">Partial pressure of carbon dioxide, hPa; 0 to leave it out, as is usual.</param>
     /// <param name="rule">Refuse, near edge or extrapolate. More oxygen than there is pressure is named as a partial pressure above its range.</param>
     /// <param name="nitrogenArgonHectopascal">Partial pressure of nitrogen and argon, hPa; NaN unless Ok or let pass by the rule.</param>
@@ -81,7 +81,7 @@ public static class TotalDissolvedGas
         nitrogenArgonHectopascal = double.NaN;
         percent = double.NaN;
         Status status = Compute(
-            deltaHectopascal, barometricHectopascal, celsius, salinity, oxygenHectopascal, carbonDioxideHectopascal, null,
+            deltaHectopascal, barometricHectopascal, celsius, salinity, oxygenHectopascal, carbonDioxideHectopascal,
             out double rest, out double inAir, out _, out _);
         if (InputCheck.Refuses(status, rule) || inAir <= 0.0) { return status; }
         nitrogenArgonHectopascal = InputCheck.FiniteOrNaN(rest);
@@ -96,7 +96,7 @@ public static class TotalDissolvedGas
     /// <param name="barometricHectopascal">Absolute station pressure BP, 506.625–1114.575 hPa.</param>
     /// <param name="celsius">Temperature, 0–40 °C.</param>
     /// <param name="salinity">Practical salinity, 0–40.</param>
-    /// <param name="oxygenHectopascal">Partial pressure of oxygen, hPa.</param>
+    /// <param name="oxygenHectopascal">Partial pressure of oxygen, hPa, −1114.575 to 1114.575; a little below zero in anoxic water passes through.</param>
     /// <param name="carbonDioxideHectopascal">Partial pressure of carbon dioxide, hPa; 0 to leave it out.</param>
     /// <param name="rule">Refuse, near edge or extrapolate.</param>
     /// <param name="perKelvin">∂p/∂T, hPa per K.</param>
@@ -118,7 +118,7 @@ public static class TotalDissolvedGas
         percentPerKelvin = double.NaN;
         percentPerSalinity = double.NaN;
         Status status = Compute(
-            deltaHectopascal, barometricHectopascal, celsius, salinity, oxygenHectopascal, carbonDioxideHectopascal, null,
+            deltaHectopascal, barometricHectopascal, celsius, salinity, oxygenHectopascal, carbonDioxideHectopascal,
             out double rest, out double inAir, out double vapourPerKelvin, out double vapourPerSalinity);
         if (InputCheck.Refuses(status, rule) || inAir <= 0.0) { return status; }
         double share = 100.0 / inAir;
@@ -144,9 +144,17 @@ public static class TotalDissolvedGas
         return InputCheck.Pressure(delta, -GreatestDeltaHectopascal, GreatestDeltaHectopascal);
     }
 
+    /// <summary>A probe in anoxic water may read a little below zero; what lies as far below as pure oxygen lies above is no reading.</summary>
+    private static Status CheckPartial(double hectopascal)
+    {
+        return hectopascal < -OxygenEquilibrium.HighestPartialPressureHectopascal && !InputCheck.NotFinite(hectopascal)
+            ? Status.PartialPressureBelowRange
+            : InputCheck.PartialPressure(hectopascal, OxygenEquilibrium.HighestPartialPressureHectopascal);
+    }
+
     /// <summary>What is left for nitrogen and argon, what air holds of them, and the slopes of the vapour; values even when the status names a range.</summary>
     internal static Status Compute(
-        double delta, double barometric, double celsius, double salinity, double oxygen, double carbonDioxide, CalculationSteps? steps,
+        double delta, double barometric, double celsius, double salinity, double oxygen, double carbonDioxide,
         out double rest, out double inAir, out double vapourPerKelvin, out double vapourPerSalinity)
     {
         double vapour = PressureUnits.HectopascalPerAtmosphere
@@ -155,20 +163,13 @@ public static class TotalDissolvedGas
         vapourPerSalinity = vapour * logPerSalinity;
         rest = barometric + delta - oxygen - carbonDioxide - vapour;
         inAir = NitrogenArgonMoleFraction * (barometric - vapour);
-        if (steps != null)
-        {
-            steps.Add(StepQuantity.VapourHectopascal, vapour);
-            steps.Add(StepQuantity.NitrogenArgonHectopascal, rest);
-            steps.Add(StepQuantity.NitrogenArgonInAirHectopascal, inAir);
-        }
-
         Status status = InputCheck.Graver(
             InputCheck.Pressure(barometric, BensonKrause1984.LowestHectopascal, BensonKrause1984.HighestHectopascal), CheckDelta(delta));
         status = InputCheck.Graver(
             status, InputCheck.Temperature(celsius, VapourWeissPrice1980.LowestCelsius, VapourWeissPrice1980.HighestCelsius));
         status = InputCheck.Graver(status, InputCheck.Salinity(salinity, VapourWeissPrice1980.HighestSalinity));
-        status = InputCheck.Graver(status, InputCheck.PartialPressure(oxygen, OxygenEquilibrium.HighestPartialPressureHectopascal));
-        status = InputCheck.Graver(status, InputCheck.PartialPressure(carbonDioxide, OxygenEquilibrium.HighestPartialPressureHectopascal));
+        status = InputCheck.Graver(status, CheckPartial(oxygen));
+        status = InputCheck.Graver(status, CheckPartial(carbonDioxide));
         return rest < 0.0 ? InputCheck.Graver(status, Status.PartialPressureAboveRange) : status;
     }
 }

@@ -36,7 +36,8 @@ internal static class CoreFunctions
     private static readonly Input Decibar = new(Depth, 120.0, 0.0, 10000.0);
     private static readonly Input OutdoorCelsius = new(Temperature, 11.0, -80.0, 60.0);
     private static readonly Input Delta = new(Pressure, 70.0, None, 10132.5);
-    private static readonly Input Little = new(PartialPressure, 1.2, None, None);
+    private static readonly Input Little = new(PartialPressure, 1.2, -1114.575, None);
+    private static readonly Input Gauge = new(PartialPressure, 190.0, -1114.575, None);
     private static readonly Input Brine = new(Temperature, 35.0, 0.0, 90.0);
     private static readonly Input Molar = new(Concentration, 0.8, 0.0, 5.0);
     private static readonly Input Above = new(Depth, 2100.0, 0.0, 101325.0);
@@ -83,8 +84,8 @@ internal static class CoreFunctions
         yield return Strict("TotalDissolvedGas.Percent", [Delta, AnyPressure], (double[] x, RangeRule r, out double v) => TotalDissolvedGas.Percent(x[0], x[1], out v));
         yield return Strict("TotalDissolvedGas.CompensationDepth", [Delta, Rho], (double[] x, RangeRule r, out double v) => TotalDissolvedGas.CompensationDepth(x[0], x[1], out v));
         yield return Strict("TotalDissolvedGas.UncompensatedDelta", [Delta, new Input(Depth, 12.0, 0.0, 1000.0), Rho], (double[] x, RangeRule r, out double v) => TotalDissolvedGas.UncompensatedDelta(x[0], x[1], x[2], out v));
-        yield return new("TotalDissolvedGas.NitrogenArgon", true, [Delta, Total, Celsius, Salt, AnyPartial, Little], (x, r) => (TotalDissolvedGas.NitrogenArgon(x[0], x[1], x[2], x[3], x[4], x[5], r, out double a, out double b), [a, b]));
-        yield return new("TotalDissolvedGas.NitrogenArgonSensitivities", true, [Delta, Total, Celsius, Salt, AnyPartial, Little], (x, r) => (TotalDissolvedGas.NitrogenArgonSensitivities(x[0], x[1], x[2], x[3], x[4], x[5], r, out double a, out double b, out double c, out double d, out double e, out double f), [a, b, c, d, e, f]));
+        yield return new("TotalDissolvedGas.NitrogenArgon", true, [Delta, Total, Celsius, Salt, Gauge, Little], (x, r) => (TotalDissolvedGas.NitrogenArgon(x[0], x[1], x[2], x[3], x[4], x[5], r, out double a, out double b), [a, b]));
+        yield return new("TotalDissolvedGas.NitrogenArgonSensitivities", true, [Delta, Total, Celsius, Salt, Gauge, Little], (x, r) => (TotalDissolvedGas.NitrogenArgonSensitivities(x[0], x[1], x[2], x[3], x[4], x[5], r, out double a, out double b, out double c, out double d, out double e, out double f), [a, b, c, d, e, f]));
         yield return Strict("TotalDissolvedGasUncertainty.Percent", [Delta, AnyPressure, Spread, Spread], (double[] x, RangeRule r, out double v) => TotalDissolvedGasUncertainty.Percent(x[0], x[1], true, x[2], x[3], out v));
         yield return new("TotalDissolvedGasUncertainty.Components", true, [Delta, Total, Celsius, Salt, Milligrams, Little, Spread, Spread, Spread, Spread, Spread], (x, r) => (TotalDissolvedGasUncertainty.Components(SolubilityEquation.BensonKrause1984, x[0], x[1], x[2], x[3], x[4], x[5], false, x[6], x[7], x[8], x[9], x[10], r, out double a, out double b, out double c, out double d), [a, b, c, d]));
         yield return One("SaltingOutWeisenbergerSchumpe1996.Term", [Brine, Molar], (double[] x, RangeRule r, out double v) => SaltingOutWeisenbergerSchumpe1996.Term(Ion.Calcium, Gas.Methane, x[0], x[1], r, out v));
