@@ -3,8 +3,8 @@ using System.Linq;
 using System.Threading;
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Equilibrium;
-using GasPhase = ProbeCal.Station.Equilibrium.GasPhase;
 using Xunit;
+using GasPhase = ProbeCal.Station.Equilibrium.GasPhase;
 
 namespace ProbeCal.Station.Tests.Equilibrium;
 
