@@ -6,7 +6,7 @@ namespace ProbeCal;
 /// </summary>
 /// <remarks>
 /// Colt, J. (1984) Computation of dissolved gas concentrations in water as functions of temperature, salinity, and pressure, Am. Fish. Soc. Spec. Publ. 14; Standard Methods 2810 B (both
-/// from memory). The oxygen is this library's (<see cref="OxygenEquilibrium"/>), the vapour that of Weiss and Price 1980 with salinity; by Colt's own constants pO2 comes out 0.3 % apart at most. Percentages stand
+/// from memory). The oxygen is this library's (<see cref="OxygenEquilibrium"/>), the vapour that of Weiss and Price 1980 with salinity; by Colt's own constants pO2 comes out 0.5 % apart at most. Percentages stand
 /// on the fractions 0.20946 and 0.79018 of dry air (printed as 0.2095 and 0.7902). What is not oxygen, vapour or given carbon dioxide counts as nitrogen and argon, so that water in equilibrium with air
 /// reads 100.05 % for them: the 0.0425 % of carbon dioxide and 0.0025 % of neon and helium are in it. Accuracy as good as ΔP: 1 hPa is 0.13 % of nitrogen and argon.
 /// </remarks>

@@ -5,7 +5,7 @@ namespace ProbeCal;
 /// </summary>
 /// <remarks>
 /// US Geological Survey, Quality of Water Branch Technical Memorandum 81.11 (1981), which fed the pressure corrections of its time; coefficients seen in three second-hand
-/// places. 0–60 °C. It lies 0.09 to 0.38 % below Wagner and Pruss 1993 between 0 and 40 °C.
+/// places. 0–60 °C. It lies 0.08 to 0.38 % below Wagner and Pruss 1993 between 0 and 40 °C.
 /// </remarks>
 public static class VapourAntoine8111
 {

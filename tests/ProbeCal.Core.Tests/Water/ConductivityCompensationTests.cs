@@ -45,13 +45,13 @@ public class ConductivityCompensationTests(ITestOutputHelper output)
         Assert.InRange(furthest, 0.0, 0.025);
     }
 
-    /// <summary>0.5 % apart at 15 °C (practice notes).</summary>
+    /// <summary>By hand from the remembered factor: 1/(1 − 0.191) is 1.2361, and 1.256 over it is 1.6 % more.</summary>
     [Fact]
-    public void Linear_IsHalfAPercentOffAt15()
+    public void Linear_LiesBelowTheFactorOfNaturalWaterAt15()
     {
         Assert.Equal(Status.Ok, ConductivityCompensation.Linear(100.0, 15.0, RangeRule.Refuse, out double linear));
         Assert.Equal(Status.Ok, ConductivityCompensation.NaturalWater(100.0, 15.0, RangeRule.Refuse, out double natural));
-        output.WriteLine($"{100.0 * ((natural / linear) - 1.0):F2} %");
-        Assert.Equal(0.5, 100.0 * Math.Abs((natural / linear) - 1.0), 2.0);
+        Assert.Equal(123.61, linear, 0.005);
+        Assert.Equal(1.6, 100.0 * ((natural / linear) - 1.0), 0.05);
     }
 }
