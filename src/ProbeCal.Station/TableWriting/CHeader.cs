@@ -123,7 +123,8 @@ internal static class CHeader
                 {{type}} down, low;
                 int row;
 
-            {{Checks("celsius", capitals, "CELSIUS", "TEMPERATURE")}}
+            {{NanCheck("celsius", "TEMPERATURE")}}
+            {{RangeChecks("celsius", capitals, "CELSIUS", "TEMPERATURE")}}
                 down = (celsius - {{capitals}}_FIRST_CELSIUS) * {{capitals}}_ROWS_PER_KELVIN;
                 row = down < {{capitals}}_ROWS - 2 ? (int)down : {{capitals}}_ROWS - 2;
                 low = {{snake}}_values[row];
@@ -139,6 +140,7 @@ internal static class CHeader
         TableAxis columns = table.Columns!;
         string word = Word(columns);
         string argument = columns.Quantity == AxisQuantity.Pressure ? "hectopascal" : "salinity";
+        string quantity = columns.Quantity == AxisQuantity.Pressure ? "PRESSURE" : "SALINITY";
         string said = columns.Quantity == AxisQuantity.Pressure ? "an absolute station pressure (hPa)" : "a practical salinity";
         text.Append(CultureInfo.InvariantCulture, $$"""
             /* The value at a temperature (degC) and {{said}}; *{{table.Subject.CUnit}} is left as it was
@@ -148,8 +150,10 @@ internal static class CHeader
                 {{type}} down, along, part, above, below;
                 int row, column;
 
-            {{Checks("celsius", capitals, "CELSIUS", "TEMPERATURE")}}
-            {{Checks(argument, capitals, word, columns.Quantity == AxisQuantity.Pressure ? "PRESSURE" : "SALINITY")}}
+            {{NanCheck("celsius", "TEMPERATURE")}}
+            {{NanCheck(argument, quantity)}}
+            {{RangeChecks("celsius", capitals, "CELSIUS", "TEMPERATURE")}}
+            {{RangeChecks(argument, capitals, word, quantity)}}
                 down = (celsius - {{capitals}}_FIRST_CELSIUS) * {{capitals}}_ROWS_PER_KELVIN;
                 along = ({{argument}} - {{capitals}}_FIRST_{{word}}) * {{capitals}}_COLUMNS_PER_{{word}};
                 row = down < {{capitals}}_ROWS - 2 ? (int)down : {{capitals}}_ROWS - 2;
@@ -166,10 +170,16 @@ internal static class CHeader
             """);
     }
 
-    private static string Checks(string argument, string capitals, string word, string name)
+    private static string NanCheck(string argument, string name)
     {
         return $$"""
                 if ({{argument}} != {{argument}}) { return PROBECAL_TABLE_{{name}}_IS_NAN; }
+            """;
+    }
+
+    private static string RangeChecks(string argument, string capitals, string word, string name)
+    {
+        return $$"""
                 if ({{argument}} < {{capitals}}_FIRST_{{word}}) { return PROBECAL_TABLE_{{name}}_BELOW; }
                 if ({{capitals}}_LAST_{{word}} < {{argument}}) { return PROBECAL_TABLE_{{name}}_ABOVE; }
             """;
