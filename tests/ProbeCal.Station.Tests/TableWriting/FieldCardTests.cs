@@ -14,7 +14,12 @@ public class FieldCardTests
 {
     private static TableOptions Pond => new()
     {
-        Format = "card", Program = "probecal test", Temperature = "0..40C", Salinity = "0", SiteAltitude = "640m", Site = "North <pond> & weir",
+        Format = "card",
+        Program = "probecal test",
+        Temperature = "0..40C",
+        Salinity = "0",
+        SiteAltitude = "640m",
+        Site = "North <pond> & weir",
     };
 
     private static string Make(TableOptions options)

@@ -24,7 +24,12 @@ public class TableWriterTests(ITestOutputHelper output)
 
     private static TableOptions Fresh => new()
     {
-        Format = "csv", Program = "probecal test", Temperature = "0..40C", Pressure = "600..1100hPa", Salinity = "0", Error = "0.01mg/L",
+        Format = "csv",
+        Program = "probecal test",
+        Temperature = "0..40C",
+        Pressure = "600..1100hPa",
+        Salinity = "0",
+        Error = "0.01mg/L",
     };
 
     private static WrittenTable Make(TableOptions options)
