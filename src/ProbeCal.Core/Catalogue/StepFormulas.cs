@@ -59,9 +59,7 @@ internal sealed class StepFormulas
             case StepQuantity.Theta: return Polynomial(StepQuantity.ThetaCoefficient0, 3, "t");
             case StepQuantity.ExcessAtmospheres: return "Patm - 1.1";
             case StepQuantity.GasKelvin: return "t + 273.15";
-            case StepQuantity.SecondVirial: return Has(StepQuantity.CriticalKelvin)
-                ? GasConstant + "*Tc/Pc*(0.083 - 0.422/(T90/Tc)^1.6 + ω*(0.139 - 0.172/(T90/Tc)^4.2))"
-                : Polynomial(StepQuantity.VirialCoefficient0, 4, "T90");
+            case StepQuantity.SecondVirial: return SecondVirial();
             case StepQuantity.CrossVirial: return Polynomial(StepQuantity.CrossVirialCoefficient0, 2, "T90");
             case StepQuantity.WetMoleFraction: return "p/P";
             case StepQuantity.FugacityCoefficient: return Fugacity();
@@ -118,6 +116,13 @@ internal sealed class StepFormulas
         return Has(StepQuantity.ReferenceMilligramsPerLitre)
             ? "Cr" + pressure + "/(xr*1013.25*(1 - u)*φ1)"
             : "K" + pressure;
+    }
+
+    private string SecondVirial()
+    {
+        return Has(StepQuantity.CriticalKelvin)
+            ? GasConstant + "*Tc/Pc*(0.083 - 0.422/(T90/Tc)^1.6 + ω*(0.139 - 0.172/(T90/Tc)^4.2))"
+            : Polynomial(StepQuantity.VirialCoefficient0, 4, "T90");
     }
 
     private string Fugacity()
