@@ -86,7 +86,7 @@ public class MethodsDocumentTests
         List<(string Confidence, double Percent)> found = [];
         foreach (CheckRow row in CheckRow.Read("gas-equations.csv", GasCheckValueTests.Rows))
         {
-            if (GasCheckValueTests.Gases[row["gas"]] == entry.Gas && row["equation"] == entry.Equation.ToString())
+            if (GasCheckValueTests.Named(row["gas"]) == entry.Gas && row["equation"] == entry.Equation.ToString())
             {
                 // A logarithm: its difference is the relative one of what it is the logarithm of.
                 double expected = row.Number("expected");

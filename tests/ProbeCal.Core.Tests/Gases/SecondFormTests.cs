@@ -20,7 +20,7 @@ public class SecondFormTests(ITestOutputHelper output)
     {
         foreach (CheckRow row in CheckRow.Read("second-coefficient-sets.csv", 10))
         {
-            Gas gas = GasCheckValueTests.Gases[row["gas"]];
+            Gas gas = GasCheckValueTests.Named(row["gas"]);
             SolubilityEquation equation = Enum.Parse<SolubilityEquation>(row["equation"]);
             double lowest = double.PositiveInfinity;
             double highest = double.NegativeInfinity;
