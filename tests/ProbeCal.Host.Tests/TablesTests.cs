@@ -28,7 +28,7 @@ public sealed class TablesTests : IDisposable
         Assert.StartsWith("# format: probecal-table/1\n# table: fresh\n", run.Output, StringComparison.Ordinal);
         Assert.Contains("\n# made by: probecal 0.", run.Output, StringComparison.Ordinal);
         Assert.DoesNotContain('+', run.Output.Split("# made by:")[1].Split('\n')[0]);
-        Assert.Matches("^[0-9]+ x [0-9]+ values, largest error found 0.0[0-9]+ mg/L at ", run.ErrorLine);
+        Assert.Matches("^[0-9]+ x [0-9]+ values, largest error found 0.0[0-9]+ mg/L at ", LastLine(run));
     }
 
     [Fact]
@@ -48,8 +48,7 @@ public sealed class TablesTests : IDisposable
         File.WriteAllText(file, "mine");
         Run refused = await Run.OfAsync([.. Usual, "--output", folder]);
         Assert.Equal((2, "", "mine"), (refused.ExitCode, refused.Output, File.ReadAllText(file)));
-        Assert.Contains("--force", refused.ErrorLine, StringComparison.Ordinal);
-        Assert.DoesNotContain('\n', refused.ErrorLine);
+        Assert.Matches("^probecal: --output .*--force", LastLine(refused));
 
         Assert.Equal(0, (await Run.OfAsync([.. Usual, "--output", folder, "--force"])).ExitCode);
         Assert.Equal(written, File.ReadAllText(file));
@@ -124,6 +123,12 @@ public sealed class TablesTests : IDisposable
             Run run = await Run.OfAsync(words[1..]);
             Assert.True(run.ExitCode == 0, example + ": " + run.Error);
         }
+    }
+
+    /// <summary>The line after whatever progress a busy machine has told.</summary>
+    private static string LastLine(Run run)
+    {
+        return run.ErrorLine.Split('\n')[^1];
     }
 
     /// <summary>A clock on which every look takes a second.</summary>
