@@ -98,8 +98,13 @@ public sealed class WholeFileCommandTests : IDisposable
         StringWriter error = new();
         Terminal terminal = new()
         {
-            Input = TextReader.Null, Output = TextWriter.Null, Error = error, Time = TimeProvider.System, Stop = CancellationToken.None,
-            InputBytes = () => new MemoryStream(input), OutputBytes = () => output,
+            Input = TextReader.Null,
+            Output = TextWriter.Null,
+            Error = error,
+            Time = TimeProvider.System,
+            Stop = CancellationToken.None,
+            InputBytes = () => new MemoryStream(input),
+            OutputBytes = () => output,
         };
         int code = await Program.RunAsync(["equilibrium", "--input", "-", "--output", "-", "--column", "temperature=T", "--column", "pressure=P [hPa]", "--salinity", "0"], terminal);
         Assert.Equal(0, code);
