@@ -13,7 +13,7 @@ namespace ProbeCal;
 /// enters as given, without the scale conversion: so does the national field manual, whose tables are met to every printed
 /// digit only in this way (docs/decisions/0004); the effect is at most 0.016 % (docs/methods.md).
 /// </remarks>
-public static class BensonKrause1984
+public static partial class BensonKrause1984
 {
     /// <summary>Lowest temperature, °C.</summary>
     public const double LowestCelsius = 0.0;

@@ -13,7 +13,7 @@ namespace ProbeCal;
 /// it. Range freezing point (but not below −2 °C) to 40 °C, S 0–42, 0.5–1.1 atm. Accuracy ±0.1–0.3 % (from memory). The ITS-90 input is converted,
 /// as gsw does. The vapour and virial terms of the pressure factor are stated for 0–40 °C; below 0 °C they are continued, which changes the factor by less than 0.001 %.
 /// </remarks>
-public static class GarciaGordon1992
+public static partial class GarciaGordon1992
 {
     /// <summary>Lowest temperature, °C, where the water is not frozen before: the end of the density and vapour formulas that go with the equation.</summary>
     public const double LowestCelsius = -2.0;
@@ -53,6 +53,21 @@ public static class GarciaGordon1992
         return status;
     }
 
+    /// <summary>Concentration at equilibrium with water-saturated air at a total pressure of 1 atm: the fit alone, without a pressure factor.</summary>
+    /// <param name="celsius">Temperature on ITS-90, freezing point or −2 to 40 °C.</param>
+    /// <param name="salinity">Practical salinity, 0–42.</param>
+    /// <param name="rule">Refuse or extrapolate outside the range.</param>
+    /// <param name="micromolesPerKilogram">Concentration, µmol per kg of water; NaN unless Ok or extrapolated. Inside the range it has the bits of 1013.25 hPa.</param>
+    public static Status MicromolesPerKilogramAtOneAtmosphere(
+        double celsius, double salinity, RangeRule rule, out double micromolesPerKilogram)
+    {
+        micromolesPerKilogram = double.NaN;
+        Status status = CheckWater(celsius, salinity);
+        if (InputCheck.Refuses(status, rule)) { return status; }
+        micromolesPerKilogram = InputCheck.FiniteOrNaN(OneAtmosphere(celsius, salinity));
+        return status;
+    }
+
     /// <summary>How the equilibrium concentration answers to temperature, salinity and pressure.</summary>
     /// <param name="celsius">Temperature on ITS-90, freezing point or −2 to 40 °C.</param>
     /// <param name="salinity">Practical salinity, 0–42.</param>
@@ -77,14 +92,11 @@ public static class GarciaGordon1992
         return status;
     }
 
-    /// <summary>Ranges of the equation and of the pressure factor. A negative salinity has no freezing point: 0 °C stands in.</summary>
+    /// <summary>Ranges of the equation and of the pressure factor.</summary>
     internal static Status Check(double celsius, double salinity, double pressureHectopascal)
     {
-        Status salinityStatus = InputCheck.Salinity(salinity, HighestSalinity);
-        double lowest = LowestLiquidCelsius(salinity);
-        Status status = InputCheck.Graver(InputCheck.Temperature(celsius, lowest, HighestCelsius), salinityStatus);
         return InputCheck.Graver(
-            status,
+            CheckWater(celsius, salinity),
             InputCheck.Pressure(pressureHectopascal, BensonKrause1984.LowestHectopascal, BensonKrause1984.HighestHectopascal));
     }
 
@@ -94,6 +106,16 @@ public static class GarciaGordon1992
         if (InputCheck.Salinity(salinity, HighestSalinity) != Status.Ok) { return 0.0; }
         double lowest = FreezingPoint.Value(salinity);
         return lowest < LowestCelsius ? LowestCelsius : lowest;
+    }
+
+    /// <summary>
+    /// Ranges of the equation. The freezing point is never above 0 °C, so that only cold water asks for it.
+    /// </summary>
+    private static Status CheckWater(double celsius, double salinity)
+    {
+        Status salinityStatus = InputCheck.Salinity(salinity, HighestSalinity);
+        double lowest = celsius < 0.0 ? LowestLiquidCelsius(salinity) : 0.0;
+        return InputCheck.Graver(InputCheck.Temperature(celsius, lowest, HighestCelsius), salinityStatus);
     }
 
     /// <summary>The fit at 1 atm, µmol/kg, without a range; NaN where the scaled temperature does not exist.</summary>

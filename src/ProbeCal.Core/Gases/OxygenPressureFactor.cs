@@ -4,7 +4,7 @@ namespace ProbeCal;
 /// F(P) = [(P − u)(1 − θP)] / [(1 − u)(1 − θ)] without ranges, P in atm. u is the vapour pressure in atm, θ the second virial
 /// term. Benson, B.B., Krause, D. (1980) Limnol. Oceanogr. 25(4), 662–671 and (1984) 29(3), 620–632.
 /// </summary>
-internal static class OxygenPressureFactor
+internal static partial class OxygenPressureFactor
 {
     private const double Theta0 = 0.000975;
     private const double Theta1 = -1.426e-5;

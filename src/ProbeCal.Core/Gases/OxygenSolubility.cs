@@ -1,7 +1,7 @@
 namespace ProbeCal;
 
 /// <summary>The one switch over the equations, in mg/L at 1 atm, without ranges except <see cref="Check"/>.</summary>
-internal static class OxygenSolubility
+internal static partial class OxygenSolubility
 {
     // µmol/kg · kg/m³ = µmol/m³; times g/mol · 10⁻⁶ = mg/L.
     private const double MilligramsPerLitreScale = OxygenUnits.GramsPerMole * 1.0e-6;

@@ -9,7 +9,7 @@ namespace ProbeCal;
 /// Millero, F.J., Poisson, A. (1981) Deep-Sea Res. 28A, 625–629, doi:10.1016/0198-0149(81)90122-9; UNESCO Technical Papers in
 /// Marine Science 44 (1983). Range −2 to 40 °C, S 0–42. Stated standard error 0.0036 kg/m³. The ITS-90 input is converted. TEOS-10 differs from it by up to 0.0083 kg/m³ for S up to 35 and 0.011 up to 42 (docs/methods.md).
 /// </remarks>
-public static class DensityEos80
+public static partial class DensityEos80
 {
     /// <summary>Lowest temperature, °C.</summary>
     public const double LowestCelsius = -2.0;

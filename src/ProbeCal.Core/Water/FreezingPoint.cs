@@ -8,7 +8,7 @@ namespace ProbeCal;
 /// Millero, F.J., Leung, W.H. (1976), as fixed by UNESCO Technical Papers in Marine Science 44 (1983); coefficients from
 /// memory, held against gsw in the peer tests. Range S 4–40, stated accuracy 0.004 K (from memory); used here from S 0, where it gives 0 °C, to S 42.
 /// </remarks>
-public static class FreezingPoint
+public static partial class FreezingPoint
 {
     /// <summary>Highest practical salinity.</summary>
     public const double HighestSalinity = 42.0;

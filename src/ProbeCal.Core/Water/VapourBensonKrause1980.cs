@@ -9,7 +9,7 @@ namespace ProbeCal;
 /// three second-hand places. Range 0–40 °C. It lies 0.035 to 0.123 % below Wagner and Pruss 1993, which moves an oxygen value
 /// by less than 0.005 %. The temperature is used as given: the scale difference is below 0.06 % of u.
 /// </remarks>
-public static class VapourBensonKrause1980
+public static partial class VapourBensonKrause1980
 {
     /// <summary>Lowest temperature of the published range, °C.</summary>
     public const double LowestCelsius = 0.0;

@@ -1,0 +1,25 @@
+using System.Runtime.CompilerServices;
+
+namespace ProbeCal;
+
+internal static partial class OxygenPressureFactor
+{
+    /// <summary>The lanes of <see cref="Theta(double)"/>.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    internal static TLanes Theta<TLanes>(TLanes celsius)
+        where TLanes : struct, ILanes<TLanes>
+    {
+        return Theta0 + (celsius * (Theta1 + (celsius * Theta2)));
+    }
+
+    /// <summary>The lanes of <see cref="Value(double, double)"/>, inside the range, where the denominator is positive.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    internal static TLanes Value<TLanes>(TLanes celsius, TLanes atmospheres)
+        where TLanes : struct, ILanes<TLanes>
+    {
+        TLanes u = VapourBensonKrause1980.Atmospheres(celsius);
+        TLanes theta = Theta(celsius);
+        TLanes denominator = (1.0 - u) * (1.0 - theta);
+        return (atmospheres - u) * (1.0 - (theta * atmospheres)) / denominator;
+    }
+}
