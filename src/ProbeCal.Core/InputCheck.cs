@@ -125,12 +125,13 @@ internal static class InputCheck
     /// </summary>
     internal static Status Graver(Status first, Status second)
     {
+        if (second == Status.Ok) { return first; }
+        if (first == Status.Ok) { return second; }
         return Gravity(second) <= Gravity(first) ? first : second;
     }
 
     private static int Gravity(Status status)
     {
-        if (status == Status.Ok) { return 0; }
         RefusalReason reason = StatusParts.Reason(status);
         if (reason == RefusalReason.JustBelowRange || reason == RefusalReason.JustAboveRange) { return 1; }
         return reason == RefusalReason.BelowRange || reason == RefusalReason.AboveRange ? 2 : 3;

@@ -8,11 +8,8 @@ public static partial class Numerics
     private const long LanesExponentOffset = (LanesExponentShift << FractionBits) - SqrtHalfBits;
     private const long LanesExponentShift = 1024L;
 
-    // The bits of RoundToInteger: an integer added to them is added to the number that they stand for.
-    private const long RoundToIntegerBits = 0x4338000000000000L;
-
     /// <summary>
-    /// The lanes of <see cref="Exp(double)"/>, with its bits for −708 to 709 in each lane, where 2^k is put on in one step; outside a lane holds no
+    /// The lanes of <see cref="Exp(double)"/>, with its bits for −708 to 708 in each lane, where 2^k is put on in one step; outside a lane holds no
     /// meaningful number, and the caller takes the scalar function there.
     /// </summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]

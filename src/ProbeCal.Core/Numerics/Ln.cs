@@ -27,32 +27,37 @@ public static partial class Numerics
     /// </remarks>
     public static double Ln(double x)
     {
-        if (x - x != 0.0) // NaN or infinite
-        {
-            if (double.IsNaN(x))
-            {
-                return double.NaN;
-            }
-
-            return 0.0 < x ? x : double.NaN;
-        }
-
-        if (x <= 0.0)
-        {
-            return x == 0.0 ? double.NegativeInfinity : double.NaN;
-        }
-
-        double k = 0.0;
-        if (x < SmallestNormal)
-        {
-            x *= TwoTo54;
-            k = -54.0;
-        }
-
         long bits = System.BitConverter.DoubleToInt64Bits(x);
         long exponent = (bits - SqrtHalfBits) >> FractionBits;
-        double f = System.BitConverter.Int64BitsToDouble(bits - (exponent << FractionBits)) - 1.0;
-        k += exponent;
+        double f = x - 1.0;
+        if (exponent != 0L)
+        {
+            if (x - x != 0.0) // NaN or infinite
+            {
+                if (double.IsNaN(x))
+                {
+                    return double.NaN;
+                }
+
+                return 0.0 < x ? x : double.NaN;
+            }
+
+            if (x <= 0.0)
+            {
+                return x == 0.0 ? double.NegativeInfinity : double.NaN;
+            }
+
+            long shift = 0L;
+            if (x < SmallestNormal)
+            {
+                bits = System.BitConverter.DoubleToInt64Bits(x * TwoTo54);
+                exponent = (bits - SqrtHalfBits) >> FractionBits;
+                shift = 54L;
+            }
+
+            f = System.BitConverter.Int64BitsToDouble(bits - (exponent << FractionBits)) - 1.0;
+            exponent -= shift;
+        }
 
         double s = f / (2.0 + f);
         double z = s * s;
@@ -64,6 +69,14 @@ public static partial class Numerics
         // Bound, in units of 2^-54 where the result is just above 1/4 and the terms are largest: last rounding 0.5, halfSquare
         // 0.13, rounding of s 0.07, of z and the series 0.05, of the small terms' product and sum 0.06, approximation 0.02.
         // Each sum's first operand is the larger one or zero, so that its rest is exact.
+        if (exponent == 0L)
+        {
+            // The sums below with k = 0, whose terms then change no bit: x near 1 is the common case.
+            double c = f - halfSquare;
+            return c + ((s * (halfSquare + series)) + ((f - c) - halfSquare));
+        }
+
+        double k = exponent;
         double whole = k * Ln2High;
         double a = whole + f;
         double aRest = (whole - a) + f;

@@ -22,6 +22,8 @@ public static partial class Numerics
     // 1.5·2^52: adding and subtracting it rounds a double below 2^51 to the nearest integer, ties to even.
     // Divided by 2^n it rounds to a multiple of 2^-n in the same way.
     private const double RoundToInteger = 6755399441055744.0;
+    // The bits of RoundToInteger: an integer added to them is added to the number that they stand for.
+    private const long RoundToIntegerBits = 0x4338000000000000L;
     private const double RoundTo25Bits = 201326592.0;
     private const double RoundTo27Bits = 50331648.0;
     private const double RoundTo32Bits = 1572864.0;
