@@ -6,13 +6,20 @@ namespace ProbeCal;
 /// </summary>
 internal static class InputCheck
 {
+    // The checks ask first for the common answer, a value within (a NaN is within nothing), and are then short enough that a compiler puts them
+    // into their callers.
+
     /// <summary>How far outside its range a temperature still counts as near the edge, K (common practice, no source).</summary>
     internal const double NearEdgeKelvin = 0.2;
 
     /// <summary>True when the value must be NaN: a NaN or unknown input always, a range fault unless the rule lets it pass.</summary>
     internal static bool Refuses(Status status, RangeRule rule)
     {
-        if (status == Status.Ok) { return false; }
+        return status != Status.Ok && RefusesFault(status, rule);
+    }
+
+    private static bool RefusesFault(Status status, RangeRule rule)
+    {
         if (rule != RangeRule.Extrapolate && rule != RangeRule.NearEdge) { return true; }
         RefusalReason reason = StatusParts.Reason(status);
         if (reason == RefusalReason.JustBelowRange || reason == RefusalReason.JustAboveRange) { return false; }
@@ -44,34 +51,40 @@ internal static class InputCheck
 
     internal static Status Temperature(double celsius, double lowest, double highest)
     {
+        return lowest <= celsius && celsius <= highest ? Status.Ok : TemperatureFault(celsius, lowest, highest);
+    }
+
+    private static Status TemperatureFault(double celsius, double lowest, double highest)
+    {
         if (NotFinite(celsius)) { return Status.TemperatureNotFinite; }
         if (celsius < lowest)
         {
             return celsius < lowest - NearEdgeKelvin ? Status.TemperatureBelowRange : Status.TemperatureJustBelowRange;
         }
 
-        if (highest < celsius)
-        {
-            return highest + NearEdgeKelvin < celsius ? Status.TemperatureAboveRange : Status.TemperatureJustAboveRange;
-        }
-
-        return Status.Ok;
+        return highest + NearEdgeKelvin < celsius ? Status.TemperatureAboveRange : Status.TemperatureJustAboveRange;
     }
 
     internal static Status Salinity(double salinity, double highest)
     {
+        return 0.0 <= salinity && salinity <= highest ? Status.Ok : SalinityFault(salinity);
+    }
+
+    private static Status SalinityFault(double salinity)
+    {
         if (NotFinite(salinity)) { return Status.SalinityNotFinite; }
-        if (salinity < 0.0) { return Status.SalinityBelowRange; }
-        if (highest < salinity) { return Status.SalinityAboveRange; }
-        return Status.Ok;
+        return salinity < 0.0 ? Status.SalinityBelowRange : Status.SalinityAboveRange;
     }
 
     internal static Status Pressure(double hectopascal, double lowest, double highest)
     {
+        return lowest <= hectopascal && hectopascal <= highest ? Status.Ok : PressureFault(hectopascal, lowest);
+    }
+
+    private static Status PressureFault(double hectopascal, double lowest)
+    {
         if (NotFinite(hectopascal)) { return Status.PressureNotFinite; }
-        if (hectopascal < lowest) { return Status.PressureBelowRange; }
-        if (highest < hectopascal) { return Status.PressureAboveRange; }
-        return Status.Ok;
+        return hectopascal < lowest ? Status.PressureBelowRange : Status.PressureAboveRange;
     }
 
     internal static Status PartialPressure(double hectopascal, double highest)
@@ -125,7 +138,11 @@ internal static class InputCheck
     /// </summary>
     internal static Status Graver(Status first, Status second)
     {
-        if (second == Status.Ok) { return first; }
+        return second == Status.Ok ? first : GraverThan(first, second);
+    }
+
+    private static Status GraverThan(Status first, Status second)
+    {
         if (first == Status.Ok) { return second; }
         return Gravity(second) <= Gravity(first) ? first : second;
     }
