@@ -55,7 +55,7 @@ public class SameBitsTests(ITestOutputHelper output)
     {
         Assert.True(await program.ExitCodeAsync(Deadline) == 0, program.Tail());
         output.WriteLine("campaign: same bits on " + program.Error()[0]);
-        Assert.Equal(4, program.Output().Count);
+        Assert.Equal(5, program.Output().Count);
         Assert.Equal("self-check True", program.Output()[0]);
         return string.Join('\n', program.Output());
     }

@@ -39,6 +39,34 @@ for (int i = 0; i < count; i++)
 
 Console.WriteLine("equilibrium " + equilibrium);
 
+Digest batch = new();
+double[] celsius = new double[count], salinity = new double[count], pressure = new double[count], fourth = new double[count], values = new double[count];
+Status[] statuses = new Status[count];
+for (int i = 0; i < count; i++)
+{
+    // Some of it out of range, so that the lanes that are not Ok are among the rest.
+    celsius[i] = inputs.Between(-3, 41);
+    salinity[i] = inputs.Between(-1, 43);
+    pressure[i] = inputs.Between(500, 1120);
+    fourth[i] = inputs.Between(-1, 60);
+}
+
+foreach (RangeRule rule in new[] { RangeRule.Refuse, RangeRule.NearEdge, RangeRule.Extrapolate })
+{
+    foreach (SolubilityEquation equation in new[] { SolubilityEquation.BensonKrause1984, SolubilityEquation.GarciaGordon1992 })
+    {
+        batch.Add(OxygenBatch.MilligramsPerLitre(equation, celsius, salinity, pressure, rule, values, statuses), values, statuses);
+        batch.Add(OxygenBatch.ConcentrationFromPartialPressure(equation, celsius, salinity, pressure, fourth, rule, values, statuses), values, statuses);
+        batch.Add(OxygenBatch.PartialPressureFromConcentration(equation, celsius, salinity, pressure, fourth, rule, values, statuses), values, statuses);
+    }
+
+    batch.Add(OxygenBatch.GarciaGordon1992MicromolesPerKilogramAtOneAtmosphere(celsius, salinity, rule, values, statuses), values, statuses);
+    batch.Add(OxygenBatch.GarciaGordon1992MicromolesPerKilogram(celsius, salinity, pressure, rule, values, statuses), values, statuses);
+    batch.Add(OxygenBatch.PartialPressure(celsius, pressure, rule, values, statuses), values, statuses);
+}
+
+Console.WriteLine("batch " + batch);
+
 Digest readings = new();
 AmperometricProbe probe = new(TemperatureCoefficientForm.Arrhenius, 22000, 25, 0, 40);
 CalibrationPoint point = new(CalibrationMethod.AirSaturatedWater, 66.17, 0.01, 16, 0.03, 939, 0.8, Stirring.Stirred, 1, 1, 0, 0.0075);
@@ -106,6 +134,12 @@ internal sealed class Digest
     {
         Add((double)(int)status);
         Add(value);
+    }
+
+    internal void Add(int notOk, double[] values, Status[] statuses)
+    {
+        Add((double)notOk);
+        for (int i = 0; i < values.Length; i++) { Add(statuses[i], values[i]); }
     }
 
     public override string ToString()

@@ -12,7 +12,7 @@ public static partial class BensonKrause1984
         return LaneCheck.Within(celsius, LowestCelsius, HighestCelsius) & LaneCheck.Within(salinity, 0.0, HighestSalinity);
     }
 
-    /// <summary>The lanes of <see cref="OneAtmosphere(double, double)"/>, inside the range.</summary>
+    /// <summary>The lanes of <c>OneAtmosphere</c>, inside the range.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     internal static TLanes OneAtmosphere<TLanes>(TLanes celsius, TLanes salinity)
         where TLanes : struct, ILanes<TLanes>

@@ -4,7 +4,7 @@ namespace ProbeCal;
 
 public static partial class DensityEos80
 {
-    /// <summary>The lanes of <see cref="Value(double, double)"/>.</summary>
+    /// <summary>The lanes of <c>Value</c>.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     internal static TLanes Value<TLanes>(TLanes celsius, TLanes salinity)
         where TLanes : struct, ILanes<TLanes>

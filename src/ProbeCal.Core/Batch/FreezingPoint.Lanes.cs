@@ -4,7 +4,7 @@ namespace ProbeCal;
 
 public static partial class FreezingPoint
 {
-    /// <summary>The lanes of <see cref="Value(double)"/>.</summary>
+    /// <summary>The lanes of <c>Value</c>.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     internal static TLanes Value<TLanes>(TLanes salinity)
         where TLanes : struct, ILanes<TLanes>

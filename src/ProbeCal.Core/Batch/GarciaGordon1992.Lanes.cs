@@ -15,7 +15,7 @@ public static partial class GarciaGordon1992
         return ok & (celsius >= FreezingPoint.Value(salinity));
     }
 
-    /// <summary>The lanes of <see cref="ScaledTemperature(double)"/>, inside the range.</summary>
+    /// <summary>The lanes of <c>ScaledTemperature</c>, inside the range.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     internal static TLanes ScaledTemperature<TLanes>(TLanes celsius)
         where TLanes : struct, ILanes<TLanes>
@@ -24,7 +24,7 @@ public static partial class GarciaGordon1992
         return Numerics.Ln((UpperKelvinOfScaling - t) / (TemperatureScale.KelvinAtZeroCelsius + t));
     }
 
-    /// <summary>The lanes of <see cref="OneAtmosphere(double, double)"/>, inside the range, from the scaled temperature.</summary>
+    /// <summary>The lanes of <c>OneAtmosphere</c>, inside the range, from the scaled temperature.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     internal static TLanes OneAtmosphereOfScaled<TLanes>(TLanes ts, TLanes salinity)
         where TLanes : struct, ILanes<TLanes>

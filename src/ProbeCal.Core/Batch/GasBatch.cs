@@ -12,7 +12,7 @@ namespace ProbeCal;
 /// </remarks>
 public static class GasBatch
 {
-    /// <summary><see cref="GasEquilibrium.MilligramsPerLitre"/> for each temperature, salinity and pressure.</summary>
+    /// <summary><c>GasEquilibrium.MilligramsPerLitre</c> for each temperature, salinity and pressure.</summary>
     /// <param name="gas">The gas.</param>
     /// <param name="equation">A solubility equation that covers it.</param>
     /// <param name="celsius">Temperatures (ITS-90), the range of the equation.</param>

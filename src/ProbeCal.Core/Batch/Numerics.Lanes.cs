@@ -9,7 +9,7 @@ public static partial class Numerics
     private const long LanesExponentShift = 1024L;
 
     /// <summary>
-    /// The lanes of <see cref="Exp(double)"/>, with its bits for −708 to 708 in each lane, where 2^k is put on in one step; outside a lane holds no
+    /// The lanes of <c>Exp</c>, with its bits for −708 to 708 in each lane, where 2^k is put on in one step; outside a lane holds no
     /// meaningful number, and the caller takes the scalar function there.
     /// </summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
@@ -39,7 +39,7 @@ public static partial class Numerics
     }
 
     /// <summary>
-    /// The lanes of <see cref="Ln(double)"/>, with its bits for normal positive numbers; elsewhere a lane holds no meaningful number, and the caller
+    /// The lanes of <c>Ln</c>, with its bits for normal positive numbers; elsewhere a lane holds no meaningful number, and the caller
     /// takes the scalar function there.
     /// </summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]

@@ -12,7 +12,7 @@ public static partial class OxygenEquilibrium
         return LaneCheck.Within(celsius, LowestCelsius, HighestCelsius) & LaneCheck.Pressure(pressureHectopascal);
     }
 
-    /// <summary>The lanes of <see cref="AirPartialPressure(double, double)"/>, inside the range.</summary>
+    /// <summary>The lanes of <c>AirPartialPressure</c>, inside the range.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     internal static TLanes AirPartialPressure<TLanes>(TLanes celsius, TLanes pressureHectopascal)
         where TLanes : struct, ILanes<TLanes>
@@ -22,7 +22,7 @@ public static partial class OxygenEquilibrium
     }
 
     /// <summary>
-    /// The lanes of <see cref="Solubility(SolubilityEquation, double, double, double)"/>, inside the range, where the denominator is positive, from the
+    /// The lanes of <c>Solubility</c>, inside the range, where the denominator is positive, from the
     /// concentration at 1 atm.
     /// </summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]

@@ -4,7 +4,7 @@ namespace ProbeCal;
 
 internal static partial class OxygenPressureFactor
 {
-    /// <summary>The lanes of <see cref="Theta(double)"/>.</summary>
+    /// <summary>The lanes of <c>Theta</c>.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     internal static TLanes Theta<TLanes>(TLanes celsius)
         where TLanes : struct, ILanes<TLanes>
@@ -12,7 +12,7 @@ internal static partial class OxygenPressureFactor
         return Theta0 + (celsius * (Theta1 + (celsius * Theta2)));
     }
 
-    /// <summary>The lanes of <see cref="Value(double, double)"/>, inside the range, where the denominator is positive.</summary>
+    /// <summary>The lanes of <c>Value</c>, inside the range, where the denominator is positive.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     internal static TLanes Value<TLanes>(TLanes celsius, TLanes atmospheres)
         where TLanes : struct, ILanes<TLanes>

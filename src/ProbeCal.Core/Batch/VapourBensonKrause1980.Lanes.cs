@@ -4,7 +4,7 @@ namespace ProbeCal;
 
 public static partial class VapourBensonKrause1980
 {
-    /// <summary>The lanes of <see cref="Atmospheres(double)"/>, inside the range of the oxygen equations.</summary>
+    /// <summary>The lanes of <c>Atmospheres</c>, inside the range of the oxygen equations.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
     internal static TLanes Atmospheres<TLanes>(TLanes celsius)
         where TLanes : struct, ILanes<TLanes>
