@@ -6,7 +6,8 @@ namespace ProbeCal;
 /// </summary>
 /// <remarks>
 /// What a paper states is taken as one standard uncertainty (our choice, on the safe side); only the oxygen figure depends on the salinity. Where nothing is stated
-/// (Weiss 1970 for nitrogen and argon) the distance to Hamme and Emerson 2004 stands in. Outside the range of temperature |∂(ln C)/∂T| times the distance is added, above 1.1 atm
+/// (Weiss 1970 for nitrogen and argon) the distance to Hamme and Emerson 2004 stands in, and for sulfur hexafluoride by Fernández-Prini 2003 10 % for the
+/// 8 to 18 % that part it from Bullister 2002 above 25 °C. Outside the range of temperature |∂(ln C)/∂T| times the distance is added, above 1.1 atm
 /// 5 cm³/mol·(P − 1.1 atm)/(R·T) for the volume of the dissolved gas and the virial coefficients (our choices), all as root of the sum of squares.
 /// </remarks>
 public static class GasUncertainty
@@ -113,7 +114,7 @@ public static class GasUncertainty
             case SolubilityEquation.WarnerWeiss1985:
                 return 0.015;
             case SolubilityEquation.FernandezPrini2003:
-                return 0.02;
+                return gas == Gas.SulfurHexafluoride ? 0.10 : 0.02;
             case SolubilityEquation.Sander2023:
                 return 0.05;
             default:

@@ -27,6 +27,7 @@ public class GasUncertaintyTests
     [InlineData(Gas.SulfurHexafluoride, SolubilityEquation.Bullister2002MoistAir, 0.02)]
     [InlineData(Gas.Cfc12, SolubilityEquation.WarnerWeiss1985, 0.015)]
     [InlineData(Gas.Ethane, SolubilityEquation.FernandezPrini2003, 0.02)]
+    [InlineData(Gas.SulfurHexafluoride, SolubilityEquation.FernandezPrini2003, 0.10)]
     [InlineData(Gas.Ammonia, SolubilityEquation.Sander2023, 0.05)]
     public void StatedAccuracy_IsTaken(Gas gas, SolubilityEquation equation, double expected)
     {
