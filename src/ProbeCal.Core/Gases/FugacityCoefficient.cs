@@ -10,7 +10,7 @@ namespace ProbeCal;
 /// θ: Benson, B.B., Krause, D. (1980) Limnol. Oceanogr. 25(4), 662–671. Carbon dioxide: Weiss, R.F. (1974) Mar. Chem. 2, 203–215, coefficients seen in four second-hand places.
 /// Nitrous oxide: Weiss, R.F., Price, B.A. (1980) Mar. Chem. 8, 347–359, seen in one. The others: B by the Pitzer–Abbott correlation,
 /// B·Pc/(R·Tc) = 0.083 − 0.422/Tr^1.6 + ω·(0.139 − 0.172/Tr^4.2), with critical constants (both from memory; helium with the effective constants of a quantum gas).
-/// The correlation gives the θ of oxygen within 0.5 cm³/mol, 2.6 % (0–40 °C, a test). Temperature as given: the scales differ by less than 1e-6 in φ.
+/// The correlation gives the θ of oxygen within 0.55 cm³/mol, 2.7 % (0–40 °C, a test). Temperature as given: the scales differ by less than 1e-6 in φ.
 /// </remarks>
 internal static class FugacityCoefficient
 {

@@ -7,7 +7,7 @@ namespace ProbeCal;
 /// <remarks>
 /// Garcia, H.E., Gordon, L.I. (1992) Limnol. Oceanogr. 37(6), 1307–1312, doi:10.4319/lo.1992.37.6.1307, erratum 38, 656 (1993). Coefficients seen in four second-hand
 /// places, a published value is reproduced. Range as the other column: freezing point (not below −2 °C) to 40 °C, S 0–42. It lies −0.14 to +0.24 % from the
-/// Benson–Krause column. The ITS-90 input is converted.
+/// Benson–Krause column (0–40 °C, S 0–40; +0.28 % at −1 °C, S 42). The ITS-90 input is converted.
 /// </remarks>
 internal static class GarciaGordon1992Combined
 {

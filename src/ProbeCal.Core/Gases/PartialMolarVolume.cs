@@ -2,8 +2,8 @@ namespace ProbeCal;
 
 /// <summary>Volume that a mole of dissolved gas takes up in water: what hydrostatic pressure works against.</summary>
 /// <remarks>
-/// Enns, T., Scholander, P.F., Bradstreet, E.D. (1965) J. Phys. Chem. 69, 389–391, doi:10.1021/j100886a005. Oxygen seen in two second-hand places, the others in
-/// one (unconfirmed). Taken as the same at every temperature.
+/// Enns, T., Scholander, P.F., Bradstreet, E.D. (1965) J. Phys. Chem. 69, 389–391, doi:10.1021/j100886a005. Oxygen seen in two second-hand places, the others
+/// from memory. Taken as the same at every temperature.
 /// </remarks>
 internal static class PartialMolarVolume
 {

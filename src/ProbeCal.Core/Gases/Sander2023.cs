@@ -3,8 +3,8 @@ namespace ProbeCal;
 /// <summary>Fifteen gases in fresh water as Henry's-law constants Hcp in mol/(m³·Pa): Hcp = Hcp(298.15 K)·exp[B·(1/T − 1/298.15 K)].</summary>
 /// <remarks>
 /// Sander, R. (2023) Atmos. Chem. Phys. 23, 10901–12440, doi:10.5194/acp-23-10901-2023. Two significant figures, taken as 5 %: for oxygen 5.0 % low at 0 °C
-/// and 3.4 % high at 25 °C against Benson and Krause 1984. Never for a percentage of saturation. Coefficients seen in one second-hand place (neon, krypton,
-/// ammonia unconfirmed). A law of dilute water: ammonia, 16 g/L at 10 hPa and 15 °C, leaves it early, and nothing here says where. Best within 20 K of 25 °C: range 5–40 °C, where the upper end is that of density and vapour. Fresh water only; the gas is taken as ideal.
+/// and 3.4 % high at 25 °C against Benson and Krause 1984. Never for a percentage of saturation. Coefficients read in one place, the topmost reviewed row of each gas
+/// (neon, krypton and ammonia from memory). A law of dilute water: ammonia, 16 g/L at 10 hPa and 15 °C, leaves it early, and nothing here says where. Best within 20 K of 25 °C: range 5–40 °C, where the upper end is that of density and vapour. Fresh water only; the gas is taken as ideal.
 /// </remarks>
 internal static class Sander2023
 {

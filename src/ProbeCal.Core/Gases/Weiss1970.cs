@@ -3,7 +3,7 @@ namespace ProbeCal;
 /// <summary>Oxygen, nitrogen and argon in water: mL of gas (0 °C, 1 atm) per litre in equilibrium with water-saturated air at 1 atm, and Bunsen coefficients: ln C = A1 + A2·(100/T) + A3·ln(T/100) + A4·(T/100) + S·[B1 + B2·(T/100) + B3·(T/100)²].</summary>
 /// <remarks>
 /// Weiss, R.F. (1970) Deep-Sea Res. 17, 721–735, doi:10.1016/0011-7471(70)90037-9. Range −1 to 40 °C, S 0–40. Stated accuracy 0.02 mL/L for oxygen
-/// (second-hand); nitrogen lies 1.0–1.5 % below Hamme and Emerson 2004, and its two forms differ by 0.36 % between themselves. The ITS-90 input is converted.
+/// (second-hand); nitrogen lies 0.8–1.6 % below Hamme and Emerson 2004, and its two forms differ by 0.36 % between themselves. The ITS-90 input is converted.
 /// </remarks>
 internal static class Weiss1970
 {

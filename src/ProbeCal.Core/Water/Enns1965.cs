@@ -6,7 +6,7 @@ namespace ProbeCal;
 /// </summary>
 /// <remarks>
 /// Enns, T., Scholander, P.F., Bradstreet, E.D. (1965) J. Phys. Chem. 69, 389–391, doi:10.1021/j100886a005: oxygen, nitrogen, argon, helium and carbon dioxide to 100 atm. The volume of
-/// oxygen seen in two second-hand places, the others in one and from memory. Their "about 14 % per 100 atm" is met at 25 °C. Accuracy of the volumes about 3 % (our estimate), 0.4 % of the pressure at 1000 m.
+/// oxygen seen in two second-hand places, the others from memory. Their "about 14 % per 100 atm" is met at 25 °C. Accuracy of the volumes about 3 % (our estimate), 0.4 % of the pressure at 1000 m.
 /// Hydrostatic pressure 0–101 325 hPa, 0–40 °C.
 /// </remarks>
 public static class Enns1965

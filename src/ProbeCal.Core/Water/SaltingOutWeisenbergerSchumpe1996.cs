@@ -36,7 +36,7 @@ public static class SaltingOutWeisenbergerSchumpe1996
         return Compute(ion, gas, celsius, molesPerLitre, rule, out term, out _);
     }
 
-    /// <summary>How one ion's term answers to temperature. To concentration it answers with term/cᵢ.</summary>
+    /// <summary>How one ion's term answers to temperature. To concentration it answers with the term of 1 mol/L.</summary>
     /// <param name="ion">The ion.</param>
     /// <param name="gas">The dissolved gas.</param>
     /// <param name="celsius">Temperature, 0–90 °C; 25 °C for a gas without a temperature constant.</param>

@@ -22,7 +22,8 @@ public class FugacityTests(ITestOutputHelper output)
 
     /// <summary>
     /// The Pitzer–Abbott correlation stands in for N2, Ar and He above 1.1 atm. Its only check here is oxygen, whose θ (Benson and Krause 1980) is −B/(R·T) measured:
-    /// critical constants 154.58 K, 49.77 atm, ω 0.022 (from memory). Abbott's correlation is good to some cm³/mol for simple gases (from memory): 1.5 cm³/mol are allowed.
+    /// critical constants 154.58 K, 49.77 atm, ω 0.022 (from memory). Abbott's correlation is good to some cm³/mol for simple gases (from memory); the documents state what was found,
+    /// 0.55 cm³/mol and 2.7 %, and are held to it.
     /// </summary>
     [Theory]
     [InlineData(0.0)]
@@ -36,7 +37,28 @@ public class FugacityTests(ITestOutputHelper output)
         double virial = FugacityCoefficient.Abbott(kelvin, 154.58, 49.77, 0.022, out _);
         double measured = -OxygenPressureFactor.Theta(celsius) * 82.05746 * kelvin;
         output.WriteLine($"{celsius} °C: {virial:F2} cm³/mol for {measured:F2}");
-        Assert.Equal(measured, virial, 1.5);
+        Assert.Equal(measured, virial, 0.55);
+        Assert.Equal(1.0, virial / measured, 0.027);
+    }
+
+    /// <summary>
+    /// The published second virial coefficients of the two gases that are not ideal, read back from φ of the pure gas at 1 atm, against the same correlation with their critical constants (from
+    /// memory): a check from outside that sees a wrong digit. Allowed are the "some cm³/mol" of the correlation: 2 for N2O, and 4 for CO2, where it was found 3.8 too low at 0 °C.
+    /// </summary>
+    [Theory]
+    [InlineData(Gas.NitrousOxide, 309.57, 71.5, 0.165, 2.0)]
+    [InlineData(Gas.CarbonDioxide, 304.13, 72.8, 0.225, 4.0)]
+    public void PublishedVirial_AgreesWithTheCorrelation(Gas gas, double criticalKelvin, double criticalAtmospheres, double acentricFactor, double allowed)
+    {
+        for (double celsius = 0.0; celsius <= 40.0; celsius += 5.0)
+        {
+            double kelvin = celsius + 273.15;
+            double phi = FugacityCoefficient.Value(gas, celsius, 1.0, 1.0, null, out _, out _, out _);
+            double published = Math.Log(phi) * 82.05746 * kelvin;
+            double correlated = FugacityCoefficient.Abbott(kelvin, criticalKelvin, criticalAtmospheres, acentricFactor, out _);
+            output.WriteLine($"{gas} at {celsius} °C: {published:F1} cm³/mol, correlation {correlated:F1}");
+            Assert.Equal(published, correlated, allowed);
+        }
     }
 
     /// <summary>At 1.1 atm nothing jumps, and the slopes on the two sides differ only by what the extra terms say.</summary>

@@ -40,7 +40,7 @@ public class SecondFormTests(ITestOutputHelper output)
 
     /// <summary>
     /// Two equations for one gas in equilibrium with moist air at 1 atm: how far the first lies from the second, in %, over their common range. The limits were measured here and rounded
-    /// outwards: they guard the coefficients, and the documents state them. A comment gives the distance that was known beforehand, at other conditions.
+    /// outwards: they guard the coefficients, and the documents state them. Two forms of one paper lie inside what the paper states for either fit. A comment gives the distance that was known beforehand, at other conditions.
     /// </summary>
     [Theory]
     // One paper, two forms.

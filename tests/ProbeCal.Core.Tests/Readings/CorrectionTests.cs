@@ -131,6 +131,12 @@ public class CorrectionTests
             if (Array.IndexOf(Concentrations, quantity) >= 0)
             {
                 AssertRefused(reading, quantity, expected);
+                // No contribution stands beside a value that is not there, but those that are nothing.
+                foreach (UncertaintySource source in Enum.GetValues<UncertaintySource>())
+                {
+                    Assert.False(Math.Abs(reading.Contribution(source, quantity)) > 0.0, $"{source} of {quantity}");
+                }
+
                 continue;
             }
 

@@ -1,5 +1,7 @@
 using System;
+using System.Collections.Generic;
 using System.Linq;
+using ProbeCal.Core.Tests.Gases;
 using Xunit;
 using Xunit.Abstractions;
 
@@ -66,6 +68,28 @@ public class SaltingOutTests(ITestOutputHelper output)
         Assert.InRange(off, -6.8, 6.8);
         if (gas != Gas.Helium) { Assert.InRange(off, -3.4, 3.4); }
         if (!double.IsNaN(percent)) { Assert.Equal(percent, off, 0.15); }
+    }
+
+    /// <summary>Every constant against a second transcription. One mole of H⁺, whose constant is zero, shows a gas alone; oxygen, whose constant is zero, shows an ion alone.</summary>
+    [Fact]
+    public void Constants_MeetTheSecondTranscription()
+    {
+        List<CheckRow> rows = CheckRow.Read("salting-out.csv", 65);
+        foreach (CheckRow row in rows)
+        {
+            bool isIon = row["kind"] == "ion";
+            Ion ion = isIon ? Enum.Parse<Ion>(row["name"]) : Ion.Hydrogen;
+            Gas gas = isIon ? Gas.Oxygen : Enum.Parse<Gas>(row["name"]);
+            Assert.Equal(Status.Ok, SaltingOutWeisenbergerSchumpe1996.Term(ion, gas, 25.0, 1.0, RangeRule.Refuse, out double constant));
+            Assert.True(Math.Abs(constant - row.Number("h")) < row.Number("hTolerance"), $"{row}: {constant}");
+            if (isIon) { continue; }
+            Assert.Equal(Status.Ok, SaltingOutWeisenbergerSchumpe1996.Sensitivity(ion, gas, 25.0, 1.0, RangeRule.Refuse, out double slope));
+            if (row["slope"].Length == 0) { Assert.Equal(0.0, slope); }
+            else { Assert.True(Math.Abs(slope - row.Number("slope")) < row.Number("slopeTolerance"), $"{row}: {slope}"); }
+        }
+
+        Assert.Equal(Enum.GetValues<Ion>().Length, rows.Count(row => row["kind"] == "ion"));
+        Assert.Equal(65, rows.Select(row => row["kind"] + row["name"]).Distinct().Count());
     }
 
     /// <summary>NaCl and oxygen at 25 °C: 0.1461 L/mol is the sum of the two ions' constants, by hand.</summary>
