@@ -96,6 +96,36 @@ public class WaterTests
         Assert.Equal(0.0574, (double)salty["freezingPointK"]!, 0.002);
     }
 
+    /// <summary>A water has one salinity and one uncertainty of it, whichever command reads it.</summary>
+    [Theory]
+    [InlineData("--conductivity", "42mS/cm", "--conductivity-uncertainty", "0.1mS/cm", "--conductivity-temperature", "18", "--conductivity-temperature-uncertainty", "0.1K")]
+    [InlineData("--specific-conductance", "1000uS/cm")]
+    [InlineData("--specific-conductance", "53mS/cm", "--conductivity-uncertainty", "500uS/cm")]
+    [InlineData("--chlorinity", "19.374", "--chlorinity-uncertainty", "0.01")]
+    [InlineData("--salinity", "35", "--salinity-uncertainty", "0.05")]
+    public async Task Salinity_IsThatOfEquilibrium_WithTheSameUncertainty(params string[] salt)
+    {
+        JsonNode water = await JsonAsync(["--temperature", "20", .. salt]);
+        Run run = await Run.OfAsync(["equilibrium", "--temperature", "20", "--pressure", "1atm", "--format", "json", .. salt]);
+        JsonNode equilibrium = JsonNode.Parse(run.Output)!;
+        Assert.Equal((double)equilibrium["salinity"]!, (double)water["salinity"]!);
+        Assert.Equal((double)equilibrium["standardUncertainty"]!["salinity"]!, (double)water["standardUncertainty"]!["salinity"]!);
+    }
+
+    /// <summary>
+    /// The relation of the field manual gives 0.559 where sea salt has 0.492 (1000 µS/cm) and 35.26 where it has 35: one standard uncertainty holds either difference,
+    /// and dilute water is not said to be uncertain by more than it holds.
+    /// </summary>
+    [Theory]
+    [InlineData("1000uS/cm", 0.067, 0.085)]
+    [InlineData("53065uS/cm", 0.26, 0.31)]
+    [InlineData("50uS/cm", 0.001, 0.006)]
+    public async Task FieldRelation_IsAsUncertainAsItIsFarOff(string conductance, double least, double most)
+    {
+        JsonNode water = await JsonAsync("--temperature", "20", "--specific-conductance", conductance);
+        Assert.InRange((double)water["standardUncertainty"]!["salinity"]!, least, most);
+    }
+
     [Theory]
     [InlineData("--temperature is missing: ", "--salinity", "0")]
     [InlineData("--salinity is missing: 0 for fresh water, or in its place --conductivity", "--temperature", "20")]
@@ -103,12 +133,12 @@ public class WaterTests
     [InlineData("--temperature 120: water is described here from -2.2 to 100 °C", "--temperature", "120", "--salinity", "0")]
     [InlineData("--salinity 50: water is described here for practical salinities of 0 to 42", "--temperature", "20", "--salinity", "50")]
     [InlineData("--conductivity 310: a conductivity carries its unit", "--temperature", "20", "--conductivity", "310")]
-    [InlineData("--conductivity 310mS/cm: the scale holds from 0", "--temperature", "20", "--conductivity", "310mS/cm")]
-    [InlineData("--temperature 40: a conductivity gives a practical salinity from -2 to 35 °C", "--temperature", "40", "--conductivity", "42mS/cm")]
+    [InlineData("--conductivity 310mS/cm: at 20 °C this is outside the practical salinity scale", "--temperature", "20", "--conductivity", "310mS/cm")]
+    [InlineData("--temperature 40 °C is outside the practical salinity scale (PSS-78), which holds from -2 to 35 °C", "--temperature", "40", "--conductivity", "42mS/cm")]
     [InlineData("--specific-conductance 60mS/cm: the relation of the field manual", "--temperature", "20", "--specific-conductance", "60mS/cm")]
-    [InlineData("--chlorinity 30: sea water has 0 to 23.2 g/kg", "--temperature", "20", "--chlorinity", "30")]
+    [InlineData("--chlorinity 30: the chlorinity of sea water is from 0 to 23.25 g/kg", "--temperature", "20", "--chlorinity", "30")]
     [InlineData("--salinity-uncertainty belongs to --salinity, which is not given", "--temperature", "20", "--chlorinity", "19", "--salinity-uncertainty", "1")]
-    [InlineData("--conductivity-uncertainty belongs to a conductivity, which is not given", "--temperature", "20", "--salinity", "5", "--conductivity-uncertainty", "1uS/cm")]
+    [InlineData("--conductivity-uncertainty belongs to --conductivity or --specific-conductance, which is not given", "--temperature", "20", "--salinity", "5", "--conductivity-uncertainty", "1uS/cm")]
     [InlineData("--temperature-uncertainty -1K: a standard uncertainty is zero or above", "--temperature", "20", "--salinity", "5", "--temperature-uncertainty", "-1K")]
     [InlineData("--format xml: there is no such form; there are text and json", "--temperature", "20", "--salinity", "5", "--format", "xml")]
     public async Task WrongInput_IsOneLine(string says, params string[] arguments)

@@ -52,7 +52,7 @@ internal sealed record WaterJson
         {
             TemperatureC = w.TemperatureCelsius,
             Salinity = w.Salt.Salinity,
-            SalinitySource = w.Salt.Source,
+            SalinitySource = WaterWords.SourceName(w.Salt.Source),
             ChlorinityGPerKg = w.Salt.ChlorinityGramsPerKilogram,
             ConductivityUSPerCm = w.Salt.ConductivityMillisiemensPerCentimetre * 1000,
             SpecificConductanceUSPerCm = w.Salt.LinearAt25MicrosiemensPerCentimetre,

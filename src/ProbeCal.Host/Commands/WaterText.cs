@@ -3,6 +3,7 @@ using System.Collections.Generic;
 using System.Globalization;
 using System.IO;
 using ProbeCal.Station.Entry;
+using ProbeCal.Station.Equilibrium;
 using ProbeCal.Station.InWater;
 
 namespace ProbeCal.Host.Commands;
@@ -20,18 +21,18 @@ internal static class WaterText
         WaterSalt salt = w.Salt;
         Line($"Water at {w.TemperatureCelsius} °C, practical salinity {Number.Fixed(salt.Salinity, 4)}{From(salt.Source)}, at the surface");
         Line($"");
-        Row("salinity", salt.Salinity, salt.Uncertainty, 4, "", salt.Source == "given" ? "" : $"chlorinity {Number.Fixed(salt.ChlorinityGramsPerKilogram, 4)} g/kg");
+        Row("salinity", salt.Salinity, salt.Uncertainty, 4, "", salt.Source == SalinitySource.Given ? "" : $"chlorinity {Number.Fixed(salt.ChlorinityGramsPerKilogram, 4)} g/kg");
         if (salt.ConductivityMillisiemensPerCentimetre is double raw)
         {
-            Line($"  conductivity       {raw * 1000,11:F1} µS/cm at the water's temperature");
+            Line($"  conductivity       {raw * 1000,11:F1} µS/cm as measured");
         }
 
         if (salt.LinearAt25MicrosiemensPerCentimetre is double linear)
         {
-            Line($"  at 25 °C           {linear,11:F1} µS/cm {(salt.Source == "conductivity" ? "linear, 1.91 % per °C" : "as given")}");
+            Line($"  at 25 °C           {linear,11:F1} µS/cm {(salt.Source == SalinitySource.Conductivity ? "linear, 1.91 % per °C" : "as given")}");
         }
 
-        if (salt.Source == "conductivity")
+        if (salt.Source == SalinitySource.Conductivity)
         {
             if (salt.NaturalAt25MicrosiemensPerCentimetre is double natural)
             {
@@ -87,13 +88,13 @@ internal static class WaterText
         }
     }
 
-    private static string From(string source)
+    private static string From(SalinitySource source)
     {
         return source switch
         {
-            "conductivity" => " (PSS-78 from the conductivity)",
-            "specific-conductance" => " (field manual, from the specific conductance)",
-            "chlorinity" => " (from the chlorinity)",
+            SalinitySource.Conductivity => " (PSS-78 from the conductivity)",
+            SalinitySource.SpecificConductance => " (field manual, from the specific conductance)",
+            SalinitySource.Chlorinity => " (from the chlorinity)",
             _ => "",
         };
     }

@@ -116,14 +116,8 @@ public sealed record EquilibriumEntry
     public EquilibriumCase Read()
     {
         Gas gas = Gas is null ? ProbeCal.Gas.Oxygen : GasNames.Parse("--gas", Gas);
-        if (Temperature is null)
-        {
-            throw new InputException("--temperature is missing: the temperature of the water, for example --temperature 20 or 68F");
-        }
-
-        double celsius = Quantity.TemperatureCelsius("--temperature", Temperature);
-        UncertainQuantity temperature = UncertainQuantity.Read(celsius, QuantityKind.TemperatureDifference, "--temperature", TemperatureUncertainty, TemperatureWithin);
-        WaterSalinity water = WaterSalinity.Read(this, celsius);
+        UncertainQuantity temperature = ReadTemperature();
+        WaterSalinity water = WaterSalinity.Read(this, temperature.Value);
         StationPressure pressure = StationPressure.Parse(Pressure, Altitude, PressureUncertainty, SeaLevelPressure, AirTemperature);
         UncertainQuantity stated = UncertainQuantity.Read(pressure.Hectopascal, QuantityKind.Pressure, "--pressure", PressureUncertainty, PressureWithin);
         List<string> notes = [];
@@ -152,5 +146,18 @@ public sealed record EquilibriumEntry
             DepthMetres = Depth is null ? null : ProbeDepth.Read(Depth, water),
             Notes = notes,
         };
+    }
+
+    /// <summary>Understands the temperature of the water.</summary>
+    /// <exception cref="InputException">It is missing or cannot be read.</exception>
+    internal UncertainQuantity ReadTemperature()
+    {
+        if (Temperature is null)
+        {
+            throw new InputException("--temperature is missing: the temperature of the water, for example --temperature 20 or 68F");
+        }
+
+        double celsius = Quantity.TemperatureCelsius("--temperature", Temperature);
+        return UncertainQuantity.Read(celsius, QuantityKind.TemperatureDifference, "--temperature", TemperatureUncertainty, TemperatureWithin);
     }
 }

@@ -145,17 +145,7 @@ internal sealed class EquilibriumModel(EquilibriumCase asked)
         {
             double given = _inputs[(int)EquilibriumInput.Concentration];
             QuantityKind kind = asked.Measured!.Kind;
-            if (kind == QuantityKind.MassConcentration)
-            {
-                return given;
-            }
-
-            if (kind == QuantityKind.VolumeConcentration)
-            {
-                return GasUnits.MilligramsPerLitreFromMillilitresPerLitre(asked.Gas, given);
-            }
-
-            return GasUnits.MilligramsPerLitreFromMicromolesPerLitre(asked.Gas, kind == QuantityKind.AmountPerKilogram ? given * Density() / 1000 : given);
+            return MeasuredConcentration.MilligramsPerLitre(asked.Gas, kind, given, kind == QuantityKind.AmountPerKilogram ? Density() : double.NaN);
         }
 
         internal double MeasuredPartialPressure()

@@ -37,6 +37,18 @@ public sealed record MeasuredConcentration(QuantityKind Kind, UncertainQuantity 
         return new MeasuredConcentration(kind, UncertainQuantity.Read(value, kind, Option, entry.ConcentrationUncertainty, null), text.Trim());
     }
 
+    /// <summary>Converts a value of one of the kinds.</summary>
+    /// <param name="gas">The gas.</param>
+    /// <param name="kind">The kind in whose canonical unit the value is.</param>
+    /// <param name="given">The value.</param>
+    /// <param name="density">Density of the water, kg/m³; of use for amounts per kilogram only.</param>
+    internal static double MilligramsPerLitre(Gas gas, QuantityKind kind, double given, double density)
+    {
+        return kind == QuantityKind.MassConcentration ? given
+            : kind == QuantityKind.VolumeConcentration ? GasUnits.MilligramsPerLitreFromMillilitresPerLitre(gas, given)
+            : GasUnits.MilligramsPerLitreFromMicromolesPerLitre(gas, kind == QuantityKind.AmountPerKilogram ? given * density / 1000 : given);
+    }
+
     private static QuantityKind KindOf(string text)
     {
         string trimmed = text.Trim();

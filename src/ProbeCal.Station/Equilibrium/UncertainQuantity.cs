@@ -36,7 +36,9 @@ public readonly record struct UncertainQuantity(double Value, double StandardUnc
             : new UncertainQuantity(value, uncertainty is null ? 0 : NotNegative(kind, option + "-uncertainty", uncertainty, "a standard uncertainty is zero or above"));
     }
 
-    private static double NotNegative(QuantityKind kind, string option, string text, string right)
+    /// <summary>Reads a quantity that is zero or above.</summary>
+    /// <exception cref="InputException">It cannot be read or is negative.</exception>
+    internal static double NotNegative(QuantityKind kind, string option, string text, string right)
     {
         double value = Quantity.Parse(kind, option, text);
         return 0 <= value ? value : throw Wrong.Input(option, text, right);

@@ -22,14 +22,14 @@ public enum SalinitySource
 /// <summary>The salinity of the water and where it comes from.</summary>
 public sealed record WaterSalinity
 {
-    private const double MicrosiemensPerMillisiemens = 1000;
+    internal const double MicrosiemensPerMillisiemens = 1000;
 
     /// <summary>Standard uncertainty of the practical salinity scale itself (0.002–0.003 as stated with it, the larger taken).</summary>
     private const double ScaleUncertainty = 0.003;
 
     /// <summary>
-    /// Standard uncertainty of the field manual's relation, as a part of the salinity and at most: fresh water of sea-salt ions comes out 14 % too high by it
-    /// (0.559 for 0.492), sea water 0.26 (35.26 for 35).
+    /// Standard uncertainty of the field manual's relation, as a part of the salinity and at most. The relation gives 0.559 where water of sea-salt ions has 0.492,
+    /// 14 % more, and 35.26 where sea water has 35. Inland water holds other ions, so which of the two is nearer is not known: the whole difference is taken.
     /// </summary>
     private const double FieldRelationRelative = 0.14;
     private const double FieldRelationHighest = 0.3;

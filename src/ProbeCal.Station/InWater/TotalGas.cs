@@ -131,8 +131,8 @@ public sealed record TotalGas
 
     private static double AtDepth(TotalGasReading r, double metres, double density)
     {
-        Status status = TotalDissolvedGas.UncompensatedDelta(r.Delta.Value, metres, density, out double left);
-        return status == Status.Ok ? left : throw new InputException(Invariant($"--depth {metres} m: the pressure of the water is computed from 0 to {HydrostaticPressure.GreatestDepthMetres} m"));
+        Expect(TotalDissolvedGas.UncompensatedDelta(r.Delta.Value, metres, density, out double left), left, r);
+        return left;
     }
 
     private static TotalGasParts PartsOf(TotalGasReading r, double density)
@@ -141,7 +141,7 @@ public sealed record TotalGas
         double celsius = r.Temperature.Value;
         double salinity = r.Salinity.Value;
         double carbonDioxide = r.CarbonDioxideHectopascal ?? 0;
-        UncertainQuantity oxygen = MilligramsPerLitre(r.Oxygen!, density);
+        UncertainQuantity oxygen = new(MilligramsPerLitre(r.Oxygen!.Given.Value), MilligramsPerLitre(r.Oxygen.Given.StandardUncertainty));
         Expect(GasEquilibrium.PartialPressureFromConcentration(Gas.Oxygen, Equation, celsius, salinity, air, oxygen.Value, NearEdge, out double pO2), pO2, r);
         Expect(Saturation.PercentLocal(pO2, celsius, air, NearEdge, out double percentO2), percentO2, r);
         Status status = TotalDissolvedGas.NitrogenArgon(r.Delta.Value, air, celsius, salinity, pO2, carbonDioxide, NearEdge, out double rest, out double percentRest);
@@ -160,14 +160,8 @@ public sealed record TotalGas
         return new TotalGasParts(
             oxygen, new UncertainQuantity(pO2, uO2), new UncertainQuantity(percentO2, uPercentO2),
             new UncertainQuantity(rest, uRest), new UncertainQuantity(percentRest, uPercentRest));
-    }
 
-    private static UncertainQuantity MilligramsPerLitre(MeasuredConcentration measured, double density)
-    {
-        double factor = measured.Kind == QuantityKind.MassConcentration ? 1
-            : measured.Kind == QuantityKind.VolumeConcentration ? GasUnits.MilligramsPerLitreFromMillilitresPerLitre(Gas.Oxygen, 1)
-            : GasUnits.MilligramsPerLitreFromMicromolesPerLitre(Gas.Oxygen, 1) * (measured.Kind == QuantityKind.AmountPerKilogram ? density / 1000 : 1);
-        return new UncertainQuantity(measured.Given.Value * factor, measured.Given.StandardUncertainty * factor);
+        double MilligramsPerLitre(double given) => MeasuredConcentration.MilligramsPerLitre(Gas.Oxygen, r.Oxygen!.Kind, given, density);
     }
 
     private static void Expect(Status status, double value, TotalGasReading r)

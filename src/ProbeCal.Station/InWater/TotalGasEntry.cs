@@ -65,11 +65,6 @@ public sealed record TotalGasEntry
                 : "--total-pressure and --delta-p say the same thing in two ways; give one of them");
         }
 
-        if (Temperature is null)
-        {
-            throw new InputException("--temperature is missing: the temperature of the water, for example --temperature 20 or 68F");
-        }
-
         if (Salinity is null)
         {
             throw new InputException("--salinity is missing: the practical salinity, 0 for fresh water");
@@ -78,11 +73,19 @@ public sealed record TotalGasEntry
         StationPressure air = StationPressure.Parse(Pressure, Altitude, PressureUncertainty, SeaLevelPressure, AirTemperature);
         bool isTotal = TotalPressure is not null;
         double given = isTotal ? Quantity.PressureHectopascal("--total-pressure", TotalPressure!) : Quantity.PressureHectopascal("--delta-p", DeltaPressure!);
-        double celsius = Quantity.TemperatureCelsius("--temperature", Temperature);
-        EquilibriumEntry words = new() { Salinity = Salinity, SalinityUncertainty = SalinityUncertainty, Concentration = Concentration, ConcentrationUncertainty = ConcentrationUncertainty };
-        WaterSalinity water = WaterSalinity.Read(words, celsius);
+        EquilibriumEntry words = new()
+        {
+            Temperature = Temperature,
+            TemperatureUncertainty = TemperatureUncertainty,
+            Salinity = Salinity,
+            SalinityUncertainty = SalinityUncertainty,
+            Concentration = Concentration,
+            ConcentrationUncertainty = ConcentrationUncertainty,
+        };
+        UncertainQuantity temperature = words.ReadTemperature();
+        WaterSalinity water = WaterSalinity.Read(words, temperature.Value);
         MeasuredConcentration? oxygen = MeasuredConcentration.Read(words, water);
-        double? carbonDioxide = CarbonDioxide is null ? null : NotNegative(QuantityKind.Pressure, "--carbon-dioxide", CarbonDioxide, "a partial pressure is zero or above");
+        double? carbonDioxide = CarbonDioxide is null ? null : UncertainQuantity.NotNegative(QuantityKind.Pressure, "--carbon-dioxide", CarbonDioxide, "a partial pressure is zero or above");
         if (carbonDioxide is not null && oxygen is null)
         {
             throw new InputException("--carbon-dioxide plays its part where the total is split, which takes --concentration, the oxygen in the water");
@@ -93,23 +96,12 @@ public sealed record TotalGasEntry
             {
                 Air = air,
                 IsTotalMeasured = isTotal,
-                Delta = new UncertainQuantity(isTotal ? given - air.Hectopascal : given, Uncertainty(QuantityKind.Pressure, "--total-pressure-uncertainty", TotalPressureUncertainty)),
-                Temperature = new UncertainQuantity(celsius, Uncertainty(QuantityKind.TemperatureDifference, "--temperature-uncertainty", TemperatureUncertainty)),
+                Delta = UncertainQuantity.Read(isTotal ? given - air.Hectopascal : given, QuantityKind.Pressure, "--total-pressure", TotalPressureUncertainty, null),
+                Temperature = temperature,
                 Salinity = water.Given,
                 Oxygen = oxygen,
                 CarbonDioxideHectopascal = carbonDioxide,
-                DepthMetres = Depth is null ? null : NotNegative(QuantityKind.Depth, "--depth", Depth, "a depth is zero or above"),
+                DepthMetres = Depth is null ? null : ProbeDepth.Read(Depth, water),
             });
-    }
-
-    private static double Uncertainty(QuantityKind kind, string option, string? text)
-    {
-        return text is null ? 0 : NotNegative(kind, option, text, "a standard uncertainty is zero or above");
-    }
-
-    private static double NotNegative(QuantityKind kind, string option, string text, string right)
-    {
-        double value = Quantity.Parse(kind, option, text);
-        return 0 <= value ? value : throw Wrong.Input(option, text, right);
     }
 }

@@ -1,27 +1,25 @@
 using System;
 using System.Globalization;
 using ProbeCal.Station.Entry;
+using ProbeCal.Station.Equilibrium;
 
 namespace ProbeCal.Station.InWater;
 
-/// <summary>How salty a water is, and what that was taken from.</summary>
+/// <summary>How salty a water is: the salinity as every command reads it (<see cref="WaterSalinity"/>), with the conductivities that belong to it.</summary>
 public sealed record WaterSalt
 {
-    /// <summary>Stated accuracy of the practical salinity scale, taken as one standard uncertainty (from memory).</summary>
-    private const double PracticalSalinityUncertainty = 0.003;
-
     private WaterSalt() { }
 
     /// <summary>Practical salinity.</summary>
     public required double Salinity { get; init; }
 
-    /// <summary>Its standard uncertainty; 0 when it was given as exact.</summary>
+    /// <summary>Its standard uncertainty, with that of the water's temperature where a conductivity was measured at it; 0 when it was given as exact.</summary>
     public required double Uncertainty { get; init; }
 
-    /// <summary><c>given</c>, <c>conductivity</c>, <c>specific-conductance</c> or <c>chlorinity</c>.</summary>
-    public required string Source { get; init; }
+    /// <summary>What it was taken from.</summary>
+    public required SalinitySource Source { get; init; }
 
-    /// <summary>Conductivity at the temperature of the water, mS/cm; null unless given.</summary>
+    /// <summary>Conductivity at the temperature it was measured at, mS/cm; null unless given.</summary>
     public double? ConductivityMillisiemensPerCentimetre { get; private init; }
 
     /// <summary>Specific conductance at 25 °C by linear compensation, or as given, µS/cm; null where there is none.</summary>
@@ -36,86 +34,47 @@ public sealed record WaterSalt
     /// <summary>Chlorinity, g/kg.</summary>
     public double ChlorinityGramsPerKilogram => Salinity / Chlorinity.SalinityPerGramPerKilogram;
 
-    internal static WaterSalt Given(string text, double uncertainty)
+    /// <summary>Reads what the words say of it.</summary>
+    /// <param name="entry">The words.</param>
+    /// <param name="celsius">Temperature of the water, °C.</param>
+    /// <param name="uCelsius">Its standard uncertainty, K.</param>
+    /// <exception cref="InputException">As <see cref="WaterSalinity.Read"/>, or more salt than water is described for.</exception>
+    internal static WaterSalt Read(EquilibriumEntry entry, double celsius, double uCelsius)
     {
-        double salinity = Quantity.Salinity("--salinity", text);
-        return Checked("--salinity", text, salinity, new WaterSalt { Salinity = salinity, Uncertainty = uncertainty, Source = "given" });
-    }
-
-    internal static WaterSalt OfChlorinity(string text)
-    {
-        double chlorinity = Quantity.Parse(QuantityKind.Chlorinity, "--chlorinity", text);
-        return Chlorinity.Salinity(chlorinity, RangeRule.Refuse, out double salinity) == Status.Ok
-            ? new WaterSalt { Salinity = salinity, Uncertainty = 0, Source = "chlorinity" }
-            : throw Wrong.Input("--chlorinity", text, string.Create(CultureInfo.InvariantCulture, $"sea water has 0 to {Chlorinity.HighestGramsPerKilogram:F1} g/kg"));
-    }
-
-    internal static WaterSalt OfConductivity(string text, double uncertainty, double celsius, string temperature, double uCelsius)
-    {
-        double conductivity = Quantity.Parse(QuantityKind.Conductivity, "--conductivity", text);
-        Status status = PracticalSalinity.FromConductivity(conductivity, celsius, 0, RangeRule.NearEdge, out double salinity);
-        if (double.IsNaN(salinity))
+        WaterSalinity water = WaterSalinity.Read(entry, celsius);
+        if (!(0 <= water.Salinity && water.Salinity <= DensityEos80.HighestSalinity))
         {
-            throw StatusParts.Input(status) == InputQuantity.Temperature
-                ? Wrong.Input("--temperature", temperature, string.Create(CultureInfo.InvariantCulture, $"a conductivity gives a practical salinity from {PracticalSalinity.LowestCelsius} to {PracticalSalinity.HighestCelsius} °C"))
-                : Wrong.Input("--conductivity", text, string.Create(CultureInfo.InvariantCulture, $"the scale holds from 0 to what makes a salinity of {PracticalSalinity.HighestSalinity} (is the unit right? mS/cm and uS/cm differ a thousandfold)"));
+            throw new InputException(string.Create(CultureInfo.InvariantCulture, $"{water.Described}: water is described here for practical salinities of 0 to {DensityEos80.HighestSalinity}"));
         }
 
-        PracticalSalinity.Sensitivities(conductivity, celsius, 0, RangeRule.NearEdge, out double perConductivity, out double perKelvin);
-        double micro = conductivity * 1000;
-        Status linear = ConductivityCompensation.Linear(micro, celsius, RangeRule.NearEdge, out double at25);
-        Status natural = ConductivityCompensation.NaturalWater(micro, celsius, RangeRule.NearEdge, out double naturalAt25);
-        Status field = SpecificConductance.Salinity(at25, RangeRule.Refuse, out double fieldSalinity);
-        return new WaterSalt
+        double shared = water.ConductivityTemperature is null ? water.PerKelvin * uCelsius : 0;
+        WaterSalt salt = new()
         {
-            Salinity = salinity,
-            Uncertainty = Math.Sqrt(Square(perConductivity * uncertainty) + Square(perKelvin * uCelsius) + Square(PracticalSalinityUncertainty)),
-            Source = "conductivity",
+            Salinity = water.Salinity,
+            Uncertainty = Math.Sqrt((water.SalinityUncertainty * water.SalinityUncertainty) + (shared * shared)),
+            Source = water.Source,
+            LinearAt25MicrosiemensPerCentimetre = water.Source == SalinitySource.SpecificConductance ? water.Given.Value * WaterSalinity.MicrosiemensPerMillisiemens : null,
+        };
+        return water.Source == SalinitySource.Conductivity ? Compensated(salt, water.Given.Value, water.ConductivityTemperature?.Value ?? celsius) : salt;
+    }
+
+    private static WaterSalt Compensated(WaterSalt salt, double conductivity, double celsius)
+    {
+        double micro = conductivity * WaterSalinity.MicrosiemensPerMillisiemens;
+        ConductivityCompensation.Linear(micro, celsius, RangeRule.NearEdge, out double at25);
+        ConductivityCompensation.NaturalWater(micro, celsius, RangeRule.NearEdge, out double naturalAt25);
+        SpecificConductance.Salinity(at25, RangeRule.Refuse, out double field);
+        return salt with
+        {
             ConductivityMillisiemensPerCentimetre = conductivity,
-            LinearAt25MicrosiemensPerCentimetre = ValueOf(linear, at25),
-            NaturalAt25MicrosiemensPerCentimetre = ValueOf(natural, naturalAt25),
-            FieldRelationSalinity = ValueOf(field, fieldSalinity),
+            LinearAt25MicrosiemensPerCentimetre = OrNull(at25),
+            NaturalAt25MicrosiemensPerCentimetre = OrNull(naturalAt25),
+            FieldRelationSalinity = OrNull(field),
         };
     }
 
-    internal static WaterSalt OfSpecificConductance(string text, double uncertainty)
+    private static double? OrNull(double value)
     {
-        double conductance = Quantity.Parse(QuantityKind.Conductivity, "--specific-conductance", text) * 1000;
-        if (SpecificConductance.Salinity(conductance, RangeRule.Refuse, out double salinity) != Status.Ok)
-        {
-            throw Wrong.Input("--specific-conductance", text, string.Create(CultureInfo.InvariantCulture,
-                $"the relation of the field manual (TM 9-A6.2) holds from 0 to {SpecificConductance.HighestMicrosiemensPerCentimetre} uS/cm at 25 °C"));
-        }
-
-        // A parabola: the difference over one step to either side is its slope.
-        SpecificConductance.Salinity(conductance + 1, RangeRule.Extrapolate, out double above);
-        SpecificConductance.Salinity(conductance - 1, RangeRule.Extrapolate, out double below);
-        double perMicro = (above - below) / 2;
-        // What the relation departs from practical salinity by: 0.07 at 1000 µS/cm, 0.26 at S 35.
-        double own = Math.Sqrt(Square(0.07) + Square(0.007 * salinity));
-        return new WaterSalt
-        {
-            Salinity = salinity,
-            Uncertainty = Math.Sqrt(Square(perMicro * uncertainty * 1000) + Square(own)),
-            Source = "specific-conductance",
-            LinearAt25MicrosiemensPerCentimetre = conductance,
-        };
-    }
-
-    private static WaterSalt Checked(string option, string text, double salinity, WaterSalt salt)
-    {
-        return 0 <= salinity && salinity <= DensityEos80.HighestSalinity
-            ? salt
-            : throw Wrong.Input(option, text, string.Create(CultureInfo.InvariantCulture, $"water is described here for practical salinities of 0 to {DensityEos80.HighestSalinity}"));
-    }
-
-    private static double? ValueOf(Status status, double value)
-    {
-        return status != Status.Ok && double.IsNaN(value) ? null : value;
-    }
-
-    private static double Square(double value)
-    {
-        return value * value;
+        return double.IsNaN(value) ? null : value;
     }
 }
