@@ -45,7 +45,7 @@ internal static class CalibrateCommand
 
     private static async Task<int> RunAsync(CalibrateOptions options, ParseResult parsed, Terminal terminal, CancellationToken cancellationToken)
     {
-        bool json = IsJson(parsed.GetValue(options.Format));
+        bool json = OutputShape.IsJson(parsed.GetValue(options.Format));
         bool manual = parsed.GetValue(options.Manual);
         SourceAddress? address = Address(parsed.GetValue(options.Source), manual);
         LineTemplate? line = address == null ? null : LineTemplate.Parse("--line", parsed.GetValue(options.Line) ?? LineTemplate.UsualText);
@@ -104,17 +104,6 @@ internal static class CalibrateCommand
         {
             terminal.Error.WriteLine("probecal: calibrate: failed: " + reason);
         }
-    }
-
-    /// <summary>True for JSON.</summary>
-    internal static bool IsJson(string? format)
-    {
-        return format switch
-        {
-            null or "text" => false,
-            "json" => true,
-            _ => throw new InputException($"--format {Wrong.Shown(format)}: there are text and json"),
-        };
     }
 
     private static SourceAddress? Address(string? source, bool manual)

@@ -33,7 +33,7 @@ internal static class CalibrationsCommand
         Command command = new("list", "One line for each calibration, oldest first, and whether the chain of records is whole.") { data, probe, format };
         command.SetAction(parsed =>
         {
-            bool json = CalibrateCommand.IsJson(parsed.GetValue(format));
+            bool json = OutputShape.IsJson(parsed.GetValue(format));
             using CalibrationLogStore log = Open(parsed.GetValue(data));
             string? only = parsed.GetValue(probe);
             List<StoredCalibration> wanted = [.. log.Records.Where(stored => only == null || stored.Record.Probe.Id == only)];
@@ -59,7 +59,7 @@ internal static class CalibrationsCommand
         Command command = new("show", "One record, whole.") { id, data, format };
         command.SetAction(parsed =>
         {
-            bool json = CalibrateCommand.IsJson(parsed.GetValue(format));
+            bool json = OutputShape.IsJson(parsed.GetValue(format));
             using CalibrationLogStore log = Open(parsed.GetValue(data));
             string wanted = parsed.GetValue(id)!;
             StoredCalibration stored = log.Find(wanted)

@@ -34,7 +34,7 @@ internal static class EquationsCommand
             string shape = parsed.GetValue(format)!;
             if (Array.IndexOf(Formats, shape) < 0)
             {
-                throw Wrong.Input("--format", shape, "there are text, markdown and json");
+                throw Wrong.Input("--format", shape, $"there is no such form{NearestName.DidYouMean(shape, Formats)}; there are text, markdown and json");
             }
 
             Gas? only = parsed.GetValue(gas) is string given ? GasNames.Parse("--gas", given) : null;

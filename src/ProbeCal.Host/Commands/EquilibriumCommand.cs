@@ -20,8 +20,6 @@ internal static class EquilibriumCommand
 
     private static readonly TimeSpan QuietTime = TimeSpan.FromSeconds(2);
 
-    private static readonly string[] Formats = ["text", "json"];
-
     internal static Command Create(Terminal terminal)
     {
         EquilibriumOptions options = new();
@@ -57,12 +55,7 @@ internal static class EquilibriumCommand
                 return file.Run(parsed, options.Entry(parsed), terminal);
             }
 
-            string shape = parsed.GetValue(format)!;
-            if (Array.IndexOf(Formats, shape) < 0)
-            {
-                throw new InputException($"--format '{Wrong.Shown(shape)}': there are text and json");
-            }
-
+            bool json = OutputShape.IsJson(parsed.GetValue(format)!);
             bool wantsCheck = parsed.GetResult(monteCarlo) is not null;
             int trials = wantsCheck && parsed.GetValue(monteCarlo) is string text ? (int)Number.ParseWhole("--monte-carlo", text, FewestTrials, MostTrials) : UsualTrials;
             string? seedText = parsed.GetValue(seed);
@@ -79,7 +72,7 @@ internal static class EquilibriumCommand
             }
 
             MonteCarloReport? check = wantsCheck ? Check(terminal, result, trials, seedNumber) : null;
-            if (shape == "json")
+            if (json)
             {
                 terminal.Output.WriteLine(EquilibriumJson.Of(result, check));
             }

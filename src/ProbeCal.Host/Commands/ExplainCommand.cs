@@ -1,4 +1,3 @@
-using System;
 using System.CommandLine;
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Equilibrium;
@@ -8,8 +7,6 @@ namespace ProbeCal.Host.Commands;
 /// <summary><c>probecal explain</c>: an equilibrium value as a person would check it by hand.</summary>
 internal static class ExplainCommand
 {
-    private static readonly string[] Formats = ["text", "json"];
-
     internal static Command Create(Terminal terminal)
     {
         EquilibriumOptions options = new();
@@ -31,12 +28,7 @@ internal static class ExplainCommand
         command.Options.Add(format);
         command.SetAction(parsed =>
         {
-            string shape = parsed.GetValue(format)!;
-            if (Array.IndexOf(Formats, shape) < 0)
-            {
-                throw Wrong.Input("--format", shape, "there are text and json");
-            }
-
+            bool json = OutputShape.IsJson(parsed.GetValue(format)!);
             EquilibriumCase asked = options.Entry(parsed).Read();
             ExplainedEquilibrium explained = ExplainedEquilibrium.Of(asked);
             foreach (string note in asked.Notes)
@@ -44,7 +36,7 @@ internal static class ExplainCommand
                 terminal.Error.WriteLine("note: " + note);
             }
 
-            if (shape == "json")
+            if (json)
             {
                 terminal.Output.WriteLine(ExplanationJson.Of(explained));
             }

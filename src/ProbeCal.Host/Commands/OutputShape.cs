@@ -8,15 +8,15 @@ internal static class OutputShape
 {
     private static readonly string[] Shapes = ["text", "json"];
 
-    /// <summary>True for JSON.</summary>
+    /// <summary>True for JSON; text when nothing is said.</summary>
     /// <exception cref="InputException">It is neither text nor json.</exception>
-    internal static bool IsJson(string shape)
+    internal static bool IsJson(string? shape)
     {
-        return Array.IndexOf(Shapes, shape) switch
+        return Array.IndexOf(Shapes, shape ?? Shapes[0]) switch
         {
             0 => false,
             1 => true,
-            _ => throw Wrong.Input("--format", shape, $"there is no such form{NearestName.DidYouMean(shape, Shapes)}; there are text and json"),
+            _ => throw Wrong.Input("--format", shape!, $"there is no such form{NearestName.DidYouMean(shape!, Shapes)}; there are text and json"),
         };
     }
 }
