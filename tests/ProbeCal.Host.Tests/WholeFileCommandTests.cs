@@ -114,6 +114,58 @@ public sealed class WholeFileCommandTests : IDisposable
         Assert.StartsWith("standard input: 2 columns separated by comma", error.ToString(), StringComparison.Ordinal);
     }
 
+    /// <summary>The input is the same file by way of a folder that is a link, and --force is there: it stays as it is.</summary>
+    [Fact]
+    public async Task TheInput_IsNeverOverwritten_ThroughALinkedFolder()
+    {
+        string real = Directory.CreateDirectory(Path.Combine(_folder, "real")).FullName;
+        string linked = Directory.CreateSymbolicLink(Path.Combine(_folder, "linked"), real).FullName;
+        string input = Write(Path.Combine("real", "june.csv"), "T\n20\n");
+        Run run = await Run.OfAsync("equilibrium", "--input", input, "--output", Path.Combine(linked, "june.csv"), "--force", "--column", "temperature=T", "--salinity", "0", "--altitude", "640m");
+        Assert.Equal((2, "T\n20\n"), (run.ExitCode, File.ReadAllText(input)));
+        Assert.Contains("this is the input, which is never overwritten", run.ErrorLine, StringComparison.Ordinal);
+        Assert.Equal([input], Directory.GetFiles(real));
+    }
+
+    /// <summary>Another program finishes the same output first, after it was seen to be free: its file stays, and nothing is left beside it.</summary>
+    [Fact]
+    public async Task AnOutputThatCameMeanwhile_IsNotReplaced()
+    {
+        string output = Path.Combine(_folder, "out.csv");
+        StringWriter error = new();
+        Terminal terminal = new()
+        {
+            Input = TextReader.Null,
+            Output = TextWriter.Null,
+            Error = error,
+            Time = TimeProvider.System,
+            Stop = CancellationToken.None,
+            InputBytes = () => new EndingStream("T\n20\n"u8.ToArray(), () => File.WriteAllText(output, "the other's\n")),
+        };
+        int code = await Program.RunAsync(["equilibrium", "--input", "-", "--output", output, "--column", "temperature=T", "--salinity", "0", "--altitude", "640m"], terminal);
+        Assert.Equal((2, "the other's\n"), (code, File.ReadAllText(output)));
+        // The header was read and the output free when the work began.
+        Assert.StartsWith("standard input: 1 columns", error.ToString(), StringComparison.Ordinal);
+        Assert.Contains("this file exists already", error.ToString(), StringComparison.Ordinal);
+        Assert.Equal([output], Directory.GetFiles(_folder));
+    }
+
+    /// <summary>Tables that no person made: a bounded line, whatever their size.</summary>
+    [Fact]
+    public async Task AMessage_IsNoLongerThanAPersonReads()
+    {
+        string wide = Write("wide.csv", string.Join(',', Enumerable.Range(0, 100_000).Select(static i => "c" + Text(i))) + "\n");
+        string remarks = Write("remarks.csv", string.Concat(Enumerable.Repeat("#" + new string('x', 100_000) + "\n", 12)) + "T\n20\n");
+        string[] rest = ["--output", Path.Combine(_folder, "out.csv"), "--salinity", "0", "--altitude", "640m", "--column"];
+        Run unknown = await Run.OfAsync(["equilibrium", "--input", wide, .. rest, "temperature=c100000"]);
+        Assert.Equal(2, unknown.ExitCode);
+        Assert.EndsWith("c38, c39 and 99960 more", unknown.ErrorLine, StringComparison.Ordinal);
+        Assert.InRange(unknown.ErrorLine.Length, 1, 1000);
+        Run before = await Run.OfAsync(["equilibrium", "--input", remarks, .. rest, "temperature=T"]);
+        Assert.Equal(2, before.ExitCode);
+        Assert.EndsWith("more than a megabyte stands before the header; take the remarks out", before.ErrorLine, StringComparison.Ordinal);
+    }
+
     /// <summary>What the options lack or say twice is said once, before anything is written.</summary>
     [Theory]
     [InlineData("--output is missing", "--input", "IN", "--column", "temperature=T")]
@@ -181,6 +233,26 @@ public sealed class WholeFileCommandTests : IDisposable
         string path = Path.Combine(_folder, name);
         File.WriteAllText(path, text);
         return path;
+    }
+
+    /// <summary>Gives its bytes in one piece, and does something when it is asked for more.</summary>
+    private sealed class EndingStream(byte[] bytes, Action atEnd) : MemoryStream(bytes)
+    {
+        public override int Read(Span<byte> buffer)
+        {
+            return Told(base.Read(buffer));
+        }
+
+        public override int Read(byte[] buffer, int offset, int count)
+        {
+            return Told(base.Read(buffer, offset, count));
+        }
+
+        private int Told(int read)
+        {
+            if (read == 0) { atEnd(); }
+            return read;
+        }
     }
 
     private static string Text(double value)

@@ -52,6 +52,34 @@ public sealed class WholeFileTests
         Assert.EndsWith(",ok", File.ReadLines(output).Last(), StringComparison.Ordinal);
     }
 
+    /// <summary>
+    /// The file system takes no more of the output: no space is left on standard output, or the file is larger than it may be (here by a limit of the process). One line,
+    /// the old output whole, nothing left beside it.
+    /// </summary>
+    [Fact]
+    public async Task Full_disk_leaves_the_old_output_whole()
+    {
+        using TemporaryFolder folder = new();
+        string input = folder["season.csv"], output = folder["result.csv"];
+        await File.WriteAllTextAsync(input, "T\n" + string.Concat(Enumerable.Repeat("12.5\n", Rows)));
+        await File.WriteAllTextAsync(output, "the old one\n");
+        string[] line = Programs.CommandLine(["equilibrium", "--input", input, "--output", output, "--force", "--column", "temperature=T [C]", "--salinity", "0", "--pressure", "938hPa"]);
+        // The runtime maps its own code through a file, which the limit would meet too.
+        using (OutsideProcess limited = OutsideProcess.Start("/bin/sh", ["-c", "trap '' XFSZ; ulimit -f 500; export DOTNET_EnableWriteXorExecute=0; exec \"$@\"", "sh", .. line]))
+        {
+            Assert.Equal(1, await limited.ExitCodeAsync(Deadline));
+            Assert.Equal($"probecal: --output {output}: cannot be written (the file would be larger than its file system takes)", limited.Error()[^1]);
+        }
+
+        Assert.Equal("the old one\n", await File.ReadAllTextAsync(output));
+        Assert.Equal(2, Directory.GetFiles(folder.Path).Length);
+
+        string[] toOutput = Programs.CommandLine(["equilibrium", "--input", input, "--output", "-", "--column", "temperature=T [C]", "--salinity", "0", "--pressure", "938hPa"]);
+        using OutsideProcess full = OutsideProcess.Start("/bin/sh", ["-c", "\"$@\" > /dev/full", "sh", .. toOutput]);
+        Assert.Equal(1, await full.ExitCodeAsync(Deadline));
+        Assert.StartsWith("probecal: the system refused to read or write: ", full.Error()[^1], StringComparison.Ordinal);
+    }
+
     [Fact]
     public async Task Dashes_read_and_write_the_standard_streams()
     {

@@ -2,6 +2,7 @@ using System;
 using System.IO;
 using System.Text;
 using ProbeCal.Station.Entry;
+using ProbeCal.Station.Storage;
 
 namespace ProbeCal.Station.TableWriting;
 
@@ -16,6 +17,11 @@ public static class TableFile
     /// <exception cref="InputException">A file that differs is there, or the folder is a file.</exception>
     public static bool Write(string folder, WrittenTable table, bool force)
     {
+        if (string.IsNullOrWhiteSpace(folder))
+        {
+            throw Wrong.Input("--output", folder, "name the folder that the table goes into, or - for standard output");
+        }
+
         if (File.Exists(folder))
         {
             throw Wrong.Input("--output", folder, "this is a file; name the folder that the table goes into, or - for standard output");
@@ -37,14 +43,15 @@ public static class TableFile
 
             if (!force)
             {
-                throw Wrong.Input("--output", folder, table.FileName + " is there already and differs; another --name keeps both, --force replaces it");
+                throw Differs();
             }
         }
 
         Directory.CreateDirectory(folder);
-        string part = path + ".part";
-        File.WriteAllBytes(part, content);
-        File.Move(part, path, overwrite: true);
-        return true;
+        using NewFile file = new(path);
+        file.Stream.Write(content);
+        return file.Keep(force) ? true : throw Differs();
+
+        InputException Differs() => Wrong.Input("--output", folder, table.FileName + " is there already and differs; another --name keeps both, --force replaces it");
     }
 }

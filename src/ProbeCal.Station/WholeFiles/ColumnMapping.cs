@@ -183,9 +183,17 @@ internal sealed class ColumnMapping
         return at.Length switch
         {
             1 => at[0],
-            0 => throw Wrong.Input(What, _given, $"there is no column {Wrong.Shown(name)}{NearestName.DidYouMean(name, header)}; there are {Wrong.OneLine(string.Join(", ", header))}"),
+            0 => throw Wrong.Input(What, _given, $"there is no column {Wrong.Shown(name)}{NearestName.DidYouMean(name, header)}; there are {Columns(header)}"),
             _ => throw Wrong.Input(What, _given, string.Create(CultureInfo.InvariantCulture, $"{at.Length} columns are called {Wrong.Shown(name)}; say which by its number, for example \"{Quantity.Name}=#{at[0] + 1}\"")),
         };
+    }
+
+    /// <summary>The names of the columns, as many as a person reads.</summary>
+    private static string Columns(IReadOnlyList<string> header)
+    {
+        const int Most = 40;
+        string names = string.Join(", ", header.Take(Most).Select(Wrong.Shown));
+        return header.Count <= Most ? names : string.Create(CultureInfo.InvariantCulture, $"{names} and {header.Count - Most} more");
     }
 
     private bool NumberOf(out int number)

@@ -1,25 +1,26 @@
 using System;
 using System.IO;
 using ProbeCal.Station.Entry;
+using ProbeCal.Station.Storage;
 
 namespace ProbeCal.Station.WholeFiles;
 
 /// <summary>
-/// The output while it is being made: a file beside the one that is meant, which takes its place at the end. Whoever pulls
-/// the plug leaves the old file whole.
+/// The output of a whole file: a <see cref="NewFile"/> that is never the input, or standard output.
 /// </summary>
 internal sealed class ResultFile : IDisposable
 {
     private const string Dash = "-";
 
-    private readonly string _path;
-    private readonly string? _temporary;
-    private bool _kept;
+    private readonly string _shown;
+    private readonly NewFile? _file;
+    private readonly bool _force;
 
-    private ResultFile(string path, string? temporary, Stream stream)
+    private ResultFile(string shown, NewFile? file, bool force, Stream stream)
     {
-        _path = path;
-        _temporary = temporary;
+        _shown = shown;
+        _file = file;
+        _force = force;
         Stream = stream;
     }
 
@@ -37,7 +38,12 @@ internal sealed class ResultFile : IDisposable
     {
         if (output == Dash)
         {
-            return new ResultFile(output, null, standardOutput());
+            return new ResultFile(output, null, force, standardOutput());
+        }
+
+        if (string.IsNullOrWhiteSpace(output))
+        {
+            throw Wrong.Input("--output", output, "name the file that the rows go into, or - for standard output");
         }
 
         string path = Target(output);
@@ -53,13 +59,13 @@ internal sealed class ResultFile : IDisposable
 
         if (File.Exists(path) && !force)
         {
-            throw Wrong.Input("--output", output, "this file exists already; give another name, or --force to replace it");
+            throw Exists(output);
         }
 
-        string temporary = path + "." + Path.GetRandomFileName() + ".partial";
         try
         {
-            return new ResultFile(path, temporary, new FileStream(temporary, FileMode.CreateNew, FileAccess.Write, FileShare.Read, 1 << 16));
+            NewFile file = new(path);
+            return new ResultFile(output, file, force, file.Stream);
         }
         catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
         {
@@ -68,41 +74,48 @@ internal sealed class ResultFile : IDisposable
     }
 
     /// <summary>Puts the finished output in its place.</summary>
+    /// <exception cref="InputException">A file has come there meanwhile, and nobody said to replace it.</exception>
     internal void Keep()
     {
-        if (_temporary is null)
+        if (_file is null)
         {
             Stream.Flush();
         }
-        else
+        else if (!_file.Keep(_force))
         {
-            ((FileStream)Stream).Flush(flushToDisk: true);
-            Stream.Dispose();
-            File.Move(_temporary, _path, overwrite: true);
+            throw Exists(_shown);
         }
-
-        _kept = true;
     }
 
     /// <summary>Without <see cref="Keep"/>, what was written goes.</summary>
     public void Dispose()
     {
-        if (_temporary is null)
-        {
-            return;
-        }
-
-        Stream.Dispose();
-        if (!_kept)
-        {
-            File.Delete(_temporary);
-        }
+        _file?.Dispose();
     }
 
-    /// <summary>The file behind a path, through links.</summary>
+    private static InputException Exists(string output)
+    {
+        return Wrong.Input("--output", output, "this file exists already; give another name, or --force to replace it");
+    }
+
+    /// <summary>The file behind a path, through links, be it the file or a folder above it that is one.</summary>
     private static string Target(string path)
     {
         string full = Path.GetFullPath(path);
-        return File.Exists(full) ? File.ResolveLinkTarget(full, returnFinalTarget: true)?.FullName ?? full : full;
+        full = File.Exists(full) ? File.ResolveLinkTarget(full, returnFinalTarget: true)?.FullName ?? full : full;
+        string? folder = Path.GetDirectoryName(full);
+        return folder is null ? full : Path.Combine(FolderBehind(folder), Path.GetFileName(full));
+    }
+
+    private static string FolderBehind(string folder)
+    {
+        string? above = Path.GetDirectoryName(folder);
+        if (above is null)
+        {
+            return folder;
+        }
+
+        string here = Path.Combine(FolderBehind(above), Path.GetFileName(folder));
+        return Directory.Exists(here) && Directory.ResolveLinkTarget(here, returnFinalTarget: true)?.FullName is string target ? FolderBehind(target) : here;
     }
 }

@@ -10,6 +10,10 @@ namespace ProbeCal.Station.WholeFiles;
 internal sealed class TableHeader
 {
     private const string Utf8Mark = "\u00EF\u00BB\u00BF";
+
+    /// <summary>Most that is kept of what stands before the header: a megabyte of remarks is no remark.</summary>
+    private const long MostBytesBefore = 1 << 20;
+
     private static readonly (string Name, char Character)[] Separators = [("comma", ','), ("semicolon", ';'), ("tab", '\t')];
 
     private TableHeader() { }
@@ -47,6 +51,7 @@ internal sealed class TableHeader
     {
         char? stated = separator is null ? null : SeparatorOf(separator);
         List<string> before = [];
+        long bytes = 0;
         string mark = "";
         while (lines.Next(out string end) is string text)
         {
@@ -61,7 +66,8 @@ internal sealed class TableHeader
             if (!isHeader)
             {
                 before.Add(text);
-                if (1000 < before.Count)
+                bytes += text.Length;
+                if (1000 < before.Count || MostBytesBefore < bytes)
                 {
                     break;
                 }
@@ -83,7 +89,9 @@ internal sealed class TableHeader
             };
         }
 
-        throw new InputException(line is long asked
+        throw new InputException(MostBytesBefore < bytes
+            ? $"{name}: more than a megabyte stands before the header; take the remarks out"
+            : line is long asked
             ? string.Create(CultureInfo.InvariantCulture, $"{name}: there is no line {asked} for the header")
             : $"{name}: there is no header; the first line that is neither blank nor a comment (#) names the columns");
     }

@@ -76,13 +76,22 @@ public static class WholeFile
         }
 
         RowCounts counts = new();
-        using (IRowWriter writer = Writer(request, formula, header, output.Stream))
+        try
         {
-            writer.Header(header);
-            WriteRows(request, formula, lines, header, mappings, writer, counts, surroundings, stop);
+            using (IRowWriter writer = Writer(request, formula, header, output.Stream))
+            {
+                writer.Header(header);
+                WriteRows(request, formula, lines, header, mappings, writer, counts, surroundings, stop);
+            }
+
+            output.Keep();
+        }
+        catch (ArgumentOutOfRangeException fault) when (fault.ParamName == "value")
+        {
+            // What the runtime makes of a file that has grown larger than its file system takes, 4 GB on many a memory card.
+            throw new WorkFailedException($"--output {Wrong.Shown(request.Output)}: cannot be written (the file would be larger than its file system takes)", fault);
         }
 
-        output.Keep();
         counts.Tell(surroundings.Say);
     }
 
@@ -169,6 +178,11 @@ public static class WholeFile
         if (path == "-")
         {
             return surroundings.StandardInput();
+        }
+
+        if (string.IsNullOrWhiteSpace(path))
+        {
+            throw Wrong.Input("--input", path, "name the file with the conditions, or - for standard input");
         }
 
         if (Directory.Exists(path))

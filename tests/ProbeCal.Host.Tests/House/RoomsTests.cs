@@ -52,10 +52,10 @@ public class RoomsTests
     {
         ["Entry"] = [],
         ["Equilibrium"] = ["Entry", "Uncertainty"],
-        ["WholeFiles"] = ["Entry", "Equilibrium"],
+        ["WholeFiles"] = ["Entry", "Equilibrium", "Storage"],
         ["InWater"] = ["Entry", "Equilibrium"],
         ["Storage"] = ["Entry"],
-        ["TableWriting"] = ["Entry"],
+        ["TableWriting"] = ["Entry", "Storage"],
         ["Uncertainty"] = [],
         ["Simulation"] = ["Entry", "Sources"],
         ["Sources"] = ["Entry", "Simulation"],
