@@ -98,6 +98,19 @@ public sealed class TablesTests : IDisposable
     [InlineData("--format", "pdf", "csv, json, c-float, c-double, csharp, card")]
     [InlineData("--error", "tiny", "tiny")]
     [InlineData("--gas", "oxigen", "did you mean oxygen?")]
+    [InlineData("--temperature", "0...40C", "a range has two dots")]
+    [InlineData("--temperature", "-1e9..1e9C", "lie within a million")]
+    [InlineData("--temperature", "0..1e400C", "the number is too large")]
+    [InlineData("--temperature", "\u22122..40C", "the minus sign is another character; write -2")]
+    [InlineData("--temperature", "40..0C", "from low to high")]
+    [InlineData("--temperature-step", "1e40K", "no whole number of such steps")]
+    [InlineData("--temperature-step", "1e-12K", "more than 4000 of them")]
+    [InlineData("--error", "1e-300mg/L", "cannot be reached")]
+    [InlineData("--error", "0mg/L", "above zero")]
+    [InlineData("--mole-fraction", "21", "a mole fraction lies above 0 and is at most 1")]
+    [InlineData("--mole-fraction", "20xx", "xx is no unit of a mole fraction")]
+    [InlineData("--output", "", "name the folder")]
+    [InlineData("--name", "../x", "small letters, digits and single hyphens")]
     public async Task Wrong_input_is_one_line_with_exit_2(string option, string value, string right)
     {
         string[] arguments = [.. Usual];
@@ -105,8 +118,26 @@ public sealed class TablesTests : IDisposable
         arguments = at < 0 ? [.. Usual, option, value] : [.. Usual[..(at + 1)], value, .. Usual[(at + 2)..]];
         Run run = await Run.OfAsync(arguments);
         Assert.Equal((2, ""), (run.ExitCode, run.Output));
-        Assert.Contains(right, run.ErrorLine, StringComparison.Ordinal);
-        Assert.DoesNotContain('\n', run.ErrorLine);
+        Assert.Contains(right, LastLine(run), StringComparison.Ordinal);
+        Assert.StartsWith("probecal: ", LastLine(run), StringComparison.Ordinal);
+    }
+
+    /// <summary>A share is written as in the other commands, with a unit or as a bare number.</summary>
+    [Fact]
+    public async Task A_mole_fraction_has_the_units_of_the_other_commands()
+    {
+        string[] usual = ["tables", "--gas", "CO2", "--temperature", "0..30C", "--pressure", "1atm", "--salinity", "0", "--error", "1%", "--format", "csv"];
+        Run bare = await Run.OfAsync([.. usual, "--mole-fraction", "0.00042"]);
+        Assert.Equal(0, bare.ExitCode);
+        Assert.Equal(bare.Output, (await Run.OfAsync([.. usual, "--mole-fraction", "420ppm"])).Output);
+    }
+
+    [Fact]
+    public async Task Values_that_would_all_be_written_as_0_are_refused()
+    {
+        Run run = await Run.OfAsync("tables", "--mole-fraction", "1e-300", "--temperature", "0..30C", "--temperature-step", "1K", "--pressure", "1atm", "--salinity", "0", "--format", "csv");
+        Assert.Equal((2, ""), (run.ExitCode, run.Output));
+        Assert.Contains("too small to be written", LastLine(run), StringComparison.Ordinal);
     }
 
     [Fact]

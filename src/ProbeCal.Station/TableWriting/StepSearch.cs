@@ -20,6 +20,9 @@ internal sealed class StepSearch
     /// <summary>How many tables are tried at most.</summary>
     private const int ProofsTried = 24;
 
+    /// <summary>Most decimals that a value is written with.</summary>
+    private const int MostDecimals = 24;
+
     /// <summary>How many tables in a row may bring next to nothing.</summary>
     private const int ProofsInVain = 4;
 
@@ -95,6 +98,11 @@ internal sealed class StepSearch
 
         GasTable table = Make(rows, columns, decimals ?? (_allowed is null ? DecimalsForSteps(rows, columns) : DecimalsFor(_allowed, rows, columns)));
         ErrorProof proof = ErrorProof.Over(table, _progress, _stop);
+        if (100 <= proof.LargestPercent && proof.Largest <= Math.Pow(10, -MostDecimals))
+        {
+            throw new InputException($"the values of this table are too small to be written with {MostDecimals} decimals: all of them would be 0; look at --mole-fraction and its unit");
+        }
+
         if (_allowed is null || _allowed.IsMetBy(proof))
         {
             return (table, proof);
@@ -289,7 +297,7 @@ internal sealed class StepSearch
 
     private static int DecimalsOf(double step)
     {
-        return Math.Clamp((int)Math.Ceiling(-Math.Log10(step)), 0, 24);
+        return Math.Clamp((int)Math.Ceiling(-Math.Log10(step)), 0, MostDecimals);
     }
 
     /// <summary>The smallest value at the corners; the quantities here are monotone along each axis.</summary>

@@ -73,6 +73,11 @@ internal sealed record TableAxis(AxisQuantity Quantity, double First, double Las
     /// <summary>How many steps of that length the range falls into; null when the last one would not end at its end.</summary>
     internal int? StepsOf(double step)
     {
+        if (Last - First < step)
+        {
+            return null;
+        }
+
         decimal steps = ((decimal)Last - (decimal)First) / (decimal)step;
         return steps == decimal.Truncate(steps) && 1 <= steps && steps <= TableLimits.MostSteps ? (int)steps : null;
     }

@@ -65,7 +65,7 @@ internal sealed record TableRequest(
     {
         Gas gas = o.Gas is null ? Gas.Oxygen : GasNames.Parse("--gas", o.Gas);
         SolubilityEquation equation = EquationNames.ParseOrDefault("--equation", o.Equation, gas);
-        double fraction = o.MoleFraction is null ? DryAir.MoleFraction(gas) : Number.Parse("--mole-fraction", o.MoleFraction);
+        double fraction = o.MoleFraction is null ? DryAir.MoleFraction(gas) : Quantity.Parse(QuantityKind.MoleFraction, "--mole-fraction", o.MoleFraction);
         if (double.IsNaN(fraction))
         {
             throw new InputException($"--mole-fraction is missing: air holds no settled share of {GasNames.NameOf(gas)}; give the mole fraction in the dry gas phase, for example --mole-fraction 1e-6");
@@ -191,6 +191,11 @@ internal static class TableRange
         }
 
         string upper = text[(dots + 2)..];
+        if (upper.StartsWith('.'))
+        {
+            throw Wrong.Input(option, text, "a range has two dots; write for example " + example);
+        }
+
         string lower = text[..dots];
         string what = option + " " + Wrong.Shown(text) + ":";
         // The unit behind the upper end holds for the lower one too.
@@ -209,7 +214,12 @@ internal static class TableRange
             throw Wrong.Input(option, text, $"the sides of a table are in {kind.CanonicalUnit.Name}; write for example {example}");
         }
 
-        if (!(Math.Abs(low) < Widest && Math.Abs(high) < Widest) || Math.Round(low, 4) != low || Math.Round(high, 4) != high)
+        if (!(Math.Abs(low) < Widest && Math.Abs(high) < Widest))
+        {
+            throw Wrong.Input(option, text, "the ends of a table lie within a million; write for example " + example);
+        }
+
+        if (Math.Round(low, 4) != low || Math.Round(high, 4) != high)
         {
             throw Wrong.Input(option, text, "the ends of a table are numbers of at most four decimals");
         }
