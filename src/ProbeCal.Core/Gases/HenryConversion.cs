@@ -35,6 +35,8 @@ public static class HenryConversion
         double fromFactor = PerHcp(from, kelvin, densityKilogramsPerCubicMetre);
         double toFactor = PerHcp(to, kelvin, densityKilogramsPerCubicMetre);
         if (fromFactor <= 0.0 || toFactor <= 0.0) { return Status.DensityAboveRange; }
+        if (InputCheck.NotFinite(JoulesPerMoleKelvin * kelvin)) { return Status.TemperatureAboveRange; }
+        if (InputCheck.NotFinite(fromFactor) || InputCheck.NotFinite(toFactor)) { return Status.DensityBelowRange; }
         if (from == to)
         {
             converted = constant;
@@ -46,15 +48,14 @@ public static class HenryConversion
         {
             double product = constant * fromFactor;
             if (product <= 0.0) { return Status.CoefficientBelowRange; }
+            if (InputCheck.NotFinite(product)) { return Status.CoefficientAboveRange; }
             solubility = 1.0 / product;
         }
 
         double value = solubility * toFactor;
-        if (IsVolatility(to))
-        {
-            if (value <= 0.0) { return Status.CoefficientBelowRange; }
-            value = 1.0 / value;
-        }
+        // So small that nothing of it is left: a zero would pass for a gas that does not dissolve.
+        if (value <= 0.0) { return Status.CoefficientBelowRange; }
+        if (IsVolatility(to)) { value = 1.0 / value; }
 
         return InputCheck.Deliver(value, status, Status.CoefficientAboveRange, out converted);
     }

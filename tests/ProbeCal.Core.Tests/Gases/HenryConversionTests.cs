@@ -88,6 +88,31 @@ public class HenryConversionTests(ITestOutputHelper output)
         Assert.True(double.IsNaN(none));
     }
 
+    /// <summary>What leaves the numbers on the way is refused, and never comes out as a zero with Ok.</summary>
+    [Theory]
+    [InlineData(HenryForm.Hcc, HenryForm.Hcp, 1.0, 1.0e308, 997.0, Status.TemperatureAboveRange)]
+    [InlineData(HenryForm.Hcp, HenryForm.Kcc, 1.0, 1.0e308, 997.0, Status.TemperatureAboveRange)]
+    [InlineData(HenryForm.Hbp, HenryForm.Hcp, 1.0, 25.0, 1.0e-310, Status.DensityBelowRange)]
+    [InlineData(HenryForm.Hcp, HenryForm.Hxp, 1.0, 25.0, 1.0e-311, Status.DensityBelowRange)]
+    [InlineData(HenryForm.Hcc, HenryForm.Hcp, 5.0e-324, 25.0, 997.0, Status.CoefficientBelowRange)]
+    [InlineData(HenryForm.Kcc, HenryForm.Hcp, 1.0e308, 25.0, 997.0, Status.CoefficientAboveRange)]
+    public void Extremes_AreRefused(HenryForm from, HenryForm to, double constant, double celsius, double density, Status expected)
+    {
+        Assert.Equal(expected, HenryConversion.Convert(from, to, constant, celsius, density, out double converted));
+        Assert.True(double.IsNaN(converted));
+    }
+
+    /// <summary>The guideline's fits begin at the lowest data: whole degrees as seen second-hand.</summary>
+    [Theory]
+    [InlineData(Gas.Oxygen, 1.0)]
+    [InlineData(Gas.Nitrogen, 5.0)]
+    [InlineData(Gas.CarbonDioxide, 1.0)]
+    [InlineData(Gas.Methane, 2.0)]
+    public void Guideline_BeginsAtItsLowestData(Gas gas, double celsius)
+    {
+        Assert.Equal(celsius, FernandezPrini2003.LowestCelsius(gas), 0.5);
+    }
+
     /// <summary>kH as the international guideline prints it at 300 K (second-hand, to 0.00005 in the logarithm), by way of Hcp and the conversion.</summary>
     [Theory]
     [InlineData(Gas.Helium, 2.6576)]
