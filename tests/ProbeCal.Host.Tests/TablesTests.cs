@@ -138,6 +138,9 @@ public sealed class TablesTests : IDisposable
         Run run = await Run.OfAsync("tables", "--mole-fraction", "1e-300", "--temperature", "0..30C", "--temperature-step", "1K", "--pressure", "1atm", "--salinity", "0", "--format", "csv");
         Assert.Equal((2, ""), (run.ExitCode, run.Output));
         Assert.Contains("too small to be written", LastLine(run), StringComparison.Ordinal);
+        Run card = await Run.OfAsync("tables", "--mole-fraction", "1e-300", "--temperature", "0..30C", "--site-altitude", "640m", "--salinity", "0", "--format", "card");
+        Assert.Equal((2, ""), (card.ExitCode, card.Output));
+        Assert.Contains("too small to be printed", LastLine(card), StringComparison.Ordinal);
     }
 
     [Fact]

@@ -133,6 +133,7 @@ public class TotalGasTests
     [InlineData("--salinity 45: total gas is computed from 0 to 40", "--delta-p", "0hPa", "--pressure", "745mmHg", "--temperature", "20", "--salinity", "45")]
     [InlineData("the pressure of the air of 300 hPa is outside what is computed", "--delta-p", "0hPa", "--pressure", "300hPa", "--temperature", "20", "--salinity", "0", "--concentration", "3mg/L")]
     [InlineData("--depth 2000m: the pressure of the water is computed from 0 to 1000 m", "--delta-p", "0hPa", "--pressure", "745mmHg", "--temperature", "20", "--salinity", "0", "--depth", "2000m")]
+    [InlineData("the stated uncertainties are too large to be worked with", "--delta-p", "0hPa", "--pressure", "745mmHg", "--temperature", "20", "--salinity", "0", "--total-pressure-uncertainty", "1e300hPa")]
     [InlineData("--depth 2: a depth carries its unit", "--delta-p", "0hPa", "--pressure", "745mmHg", "--temperature", "20", "--salinity", "0", "--depth", "2")]
     public async Task WrongInput_IsOneLine(string says, params string[] arguments)
     {

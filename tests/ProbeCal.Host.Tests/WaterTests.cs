@@ -140,6 +140,10 @@ public class WaterTests
     [InlineData("--salinity-uncertainty belongs to --salinity, which is not given", "--temperature", "20", "--chlorinity", "19", "--salinity-uncertainty", "1")]
     [InlineData("--conductivity-uncertainty belongs to --conductivity or --specific-conductance, which is not given", "--temperature", "20", "--salinity", "5", "--conductivity-uncertainty", "1uS/cm")]
     [InlineData("--temperature-uncertainty -1K: a standard uncertainty is zero or above", "--temperature", "20", "--salinity", "5", "--temperature-uncertainty", "-1K")]
+    [InlineData("the stated uncertainties are too large to be worked with", "--temperature", "20", "--salinity", "5", "--temperature-uncertainty", "1e300K", "--format", "json")]
+    [InlineData("the stated uncertainties are too large to be worked with", "--temperature", "20", "--salinity", "5", "--salinity-uncertainty", "1e308")]
+    [InlineData("the stated uncertainties are too large to be worked with", "--temperature", "20", "--conductivity", "5mS/cm", "--conductivity-uncertainty", "1e308uS/cm")]
+    [InlineData("the stated uncertainties are too large to be worked with", "--temperature", "20", "--chlorinity", "5", "--chlorinity-uncertainty", "1e308", "--format", "json")]
     [InlineData("--format xml: there is no such form; there are text and json", "--temperature", "20", "--salinity", "5", "--format", "xml")]
     public async Task WrongInput_IsOneLine(string says, params string[] arguments)
     {

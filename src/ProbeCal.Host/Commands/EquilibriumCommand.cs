@@ -13,7 +13,7 @@ internal static class EquilibriumCommand
 {
     private const int UsualTrials = 1_000_000;
     private const int FewestTrials = 1_000;
-    private const int MostTrials = 100_000_000;
+    private const int MostTrials = 10_000_000;
 
     /// <summary>The seed where none is given: any will do, and a fixed one gives the same figures tomorrow.</summary>
     private const int UsualSeed = 1;

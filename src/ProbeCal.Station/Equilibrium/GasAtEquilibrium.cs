@@ -256,7 +256,7 @@ public sealed class GasAtEquilibrium
         }
         catch (ArgumentException none)
         {
-            throw new InputException("the stated uncertainties are too large to be worked with; look at their units (" + none.Message + ")", none);
+            throw new InputException(UncertainQuantity.TooLarge + " (" + none.Message + ")", none);
         }
     }
 

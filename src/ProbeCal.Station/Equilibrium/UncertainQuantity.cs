@@ -11,6 +11,9 @@ namespace ProbeCal.Station.Equilibrium;
 /// </param>
 public readonly record struct UncertainQuantity(double Value, double StandardUncertainty, bool IsRectangular = false)
 {
+    /// <summary>What is said where stated uncertainties lead to no number.</summary>
+    internal const string TooLarge = "the stated uncertainties are too large to be worked with; look at their units";
+
     /// <summary>Half-width of the limits behind a rectangular distribution: √3 times the standard uncertainty.</summary>
     public double HalfWidth => StandardUncertainty * Math.Sqrt(3);
 

@@ -173,6 +173,7 @@ public sealed record TotalGas
 
         throw new InputException(StatusParts.Input(status) switch
         {
+            InputQuantity.Uncertainty => UncertainQuantity.TooLarge,
             InputQuantity.Temperature => Invariant($"--temperature {r.Temperature.Value} °C: total gas is computed from {VapourWeissPrice1980.LowestCelsius} to {VapourWeissPrice1980.HighestCelsius} °C"),
             InputQuantity.Salinity => Invariant($"--salinity {r.Salinity.Value}: total gas is computed from 0 to {VapourWeissPrice1980.HighestSalinity}"),
             InputQuantity.Pressure => Invariant($"the pressure of the air of {r.Air.Hectopascal} hPa is outside what is computed, {BensonKrause1984.LowestHectopascal} to {BensonKrause1984.HighestHectopascal} hPa"),

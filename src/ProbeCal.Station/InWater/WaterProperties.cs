@@ -1,6 +1,8 @@
 using System;
 using System.Collections.Generic;
 using System.Linq;
+using ProbeCal.Station.Entry;
+using ProbeCal.Station.Equilibrium;
 
 namespace ProbeCal.Station.InWater;
 
@@ -79,6 +81,12 @@ public sealed record WaterProperties
             VapourForms = [.. InWater.VapourForms.All.Select(each => ByForm(each.Equation, each.Name, each.TakesSalt, celsius, salinity))],
             Notes = notes,
         };
+        WaterValue[] values = [properties.Density, properties.PureWaterDensity, properties.FreezingPoint, properties.VapourPressure];
+        if (!double.IsFinite(salt.Uncertainty) || Array.Exists(values, static each => each.Uncertainty is double sure && !double.IsFinite(sure)))
+        {
+            throw new InputException(UncertainQuantity.TooLarge);
+        }
+
         if (properties.FreezingPoint.Value is double freezing && celsius < freezing)
         {
             notes.Add(FormattableString.Invariant($"the water is colder than its freezing point of {freezing:F2} °C: super-cooled, or temperature or salinity are wrong"));

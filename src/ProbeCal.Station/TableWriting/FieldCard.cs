@@ -18,6 +18,9 @@ internal static class FieldCard
     /// <summary>What fits one page of the smaller of A4 and Letter.</summary>
     internal const int MostRows = 42;
 
+    /// <summary>What a column of the page has room for.</summary>
+    private const int MostDecimals = 6;
+
     private const int LongestSite = 60;
 
     private static readonly (string Unit, double Step, int Decimals)[] PressureUnits = [("hPa", 5, 0), ("mmHg", 4, 0), ("kPa", 0.5, 1), ("inHg", 0.15, 2)];
@@ -40,6 +43,7 @@ internal static class FieldCard
         TableAxis rows = TableRange.Axis(AxisQuantity.Temperature, "--temperature", temperatures, "--temperature-step", o.TemperatureStep ?? (o.Error is null ? "1K" : null));
         CardPressures pressures = CardPressures.At(altitude, o.PressureUnit ?? PressureUnits[0].Unit);
         TableAxis columns = pressures.Axis;
+        FitsThePage(rows);
 
         ConcentrationSubject subject = new(gas, equation) { Salinity = salinity, MoleFraction = fraction };
         foreach (double hectopascal in new[] { columns.First, columns.Last })
@@ -55,6 +59,11 @@ internal static class FieldCard
         subject = new ConcentrationSubject(gas, equation) { Salinity = salinity, MoleFraction = fraction, UnitName = unit, PerMilligram = perMilligram };
         // Three figures in the smallest value, two decimals at least: what a meter shows.
         int decimals = Math.Max(2, 2 - (int)Math.Floor(Math.Log10(smallest * perMilligram)));
+        if (MostDecimals < decimals)
+        {
+            throw new InputException($"the values of this card are too small to be printed even in {unit}; look at --mole-fraction and its unit");
+        }
+
         AllowedError? allowed = o.Error is null ? null : AllowedError.Parse(o.Error, new ConcentrationSubject(gas, equation));
         if (allowed is { IsPercent: false })
         {
@@ -62,11 +71,7 @@ internal static class FieldCard
         }
 
         (GasTable table, ErrorProof proof) = new StepSearch(subject, TablePrecision.Double, allowed, progress, stop).Find(rows, columns, decimals);
-        if (MostRows < table.Rows.Count)
-        {
-            throw new InputException($"--temperature {temperatures}: {Number.Print(table.Rows.Count)} rows do not fit one page; at most {Number.Print(MostRows)} do: take a smaller range or a larger --temperature-step");
-        }
-
+        FitsThePage(table.Rows);
         string name = TableRequest.NameOf(o, subject, columns);
         string? site = o.Site is null ? null : PlainText.OneLine("--site", o.Site.Trim());
         if (LongestSite < site?.Length)
@@ -76,6 +81,14 @@ internal static class FieldCard
 
         CardPage page = new(table, proof, pressures, Catalogue.Gas(gas).Name, site, name, o.Program);
         return new WrittenTable(name + ".html", page.Write(), TableWriter.Summary(table, proof, allowed));
+
+        void FitsThePage(TableAxis axis)
+        {
+            if (MostRows < axis.Count)
+            {
+                throw new InputException($"--temperature {temperatures}: {Number.Print(axis.Count)} rows do not fit one page; at most {Number.Print(MostRows)} do: take a smaller range or a larger --temperature-step");
+            }
+        }
     }
 
     private static (string Unit, double PerMilligram) UnitFor(double smallestMilligrams)
