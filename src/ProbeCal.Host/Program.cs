@@ -57,6 +57,13 @@ internal static class Program
             return ExitCode.InputWrong;
         }
 
+        if (args is ["--help" or "-h" or "-?"])
+        {
+            // The examples of every command at once would fill three screens.
+            UsageErrors.Overview(root, terminal.Output);
+            return ExitCode.Done;
+        }
+
         ParseResult parsed = root.Parse(args);
         if (parsed.Errors.Count != 0)
         {

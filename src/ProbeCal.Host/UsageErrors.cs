@@ -1,6 +1,7 @@
 using System;
 using System.Collections.Generic;
 using System.CommandLine;
+using System.CommandLine.Parsing;
 using System.IO;
 using System.Linq;
 using ProbeCal.Station.Entry;
@@ -17,18 +18,19 @@ internal static class UsageErrors
         return What(parsed, command) + " ('" + Path(parsed) + " --help' lists what it takes)";
     }
 
-    /// <summary>One line a command: what a bare <c>probecal</c> shows.</summary>
-    internal static void Overview(RootCommand root, TextWriter error)
+    /// <summary>One line a command: what a bare <c>probecal</c> shows, and its <c>--help</c>.</summary>
+    internal static void Overview(RootCommand root, TextWriter output)
     {
-        error.WriteLine(root.Description);
-        error.WriteLine();
+        output.WriteLine(root.Description);
+        output.WriteLine();
         foreach (Command command in root.Subcommands)
         {
-            error.WriteLine($"  probecal {command.Name,-13} {(command.Description ?? "").Split('\n')[0].TrimEnd()}");
+            output.WriteLine($"  probecal {command.Name,-13} {(command.Description ?? "").Split('\n')[0].TrimEnd()}");
         }
 
-        error.WriteLine();
-        error.WriteLine("'probecal demo' shows the whole job without hardware; 'probecal calibrate --help' and the like show options and examples.");
+        output.WriteLine();
+        output.WriteLine("'probecal demo' shows the whole job without hardware. 'probecal equilibrium --help' and the like show options");
+        output.WriteLine("and examples; 'probecal --version' the version.");
     }
 
     private static string What(ParseResult parsed, Command command)
@@ -36,7 +38,7 @@ internal static class UsageErrors
         string[] commands = [.. command.Subcommands.Select(static known => known.Name)];
         if (parsed.UnmatchedTokens.Count == 0)
         {
-            return commands.Length == 0 ? parsed.Errors[0].Message : "name a command: " + string.Join(", ", commands);
+            return commands.Length == 0 ? OfOption(parsed, command) : "name a command: " + string.Join(", ", commands);
         }
 
         string given = parsed.UnmatchedTokens[0];
@@ -49,6 +51,21 @@ internal static class UsageErrors
         return commands.Length == 0
             ? $"'{shown}' is not understood there; a value with blanks in it wants quotes"
             : $"there is no command '{shown}'{NearestName.DidYouMean(given, commands)}; there are {string.Join(", ", commands)}";
+    }
+
+    /// <summary>An option that is missing, has no value or is given twice.</summary>
+    private static string OfOption(ParseResult parsed, Command command)
+    {
+        if (parsed.Errors[0].SymbolResult is OptionResult { Option: Option given, IdentifierTokenCount: int times } && 0 < times)
+        {
+            return times == 1
+                ? $"{given.Name} wants a value: {given.Description}"
+                : $"{given.Name} is given {times} times; give it once";
+        }
+
+        return command.Options.FirstOrDefault(option => option.Required && parsed.GetResult(option) is null or { Implicit: true }) is Option missing
+            ? $"{missing.Name} is missing: {missing.Description}"
+            : parsed.Errors[0].Message;
     }
 
     private static string Path(ParseResult parsed)

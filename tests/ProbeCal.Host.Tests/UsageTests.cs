@@ -14,6 +14,9 @@ public sealed class UsageTests
     [InlineData("calibrations", "name a command: list, show", "'probecal calibrations --help'")]
     [InlineData("calibrations shwo", "(did you mean show?)", "'probecal calibrations --help'")]
     [InlineData("calibrations show", "ID", "'probecal calibrations show --help'")]
+    [InlineData("tables", "--format is missing: csv, json", "'probecal tables --help'")]
+    [InlineData("equilibrium --temperature", "--temperature wants a value: Water temperature: 20, 20C, 68F", "'probecal equilibrium --help'")]
+    [InlineData("water --temperature 20 --temperature 21 --salinity 0", "--temperature is given 2 times; give it once", "'probecal water --help'")]
     public async Task WrongCommandLine_IsOneLineWithTheNearestName(string line, string says, string help)
     {
         Run run = await Run.OfAsync(line.Split(' '));
@@ -32,5 +35,41 @@ public sealed class UsageTests
         Assert.Contains("equilibrium", run.Error, StringComparison.Ordinal);
         Assert.Contains("probecal calibrate ", run.Error, StringComparison.Ordinal);
         Assert.DoesNotContain("Examples", run.Error, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public async Task Help_IsOneLineACommand()
+    {
+        Run run = await Run.OfAsync("--help");
+        Assert.Equal((0, ""), (run.ExitCode, run.Error));
+        Assert.Contains("probecal total-gas ", run.Output, StringComparison.Ordinal);
+        Assert.InRange(run.Output.Split('\n').Length, 10, 20);
+    }
+
+    [Theory]
+    [InlineData("equilibrium --temperature 20 --salinity 0 --pressure 1atm --equation benson", "(did you mean benson-krause-1984?)")]
+    [InlineData("equilibrium --temperature 20K --salinity 0 --pressure 1atm", "--temperature -253.15 °C is outside")]
+    [InlineData("equilibrium --temperature 20 --salinity 0 --pressure 1atm --format xml", "--format xml: there is no such form; there are text and json")]
+    public async Task WrongValue_IsShownAsAPersonWouldWriteIt(string line, string says)
+    {
+        Run run = await Run.OfAsync(line.Split(' '));
+        Assert.Equal((2, ""), (run.ExitCode, run.Output));
+        Assert.Contains(says, run.ErrorLine, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public async Task Screens_HaveTheMainNumberFirstAndNoDigitsOfAConversion()
+    {
+        // 780 and 745 mmHg lie 35 mmHg apart; 780/745 is 1.04698.
+        Run gas = await Run.OfAsync("total-gas", "--total-pressure", "780mmHg", "--pressure", "745mmHg", "--temperature", "57.7F", "--salinity", "0");
+        Assert.StartsWith("ΔP 46.663 hPa (35.0 mmHg): total dissolved gas is 104.70 % of the air's pressure", gas.Output, StringComparison.Ordinal);
+        Assert.Contains("water at 14.2778 °C, salinity 0, under air of 993.25 hPa (745.0 mmHg), absolute", gas.Output, StringComparison.Ordinal);
+
+        Run given = await Run.OfAsync("equilibrium", "--gas", "H2S", "--partial-pressure", "1hPa", "--temperature", "12", "--salinity", "0", "--pressure", "1atm");
+        Assert.Contains("one more         °C: -", given.Output, StringComparison.Ordinal);
+        Assert.DoesNotContain("hPa: 0 ", given.Output, StringComparison.Ordinal);
+
+        Run measured = await Run.OfAsync("equilibrium", "--concentration", "8.1mg/L", "--temperature", "20", "--salinity", "0", "--pressure", "1atm");
+        Assert.Contains("at the local pressure, measured 8.1 mg/L", measured.Output.Split('\n')[0], StringComparison.Ordinal);
     }
 }

@@ -87,7 +87,7 @@ public sealed class WholeFileCommandTests : IDisposable
         Assert.Contains("a quotation mark is opened and never closed", table[5], StringComparison.Ordinal);
         Assert.Contains("6 rows: 2 computed, 1 of them flagged, 4 refused", csv.Error, StringComparison.Ordinal);
         Assert.Contains("  refused: 1 row, temperature missing", csv.Error, StringComparison.Ordinal);
-        Assert.Contains("pressureSource altitude", csv.Error, StringComparison.Ordinal);
+        Assert.Contains("pressure source altitude", csv.Error, StringComparison.Ordinal);
     }
 
     [Fact]

@@ -49,7 +49,7 @@ internal static class EquilibriumText
             ("saturation", EquilibriumQuantity.PercentOfOneAtmosphere),
         ]);
         output.WriteLine();
-        Paragraph(output, "water", $"{Number.Print(c.Temperature.Value)} °C, {WaterWords.Of(c.Water)}");
+        Paragraph(output, "water", $"{WaterWords.Celsius(c.Temperature.Value)}, {WaterWords.Of(c.Water)}");
         Paragraph(output, "gas phase", Phase(c));
         if (r.AtDepth is ProbeDepth depth)
         {
@@ -88,10 +88,17 @@ internal static class EquilibriumText
         string value = Both(new UncertainNumber(main.Value, main.StandardUncertainty, EquilibriumUnits.Of(main.Quantity)));
         return main.Quantity switch
         {
-            EquilibriumQuantity.PercentLocal => $"{value} of saturation with {name} at the local pressure, measured {r.Asked.Measured!.Text}",
-            EquilibriumQuantity.MeasuredPartialPressure => $"{value} of {name} in the water, measured {r.Asked.Measured!.Text}",
+            EquilibriumQuantity.PercentLocal => $"{value} of saturation with {name} at the local pressure, {Measured(r.Asked.Measured!)}",
+            EquilibriumQuantity.MeasuredPartialPressure => $"{value} of {name} in the water, {Measured(r.Asked.Measured!)}",
             _ => $"{value} {name} in water in equilibrium with {Over(r.Asked.Phase)}",
         };
+    }
+
+    /// <summary>What was typed, 8.1mg/L, with the blank that print wants before a unit.</summary>
+    private static string Measured(MeasuredConcentration measured)
+    {
+        int number = Number.LeadingLength(measured.Text);
+        return $"measured {measured.Text[..number]} {measured.Text[number..].TrimStart()}";
     }
 
     private static string Over(GasPhase phase)
@@ -203,8 +210,14 @@ internal static class EquilibriumText
         EquilibriumResult milligrams = r.Value(EquilibriumQuantity.MilligramsPerLitre);
         UncertainNumber number = new(milligrams.Value, milligrams.StandardUncertainty, "mg/L");
         EquilibriumSensitivities s = r.ConcentrationSensitivities;
-        return $"°C: {Signed(s.PerKelvin * number.Factor)} {number.Unit}   hPa: {Signed(s.PerHectopascal * number.Factor)} {number.Unit}"
-            + (double.IsNaN(s.PerSalinity) ? "" : $"   of salinity: {Signed(s.PerSalinity * number.Factor)} {number.Unit}");
+        return $"°C: {Signed(s.PerKelvin * number.Factor)} {number.Unit}"
+            + Further("hPa", s.PerHectopascal) + Further("of salinity", s.PerSalinity);
+
+        // What the value does not hang on, pressure under a given partial pressure or salt in a constant of fresh water, is left out.
+        string Further(string what, double slope)
+        {
+            return double.IsNaN(slope) || slope == 0 ? "" : $"   {what}: {Signed(slope * number.Factor)} {number.Unit}";
+        }
     }
 
     private static string Signed(double value)

@@ -21,6 +21,12 @@ internal static class WaterWords
         };
     }
 
+    /// <summary>A temperature for people: what was read in °F has no more digits than a thermometer.</summary>
+    internal static string Celsius(double celsius)
+    {
+        return celsius.ToString("G6", System.Globalization.CultureInfo.InvariantCulture) + " °C";
+    }
+
     internal static string Of(WaterSalinity water)
     {
         return water.Source switch

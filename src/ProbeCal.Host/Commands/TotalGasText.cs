@@ -19,7 +19,9 @@ internal static class TotalGasText
             output.WriteLine(text.ToString(CultureInfo.InvariantCulture));
         }
 
-        Line($"Total dissolved gas in water at {r.Temperature.Value} °C, salinity {r.Salinity.Value}, under {r.Air.Hectopascal:F2} hPa ({MillimetresOfMercury(r.Air.Hectopascal)} mmHg)");
+        Line($"ΔP {Plain(g.Delta)} hPa ({MillimetresOfMercury(g.Delta.Value)} mmHg): total dissolved gas is {Plain(g.Percent)} % of the air's pressure");
+        Line($"");
+        Line($"  water at {WaterWords.Celsius(r.Temperature.Value)}, salinity {r.Salinity.Value}, under air of {r.Air.Hectopascal:F2} hPa ({MillimetresOfMercury(r.Air.Hectopascal)} mmHg), absolute");
         if (PressureWords.Caution(r.Air.Source, r.Air.UncertaintyHectopascal) is string second)
         {
             Line($"  {second}");
@@ -88,6 +90,13 @@ internal static class TotalGasText
             string sure = value.StandardUncertainty == 0 ? "" : "± " + Number.Significant(value.StandardUncertainty, 2);
             output.WriteLine($"  {name,-18} {Number.Fixed(value.Value, decimals),9} {unit,-4} {sure,-9} {more}".TrimEnd());
         }
+    }
+
+    /// <summary>The value with as many digits as its uncertainty leaves a meaning to.</summary>
+    private static string Plain(UncertainQuantity quantity)
+    {
+        UncertainNumber number = new(quantity.Value, quantity.StandardUncertainty, "");
+        return number.Uncertainty is null ? number.Value : $"{number.Value} ± {number.Uncertainty}";
     }
 
     private static string Exact(TotalGas g)

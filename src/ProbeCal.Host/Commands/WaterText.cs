@@ -19,7 +19,7 @@ internal static class WaterText
         }
 
         WaterSalt salt = w.Salt;
-        Line($"Water at {w.TemperatureCelsius} °C, practical salinity {Number.Fixed(salt.Salinity, 4)}{From(salt.Source)}, at the surface");
+        Line($"Water at {WaterWords.Celsius(w.TemperatureCelsius)}, practical salinity {Number.Fixed(salt.Salinity, 4)}{From(salt.Source)}, at the surface");
         Line($"");
         Row("salinity", salt.Salinity, salt.Uncertainty, 4, "", salt.Source == SalinitySource.Given ? "" : $"chlorinity {Number.Fixed(salt.ChlorinityGramsPerKilogram, 4)} g/kg");
         if (salt.ConductivityMillisiemensPerCentimetre is double raw)

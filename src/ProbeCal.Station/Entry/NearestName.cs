@@ -9,8 +9,11 @@ public static class NearestName
     /// <summary>Longest name that is compared; nobody mistypes more.</summary>
     private const int LongestName = 64;
 
+    /// <summary>Letters of a beginning that is taken for the name.</summary>
+    private const int LeastBeginning = 4;
+
     /// <summary>
-    /// The nearest of <paramref name="known"/>: the same but for case, or else the one that takes the fewest single
+    /// The nearest of <paramref name="known"/>: the same but for case, or else the first that begins so, or else the one that takes the fewest single
     /// changes (a letter more, less, other, or two swapped), at most one in three letters. Null when none is near.
     /// </summary>
     public static string? Find(string given, IEnumerable<string> known)
@@ -32,8 +35,27 @@ public static class NearestName
             }
         }
 
+        // Whoever leaves out the end means the first that begins so: an equation without its year, an amount without "per litre".
+        if (LeastBeginning <= given.Length && First(given, known) is string begun)
+        {
+            return begun;
+        }
+
         int allowed = nearest is null ? 0 : Math.Max(1, Math.Min(given.Length, nearest.Length) / 3);
         return fewest <= allowed && fewest < given.Length ? nearest : null;
+    }
+
+    private static string? First(string beginning, IEnumerable<string> known)
+    {
+        foreach (string name in known)
+        {
+            if (name.StartsWith(beginning, StringComparison.OrdinalIgnoreCase))
+            {
+                return name;
+            }
+        }
+
+        return null;
     }
 
     /// <summary><c> (did you mean mmHg?)</c> with its leading blank, or nothing when no name is near.</summary>

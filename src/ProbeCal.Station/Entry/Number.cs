@@ -74,7 +74,7 @@ public static class Number
     }
 
     /// <summary>How many characters at the start of <paramref name="text"/> form a number; 0 when none do.</summary>
-    internal static int LeadingLength(ReadOnlySpan<char> text)
+    public static int LeadingLength(ReadOnlySpan<char> text)
     {
         int at = text.Length != 0 && text[0] is '+' or '-' ? 1 : 0;
         int digits = 0;

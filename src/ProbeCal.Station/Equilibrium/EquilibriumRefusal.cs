@@ -30,11 +30,11 @@ internal static class EquilibriumRefusal
                 double celsius = asked.Temperature.Value;
                 if (asked.Water.Brine is not null && range.LowestCelsius <= celsius && celsius <= range.HighestCelsius)
                 {
-                    return Invariant($"--temperature {celsius} °C is outside the salting-out constants of {gas} (weisenberger-schumpe-1996), which hold from {SaltingOutWeisenbergerSchumpe1996.LowestCelsius} to {SaltingOutWeisenbergerSchumpe1996.HighestCelsius} °C, for some gases at {SaltingOutWeisenbergerSchumpe1996.ReferenceCelsius} °C alone");
+                    return Invariant($"--temperature {celsius:G10} °C is outside the salting-out constants of {gas} (weisenberger-schumpe-1996), which hold from {SaltingOutWeisenbergerSchumpe1996.LowestCelsius} to {SaltingOutWeisenbergerSchumpe1996.HighestCelsius} °C, for some gases at {SaltingOutWeisenbergerSchumpe1996.ReferenceCelsius} °C alone");
                 }
 
                 string advice = range.HighestCelsius < celsius && celsius is > 40 and < 110 ? "; if it was read in °F, write for example " + Number.Print(celsius) + "F" : "";
-                return Invariant($"--temperature {celsius} °C is outside {source} {range.Temperatures}{Instead(asked)}{advice}");
+                return Invariant($"--temperature {celsius:G10} °C is outside {source} {range.Temperatures}{Instead(asked)}{advice}");
             case InputQuantity.Salinity:
                 return Invariant($"{asked.Water.Described} is outside {source} 0 to {range.HighestSalinity}{Instead(asked)}");
             case InputQuantity.Pressure:

@@ -72,7 +72,7 @@ public static class WholeFile
         surroundings.Say("  " + string.Join("; ", mappings.Select(static each => each.Explanation)));
         if (formula.About.Count != 0)
         {
-            surroundings.Say("  " + string.Join("; ", formula.About.Select(static each => each.Key + " " + each.Value)));
+            surroundings.Say("  " + string.Join("; ", formula.About.Select(static each => Words(each.Key) + " " + each.Value)));
         }
 
         RowCounts counts = new();
@@ -148,6 +148,12 @@ public static class WholeFile
         }
 
         return formula.Compute(values, results);
+    }
+
+    /// <summary>A key of the JSON, pressureSource, as words.</summary>
+    private static string Words(string key)
+    {
+        return string.Concat(key.Select(static c => char.IsAsciiLetterUpper(c) ? " " + char.ToLowerInvariant(c) : c.ToString()));
     }
 
     private static IRowWriter Writer(WholeFileRequest request, IRowFormula formula, TableHeader header, Stream output)
