@@ -29,8 +29,17 @@ internal sealed class Terminal
     /// <summary>True when a person can answer a question here.</summary>
     internal bool IsInteractive { get; init; }
 
+    /// <summary>Characters in a line of the window that shows <see cref="Output"/>; null when no window does.</summary>
+    internal int? Width { get; init; }
+
     /// <summary>Cancelled by Ctrl-C, SIGTERM or a test: the command ends in order.</summary>
     internal CancellationToken Stop { get; init; }
+
+    /// <summary>Where a page for people goes: <see cref="Output"/>, its lines folded when the window is narrow.</summary>
+    internal TextWriter Page()
+    {
+        return Width is int width && FoldingWriter.Narrowest <= width ? new FoldingWriter(Output, width) : Output;
+    }
 
     internal static Terminal OfProcess(CancellationToken stop)
     {
@@ -43,6 +52,7 @@ internal sealed class Terminal
             Error = Console.Error,
             Time = TimeProvider.System,
             IsInteractive = !Console.IsInputRedirected && !Console.IsOutputRedirected,
+            Width = Console.IsOutputRedirected ? null : Console.WindowWidth,
             Stop = stop,
         };
     }

@@ -11,7 +11,13 @@ internal sealed record Run(int ExitCode, string Output, string Error)
     /// <summary>The single line that an error must be.</summary>
     internal string ErrorLine => Error.TrimEnd('\n', '\r');
 
-    internal static async Task<Run> OfAsync(params string[] arguments)
+    internal static Task<Run> OfAsync(params string[] arguments)
+    {
+        return InWindowAsync(null, arguments);
+    }
+
+    /// <summary>The same in a window so many characters wide.</summary>
+    internal static async Task<Run> InWindowAsync(int? width, params string[] arguments)
     {
         StringWriter output = new();
         StringWriter error = new();
@@ -20,6 +26,7 @@ internal sealed record Run(int ExitCode, string Output, string Error)
             Input = TextReader.Null,
             Output = output,
             Error = error,
+            Width = width,
             Time = TimeProvider.System,
             Stop = CancellationToken.None,
         };

@@ -72,4 +72,24 @@ public sealed class UsageTests
         Run measured = await Run.OfAsync("equilibrium", "--concentration", "8.1mg/L", "--temperature", "20", "--salinity", "0", "--pressure", "1atm");
         Assert.Contains("at the local pressure, measured 8.1 mg/L", measured.Output.Split('\n')[0], StringComparison.Ordinal);
     }
+
+    [Theory]
+    [InlineData("equilibrium --temperature 8.4 --salinity 0 --pressure 706mmHg")]
+    [InlineData("water --temperature 12.4 --conductivity 310uS/cm")]
+    [InlineData("total-gas --total-pressure 745mmHg --pressure 706mmHg --temperature 12 --salinity 0")]
+    [InlineData("equations --gas N2")]
+    [InlineData("explain --temperature 20 --salinity 0 --pressure 760mmHg")]
+    public async Task NarrowWindow_FoldsBetweenWordsAndLosesNone(string line)
+    {
+        const int width = 40;
+        Run wide = await Run.OfAsync(line.Split(' '));
+        Run narrow = await Run.InWindowAsync(width, line.Split(' '));
+        Assert.Equal(Words(wide.Output), Words(narrow.Output));
+        Assert.All(narrow.Output.Split('\n'), static row => Assert.True(row.Length <= width || !row.Trim().Contains(' ', StringComparison.Ordinal), row));
+
+        static string[] Words(string text)
+        {
+            return text.Split([' ', '\n', '\r'], StringSplitOptions.RemoveEmptyEntries);
+        }
+    }
 }

@@ -48,7 +48,7 @@ internal static class EquationsCommand
                     WriteMarkdown(terminal.Output, gases);
                     break;
                 default:
-                    WriteText(terminal.Output, gases, only is not null);
+                    WriteText(terminal.Page(), gases, only is not null);
                     break;
             }
 

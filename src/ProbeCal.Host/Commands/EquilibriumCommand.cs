@@ -78,7 +78,7 @@ internal static class EquilibriumCommand
             }
             else
             {
-                EquilibriumText.Write(terminal.Output, result, check);
+                EquilibriumText.Write(terminal.Page(), result, check);
             }
 
             return ExitCode.Done;

@@ -42,7 +42,7 @@ internal static class ExplainCommand
             }
             else
             {
-                ExplanationText.Write(terminal.Output, explained);
+                ExplanationText.Write(terminal.Page(), explained);
             }
 
             return ExitCode.Done;

@@ -72,7 +72,7 @@ internal static class TotalGasCommand
             }
             else
             {
-                TotalGasText.Write(terminal.Output, gas);
+                TotalGasText.Write(terminal.Page(), gas);
             }
 
             return ExitCode.Done;

@@ -58,7 +58,7 @@ internal static class WaterCommand
             }
             else
             {
-                WaterText.Write(terminal.Output, water);
+                WaterText.Write(terminal.Page(), water);
             }
 
             return ExitCode.Done;
