@@ -150,6 +150,17 @@ public sealed class WholeFileCommandTests : IDisposable
         Assert.Equal([output], Directory.GetFiles(_folder));
     }
 
+    /// <summary>Uncertainties that lead to no number are refused row by row, and counted as what they are.</summary>
+    [Fact]
+    public async Task UncertaintiesTooLarge_AreCountedAsSuch()
+    {
+        string input = Write("in.csv", "T\n20\n21\n"), output = Path.Combine(_folder, "out.csv");
+        Run run = await Run.OfAsync("equilibrium", "--input", input, "--output", output, "--column", "temperature=T", "--salinity", "0", "--altitude", "640m", "--temperature-uncertainty", "1e300K");
+        Assert.Equal(0, run.ExitCode);
+        Assert.EndsWith("2 rows: 0 computed, 2 refused\n  refused: 2 rows, uncertainties not usable\n", run.Error, StringComparison.Ordinal);
+        Assert.Contains("refused: uncertainties not usable; the stated uncertainties are too large", File.ReadAllLines(output)[2], StringComparison.Ordinal);
+    }
+
     /// <summary>Tables that no person made: a bounded line, whatever their size.</summary>
     [Fact]
     public async Task AMessage_IsNoLongerThanAPersonReads()

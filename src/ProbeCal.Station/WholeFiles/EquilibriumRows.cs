@@ -166,8 +166,11 @@ public sealed class EquilibriumRows : IRowFormula
     /// <summary>What a refusal is about: the option at the head of its line, by which rows are counted.</summary>
     private static string Subject(string message)
     {
-        string first = message.Split(' ', 3) is ["the", string noun, ..] ? noun : message.Split(' ', 2)[0];
-        return first.TrimStart('-') + " not usable";
+        string subject = message.StartsWith(UncertainQuantity.TooLarge, StringComparison.Ordinal) ? "uncertainties"
+            : message.StartsWith("--", StringComparison.Ordinal) ? message.Split(' ', 2)[0].TrimStart('-')
+            : message.Split(' ', 3) is ["the", string noun, ..] ? noun
+            : "conditions";
+        return subject + " not usable";
     }
 
     private string Example(string quantity, string example, string unit)
