@@ -44,6 +44,7 @@ internal static class Program
             EquationsCommand.Create(terminal),
             WaterCommand.Create(terminal),
             TotalGasCommand.Create(terminal),
+            HenryCommand.Create(terminal),
             CalibrateCommand.Create(terminal),
             CalibrationsCommand.Create(terminal),
             StationCommand.Create(terminal),

@@ -30,6 +30,7 @@ public class ReleasedFormatsTests
         ["probecal-equilibrium-row"] = ("equilibrium-row/version-1.jsonl", "equilibrium-row"),
         ["probecal-water"] = ("water/version-1.json", "water"),
         ["probecal-total-gas"] = ("total-gas/version-1.json", "total-gas"),
+        ["probecal-henry"] = ("henry/version-1.json", "henry"),
         ["probecal-truth"] = ("truth/version-1.csv", null),
     };
 
