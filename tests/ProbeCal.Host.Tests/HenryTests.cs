@@ -156,6 +156,7 @@ public class HenryTests
     [InlineData("--salinity 5 is outside fernandez-prini-2003, which holds for C2H6 in fresh water alone, --salinity 0", "--gas", "ethane", "--temperature", "20", "--salinity", "5")]
     [InlineData("--salinity 41 is outside jenkins-2019, which holds for Xe from 0 to 40", "--gas", "Xe", "--temperature", "20", "--salinity", "41")]
     [InlineData("--temperature-uncertainty -1K: a standard uncertainty is zero or above", "--temperature", "20", "--salinity", "5", "--temperature-uncertainty", "-1K")]
+    [InlineData("the stated uncertainties are too large to be worked with", "--temperature", "20", "--salinity", "5", "--temperature-uncertainty", "1e300K")]
     [InlineData("--format xml: there is no such form; there are text and json", "--temperature", "20", "--salinity", "5", "--format", "xml")]
     public async Task WrongInput_IsOneLine(string says, params string[] arguments)
     {

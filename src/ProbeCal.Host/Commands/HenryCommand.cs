@@ -46,7 +46,7 @@ internal static class HenryCommand
             }
             else
             {
-                HenryText.Write(terminal.Output, constant);
+                HenryText.Write(terminal.Page(), constant);
             }
 
             return ExitCode.Done;

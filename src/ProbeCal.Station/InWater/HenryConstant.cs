@@ -132,7 +132,10 @@ public sealed record HenryConstant
             double perKelvin = temperature.IsExact ? 0 : (At(form, celsius + HalfStep) - At(form, celsius - HalfStep)) / (2 * HalfStep) / value;
             double fromTemperature = Math.Abs(perKelvin) < Rounding ? 0 : perKelvin * temperature.StandardUncertainty;
             GasUncertainty.Combined(fromTemperature, 0, 0, 0, 0, equationRelative, out double relative);
-            return new HenryValue(form.Name, form.Unit, form.Meaning, value, relative * value);
+            double uncertainty = relative * value;
+            return double.IsFinite(uncertainty)
+                ? new HenryValue(form.Name, form.Unit, form.Meaning, value, uncertainty)
+                : throw new InputException(UncertainQuantity.TooLarge);
         })];
 
         double At(HenryFormEntry to, double t)

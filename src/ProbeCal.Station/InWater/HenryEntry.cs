@@ -29,19 +29,14 @@ public sealed record HenryEntry
     /// <exception cref="InputException">Something is missing, said twice, cannot be read or lies outside the range; one line says what.</exception>
     public HenryConstant Read()
     {
-        if (Temperature is null)
-        {
-            throw new InputException("--temperature is missing: the temperature of the water, for example --temperature 20 or 68F");
-        }
-
+        EquilibriumEntry words = new() { Temperature = Temperature, TemperatureUncertainty = TemperatureUncertainty, Salinity = Salinity };
+        UncertainQuantity temperature = words.ReadTemperature();
         if (Salinity is null)
         {
-            throw new InputException("--salinity is missing: the practical salinity of the water, 0 for fresh water");
+            throw new InputException("--salinity is missing: the practical salinity, 0 for fresh water");
         }
 
-        double celsius = Quantity.TemperatureCelsius("--temperature", Temperature);
-        UncertainQuantity temperature = UncertainQuantity.Read(celsius, QuantityKind.TemperatureDifference, "--temperature", TemperatureUncertainty, null);
-        double salinity = Quantity.Salinity("--salinity", Salinity);
+        double salinity = WaterSalinity.Read(words, temperature.Value).Salinity;
         if (Given is null)
         {
             Gas gas = Gas is null ? ProbeCal.Gas.Oxygen : GasNames.Parse("--gas", Gas);
