@@ -72,7 +72,12 @@ internal sealed record Worked(string Output, string[] Said)
     {
         WholeFileRequest request = new()
         {
-            Input = "-", Output = output, Columns = columns, DecimalComma = decimalComma, Separator = separator, HeaderLine = headerLine,
+            Input = "-",
+            Output = output,
+            Columns = columns,
+            DecimalComma = decimalComma,
+            Separator = separator,
+            HeaderLine = headerLine,
         };
         using MemoryStream written = new();
         List<string> said = [];
