@@ -9,8 +9,8 @@ namespace ProbeCal;
 /// <remarks>
 /// Ranges, accuracy and sources stand with the scalar functions. All spans of a call must have one length. The output may be the very same span as an
 /// input, which it then replaces; any other overlap of an input with the output is refused, and the statuses must not share memory with numbers.
-/// <see cref="SolubilityEquation.BensonKrause1984"/> and <see cref="SolubilityEquation.GarciaGordon1992"/> run in vectors; further
-/// equations, and values whose status is not Ok, run one at a time. May be called from several threads at once.
+/// <see cref="SolubilityEquation.BensonKrause1984"/> and <see cref="SolubilityEquation.GarciaGordon1992"/> run in vectors, and values whose status is not Ok
+/// one at a time. Other equations are refused as <see cref="OxygenEquilibrium"/> refuses them; <see cref="GasBatch"/> takes them. May be called from several threads at once.
 /// </remarks>
 public static class OxygenBatch
 {
