@@ -101,7 +101,13 @@ public static class TotalDissolvedGasUncertainty
             + Squares(
                 perDelta, perBarometric - (perDelta * oxygenPerHectopascal), isTotalMeasured,
                 deltaUncertaintyHectopascal, barometricUncertaintyHectopascal));
-        return status == Status.Ok && double.IsNaN(nitrogenArgonPercent + oxygenPercent) ? Status.UncertaintyAboveRange : status;
+        if (!double.IsNaN(oxygenHectopascal + oxygenPercent + nitrogenArgonHectopascal + nitrogenArgonPercent)) { return status; }
+        // One that overflowed takes the others with it: a refusal never leaves part of an answer.
+        oxygenHectopascal = double.NaN;
+        oxygenPercent = double.NaN;
+        nitrogenArgonHectopascal = double.NaN;
+        nitrogenArgonPercent = double.NaN;
+        return status == Status.Ok ? Status.UncertaintyAboveRange : status;
     }
 
     /// <summary>The part of ΔP and of the barometer. With a measured total pressure a barometer that reads too high makes ΔP too small by as much.</summary>

@@ -202,4 +202,14 @@ public class TotalDissolvedGasTests(ITestOutputHelper output)
         Assert.Equal(Status.Ok, TotalDissolvedGas.NitrogenArgon(delta, x[1], x[2], x[3], oxygen, 0.0, RangeRule.Refuse, out double rest, out double percent));
         return [total, oxygen, oxygenPercent, rest, percent];
     }
+
+    /// <summary>An uncertainty whose square leaves the numbers spoils all four answers, not only those that it enters.</summary>
+    [Fact]
+    public void Components_ThatOverflow_AreAllRefused()
+    {
+        Assert.Equal(Status.UncertaintyAboveRange, TotalDissolvedGasUncertainty.Components(
+            SolubilityEquation.GarciaGordon1992, -50.0, 870.0, 36.5, 34.5, 5.9, 0.13, false, double.MaxValue, 0.25, 0.1, 0.4, 0.2, RangeRule.Refuse,
+            out double oxygen, out double oxygenPercent, out double nitrogen, out double nitrogenPercent));
+        Assert.All(new[] { oxygen, oxygenPercent, nitrogen, nitrogenPercent }, static value => Assert.True(double.IsNaN(value)));
+    }
 }
