@@ -71,7 +71,7 @@ public static class OxygenBatch
                 default(OxygenFunctions.MilligramsPerLitre<OxygenSolubility.GarciaGordon1992Lanes>),
                 celsius, salinity, pressureHectopascal, celsius, rule, milligramsPerLitre, statuses, LaneWidths.Widest),
             _ => BatchLoop.RunScalar(
-                new OxygenFunctions.MilligramsPerLitreOf(equation),
+                default(OxygenFunctions.UnknownEquation),
                 celsius, salinity, pressureHectopascal, celsius, rule, milligramsPerLitre, statuses),
         };
     }
@@ -117,7 +117,7 @@ public static class OxygenBatch
                 default(OxygenFunctions.ConcentrationFromPartialPressure<OxygenSolubility.GarciaGordon1992Lanes>),
                 celsius, salinity, pressureHectopascal, partialPressureHectopascal, rule, milligramsPerLitre, statuses, LaneWidths.Widest),
             _ => BatchLoop.RunScalar(
-                new OxygenFunctions.ConcentrationFromPartialPressureOf(equation),
+                default(OxygenFunctions.UnknownEquation),
                 celsius, salinity, pressureHectopascal, partialPressureHectopascal, rule, milligramsPerLitre, statuses),
         };
     }
@@ -146,7 +146,7 @@ public static class OxygenBatch
                 default(OxygenFunctions.PartialPressureFromConcentration<OxygenSolubility.GarciaGordon1992Lanes>),
                 celsius, salinity, pressureHectopascal, milligramsPerLitre, rule, partialPressureHectopascal, statuses, LaneWidths.Widest),
             _ => BatchLoop.RunScalar(
-                new OxygenFunctions.PartialPressureFromConcentrationOf(equation),
+                default(OxygenFunctions.UnknownEquation),
                 celsius, salinity, pressureHectopascal, milligramsPerLitre, rule, partialPressureHectopascal, statuses),
         };
     }

@@ -223,30 +223,13 @@ internal static class OxygenFunctions
         }
     }
 
-    /// <summary>Any equation, one value at a time: temperature, salinity and pressure.</summary>
-    internal readonly struct MilligramsPerLitreOf(SolubilityEquation equation) : IBatchFunction
+    /// <summary>An equation that <see cref="OxygenEquilibrium"/> does not take: refused for every value before any of its inputs is looked at.</summary>
+    internal readonly struct UnknownEquation : IBatchFunction
     {
         public Status Scalar(double a, double b, double c, double d, RangeRule rule, out double value)
         {
-            return OxygenEquilibrium.MilligramsPerLitre(equation, a, b, c, rule, out value);
-        }
-    }
-
-    /// <summary>Any equation, one value at a time: temperature, salinity, pressure and partial pressure.</summary>
-    internal readonly struct ConcentrationFromPartialPressureOf(SolubilityEquation equation) : IBatchFunction
-    {
-        public Status Scalar(double a, double b, double c, double d, RangeRule rule, out double value)
-        {
-            return OxygenEquilibrium.ConcentrationFromPartialPressure(equation, a, b, c, d, rule, out value);
-        }
-    }
-
-    /// <summary>Any equation, one value at a time: temperature, salinity, pressure and concentration.</summary>
-    internal readonly struct PartialPressureFromConcentrationOf(SolubilityEquation equation) : IBatchFunction
-    {
-        public Status Scalar(double a, double b, double c, double d, RangeRule rule, out double value)
-        {
-            return OxygenEquilibrium.PartialPressureFromConcentration(equation, a, b, c, d, rule, out value);
+            value = double.NaN;
+            return Status.EquationUnknown;
         }
     }
 }
