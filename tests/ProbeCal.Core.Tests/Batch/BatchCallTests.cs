@@ -137,10 +137,13 @@ public class BatchCallTests
         Assert.Equal(expectedNotOk, notOk);
     }
 
+    // A field: making the list on the stack allocates in an unoptimised build, in the test itself.
+    private static readonly SolubilityEquation[] Equations = [SolubilityEquation.BensonKrause1984, SolubilityEquation.GarciaGordon1992, SolubilityEquation.Weiss1970];
+
     private static int RunAll(double[] values, Status[] statuses)
     {
         int notOk = 0;
-        foreach (SolubilityEquation equation in stackalloc[] { SolubilityEquation.BensonKrause1984, SolubilityEquation.GarciaGordon1992, SolubilityEquation.Weiss1970 })
+        foreach (SolubilityEquation equation in Equations)
         {
             notOk += OxygenBatch.MilligramsPerLitre(equation, Celsius, Salinity, Pressure, RangeRule.NearEdge, values, statuses);
             notOk += OxygenBatch.ConcentrationFromPartialPressure(equation, Celsius, Salinity, Pressure, Partial, RangeRule.Refuse, values, statuses);
