@@ -11,8 +11,14 @@ public sealed record CalibrationRecord
     /// <summary>Name of the format.</summary>
     public const string FormatName = "probecal-calibration-record";
 
-    /// <summary>The version this program writes.</summary>
-    public const int CurrentVersion = 1;
+    /// <summary><see cref="Purpose"/> of a calibration.</summary>
+    public const string CalibrationPurpose = "calibration";
+
+    /// <summary><see cref="Purpose"/> of a check.</summary>
+    public const string CheckPurpose = "check";
+
+    /// <summary>The version this program writes. Version 2 added checks, several points, references, and the decision with its uncertainty.</summary>
+    public const int CurrentVersion = 2;
 
     /// <summary><see cref="FormatName"/>.</summary>
     public string Format { get; init; } = FormatName;
@@ -53,13 +59,37 @@ public sealed record CalibrationRecord
     /// <summary>Altitude of the place; none when not stated.</summary>
     public RecordedQuantity? Altitude { get; init; }
 
-    /// <summary>The gas: <c>O2</c>.</summary>
+    /// <summary><c>calibration</c>, or <c>check</c>: the same points and guards, and no change of coefficients.</summary>
+    public string Purpose { get; init; } = CalibrationPurpose;
+
+    /// <summary>For a check: <c>initial</c>, <c>continuing</c> or <c>end-of-day</c>; none when not stated.</summary>
+    public string? CheckKind { get; init; }
+
+    /// <summary>Id of the record that this one replaces; none for a new one. The old one stays.</summary>
+    public string? Replaces { get; init; }
+
+    /// <summary>Why it replaces it.</summary>
+    public string? ReplacesReason { get; init; }
+
+    /// <summary>Where an imported record comes from: file and row; none for one made here.</summary>
+    public string? ImportedFrom { get; init; }
+
+    /// <summary>Reference equipment used, by the ids of the register: barometer, thermometer, cylinder, titrant, zero solution.</summary>
+    public string[] Equipment { get; init; } = [];
+
+    /// <summary>The steps of the procedure as they were done; empty in records of version 1.</summary>
+    public RecordedStep[] Steps { get; init; } = [];
+
+    /// <summary>The fit over several points; none where one point and a zero give the slope.</summary>
+    public RecordedFit? Fit { get; init; }
+
+    /// <summary>The gas as a formula: <c>O2</c>; <c>total</c> for a total gas pressure.</summary>
     public required string Gas { get; init; }
 
     /// <summary>The probe, its membrane and its thermometer.</summary>
     public required RecordedProbe Probe { get; init; }
 
-    /// <summary><c>air-saturated-water</c> or <c>water-saturated-air</c>.</summary>
+    /// <summary>The method of the main point: <c>air-saturated-water</c>, <c>water-saturated-air</c>, <c>titration</c>, <c>gas-mixture</c>, <c>transfer-standard</c>, <c>zero-solution</c>, <c>zero-gas</c>.</summary>
     public required string Method { get; init; }
 
     /// <summary><c>live</c> from a source, or <c>typed</c> from a meter.</summary>
@@ -83,7 +113,7 @@ public sealed record CalibrationRecord
     /// <summary>The points in the order in which they were taken.</summary>
     public required RecordedPoint[] Points { get; init; }
 
-    /// <summary>Role of the point that gave the slope: <c>span</c>, or <c>as-left</c> for a meter that was adjusted itself.</summary>
+    /// <summary>Role of the point that gave the slope: <c>span</c>, <c>as-left</c> for a meter that was adjusted itself, or <c>fit</c> for <see cref="Fit"/>.</summary>
     public required string SlopeFrom { get; init; }
 
     /// <summary>The zero that the slope rests on.</summary>
@@ -113,3 +143,9 @@ public sealed record CalibrationRecord
     /// <summary>Remarks by the person; none when there are none.</summary>
     public string? Remarks { get; init; }
 }
+
+/// <summary>One step of the procedure as it was done.</summary>
+/// <param name="Step">Id of the step.</param>
+/// <param name="DoneUtc">When it was done, UTC.</param>
+/// <param name="Note">What was written down at it; none when nothing was asked.</param>
+public sealed record RecordedStep(string Step, DateTimeOffset DoneUtc, string? Note);

@@ -21,7 +21,19 @@ public sealed record RecordedLimit
     /// <summary>Unit of <see cref="Found"/>.</summary>
     public required string Unit { get; init; }
 
-    /// <summary><c>pass</c>, <c>fail</c>, <c>not-judged</c>.</summary>
+    /// <summary>Expanded uncertainty of <see cref="Found"/>, in <see cref="Unit"/>; none in records of version 1.</summary>
+    public double? ExpandedUncertainty { get; init; }
+
+    /// <summary>Coverage factor of <see cref="ExpandedUncertainty"/>.</summary>
+    public double? CoverageFactor { get; init; }
+
+    /// <summary>Limit over <see cref="ExpandedUncertainty"/>.</summary>
+    public double? LimitToUncertainty { get; init; }
+
+    /// <summary>Width by which the limit was drawn in, in <see cref="Unit"/>; none for simple acceptance.</summary>
+    public double? GuardBand { get; init; }
+
+    /// <summary><c>pass</c>, <c>fail</c>, <c>inconclusive</c> (between the guarded limit and the limit), <c>not-judged</c>.</summary>
     public required string Verdict { get; init; }
 
     /// <summary>True when the verdict decides about the whole; false when it only informs.</summary>
@@ -43,6 +55,15 @@ public sealed record RecordedFinding
     /// <summary>The error this could cause in a reading at the calibration's conditions, mg/L; none when it cannot be said.</summary>
     public double? PossibleErrorMilligramsPerLitre { get; init; }
 
+    /// <summary>Error of the reading as found at this point, if the finding is true: reading less truth, mg/L; none when it cannot be said.</summary>
+    public double? ErrorAsFoundMilligramsPerLitre { get; init; }
+
+    /// <summary>Error of later readings after adjusting here, if the finding is true: of the opposite sign, mg/L; none when it cannot be said.</summary>
+    public double? ErrorLaterMilligramsPerLitre { get; init; }
+
+    /// <summary>What to do about it, in one sentence; none in records of version 1.</summary>
+    public string? WhatToDo { get; init; }
+
     /// <summary>The reason the person gave for going on; none for a note.</summary>
     public string? Reason { get; init; }
 }
@@ -59,8 +80,20 @@ public sealed record RecordedContribution
     /// <summary>Unit of the input.</summary>
     public required string Unit { get; init; }
 
+    /// <summary>Value of the input, in <see cref="Unit"/>; none in records of version 1.</summary>
+    public double? Value { get; init; }
+
+    /// <summary>Distribution of the input: <c>normal</c>, <c>rectangular</c>, <c>triangular</c>; none in records of version 1.</summary>
+    public string? Distribution { get; init; }
+
+    /// <summary>Relative change of the slope per unit of the input, in % per <see cref="Unit"/>, with its sign; none in records of version 1.</summary>
+    public double? SensitivityPercent { get; init; }
+
     /// <summary>Contribution to the slope, % of the slope (k = 1).</summary>
     public required double SlopePercent { get; init; }
+
+    /// <summary>Share of the variance, %; none in records of version 1.</summary>
+    public double? SharePercent { get; init; }
 
     /// <summary>Where the input's uncertainty comes from.</summary>
     public required string Source { get; init; }

@@ -33,8 +33,17 @@ public sealed record RecordedStatistics
 /// <summary>One point: what the probe gave in a steady window, and what was true there.</summary>
 public sealed record RecordedPoint
 {
-    /// <summary><c>span</c> (the 100 % point, also as found), <c>as-left</c> or <c>zero</c>.</summary>
+    /// <summary>
+    /// <c>span</c> (the 100 % point, also as found), <c>as-left</c>, <c>zero</c>, or <c>level-1</c>, <c>level-2</c> … for
+    /// further points of a fit over several.
+    /// </summary>
     public required string Role { get; init; }
+
+    /// <summary>The method by which the truth of this point is known; none where it is the record's.</summary>
+    public string? Method { get; init; }
+
+    /// <summary>What the truth of this point rests on, where it is more than temperature and pressure; none otherwise.</summary>
+    public RecordedReference? Reference { get; init; }
 
     /// <summary>Time of the first sample of the window, UTC; the time of typing for a typed reading.</summary>
     public required DateTimeOffset FirstUtc { get; init; }
@@ -69,7 +78,7 @@ public sealed record RecordedPoint
     /// <summary>Flow factor at the point: 1 where the slope is meant for the same stirring.</summary>
     public required double FlowFactor { get; init; }
 
-    /// <summary>True oxygen partial pressure, hPa.</summary>
+    /// <summary>True partial pressure of the gas, hPa.</summary>
     public required double ReferencePartialPressureHectopascal { get; init; }
 
     /// <summary>Its standard uncertainty, hPa.</summary>

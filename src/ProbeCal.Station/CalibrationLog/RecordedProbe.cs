@@ -8,8 +8,14 @@ public sealed record RecordedProbe
     /// <summary>The probe's own id, as the readings carry it.</summary>
     public required string Id { get; init; }
 
-    /// <summary>Response model: <c>amperometric</c> or <c>meter-display</c>.</summary>
+    /// <summary>
+    /// Response model: <c>amperometric</c>, <c>meter-display</c>, <c>stern-volmer</c>, <c>uchida-2008</c>, <c>bittig-2018</c>,
+    /// <c>severinghaus</c>, <c>total-gas</c>, <c>linear</c>, <c>quadratic</c>.
+    /// </summary>
     public required string Model { get; init; }
+
+    /// <summary>Coefficients of the model that a calibration does not change, by name (maker's or characterised); empty for models without.</summary>
+    public RecordedCoefficient[] Coefficients { get; init; } = [];
 
     /// <summary>Unit of the raw signal, for people; empty when nobody stated one.</summary>
     public required string SignalUnit { get; init; }
@@ -42,7 +48,7 @@ public sealed record RecordedProbe
 /// <summary>How the signal follows temperature at one partial pressure.</summary>
 public sealed record RecordedTemperatureCoefficient
 {
-    /// <summary>Form: <c>exponential</c>, <c>compound</c>, <c>linear</c> or <c>arrhenius</c>.</summary>
+    /// <summary>Form: <c>exponential</c>, <c>compound</c>, <c>linear</c>, <c>arrhenius</c>, <c>polynomial</c> (further terms in the probe's coefficients), or <c>none</c> for a model without one.</summary>
     public required string Form { get; init; }
 
     /// <summary>The coefficient in <see cref="Unit"/>.</summary>
@@ -112,5 +118,24 @@ public sealed record RecordedThermometer
     public required double CommonStandardUncertaintyCelsius { get; init; }
 
     /// <summary>Where that uncertainty came from.</summary>
+    public required string Source { get; init; }
+}
+
+/// <summary>A coefficient of a response model.</summary>
+public sealed record RecordedCoefficient
+{
+    /// <summary>Its name in the model's published form: <c>c0</c>, <c>flow-factor</c>, <c>pressure-coefficient</c>.</summary>
+    public required string Name { get; init; }
+
+    /// <summary>Its value, in <see cref="Unit"/>.</summary>
+    public required double Value { get; init; }
+
+    /// <summary>Its unit.</summary>
+    public required string Unit { get; init; }
+
+    /// <summary>Its standard uncertainty, in <see cref="Unit"/>; none when not stated.</summary>
+    public double? StandardUncertainty { get; init; }
+
+    /// <summary>Where it comes from: <c>entered</c>, or the id of a characterisation.</summary>
     public required string Source { get; init; }
 }
