@@ -39,6 +39,18 @@ public static class CalibrationIds
 
     /// <summary>Role of the point after the adjustment.</summary>
     public const string AsLeftPoint = "as-left";
+
+    /// <summary>Roles of further points of a fit begin so: <c>level-1</c>, <c>level-2</c> ….</summary>
+    public const string LevelPrefix = "level-";
+
+    /// <summary>A check before the day's first reading.</summary>
+    public const string Initial = "initial";
+
+    /// <summary>A check between readings.</summary>
+    public const string Continuing = "continuing";
+
+    /// <summary>A check after the day's last reading.</summary>
+    public const string EndOfDay = "end-of-day";
 }
 
 /// <summary>The pressure as it was entered.</summary>
@@ -66,8 +78,29 @@ public sealed record CalibrationSetup
     /// <summary>The probe, its membrane, its thermometer.</summary>
     public required RecordedProbe Probe { get; init; }
 
-    /// <summary><see cref="CalibrationIds.AirSaturatedWater"/> or <see cref="CalibrationIds.WaterSaturatedAir"/>.</summary>
+    /// <summary><see cref="CalibrationRecord.CalibrationPurpose"/>, or <see cref="CalibrationRecord.CheckPurpose"/>: the same points and guards, and no change of coefficients.</summary>
+    public string Purpose { get; init; } = CalibrationRecord.CalibrationPurpose;
+
+    /// <summary>For a check: <see cref="CalibrationIds.Initial"/>, <see cref="CalibrationIds.Continuing"/> or <see cref="CalibrationIds.EndOfDay"/>; none when not stated.</summary>
+    public string? CheckKind { get; init; }
+
+    /// <summary>The gas whose partial pressure the probe answers to; of no meaning for a probe of total gas pressure.</summary>
+    public Gas Gas { get; init; } = Gas.Oxygen;
+
+    /// <summary>The method of the main point, one of <see cref="MethodIds"/>.</summary>
     public required string Method { get; init; }
+
+    /// <summary>
+    /// The points that are planned, each with its method and what its truth rests on. Where none is named: the 100 % point by
+    /// <see cref="Method"/>, and a zero in zero solution when <see cref="ZeroPlan"/> asks for one.
+    /// </summary>
+    public IReadOnlyList<PlannedPoint> Plan { get => field.Count == 0 ? UsualPlan() : field; init; } = [];
+
+    /// <summary>Form of a fit over several points: <c>line</c> or <c>quadratic</c>.</summary>
+    public string FitForm { get; init; } = "line";
+
+    /// <summary>Reference equipment by the ids of the register: barometer, thermometer, cylinder, titrant, zero solution.</summary>
+    public string[] Equipment { get; init; } = [];
 
     /// <summary><see cref="CalibrationIds.Live"/> or <see cref="CalibrationIds.Typed"/>.</summary>
     public required string Readings { get; init; }
@@ -125,6 +158,29 @@ public sealed record CalibrationSetup
 
     /// <summary>Remarks; none when there are none.</summary>
     public string? Remarks { get; init; }
+
+    /// <summary>The plan for the point of a role; the point as left is planned as the 100 % point is.</summary>
+    internal PlannedPoint PlannedFor(string role)
+    {
+        string planned = role == CalibrationIds.AsLeftPoint ? CalibrationIds.SpanPoint : role;
+        foreach (PlannedPoint point in Plan)
+        {
+            if (point.Role == planned)
+            {
+                return point with { Role = role };
+            }
+        }
+
+        return new PlannedPoint { Role = role, Method = role == CalibrationIds.ZeroPoint ? MethodIds.ZeroSolution : Method };
+    }
+
+    private PlannedPoint[] UsualPlan()
+    {
+        PlannedPoint main = new() { Role = CalibrationIds.SpanPoint, Method = Method };
+        return ZeroPlan is CalibrationIds.ZeroCheck or CalibrationIds.ZeroAdjust
+            ? [main, new PlannedPoint { Role = CalibrationIds.ZeroPoint, Method = MethodIds.ZeroSolution }]
+            : [main];
+    }
 }
 
 /// <summary>When a window counts as steady, and how long a step may take. The defaults are our choice, no source.</summary>
