@@ -158,7 +158,7 @@ internal sealed class InteractiveDialogue(CalibrationProgress progress, Question
 
     public async Task<string?> ReasonAsync(Finding finding, CancellationToken cancellationToken)
     {
-        progress.Say(finding.Saw);
+        progress.Say(finding.Sentence);
         string reason = await questions.AskAsync("If it is right all the same, say why (empty stops):", static text => text, cancellationToken).ConfigureAwait(false);
         return reason.Length == 0 ? null : reason;
     }

@@ -169,6 +169,16 @@ internal static class CalibrationText
         foreach (RecordedFinding finding in record.Findings)
         {
             TextTable.WriteWrapped(output, "  ", "    ", $"{finding.Guard} ({finding.Severity}): {finding.Saw}");
+            if (PossibleError.WordsOf(finding) is string size)
+            {
+                TextTable.WriteWrapped(output, "    ", "      ", size);
+            }
+
+            if (finding.WhatToDo is string advice)
+            {
+                TextTable.WriteWrapped(output, "    ", "      ", "what to do: " + advice);
+            }
+
             if (finding.Reason is string reason)
             {
                 TextTable.WriteWrapped(output, "    ", "      ", "reason for going on: " + reason);

@@ -42,7 +42,9 @@ internal static class ConditionGuards
         }
 
         return new Finding(GuardNames.Clock, FindingSeverity.Refuse, Text(
-            $"the clock says {now.NowUtc:yyyy-MM-dd HH:mm}Z and the last calibration of this probe is from {previous.CompletedUtc:yyyy-MM-dd HH:mm}Z: set the clock right first"), null);
+            $"the clock says {now.NowUtc:yyyy-MM-dd HH:mm}Z and the last calibration of this probe is from {previous.CompletedUtc:yyyy-MM-dd HH:mm}Z"),
+            PossibleError.Unknown("readings would be computed by the wrong calibration, so no size can be given"),
+            "set the clock right first");
     }
 
     private static Finding? TemperatureRange(Situation now)
@@ -60,10 +62,12 @@ internal static class ConditionGuards
 
         double asFahrenheit = (celsius - 32) / 1.8;
         string hint = celsius > OxygenEquilibrium.HighestCelsius && asFahrenheit <= OxygenEquilibrium.HighestCelsius
-            ? Text($"; if {Number.Print(celsius)} was in degrees Fahrenheit, write {Number.Print(celsius)}F ({Number.Fixed(asFahrenheit, 1)} C)")
-            : "";
+            ? Text($"if {Number.Print(celsius)} was in degrees Fahrenheit, write {Number.Print(celsius)}F ({Number.Fixed(asFahrenheit, 1)} C)")
+            : "check the temperature and its unit; liquid water outside this range cannot be calibrated in";
         return new Finding(GuardNames.TemperatureRange, FindingSeverity.Refuse, Text(
-            $"temperature {Number.Print(celsius)} C is outside the range of the solubility equation (0 to 40 C){hint}"), null);
+            $"temperature {Number.Print(celsius)} C is outside the range of the solubility equation (0 to 40 C)"),
+            PossibleError.Unknown("no reference can be computed there"),
+            hint);
     }
 
     private static Finding? TemperatureTwice(Situation now)
@@ -81,19 +85,12 @@ internal static class ConditionGuards
 
         double asFahrenheit = (typed - 32) / 1.8;
         string hint = Math.Abs(asFahrenheit - own) < FahrenheitLikenessKelvin
-            ? Text($"; {Number.Print(typed)} degrees Fahrenheit would be {Number.Fixed(asFahrenheit, 1)} C: write {Number.Print(typed)}F if that was meant")
-            : "; check both against a third before going on";
+            ? Text($"{Number.Print(typed)} degrees Fahrenheit would be {Number.Fixed(asFahrenheit, 1)} C: write {Number.Print(typed)}F if that was meant")
+            : "check both against a third before going on";
         return new Finding(GuardNames.TemperatureTwice, FindingSeverity.NeedsReason, Text(
-            $"temperature typed is {Number.Fixed(typed, 2)} C and the probe's own thermometer says {Number.Fixed(own, 2)} C, {Number.Fixed(Math.Abs(difference), 2)} K apart (limit {Number.Print(ThermometerDifferenceKelvin)} K, TM 9-A6.8){hint}"),
-            Difference(now, typed, own));
-    }
-
-    private static double? Difference(Situation now, double typed, double own)
-    {
-        double pressure = now.PressureHectopascal ?? PressureUnits.HectopascalPerAtmosphere;
-        Status first = OxygenEquilibrium.MilligramsPerLitre(now.Setup.Equation, typed, now.Setup.Salinity.Value, pressure, RangeRule.Refuse, out double atTyped);
-        Status second = OxygenEquilibrium.MilligramsPerLitre(now.Setup.Equation, own, now.Setup.Salinity.Value, pressure, RangeRule.Refuse, out double atOwn);
-        return first == Status.Ok && second == Status.Ok ? atTyped - atOwn : null;
+            $"temperature typed is {Number.Fixed(typed, 2)} C and the probe's own thermometer says {Number.Fixed(own, 2)} C, {Number.Fixed(Math.Abs(difference), 2)} K apart (limit {Number.Print(ThermometerDifferenceKelvin)} K, TM 9-A6.8); were the probe's the right one"),
+            PossibleError.OfReference(now.SaturationAt(typed, now.PressureHectopascal), now.SaturationAt(own, now.PressureHectopascal)),
+            hint);
     }
 
     private static Finding? CoefficientRange(Situation now)
@@ -102,7 +99,9 @@ internal static class ConditionGuards
         bool inside = now.TemperatureCelsius is not double celsius
             || (coefficient.FittedLowCelsius <= celsius && celsius <= coefficient.FittedHighCelsius);
         return inside ? null : new Finding(GuardNames.CoefficientRange, FindingSeverity.Refuse, Text(
-            $"temperature {Number.Fixed(now.TemperatureCelsius ?? double.NaN, 2)} C is outside the range over which the temperature coefficient was fitted ({Number.Print(coefficient.FittedLowCelsius)} to {Number.Print(coefficient.FittedHighCelsius)} C): calibrate inside it, or enter a coefficient that was fitted there"), null);
+            $"temperature {Number.Fixed(now.TemperatureCelsius ?? double.NaN, 2)} C is outside the range over which the temperature coefficient was fitted ({Number.Print(coefficient.FittedLowCelsius)} to {Number.Print(coefficient.FittedHighCelsius)} C)"),
+            PossibleError.Unknown("how far the membrane departs from its coefficient there is not known"),
+            "calibrate inside it, or enter a coefficient that was fitted there");
     }
 
     private static Finding? PressureAtAltitude(Situation now)
@@ -116,21 +115,26 @@ internal static class ConditionGuards
         if (status != Status.Ok)
         {
             return new Finding(GuardNames.PressureAtAltitude, FindingSeverity.Refuse, Text(
-                $"pressure {Number.Fixed(pressure, 1)} hPa with altitude {Number.Print(altitude.Value)} m cannot be judged ({status}): check both and their units"), null);
+                $"pressure {Number.Fixed(pressure, 1)} hPa with altitude {Number.Print(altitude.Value)} m cannot be judged ({status})"),
+                PossibleError.Unknown("no station pressure is like this, so no size can be given"),
+                "check both and their units");
         }
 
         string seen = Text($"pressure {Number.Fixed(pressure, 1)} hPa at {Number.Print(altitude.Value)} m is {Number.Fixed(reduced, 1)} hPa at sea level");
-        double? error = SeaLevelError(now, pressure, altitude.Value);
         return verdict switch
         {
             PressureVerdict.RefusedHigh => new Finding(GuardNames.PressureAtAltitude, FindingSeverity.Refuse,
-                seen + ", higher than weather makes it (above 1050 hPa): a sea-level value, a wrong unit, or feet entered as metres; enter the absolute pressure of the station", error),
+                seen + ", higher than weather makes it (above 1050 hPa): a sea-level value, a wrong unit, or feet entered as metres",
+                SeaLevelError(now, pressure, altitude.Value), "enter the absolute pressure of the station"),
             PressureVerdict.RefusedLow => new Finding(GuardNames.PressureAtAltitude, FindingSeverity.Refuse,
-                seen + ", lower than weather makes it (below 870 hPa): a wrong unit or a wrong altitude", null),
+                seen + ", lower than weather makes it (below 870 hPa): a wrong unit or a wrong altitude",
+                StandardPressureError(now, pressure, altitude.Value), "enter the absolute pressure of the station with its unit, and the altitude with its own"),
             PressureVerdict.ConfirmHigh => new Finding(GuardNames.PressureAtAltitude, FindingSeverity.NeedsReason,
-                seen + ", which only a strong high makes (1035 to 1050 hPa): make sure that it is the absolute pressure of the station", error),
+                seen + ", which only a strong high makes (1035 to 1050 hPa); were it a sea-level value",
+                SeaLevelError(now, pressure, altitude.Value), "make sure that it is the absolute pressure of the station"),
             PressureVerdict.ConfirmLow => new Finding(GuardNames.PressureAtAltitude, FindingSeverity.NeedsReason,
-                seen + ", which only a deep storm makes (870 to 950 hPa): check the unit and the altitude", null),
+                seen + ", which only a deep storm makes (870 to 950 hPa); were the pressure the usual one of that altitude",
+                StandardPressureError(now, pressure, altitude.Value), "check the unit and the altitude"),
             _ => null,
         };
     }
@@ -147,33 +151,38 @@ internal static class ConditionGuards
         {
             return source.IsReported
                 ? new Finding(GuardNames.PressureReduced, FindingSeverity.NeedsReason, Text(
-                    $"pressure {Number.Fixed(pressure, 1)} hPa comes from {source.Text}, and reported pressures are nearly always reduced to sea level: enter the altitude so that it can be judged, or say how you know that it is the station's own"), null)
+                    $"pressure {Number.Fixed(pressure, 1)} hPa comes from {source.Text}, and reported pressures are nearly always reduced to sea level"),
+                    PossibleError.Unknown("a reduced one would make readings about 1.2 % too high per 100 m of altitude, which is not known here"),
+                    "enter the altitude so that it can be judged, or say how you know that it is the station's own")
                 : null;
         }
 
         bool undecided = PressurePlausibility.MayBeSeaLevelValue(pressure, altitude.Value);
-        if (!undecided || SeaLevelError(now, pressure, altitude.Value) is not double error)
+        PossibleError error = SeaLevelError(now, pressure, altitude.Value);
+        if (!undecided || error.Later is not double later)
         {
             return null;
         }
 
-        string seen = Text(
-            $"pressure {Number.Fixed(pressure, 1)} hPa could be a sea-level value as well as that of {Number.Print(altitude.Value)} m; were it one, the reference would be {Signed(error)} mg/L off: the probe would look {Number.Fixed(Math.Abs(error), 2)} mg/L {(error < 0 ? "high" : "low")} as found, and later readings would be as much too {(error < 0 ? "low" : "high")}");
-        bool ask = source.IsReported && WorthAskingMilligramsPerLitre <= Math.Abs(error);
+        string seen = Text($"pressure {Number.Fixed(pressure, 1)} hPa could be a sea-level value as well as that of {Number.Print(altitude.Value)} m; its source is {source.Text}");
+        bool ask = source.IsReported && WorthAskingMilligramsPerLitre <= Math.Abs(later);
         return ask
-            ? new Finding(GuardNames.PressureReduced, FindingSeverity.NeedsReason, seen + Text($"; {source.Text} usually reports reduced values: say how you know that it is the station's own"), error)
-            : new Finding(GuardNames.PressureReduced, FindingSeverity.Note, seen + Text($"; its source is {source.Text}"), error);
+            ? new Finding(GuardNames.PressureReduced, FindingSeverity.NeedsReason, seen + ", which usually reports reduced values", error, "say how you know that it is the station's own")
+            : new Finding(GuardNames.PressureReduced, FindingSeverity.Note, seen, error, "make sure that it is the absolute pressure of the station");
     }
 
-    private static double? SeaLevelError(Situation now, double pressure, double altitude)
+    /// <summary>What it would do if the pressure had been reduced to sea level.</summary>
+    private static PossibleError SeaLevelError(Situation now, double pressure, double altitude)
     {
-        if (now.TemperatureCelsius is not double celsius)
-        {
-            return null;
-        }
+        Status status = StandardAtmosphere.FromSeaLevel(pressure, altitude, out double station);
+        return PossibleError.OfReference(now.SaturationAt(now.TemperatureCelsius, pressure), status == Status.Ok ? now.SaturationAt(now.TemperatureCelsius, station) : null);
+    }
 
-        Status status = PressurePlausibility.SeaLevelValueError(now.Setup.Equation, celsius, now.Setup.Salinity.Value, pressure, altitude, out double error);
-        return status == Status.Ok ? error : null;
+    /// <summary>What it would do if the pressure were the one of the standard atmosphere there.</summary>
+    private static PossibleError StandardPressureError(Situation now, double pressure, double altitude)
+    {
+        Status status = StandardAtmosphere.FromSeaLevel(PressureUnits.HectopascalPerAtmosphere, altitude, out double usual);
+        return PossibleError.OfReference(now.SaturationAt(now.TemperatureCelsius, pressure), status == Status.Ok ? now.SaturationAt(now.TemperatureCelsius, usual) : null);
     }
 
     private static Finding? PressureHere(Situation now)
@@ -190,20 +199,18 @@ internal static class ConditionGuards
             return null;
         }
 
-        double? error = now.SaturationMilligramsPerLitre is double saturation ? saturation * difference / pressure : null;
         return new Finding(GuardNames.PressureHere, FindingSeverity.NeedsReason, Text(
-            $"pressure {Number.Fixed(pressure, 1)} hPa is {Number.Fixed(Math.Abs(difference), 1)} hPa {(difference < 0 ? "below" : "above")} the last one here ({Number.Fixed(before, 1)} hPa on {last.CompletedUtc:yyyy-MM-dd}, {last.Points[0].Pressure.Source}), more than weather changes: check unit, altitude and source"), error);
+            $"pressure {Number.Fixed(pressure, 1)} hPa is {Number.Fixed(Math.Abs(difference), 1)} hPa {(difference < 0 ? "below" : "above")} the last one here ({Number.Fixed(before, 1)} hPa on {last.CompletedUtc:yyyy-MM-dd}, {last.Points[0].Pressure.Source}), more than weather changes; were the last one still right"),
+            PossibleError.OfReference(now.SaturationAt(now.TemperatureCelsius, pressure), now.SaturationAt(now.TemperatureCelsius, before)),
+            "check unit, altitude and source");
     }
 
     private static Finding? StillWater(Situation now)
     {
         bool still = now.Setup.Stirring == Stirring.Still && now.Setup.Method == CalibrationIds.AirSaturatedWater;
         return still ? new Finding(GuardNames.StirringStill, FindingSeverity.Note,
-            "the water is still: an amperometric probe reads 10 to 50 % low in it (from memory), and readings in moving water will be flagged against this calibration", null) : null;
-    }
-
-    private static string Signed(double value)
-    {
-        return (value < 0 ? "" : "+") + Number.Fixed(value, 2);
+            "the water is still, in which an amperometric probe reads 10 to 50 % low (from memory); at 10 %",
+            PossibleError.OfSignal(now.SaturationMilligramsPerLitre, 0.9),
+            "keep the water moving as it does where the probe will hang; readings in moving water will be flagged against this calibration") : null;
     }
 }

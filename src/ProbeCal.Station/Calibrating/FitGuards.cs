@@ -28,14 +28,14 @@ internal static class FitGuards
 
     private static Finding? ZeroAboveSpan(Situation now)
     {
-        string? wrong = now.FitStatus switch
+        (string Saw, string Do)? wrong = now.FitStatus switch
         {
             Status.Ok => null,
-            Status.ZeroAboveRange => "the zero lies above the 100 % point: points mixed up, the input wired backwards, or the zero solution full of air",
-            Status.PointsDegenerate => "the zero and the 100 % point read the same: an input that is not connected, or a probe that was not moved",
-            _ => $"the points make no calibration ({now.FitStatus})",
+            Status.ZeroAboveRange => ("the zero lies above the 100 % point", "look for points mixed up, an input wired backwards, or a zero solution full of air"),
+            Status.PointsDegenerate => ("the zero and the 100 % point read the same", "look for an input that is not connected, or a probe that was not moved"),
+            _ => ($"the points make no calibration ({now.FitStatus})", "take them again"),
         };
-        return wrong == null ? null : new Finding(GuardNames.Zero, FindingSeverity.Refuse, wrong, null);
+        return wrong == null ? null : new Finding(GuardNames.Zero, FindingSeverity.Refuse, wrong.Value.Saw, PossibleError.Unknown("no slope comes out of it, so no reading either"), wrong.Value.Do);
     }
 
     private static Finding? SlopeChange(Situation now)
@@ -56,8 +56,9 @@ internal static class FitGuards
         }
 
         return new Finding(GuardNames.Slope, FindingSeverity.NeedsReason, Text(
-            $"the slope is {Number.Fixed(Math.Abs(percent), 0)} % {(percent < 0 ? "below" : "above")} that of {now.Previous.Id}, more than ageing explains: look for a new or torn membrane, a bubble, a wrong pressure, or another unit of the signal"),
-            now.SaturationMilligramsPerLitre * percent / 100);
+            $"the slope is {Number.Fixed(Math.Abs(percent), 0)} % {(percent < 0 ? "below" : "above")} that of {now.Previous.Id}, more than ageing explains; were the old one still right"),
+            PossibleError.OfSignal(now.SaturationMilligramsPerLitre, 1 + (percent / 100)),
+            "look for a new or torn membrane, a bubble, a wrong pressure, or another unit of the signal");
     }
 
     private static Finding? AsFound(Situation now)
@@ -69,6 +70,8 @@ internal static class FitGuards
 
         double percent = 100 * error / span.ReferenceMilligramsPerLitre;
         return Math.Abs(percent) <= AsFoundPercent ? null : new Finding(GuardNames.AsFound, FindingSeverity.Note, Text(
-            $"before adjustment the probe read {Number.Fixed(100 + percent, 1)} % in saturated {(now.Setup.Method == CalibrationIds.WaterSaturatedAir ? "air" : "water")}, outside 95 to 105 % (OceanGliders oxygen practice): readings since its last calibration deserve a second look"), error);
+            $"before adjustment the probe read {Number.Fixed(100 + percent, 1)} % in saturated {(now.Setup.Method == CalibrationIds.WaterSaturatedAir ? "air" : "water")}, outside 95 to 105 % (OceanGliders oxygen practice); were the probe right and the reference wrong"),
+            PossibleError.Known(error, -error),
+            "make sure of temperature, pressure and the state of the water first; if they are right, readings since the last calibration deserve a second look");
     }
 }

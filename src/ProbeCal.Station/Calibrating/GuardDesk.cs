@@ -38,7 +38,7 @@ internal sealed class GuardDesk
     {
         if (finding.Severity == FindingSeverity.Refuse)
         {
-            throw Stop(finding, finding.Saw, aboutEntries);
+            throw Stop(finding, finding.Sentence, aboutEntries);
         }
 
         string? reason = null;
@@ -47,7 +47,7 @@ internal sealed class GuardDesk
             reason = _reasons.GetValueOrDefault(finding.Guard) ?? await _dialogue.ReasonAsync(finding, cancellationToken).ConfigureAwait(false);
             if (string.IsNullOrWhiteSpace(reason))
             {
-                throw Stop(finding, $"{finding.Saw}; if it is right all the same, say why: --confirm {finding.Guard}=\"REASON\"", aboutEntries);
+                throw Stop(finding, $"{finding.Sentence}; if it is right all the same, say why: --confirm {finding.Guard}=\"REASON\"", aboutEntries);
             }
 
             _reasons[finding.Guard] = reason;
@@ -56,7 +56,7 @@ internal sealed class GuardDesk
         _session.Keep(finding, reason);
         if (_told.Add(finding.Guard))
         {
-            _dialogue.Say(reason == null ? "note: " + finding.Saw : $"accepted: {finding.Saw} (reason: {reason})");
+            _dialogue.Say(reason == null ? "note: " + finding.Sentence : $"accepted: {finding.Sentence} (reason: {reason})");
         }
     }
 

@@ -37,18 +37,18 @@ internal sealed record Situation
     public RecordedPoint? Span { get; init; }
 
     /// <summary>Concentration at 100 % there, mg/L; null while temperature or pressure is not known or out of range.</summary>
-    public double? SaturationMilligramsPerLitre
-    {
-        get
-        {
-            if (TemperatureCelsius is not double celsius || PressureHectopascal is not double hectopascal)
-            {
-                return null;
-            }
+    public double? SaturationMilligramsPerLitre => SaturationAt(TemperatureCelsius, PressureHectopascal);
 
-            Status status = OxygenEquilibrium.MilligramsPerLitre(Setup.Equation, celsius, Setup.Salinity.Value, hectopascal, RangeRule.Refuse, out double value);
-            return status == Status.Ok ? value : null;
+    /// <summary>Concentration at 100 %, mg/L, at some temperature and pressure; null where one is not known or out of range.</summary>
+    public double? SaturationAt(double? temperatureCelsius, double? pressureHectopascal)
+    {
+        if (temperatureCelsius is not double celsius || pressureHectopascal is not double hectopascal)
+        {
+            return null;
         }
+
+        Status status = OxygenEquilibrium.MilligramsPerLitre(Setup.Equation, celsius, Setup.Salinity.Value, hectopascal, RangeRule.Refuse, out double value);
+        return status == Status.Ok ? value : null;
     }
 }
 

@@ -32,10 +32,10 @@ public class GuardTests
     {
         Finding finding = Look(GuardNames.PressureAtAltitude, At(20, 1015))!;
         Assert.Equal(FindingSeverity.Refuse, finding.Severity);
-        Assert.Contains("hPa at sea level, higher than weather makes it", finding.Saw, StringComparison.Ordinal);
-        Assert.Contains("enter the absolute pressure of the station", finding.Saw, StringComparison.Ordinal);
+        Assert.Contains("hPa at sea level, higher than weather makes it", finding.Sentence, StringComparison.Ordinal);
+        Assert.Contains("enter the absolute pressure of the station", finding.Sentence, StringComparison.Ordinal);
         // Taken at face value the reference would be about 7.9 % high: 0.67 mg/L at 20 °C.
-        Assert.InRange(finding.PossibleErrorMilligramsPerLitre!.Value, 0.6, 0.75);
+        Assert.InRange(finding.Error.Later!.Value, 0.6, 0.75);
     }
 
     [Theory]
@@ -50,8 +50,8 @@ public class GuardTests
         // Published: a sea-level value costs +1.2 % at 100 m (0.11 mg/L at 20 °C).
         if (altitude == 100)
         {
-            Assert.InRange(finding.PossibleErrorMilligramsPerLitre!.Value, 0.10, 0.12);
-            Assert.Contains("0.11 mg/L low as found, and later readings would be as much too high", finding.Saw, StringComparison.Ordinal);
+            Assert.InRange(finding.Error.Later!.Value, 0.10, 0.12);
+            Assert.Contains("if so, the probe looks 0.11 mg/L too low as found, and once adjusted here its later readings are 0.11 mg/L too high", finding.Sentence, StringComparison.Ordinal);
         }
     }
 
@@ -82,7 +82,7 @@ public class GuardTests
         if (finding != null)
         {
             Assert.Equal(FindingSeverity.NeedsReason, finding.Severity);
-            Assert.Equal(Math.Sign(change), Math.Sign(finding.PossibleErrorMilligramsPerLitre!.Value));
+            Assert.Equal(Math.Sign(change), Math.Sign(finding.Error.Later!.Value));
         }
     }
 
@@ -91,7 +91,7 @@ public class GuardTests
     {
         Finding finding = Look(GuardNames.TemperatureRange, At(68, 940))!;
         Assert.Equal(FindingSeverity.Refuse, finding.Severity);
-        Assert.Contains("write 68F (20.0 C)", finding.Saw, StringComparison.Ordinal);
+        Assert.Contains("write 68F (20.0 C)", finding.Sentence, StringComparison.Ordinal);
         Assert.Null(Look(GuardNames.TemperatureRange, At(38, 940)));
         Assert.Equal(FindingSeverity.Refuse, Look(GuardNames.TemperatureRange, At(-1, 940))?.Severity);
     }
@@ -106,7 +106,7 @@ public class GuardTests
         Situation now = At(typed, 940) with { ProbeTemperatureCelsius = own, Setup = Bench.Setup with { TypedTemperatureCelsius = typed } };
         Finding? finding = Look(GuardNames.TemperatureTwice, now);
         Assert.Equal(trips, finding != null);
-        Assert.Contains(says, finding?.Saw ?? "", StringComparison.Ordinal);
+        Assert.Contains(says, finding?.Sentence ?? "", StringComparison.Ordinal);
     }
 
     [Theory]
