@@ -14,8 +14,13 @@ public delegate bool FitModel(double[] parameters, double[] values, double[] jac
 public static class LevenbergMarquardt
 {
     private const int MostSteps = 2000;
+    private const int MostPolishing = 60;
     /// <summary>A step that moves every parameter by less than this of itself ends the search.</summary>
-    private const double Settled = 1e-11;
+    private const double Settled = 1e-13;
+    /// <summary>Share of the squared residuals that a step may still remove where the search ends and the polishing begins.</summary>
+    private const double Offset = 1e-9;
+    /// <summary>A last step larger than this is no end: the search has not settled.</summary>
+    private const double GoodEnough = 1e-6;
     private const double LargestDamping = 1e18;
 
     /// <summary>Fits from a starting point. The analytic derivatives make the result good to the rounding of the model.</summary>
@@ -45,33 +50,78 @@ public static class LevenbergMarquardt
         double growth = 2.0;
         for (int step = 1; step <= MostSteps; step++)
         {
+            if (IsNear(now, scale)) { return Polish(model, now, next, observed, standardUncertainty, scale, step, out fit); }
             if (!Step(now, scale, damping, out double[] change)) { return Status.PointsDegenerate; }
-            bool settled = true;
-            for (int j = 0; j < unknowns; j++)
+            for (int j = 0; j < unknowns; j++) { next.Parameters[j] = now.Parameters[j] + change[j]; }
+            if (next.Evaluate(model, observed, standardUncertainty) && next.Sum <= now.Sum)
             {
-                next.Parameters[j] = now.Parameters[j] + change[j];
-                settled = settled && FitCheck.Size(change[j]) <= Settled * (FitCheck.Size(now.Parameters[j]) + 1e-290);
-            }
-
-            bool better = next.Evaluate(model, observed, standardUncertainty) && next.Sum <= now.Sum;
-            if (better)
-            {
-                bool perfect = next.Sum == 0.0;
                 (now, next) = (next, now);
-                // With the damping gone such a step is Newton's own, which doubles the digits: what is left is rounding.
-                if (perfect || (settled && damping < 1.0)) { return Finish(now, observed, standardUncertainty, step, out fit); }
                 damping = damping < 1e-15 ? damping : damping / 9.0;
                 growth = 2.0;
                 continue;
             }
 
-            if (settled) { return Finish(now, observed, standardUncertainty, step, out fit); }
             damping *= growth;
             growth *= 2.0;
             if (LargestDamping < damping) { return Status.PointsDegenerate; }
         }
 
         return Status.PointsDegenerate;
+    }
+
+    /// <summary>
+    /// True where next to nothing of the residuals can be removed by moving the parameters (the relative offset of D. M. Bates and D. G. Watts,
+    /// Technometrics 23 (1981) 179–183), or the parameters would not move.
+    /// </summary>
+    private static bool IsNear(Trial now, double[] scale)
+    {
+        if (!Step(now, scale, 0.0, out double[] change)) { return false; }
+        int unknowns = change.Length;
+        double removable = 0.0;
+        for (int i = 0; i < now.Rest.Length; i++)
+        {
+            double sum = 0.0;
+            for (int j = 0; j < unknowns; j++) { sum += now.Rows[(i * unknowns) + j] * change[j]; }
+            removable += sum * sum;
+        }
+
+        return removable <= Offset * now.Sum || Moved(now, change) <= Settled;
+    }
+
+    /// <summary>
+    /// Newton's own steps for as long as they shrink. The sum of squares is flat here and cannot judge them: half the digits would be lost.
+    /// </summary>
+    private static Status Polish(
+        FitModel model, Trial now, Trial next, double[] observed, double[]? standardUncertainty, double[] scale, int steps, out FitResult? fit)
+    {
+        double last = double.PositiveInfinity;
+        for (int more = 0; more < MostPolishing; more++)
+        {
+            if (!Step(now, scale, 0.0, out double[] change)) { break; }
+            double moved = Moved(now, change);
+            if (!(moved < last)) { break; }
+            last = moved;
+            for (int j = 0; j < change.Length; j++) { next.Parameters[j] = now.Parameters[j] + change[j]; }
+            if (!next.Evaluate(model, observed, standardUncertainty)) { break; }
+            (now, next) = (next, now);
+            steps++;
+        }
+
+        fit = null;
+        return last <= GoodEnough ? Finish(now, observed, standardUncertainty, steps, out fit) : Status.PointsDegenerate;
+    }
+
+    /// <summary>The largest change of a parameter, in units of the parameter.</summary>
+    private static double Moved(Trial now, double[] change)
+    {
+        double largest = 0.0;
+        for (int j = 0; j < change.Length; j++)
+        {
+            double size = FitCheck.Size(change[j]) / (FitCheck.Size(now.Parameters[j]) + 1e-290);
+            if (largest < size) { largest = size; }
+        }
+
+        return largest;
     }
 
     /// <summary>The damped step: the Jacobian with a row for each parameter below it that holds the parameter back.</summary>
