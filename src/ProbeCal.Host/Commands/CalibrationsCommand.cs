@@ -134,7 +134,7 @@ internal static class CalibrationsCommand
             return ExitCode.Done;
         }
 
-        foreach (string fault in chain.Faults)
+        foreach (ChainFault fault in chain.Faults)
         {
             terminal.Error.WriteLine($"probecal: calibration log {log.LogId}: CHAIN BROKEN: {fault}");
         }
@@ -150,7 +150,7 @@ internal static class CalibrationsCommand
             log.LogId,
             log.Chain.Count,
             log.Chain.HeadSha256,
-            [.. log.Chain.Faults],
+            [.. log.Chain.Faults.Select(static fault => fault.Text)],
             [.. records.Select(static stored => new CalibrationListItem(
                 stored.Record.Id,
                 stored.Record.CompletedUtc,

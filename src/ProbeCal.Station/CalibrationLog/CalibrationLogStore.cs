@@ -8,26 +8,36 @@ using ProbeCal.Station.Storage;
 
 namespace ProbeCal.Station.CalibrationLog;
 
-/// <summary>A record as the log keeps it.</summary>
+/// <summary>A calibration or check as the log keeps it.</summary>
 /// <param name="Record">The record, read from the stored bytes.</param>
 /// <param name="Sha256">SHA-256 over the stored bytes, lower-case hex.</param>
 public sealed record StoredCalibration(CalibrationRecord Record, string Sha256);
 
 /// <summary>
-/// The append-only calibration log: each record as the exact bytes of its JSON, chained by SHA-256. The whole log is read
-/// and verified on opening. One program writes at a time (<see cref="DataDirectory"/>); not for concurrent use.
+/// The append-only calibration log: each entry as the exact bytes of its JSON, chained by SHA-256. The whole log is read
+/// and verified on opening, and every imported log with it. One program writes at a time (<see cref="DataDirectory"/>); not
+/// for concurrent use.
 /// </summary>
 public sealed class CalibrationLogStore : IDisposable
 {
     private readonly SqliteFile _file;
+    private readonly TimeProvider? _time;
+    private readonly List<StoredEntry> _entries;
     private readonly List<StoredCalibration> _records;
+    private readonly List<ImportedLog> _imported;
+    private Standing _standing;
 
-    private CalibrationLogStore(SqliteFile file, LogReading reading)
+    private CalibrationLogStore(SqliteFile file, TimeProvider? time)
     {
         _file = file;
-        _records = reading.Records;
+        _time = time;
+        LogReading reading = LogTables.ReadOwn(file);
         LogId = reading.LogId;
         Chain = reading.Chain;
+        _entries = reading.Entries;
+        _records = [.. CalibrationsOf(_entries)];
+        _imported = LogTables.ReadImported(file);
+        _standing = new Standing(_entries, _imported);
     }
 
     /// <summary>The log's own id: twelve hex digits, made once.</summary>
@@ -36,70 +46,97 @@ public sealed class CalibrationLogStore : IDisposable
     /// <summary>What the verification on opening found, kept up to date by appends.</summary>
     public ChainState Chain { get; private set; }
 
-    /// <summary>Every record that can be read, oldest first. Where <see cref="Chain"/> has faults, trust none blindly.</summary>
+    /// <summary>The copy that was made before an older log was migrated, or null.</summary>
+    public string? BackupPath => _file.BackupPath;
+
+    /// <summary>Every entry that can be read, of any kind, oldest first. Where <see cref="Chain"/> has faults, trust none blindly.</summary>
+    public IReadOnlyList<StoredEntry> Entries => _entries;
+
+    /// <summary>The calibrations and checks among <see cref="Entries"/>, withdrawn and replaced ones too.</summary>
     public IReadOnlyList<StoredCalibration> Records => _records;
 
-    /// <summary>Opens the log for writing, making it when it is not there.</summary>
+    /// <summary>Logs made elsewhere and imported, each with its own id and chain, in the order in which they came.</summary>
+    public IReadOnlyList<ImportedLog> ImportedLogs => _imported;
+
+    /// <summary>Opens the log for writing, making it when it is not there and migrating an older one after a backup copy.</summary>
     /// <param name="path">The file, <see cref="DataDirectory.CalibrationLogFile"/>.</param>
-    /// <param name="time">Gives the time in the names of backup copies.</param>
+    /// <param name="time">Gives the time at which entries are written, and that in the names of backup copies.</param>
     /// <param name="newLogId">Source of the id of a new log.</param>
     /// <exception cref="InputException">The file is from a newer version or of another kind; it is untouched.</exception>
     /// <exception cref="WorkFailedException">The file is damaged, or the system refuses it; it is left as it is.</exception>
     public static CalibrationLogStore OpenForWriting(string path, TimeProvider time, Func<Guid> newLogId)
     {
         SqliteFile file = SqliteFile.OpenForWriting(path, CalibrationLogFormat.File, DamagePolicy.Refuse, time);
-        return Open(file, () => BeginLog(file, newLogId()));
+        return Open(file, time, () => LogTables.Begin(file, newLogId().ToString("N", CultureInfo.InvariantCulture)[..12]));
     }
 
-    /// <summary>Opens an existing log for reading.</summary>
-    /// <exception cref="InputException">There is none, it is from another version, or of another kind.</exception>
+    /// <summary>Opens an existing log for reading, also one of an older version, which stays as it is.</summary>
+    /// <exception cref="InputException">There is none, it is from a newer version, or of another kind.</exception>
     /// <exception cref="WorkFailedException">It is damaged, or the system refuses it.</exception>
     public static CalibrationLogStore OpenForReading(string path)
     {
         SqliteFile file = SqliteFile.OpenForReading(path, CalibrationLogFormat.File);
-        return Open(file, () => { });
+        return Open(file, null, static () => { });
     }
 
-    /// <summary>Adds a record at the end. It is on the disk when this returns.</summary>
-    /// <returns>The record with its id, index and the hash of the one before.</returns>
-    /// <exception cref="WorkFailedException">The chain has a fault, or the record could not be stored; nothing was added.</exception>
-    public StoredCalibration Append(CalibrationRecord record)
+    /// <summary>Adds an entry at the end. It is on the disk when this returns.</summary>
+    /// <returns>The entry with its id, index, time of writing and the hash of the one before.</returns>
+    /// <exception cref="InputException">It amends or replaces an entry that is not there; nothing was added.</exception>
+    /// <exception cref="WorkFailedException">The chain has a fault, or the entry could not be stored; nothing was added.</exception>
+    public StoredEntry Append(LogEntry entry)
     {
         RequireWhole();
+        RequireReferred(entry);
         long index = Chain.Count + 1;
-        CalibrationRecord placed = record with
+        LogEntry placed = entry with
         {
             LogId = LogId,
             Index = index,
             Id = string.Create(CultureInfo.InvariantCulture, $"{LogId}-{index:0000}"),
             PreviousSha256 = Chain.HeadSha256,
+            WrittenUtc = _time!.GetUtcNow(),
         };
         byte[] bytes = RecordJson.ToBytes(placed);
         string hash = LogReading.Hash(bytes);
         try
         {
-            Insert(placed, bytes, hash);
+            LogTables.Insert(_file, placed, bytes, hash);
         }
         catch (SqliteException fault)
         {
             throw SqliteFaults.AsWorkFailed(fault, _file.Path);
         }
 
-        StoredCalibration stored = new(placed, hash);
-        _records.Add(stored);
+        StoredEntry stored = new(placed, hash);
+        _entries.Add(stored);
+        _records.AddRange(CalibrationsOf([stored]));
+        _standing = new Standing(_entries, _imported);
         Chain = Chain with { Count = index, HeadSha256 = hash };
         return stored;
     }
 
-    /// <summary>The record with this id, or null.</summary>
+    /// <summary>Adds a calibration or check at the end, as <see cref="Append(LogEntry)"/> does.</summary>
+    public StoredCalibration Append(CalibrationRecord record)
+    {
+        StoredEntry stored = Append((LogEntry)record);
+        return new StoredCalibration((CalibrationRecord)stored.Entry, stored.Sha256);
+    }
+
+    /// <summary>The calibration or check with this id, in this log or an imported one, or null.</summary>
     public StoredCalibration? Find(string calibrationId)
     {
-        return _records.FirstOrDefault(stored => stored.Record.Id == calibrationId);
+        return FindEntry(calibrationId) is { Entry: CalibrationRecord record } stored ? new StoredCalibration(record, stored.Sha256) : null;
+    }
+
+    /// <summary>The entry with this id, in this log or an imported one, or null.</summary>
+    public StoredEntry? FindEntry(string id)
+    {
+        return _entries.Concat(_imported.SelectMany(static log => log.Entries)).FirstOrDefault(stored => stored.Entry.Id == id);
     }
 
     /// <summary>
-    /// The calibration in force for a probe at a time: the latest that passed and was complete by then, or null. A failed
-    /// one is kept in the log and never takes over.
+    /// The calibration in force for a probe at a time: the latest of this log that passed, was complete by then, and was neither
+    /// withdrawn nor replaced; or null. A failed one, a check, and one of an imported log never take over.
     /// </summary>
     public StoredCalibration? LatestFor(string probeId, DateTimeOffset atUtc)
     {
@@ -107,7 +144,7 @@ public sealed class CalibrationLogStore : IDisposable
         foreach (StoredCalibration stored in _records)
         {
             CalibrationRecord record = stored.Record;
-            bool inForce = record.Probe.Id == probeId && record.Result.Pass && record.CompletedUtc <= atUtc;
+            bool inForce = record.Probe.Id == probeId && MayBeInForce(record) && record.CompletedUtc <= atUtc;
             if (inForce && (latest == null || latest.Record.CompletedUtc <= record.CompletedUtc))
             {
                 latest = stored;
@@ -117,15 +154,75 @@ public sealed class CalibrationLogStore : IDisposable
         return latest;
     }
 
-    /// <summary>The exact bytes of a record as they are stored.</summary>
+    /// <summary>The checks of a probe that hold, oldest first by the time they were complete.</summary>
+    public IReadOnlyList<StoredCalibration> ChecksFor(string probeId)
+    {
+        return [.. _records.Where(stored => stored.Record.Purpose == CalibrationRecord.CheckPurpose && stored.Record.Probe.Id == probeId && Holds(stored.Record.Id)).OrderBy(static stored => stored.Record.CompletedUtc)];
+    }
+
+    /// <summary>A piece of equipment as the register had it at a time, or null.</summary>
+    public EquipmentRecord? EquipmentAt(string equipmentId, DateTimeOffset atUtc)
+    {
+        return AllEquipment(atUtc).FirstOrDefault(each => each.Equipment == equipmentId);
+    }
+
+    /// <summary>The register as it stood at a time: the newest entry of each id that holds, in order of their ids.</summary>
+    public IReadOnlyList<EquipmentRecord> AllEquipment(DateTimeOffset atUtc)
+    {
+        SortedDictionary<string, EquipmentRecord> register = new(StringComparer.Ordinal);
+        foreach (EquipmentRecord each in _entries.Select(static stored => stored.Entry).OfType<EquipmentRecord>())
+        {
+            if (each.AtUtc <= atUtc && Holds(each.Id))
+            {
+                register[each.Equipment] = each;
+            }
+        }
+
+        return [.. register.Values];
+    }
+
+    /// <summary>What was done to a probe, oldest first; withdrawn entries left out.</summary>
+    public IReadOnlyList<ServiceRecord> ServiceFor(string probeId)
+    {
+        return [.. _entries.Select(static stored => stored.Entry).OfType<ServiceRecord>().Where(each => each.Probe == probeId && Holds(each.Id)).OrderBy(static each => each.At)];
+    }
+
+    /// <summary>True when an entry was withdrawn and the withdrawal holds.</summary>
+    public bool IsWithdrawn(string id)
+    {
+        return _standing.WithdrawalOf(id) != null;
+    }
+
+    /// <summary>The withdrawal of an entry, or null.</summary>
+    public AmendmentRecord? WithdrawalOf(string id)
+    {
+        return _standing.WithdrawalOf(id);
+    }
+
+    /// <summary>The record that replaces another, or null.</summary>
+    public CalibrationRecord? ReplacementOf(string id)
+    {
+        return _standing.ReplacementOf(id);
+    }
+
+    /// <summary>True when a calibration passed, was not withdrawn and not replaced, so that readings may be corrected with it.</summary>
+    public bool MayBeInForce(CalibrationRecord record)
+    {
+        return record.Purpose == CalibrationRecord.CalibrationPurpose && record.Result.Pass && Holds(record.Id);
+    }
+
+    /// <summary>The exact bytes of a calibration or check as they are stored.</summary>
     public byte[] BytesOf(StoredCalibration stored)
+    {
+        return BytesOf(stored.Record);
+    }
+
+    /// <summary>The exact bytes of an entry as they are stored.</summary>
+    public byte[] BytesOf(LogEntry entry)
     {
         try
         {
-            using SqliteCommand command = _file.Connection.CreateCommand();
-            command.CommandText = "SELECT bytes FROM records WHERE idx = $idx";
-            command.Parameters.AddWithValue("$idx", stored.Record.Index);
-            return (byte[]?)command.ExecuteScalar() ?? throw new WorkFailedException($"{_file.Path}: record {stored.Record.Id} is no longer there");
+            return LogTables.Bytes(_file, LogId, entry) ?? throw new WorkFailedException($"{_file.Path}: record {entry.Id} is no longer there");
         }
         catch (SqliteException fault)
         {
@@ -133,13 +230,14 @@ public sealed class CalibrationLogStore : IDisposable
         }
     }
 
-    /// <summary>Stops the work when the chain has a fault: nothing may rest on a log that was tampered with.</summary>
-    /// <exception cref="WorkFailedException">The chain has a fault.</exception>
+    /// <summary>Stops the work when a chain has a fault: nothing may rest on a log that was tampered with.</summary>
+    /// <exception cref="WorkFailedException">The chain of the log, or of an imported one, has a fault.</exception>
     public void RequireWhole()
     {
-        if (!Chain.IsWhole)
+        ChainFault? fault = Chain.Faults.Concat(_imported.SelectMany(static log => log.Chain.Faults)).FirstOrDefault();
+        if (fault != null)
         {
-            throw new WorkFailedException($"{_file.Path}: the chain of calibration records is broken: {Chain.Faults[0]}; keep the file as evidence and put a sound copy in its place, or go on in another --data folder");
+            throw new WorkFailedException($"{_file.Path}: the chain of calibration records is broken: {fault}; keep the file as evidence and put a sound copy in its place, or go on in another --data folder");
         }
     }
 
@@ -149,12 +247,12 @@ public sealed class CalibrationLogStore : IDisposable
         _file.Dispose();
     }
 
-    private static CalibrationLogStore Open(SqliteFile file, Action prepare)
+    private static CalibrationLogStore Open(SqliteFile file, TimeProvider? time, Action prepare)
     {
         try
         {
             prepare();
-            return new CalibrationLogStore(file, LogReading.Of(file));
+            return new CalibrationLogStore(file, time);
         }
         catch (SqliteException fault)
         {
@@ -168,25 +266,27 @@ public sealed class CalibrationLogStore : IDisposable
         }
     }
 
-    private static void BeginLog(SqliteFile file, Guid id)
+    private static IEnumerable<StoredCalibration> CalibrationsOf(IEnumerable<StoredEntry> entries)
     {
-        using SqliteCommand command = file.Connection.CreateCommand();
-        command.CommandText = "INSERT INTO log (only_one, log_id, format) SELECT 1, $id, $format WHERE NOT EXISTS (SELECT 1 FROM log)";
-        command.Parameters.AddWithValue("$id", id.ToString("N", CultureInfo.InvariantCulture)[..12]);
-        command.Parameters.AddWithValue("$format", CalibrationLogFormat.FormatName);
-        command.ExecuteNonQuery();
+        return entries.Where(static stored => stored.Entry is CalibrationRecord).Select(static stored => new StoredCalibration((CalibrationRecord)stored.Entry, stored.Sha256));
     }
 
-    private void Insert(CalibrationRecord placed, byte[] bytes, string hash)
+    private bool Holds(string id)
     {
-        using SqliteCommand command = _file.Connection.CreateCommand();
-        command.CommandText = "INSERT INTO records (idx, calibration_id, probe_id, completed_us, bytes, sha256) VALUES ($idx, $id, $probe, $completed, $bytes, $sha256)";
-        command.Parameters.AddWithValue("$idx", placed.Index);
-        command.Parameters.AddWithValue("$id", placed.Id);
-        command.Parameters.AddWithValue("$probe", placed.Probe.Id);
-        command.Parameters.AddWithValue("$completed", LogReading.Microseconds(placed.CompletedUtc));
-        command.Parameters.AddWithValue("$bytes", bytes);
-        command.Parameters.AddWithValue("$sha256", hash);
-        command.ExecuteNonQuery();
+        return _standing.WithdrawalOf(id) == null && _standing.ReplacementOf(id) == null;
+    }
+
+    private void RequireReferred(LogEntry entry)
+    {
+        string? referred = entry switch
+        {
+            AmendmentRecord amendment => amendment.Of,
+            CalibrationRecord record => record.Replaces,
+            _ => null,
+        };
+        if (referred != null && FindEntry(referred) == null)
+        {
+            throw new InputException($"record {Wrong.Shown(referred)}: not in this log{NearestName.DidYouMean(referred, _entries.Select(static known => known.Entry.Id))}; 'probecal calibrations list' shows the ids");
+        }
     }
 }

@@ -6,7 +6,7 @@ namespace ProbeCal.Station.CalibrationLog;
 /// One calibration, whole: when, where, which probe, how, against what, with which result and how sure. The log keeps the
 /// UTF-8 bytes of its JSON; nothing in it is computed again on reading.
 /// </summary>
-public sealed record CalibrationRecord
+public sealed record CalibrationRecord : LogEntry
 {
     /// <summary>Name of the format.</summary>
     public const string FormatName = "probecal-calibration-record";
@@ -20,23 +20,14 @@ public sealed record CalibrationRecord
     /// <summary>The version this program writes. Version 2 added checks, several points, references, and the decision with its uncertainty.</summary>
     public const int CurrentVersion = 2;
 
-    /// <summary><see cref="FormatName"/>.</summary>
-    public string Format { get; init; } = FormatName;
+    // What a record leaves out must have its default: the generated reader hands null to an init-only property that is not in the
+    // JSON, so those with a default put it back themselves.
 
-    /// <summary>Version of the format, <see cref="CurrentVersion"/>.</summary>
-    public int Version { get; init; } = CurrentVersion;
-
-    /// <summary>Id of the calibration: log id and index. Empty until the log has taken it.</summary>
-    public string Id { get; init; } = "";
-
-    /// <summary>Id of the log that took it. Empty until then.</summary>
-    public string LogId { get; init; } = "";
-
-    /// <summary>Place in the log, from 1. 0 until the log has taken it.</summary>
-    public long Index { get; init; }
-
-    /// <summary>SHA-256 over the stored bytes of the record before, in lower-case hex; 64 zeros for the first.</summary>
-    public string PreviousSha256 { get; init; } = "";
+    /// <summary>An empty record; the version is the one this program writes.</summary>
+    public CalibrationRecord()
+        : base(FormatName, CurrentVersion)
+    {
+    }
 
     /// <summary>True when the signal came from a simulation: no real probe was calibrated.</summary>
     public required bool Simulated { get; init; }
@@ -50,9 +41,6 @@ public sealed record CalibrationRecord
     /// </summary>
     public required DateTimeOffset CompletedUtc { get; init; }
 
-    /// <summary>Who did it; none when not stated.</summary>
-    public string? By { get; init; }
-
     /// <summary>Site, or the room where it was done; none when not stated.</summary>
     public string? Site { get; init; }
 
@@ -60,7 +48,7 @@ public sealed record CalibrationRecord
     public RecordedQuantity? Altitude { get; init; }
 
     /// <summary><c>calibration</c>, or <c>check</c>: the same points and guards, and no change of coefficients.</summary>
-    public string Purpose { get; init; } = CalibrationPurpose;
+    public string Purpose { get; init => field = value ?? CalibrationPurpose; } = CalibrationPurpose;
 
     /// <summary>For a check: <c>initial</c>, <c>continuing</c> or <c>end-of-day</c>; none when not stated.</summary>
     public string? CheckKind { get; init; }
@@ -75,10 +63,10 @@ public sealed record CalibrationRecord
     public string? ImportedFrom { get; init; }
 
     /// <summary>Reference equipment used, by the ids of the register: barometer, thermometer, cylinder, titrant, zero solution.</summary>
-    public string[] Equipment { get; init; } = [];
+    public string[] Equipment { get; init => field = value ?? []; } = [];
 
     /// <summary>The steps of the procedure as they were done; empty in records of version 1.</summary>
-    public RecordedStep[] Steps { get; init; } = [];
+    public RecordedStep[] Steps { get; init => field = value ?? []; } = [];
 
     /// <summary>The fit over several points; none where one point and a zero give the slope.</summary>
     public RecordedFit? Fit { get; init; }
@@ -137,11 +125,14 @@ public sealed record CalibrationRecord
     /// <summary>Uncertainty budget of the slope.</summary>
     public required RecordedContribution[] Budget { get; init; }
 
-    /// <summary>Program and version that wrote it.</summary>
-    public required string Software { get; init; }
-
     /// <summary>Remarks by the person; none when there are none.</summary>
     public string? Remarks { get; init; }
+
+    internal override string Kind => Purpose == CheckPurpose ? CheckPurpose : CalibrationPurpose;
+
+    internal override string Subject => Probe.Id;
+
+    internal override DateTimeOffset AtUtc => CompletedUtc;
 }
 
 /// <summary>One step of the procedure as it was done.</summary>

@@ -2,19 +2,22 @@ using System;
 using System.Collections.Generic;
 using System.Globalization;
 using System.Security.Cryptography;
-using Microsoft.Data.Sqlite;
 using ProbeCal.Station.Entry;
-using ProbeCal.Station.Storage;
 
 namespace ProbeCal.Station.CalibrationLog;
 
-/// <summary>The walk over the whole log: every hash computed again over the stored bytes, every link and copy compared.</summary>
+/// <summary>
+/// The walk over a whole log, from its file or from an export: every hash computed again over the stored bytes, every link
+/// and copy compared.
+/// </summary>
 internal sealed class LogReading
 {
-    private const string NoHash = "0000000000000000000000000000000000000000000000000000000000000000";
-    private readonly List<string> _faults = [];
+    /// <summary>Stands for the hash of the entry before the first.</summary>
+    internal const string NoHash = "0000000000000000000000000000000000000000000000000000000000000000";
 
-    private LogReading(string logId)
+    private readonly List<ChainFault> _faults = [];
+
+    internal LogReading(string logId)
     {
         LogId = logId;
         Chain = new ChainState(0, NoHash, _faults);
@@ -22,23 +25,9 @@ internal sealed class LogReading
 
     internal string LogId { get; }
 
-    internal List<StoredCalibration> Records { get; } = [];
+    internal List<StoredEntry> Entries { get; } = [];
 
     internal ChainState Chain { get; private set; }
-
-    internal static LogReading Of(SqliteFile file)
-    {
-        LogReading reading = new(ReadLogId(file));
-        using SqliteCommand command = file.Connection.CreateCommand();
-        command.CommandText = "SELECT idx, calibration_id, probe_id, completed_us, bytes, sha256 FROM records ORDER BY idx";
-        using SqliteDataReader rows = command.ExecuteReader();
-        while (rows.Read())
-        {
-            reading.Take(rows);
-        }
-
-        return reading;
-    }
 
     internal static string Hash(byte[] bytes)
     {
@@ -50,64 +39,74 @@ internal sealed class LogReading
         return (time.UtcTicks - DateTimeOffset.UnixEpoch.UtcTicks) / TimeSpan.TicksPerMicrosecond;
     }
 
-    private static string ReadLogId(SqliteFile file)
+    /// <summary>Takes the next entry.</summary>
+    /// <param name="index">The place that it stands at.</param>
+    /// <param name="bytes">Its stored bytes.</param>
+    /// <param name="kept">The hash kept beside them.</param>
+    /// <param name="filed">How it is filed; null where nothing stands beside it.</param>
+    /// <exception cref="InputException">It is of a newer version.</exception>
+    internal void Take(long index, byte[] bytes, string kept, FiledAs? filed)
     {
-        using SqliteCommand command = file.Connection.CreateCommand();
-        command.CommandText = "SELECT log_id FROM log";
-        return command.ExecuteScalar() as string
-            ?? throw new WorkFailedException(file.Path + ": the calibration log has lost its id; keep the file as evidence and put a sound copy in its place");
-    }
-
-    private void Take(SqliteDataReader row)
-    {
-        long index = row.GetInt64(0);
-        byte[] bytes = (byte[])row.GetValue(4);
-        string kept = row.GetString(5);
         string actual = Hash(bytes);
         string name = string.Create(CultureInfo.InvariantCulture, $"record {index}");
         if (index != Chain.Count + 1)
         {
-            _faults.Add(string.Create(CultureInfo.InvariantCulture, $"{name} follows record {Chain.Count}: records between them are missing"));
+            Fault(index, "gap", string.Create(CultureInfo.InvariantCulture, $"{name} follows record {Chain.Count}: records between them are missing"));
         }
 
         if (actual != kept)
         {
-            _faults.Add($"{name} was changed after it was stored (its bytes do not give the hash kept beside them)");
+            Fault(index, "edited", $"{name} was changed after it was stored (its bytes do not give the hash kept beside them)");
         }
 
         try
         {
-            CalibrationRecord record = RecordJson.Read(bytes, name);
-            CompareWithRow(record, row, name);
-            Records.Add(new StoredCalibration(record, actual));
+            LogEntry entry = RecordJson.ReadEntry(bytes, name);
+            Compare(entry, index, filed, name);
+            Entries.Add(new StoredEntry(entry, actual));
         }
         catch (WorkFailedException unreadable)
         {
-            _faults.Add(unreadable.Message);
+            Fault(index, "unreadable", unreadable.Message);
         }
 
         Chain = Chain with { Count = index, HeadSha256 = actual };
     }
 
-    private void CompareWithRow(CalibrationRecord record, SqliteDataReader row, string name)
+    private void Compare(LogEntry entry, long index, FiledAs? filed, string name)
     {
-        if (record.PreviousSha256 != Chain.HeadSha256)
+        if (entry.PreviousSha256 != Chain.HeadSha256)
         {
-            _faults.Add(name + " does not continue the record before it (the hash it names is another)");
+            Fault(index, "link", name + " does not continue the record before it (the hash it names is another)");
         }
 
-        if (record.LogId != LogId)
+        if (entry.LogId != LogId)
         {
-            _faults.Add($"{name} belongs to log {record.LogId}, this is log {LogId}");
+            Fault(index, "foreign", $"{name} belongs to log {Wrong.Shown(entry.LogId)}, this is log {LogId}");
         }
 
-        bool sameRow = record.Index == row.GetInt64(0)
-            && record.Id == row.GetString(1)
-            && record.Probe.Id == row.GetString(2)
-            && Microseconds(record.CompletedUtc) == row.GetInt64(3);
-        if (!sameRow)
+        if (entry.Index != index)
         {
-            _faults.Add(name + " is filed under another index, id, probe or time than it states itself");
+            Fault(index, "moved", string.Create(CultureInfo.InvariantCulture, $"{name} states that it is record {entry.Index}: records were taken out, inserted or reordered"));
         }
+
+        if (filed is FiledAs columns && columns != FiledAs.Of(entry))
+        {
+            Fault(index, "filed", name + " is filed under another id, kind, subject or time than it states itself");
+        }
+    }
+
+    private void Fault(long index, string kind, string text)
+    {
+        _faults.Add(new ChainFault(index, kind, text));
+    }
+}
+
+/// <summary>The columns by which an entry is found. They stand beside its bytes and are compared with them.</summary>
+internal readonly record struct FiledAs(string Id, string Kind, string Subject, long Microseconds)
+{
+    internal static FiledAs Of(LogEntry entry)
+    {
+        return new FiledAs(entry.Id, entry.Kind, entry.Subject, LogReading.Microseconds(entry.AtUtc));
     }
 }

@@ -15,7 +15,7 @@ public sealed record RecordedProbe
     public required string Model { get; init; }
 
     /// <summary>Coefficients of the model that a calibration does not change, by name (maker's or characterised); empty for models without.</summary>
-    public RecordedCoefficient[] Coefficients { get; init; } = [];
+    public RecordedCoefficient[] Coefficients { get; init => field = value ?? []; } = [];
 
     /// <summary>Unit of the raw signal, for people; empty when nobody stated one.</summary>
     public required string SignalUnit { get; init; }

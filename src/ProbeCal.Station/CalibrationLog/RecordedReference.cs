@@ -7,7 +7,7 @@ namespace ProbeCal.Station.CalibrationLog;
 public sealed record RecordedReference
 {
     /// <summary>Equipment that gave the truth, by the ids of the register: barometer, cylinder, titrant, standard.</summary>
-    public string[] Equipment { get; init; } = [];
+    public string[] Equipment { get; init => field = value ?? []; } = [];
 
     /// <summary>A reference titration; none for another method.</summary>
     public RecordedTitration? Titration { get; init; }
@@ -19,7 +19,7 @@ public sealed record RecordedReference
     public RecordedTransfer? Transfer { get; init; }
 
     /// <summary>What contributes to the uncertainty of the reference, largest first.</summary>
-    public RecordedReferenceContribution[] Budget { get; init; } = [];
+    public RecordedReferenceContribution[] Budget { get; init => field = value ?? []; } = [];
 }
 
 /// <summary>One contribution to the uncertainty of a point's reference.</summary>

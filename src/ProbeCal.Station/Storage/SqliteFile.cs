@@ -16,10 +16,11 @@ internal sealed class SqliteFile : IDisposable
     // How long a command waits for another program's lock before it is a fault.
     private const int BusySeconds = 5;
 
-    private SqliteFile(string path, SqliteConnection connection)
+    private SqliteFile(string path, SqliteConnection connection, int version)
     {
         Path = path;
         Connection = connection;
+        Version = version;
     }
 
     /// <summary>The file, absolute.</summary>
@@ -27,6 +28,9 @@ internal sealed class SqliteFile : IDisposable
 
     /// <summary>The open connection. Whoever uses it catches <see cref="SqliteException"/> and asks <see cref="SqliteFaults"/>.</summary>
     public SqliteConnection Connection { get; }
+
+    /// <summary>The version that the file has now: the newest, or an older one that was opened for reading.</summary>
+    public int Version { get; }
 
     /// <summary>The copy that was made before an older file was migrated, or null.</summary>
     public string? BackupPath { get; private init; }
@@ -83,12 +87,12 @@ internal sealed class SqliteFile : IDisposable
             RefuseForeign(full, format);
             connection = ConnectForReading(full);
             int version = ReadVersion(connection, full, format);
-            if (version != format.Version)
+            if (version < (format.OldestReadable ?? format.Version))
             {
                 throw new InputException(string.Create(CultureInfo.InvariantCulture, $"{full}: {format.Name} is version {version} and this program reads version {format.Version}; a command that writes there migrates it, after a backup copy"));
             }
 
-            SqliteFile opened = new(full, connection);
+            SqliteFile opened = new(full, connection, version);
             connection = null;
             return opened;
         }
@@ -119,7 +123,7 @@ internal sealed class SqliteFile : IDisposable
             int version = ReadVersion(connection, full, format);
             string? backup = version != 0 && version < format.Version ? Backup(connection, full, version, time) : null;
             Migrate(connection, format, version);
-            SqliteFile opened = new(full, connection) { BackupPath = backup, SetAsidePath = setAside };
+            SqliteFile opened = new(full, connection, format.Version) { BackupPath = backup, SetAsidePath = setAside };
             connection = null;
             return opened;
         }

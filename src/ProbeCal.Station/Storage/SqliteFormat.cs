@@ -9,7 +9,8 @@ namespace ProbeCal.Station.Storage;
 /// <param name="Name">What it is, for people, with its article: <c>the journal</c>.</param>
 /// <param name="ApplicationId">The number that SQLite keeps in the file's header for its owner's use.</param>
 /// <param name="Migrations">SQL scripts; entry <c>i</c> lifts a file from version <c>i</c> to version <c>i + 1</c>.</param>
-internal sealed record SqliteFormat(string Name, int ApplicationId, IReadOnlyList<string> Migrations)
+/// <param name="OldestReadable">The oldest version that is read as it stands; null where only the newest is.</param>
+internal sealed record SqliteFormat(string Name, int ApplicationId, IReadOnlyList<string> Migrations, int? OldestReadable = null)
 {
     /// <summary>The version this program writes.</summary>
     public int Version => Migrations.Count;

@@ -18,6 +18,9 @@ public class ReleasedFormatsTests
         ["probecal-status"] = ("status/version-1.json", "status"),
         ["probecal-calibration-in-use"] = ("calibration-in-use/version-1.json", "calibration-in-use"),
         ["probecal-calibration-record"] = ("calibration-record-v1.json", "calibration-record"),
+        ["probecal-equipment"] = ("equipment/version-1.json", "equipment"),
+        ["probecal-service"] = ("service/version-1.json", "service"),
+        ["probecal-amendment"] = ("amendment/version-1.json", "amendment"),
         ["probecal-calibration-log"] = ("calibration-log-v1.db", null),
         ["probecal-calibration-list"] = ("calibration-list/version-1.json", "calibration-list"),
         // Written and read by this program alone: no schema is published.

@@ -55,8 +55,8 @@ public class CalibrationLogStoreTests
     [InlineData("UPDATE records SET bytes = x'00' WHERE idx = 1", "never changed")]
     [InlineData("DELETE FROM records", "never deleted")]
     [InlineData("DELETE FROM records WHERE idx = 2", "never deleted")]
-    [InlineData("INSERT OR REPLACE INTO records SELECT idx, calibration_id, probe_id, completed_us, x'00', sha256 FROM records WHERE idx = 1", "only added at the end")]
-    [InlineData("INSERT INTO records SELECT 9, 'x', probe_id, completed_us, bytes, sha256 FROM records WHERE idx = 1", "only added at the end")]
+    [InlineData("INSERT OR REPLACE INTO records SELECT idx, calibration_id, probe_id, completed_us, x'00', sha256, kind FROM records WHERE idx = 1", "only added at the end")]
+    [InlineData("INSERT INTO records SELECT 9, 'x', probe_id, completed_us, bytes, sha256, kind FROM records WHERE idx = 1", "only added at the end")]
     [InlineData("UPDATE log SET log_id = 'x'", "keeps its id")]
     [InlineData("DELETE FROM log", "keeps its id")]
     [InlineData("INSERT OR REPLACE INTO log VALUES (1, 'x', 'y')", "keeps its id")]
@@ -85,7 +85,7 @@ public class CalibrationLogStoreTests
 
         using CalibrationLogStore store = log.Read();
         Assert.False(store.Chain.IsWhole);
-        Assert.Contains(store.Chain.Faults, fault => fault.StartsWith("record 2 was changed after it was stored", StringComparison.Ordinal));
+        Assert.Contains(store.Chain.Faults, fault => fault.Text.StartsWith("record 2 was changed after it was stored", StringComparison.Ordinal));
         Assert.Equal(3, store.Records.Count);
         WorkFailedException refused = Assert.Throws<WorkFailedException>(store.RequireWhole);
         Assert.Contains("chain of calibration records is broken: record 2", refused.Message, StringComparison.Ordinal);
@@ -102,7 +102,7 @@ public class CalibrationLogStoreTests
             ("$sha", Convert.ToHexStringLower(SHA256.HashData(edited))));
 
         using CalibrationLogStore store = log.Read();
-        Assert.Contains(store.Chain.Faults, fault => fault.StartsWith("record 3 does not continue", StringComparison.Ordinal));
+        Assert.Contains(store.Chain.Faults, fault => fault.Text.StartsWith("record 3 does not continue", StringComparison.Ordinal));
     }
 
     [Theory]
@@ -116,7 +116,7 @@ public class CalibrationLogStoreTests
         log.Raw(DropTriggers + sql);
 
         using CalibrationLogStore store = log.Read();
-        Assert.Contains(store.Chain.Faults, found => found.StartsWith(fault, StringComparison.Ordinal));
+        Assert.Contains(store.Chain.Faults, found => found.Text.StartsWith(fault, StringComparison.Ordinal));
     }
 
     [Fact]

@@ -15,7 +15,7 @@ namespace ProbeCal.Station.Tests.CalibrationLog;
 /// <summary>One sample of each released format opens for ever, and what is written today keeps to the published schema.</summary>
 public class FormatSamplesTests
 {
-    private static readonly string Root = FindRoot();
+    internal static readonly string Root = FindRoot();
     private static readonly Lazy<JsonSchema> Schema = new(() => JsonSchema.FromText(File.ReadAllText(Path.Combine(Root, "docs/schemas/calibration-record.schema.json"))));
 
     [Fact]
@@ -36,14 +36,30 @@ public class FormatSamplesTests
                 Assert.Equal(File.ReadAllBytes(Sample("calibration-record-v1.json")), log.BytesOf(log.Records[0]));
                 foreach (StoredCalibration stored in log.Records)
                 {
+                    // What version 1 did not say has its meaning of then, and is nothing that a reader must check for.
+                    Assert.Equal(CalibrationRecord.CalibrationPurpose, stored.Record.Purpose);
+                    Assert.Empty(stored.Record.Steps);
+                    Assert.Empty(stored.Record.Equipment);
+                    Assert.Empty(stored.Record.Probe.Coefficients);
                     ProbeCalibration loaded = stored.Record.ToProbeCalibration();
                     Assert.Equal(stored.Record.Result.Slope, loaded.Slope);
                     Assert.Equal(stored.Record.Result.Zero, loaded.ZeroResponse);
                 }
             }
 
+            byte[] before = File.ReadAllBytes(copy);
+            Assert.Equal(File.ReadAllBytes(Sample("calibration-log-v1.db")), before);
             using CalibrationLogStore writing = CalibrationLogStore.OpenForWriting(copy, new FakeTimeProvider(SampleRecords.Noon), Guid.NewGuid);
-            Assert.Equal("8c6e44e20ee5-0003", writing.Append(SampleRecords.Of("P-1", SampleRecords.Noon)).Record.Id);
+            Assert.Equal(copy + ".version-1-20260601T120000Z", writing.BackupPath);
+            Assert.Equal("42452343d8b8997287ec3c3e138ad7af24229e7d663950528d9511748961ba6d", writing.Chain.HeadSha256);
+            Assert.Equal(File.ReadAllBytes(Sample("calibration-record-v1.json")), writing.BytesOf(writing.Records[0]));
+            StoredCalibration third = writing.Append(SampleRecords.Of("P-1", SampleRecords.Noon));
+            Assert.Equal("8c6e44e20ee5-0003", third.Record.Id);
+            Assert.Equal("42452343d8b8997287ec3c3e138ad7af24229e7d663950528d9511748961ba6d", third.Record.PreviousSha256);
+            using CalibrationLogStore again = CalibrationLogStore.OpenForReading(copy);
+            Assert.True(again.Chain.IsWhole, string.Join("; ", again.Chain.Faults));
+            using CalibrationLogStore backup = CalibrationLogStore.OpenForReading(writing.BackupPath!);
+            Assert.Equal(2, backup.Chain.Count);
         }
         finally
         {

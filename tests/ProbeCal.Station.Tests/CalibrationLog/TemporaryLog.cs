@@ -13,11 +13,13 @@ internal sealed class TemporaryLog : IDisposable
 
     internal string Path => System.IO.Path.Combine(_folder, "calibrations.db");
 
+    internal FakeTimeProvider Time { get; } = new(SampleRecords.Noon);
+
     internal static Guid Id { get; } = new("c3a41f09-b2e7-4d11-8000-000000000000");
 
     internal CalibrationLogStore Write()
     {
-        return CalibrationLogStore.OpenForWriting(Path, new FakeTimeProvider(SampleRecords.Noon), () => Id);
+        return CalibrationLogStore.OpenForWriting(Path, Time, () => Id);
     }
 
     internal CalibrationLogStore Read()
