@@ -156,6 +156,13 @@ public enum Status
 
     /// <summary>The ion is not one of those that the salting-out constants cover.</summary>
     IonUnknown = 0x1504,
+
+    /// <summary>A volume (titre, flask, aliquot) is NaN or infinite.</summary>
+    VolumeNotFinite = 0x1601,
+    /// <summary>A volume is negative, or too small for what is taken from it.</summary>
+    VolumeBelowRange = 0x1602,
+    /// <summary>A volume is larger than what it is taken from.</summary>
+    VolumeAboveRange = 0x1603,
 }
 
 /// <summary>Which input a <see cref="Status"/> is about: its high byte.</summary>
@@ -205,6 +212,8 @@ public enum InputQuantity
     Gas = 20,
     /// <summary>The dissolved ion asked for.</summary>
     Ion = 21,
+    /// <summary>A volume of a titration.</summary>
+    Volume = 22,
 }
 
 /// <summary>Why an input was refused: the low byte of a <see cref="Status"/>.</summary>

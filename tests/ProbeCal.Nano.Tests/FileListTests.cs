@@ -13,7 +13,7 @@ namespace ProbeCal.Nano.Tests;
 /// <summary>Core's portable files on disk, the compile gate and the device project name the same files.</summary>
 public class FileListTests
 {
-    private static readonly string[] DesktopOnlyRooms = ["Batch", "Catalogue", "Fitting", "Throwing"];
+    private static readonly string[] DesktopOnlyRooms = ["Batch", "Catalogue", "Fitting", "Throwing", "Titration"];
     private static readonly string CoreFolder = Path.Combine(DeviceAssembly.Root, "src", "ProbeCal.Core");
     private static readonly string NanoFolder = Path.Combine(DeviceAssembly.Root, "src", "ProbeCal.Nano");
     private static readonly string DeviceProject = Path.Combine(NanoFolder, "ProbeCal.Nano.nfproj");
