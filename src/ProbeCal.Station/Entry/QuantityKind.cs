@@ -131,6 +131,36 @@ public sealed class QuantityKind
         "share", "a", "1.5%",
         new QuantityUnit("%", 1, 1, 0, "percent"));
 
+    /// <summary>A share of saturation at the local pressure, canonical %. The convention must be given.</summary>
+    internal static QuantityKind PercentLocal { get; } = WithUnit(
+        "share of local saturation", "a", "98.2%local",
+        new QuantityUnit("%local", 1, 1, 0));
+
+    /// <summary>A share of saturation at one atmosphere, canonical %. The convention must be given.</summary>
+    internal static QuantityKind PercentOneAtmosphere { get; } = WithUnit(
+        "share of saturation at one atmosphere", "a", "92.1%1atm",
+        new QuantityUnit("%1atm", 1, 1, 0));
+
+    /// <summary>Volume of glassware, canonical mL. The unit must be given.</summary>
+    internal static QuantityKind Volume { get; } = WithUnit(
+        "volume", "a", "8.02mL",
+        new QuantityUnit("mL", 1, 1, 0, "ml", "cm3", "cm³"),
+        new QuantityUnit("µL", 1, 1000, 0, "uL", "ul", "μL"),
+        new QuantityUnit("L", 1000, 1, 0, "l"));
+
+    /// <summary>Concentration of a titrant or its standard in equivalents of electrons, canonical mol/L. The unit must be given; N is the same.</summary>
+    internal static QuantityKind TitrantConcentration { get; } = WithUnit(
+        "concentration", "a", "0.025mol/L",
+        new QuantityUnit("mol/L", 1, 1, 0, "mol/l", "M", "N", "eq/L"),
+        new QuantityUnit("mmol/L", 1, 1000, 0, "mmol/l", "mM", "mN", "meq/L"));
+
+    /// <summary>A small mass, canonical mg. The unit must be given.</summary>
+    internal static QuantityKind Mass { get; } = WithUnit(
+        "mass", "a", "0.0024mg",
+        new QuantityUnit("mg", 1, 1, 0),
+        new QuantityUnit("µg", 1, 1000, 0, "ug", "μg"),
+        new QuantityUnit("g", 1000, 1, 0));
+
     /// <summary>Duration, canonical s. The unit must be given; <c>m</c> alone is refused, for it also means metres.</summary>
     public static QuantityKind Duration { get; } = WithUnit(
         "duration", "a", "3min or 180s",
