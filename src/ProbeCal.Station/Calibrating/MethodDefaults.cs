@@ -3,7 +3,7 @@ namespace ProbeCal.Station.Calibrating;
 /// <summary>
 /// What stands in at a reference where the person enters nothing, each with its source; docs/uncertainty.md lists them. A limit of ±a that is rectangular is a/√3.
 /// </summary>
-public static class MethodDefaults
+internal static class MethodDefaults
 {
     /// <summary>Oxygen left in a fresh sulfite solution or under flowing nitrogen, standard uncertainty, mg/L.</summary>
     public const double ZeroMilligramsPerLitre = 0.02;
@@ -90,7 +90,7 @@ public static class MethodDefaults
 }
 
 /// <summary>What is known about the reach of a method, as data for guards and screens.</summary>
-public static class MethodFacts
+internal static class MethodFacts
 {
     /// <summary>Least oxygen that a titration is for, µmol/kg.</summary>
     public const double TitrationLowestMicromolesPerKilogram = 20;

@@ -11,9 +11,9 @@ namespace ProbeCal.Station.Calibrating;
 /// </summary>
 /// <remarks>
 /// Fraction: of the gas in the dry mixture. <c>dry</c>: as it leaves the cylinder; <c>humid</c>: after bubbling through water, 95 to 100 % unless said otherwise. Uncertainties by <c>u</c> (standard) or
-/// <c>within</c> (limits). The option is <c>--mixture</c> for the main point, <c>--zero-mixture</c> for a zero gas of stated purity, and the text behind <c>gas-mixture:</c> of a further level.
+/// <c>within</c> (limits). The option is <c>--mixture</c>, or the text behind <c>gas-mixture:</c> of a further level.
 /// </remarks>
-public static class MixtureText
+internal static class MixtureText
 {
     /// <summary>The cylinder's id for the air of the place.</summary>
     public const string Air = "air";

@@ -55,7 +55,7 @@ internal static class References
             case MethodIds.Titration:
                 return total
                     ? throw Missing(plan, "a titration says nothing of the total gas pressure")
-                    : TitrationReference.Sum(at, plan.Titration ?? throw Missing(plan, "the titres are missing, for example --titres \"8.02mL,8.05mL,8.03mL\""));
+                    : TitrationReference.Sum(at, plan.Titration ?? throw Missing(plan, "the titres are missing, for example --titration \"8.02mL,8.05mL,8.03mL flask 300.2mL titrant 0.025mol/L u 0.0001mol/L drawn 20.1C\""));
             default:
                 throw Wrong.Input("method", plan.Method, $"there is no such method{NearestName.DidYouMean(plan.Method, MethodIds.All)}; there are {string.Join(", ", MethodIds.All)}");
         }

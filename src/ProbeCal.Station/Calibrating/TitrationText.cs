@@ -7,16 +7,16 @@ using ProbeCal.Station.Entry;
 namespace ProbeCal.Station.Calibrating;
 
 /// <summary>
-/// A reference titration as lines of text. Titres (<c>--titres</c>): <c>8.02mL,8.05mL,8.03mL</c>, two or more. The rest (<c>--titration</c>): keywords with values in any order,
-/// <c>flask 300.2mL u 0.1mL titrant 0.02501mol/L u 0.00003mol/L drawn 20.1C [blank 0.01mL u 0.005mL] [aliquot 201mL] [displaced 2mL] [reagents 0.0024mg] [burette u 0.01mL]</c>. Titrant: its
-/// concentration, the id of one in the register, or nothing when <c>--standardisation</c> is given: <c>volume 10mL normality 0.01mol/L titres 9.98mL 9.99mL 9.97mL [blank 0.02mL]</c>.
+/// A reference titration as one line: the titres, then keywords with values in any order. <c>8.02mL,8.05mL,8.03mL flask 300.2mL u 0.1mL titrant 0.02501mol/L u 0.00003mol/L drawn 20.1C</c>, and
+/// where wanted <c>blank 0.01mL u 0.005mL</c>, <c>aliquot 201mL</c>, <c>displaced 2mL</c>, <c>reagents 0.0024mg</c>, <c>burette u 0.01mL</c>. The titrant is its concentration, the id of one in the
+/// register, or what its standardisation says: <c>standard 10mL normality 0.01mol/L against 9.98mL 9.99mL 9.97mL [standard-blank 0.02mL]</c>.
 /// </summary>
 /// <remarks>
-/// Uncertainties by <c>u</c> (standard) or <c>within</c> (limits); what is left out is that of <see cref="MethodDefaults"/>. Aliquot: what was titrated out of the flask; without it the whole flask was. A bottle of 300 mL
-/// of which 201 mL are titrated is <c>flask 300mL aliquot 201mL displaced 2mL</c>: the 2 mL are then counted once, here. Normality: equivalents of electrons, six times the amount concentration of
-/// KIO3, twelve times that of KH(IO3)2. The saved form is the record itself, so there is no way back to text.
+/// Two titres or more. Uncertainties by <c>u</c> (standard) or <c>within</c> (limits); what is left out is that of <see cref="MethodDefaults"/>. Aliquot: what was titrated out of the flask; without it the
+/// whole flask was. A bottle of 300 mL of which 201 mL are titrated is <c>flask 300mL aliquot 201mL displaced 2mL</c>: the 2 mL are then counted once, here. Drawn: temperature of the samples
+/// when they were drawn. Normality: equivalents of electrons, six times the amount concentration of KIO3, twelve times that of KH(IO3)2.
 /// </remarks>
-public static class TitrationText
+internal static class TitrationText
 {
     private const string Flask = "flask";
     private const string Titrant = "titrant";
@@ -26,27 +26,24 @@ public static class TitrationText
     private const string Displaced = "displaced";
     private const string Reagents = "reagents";
     private const string Burette = "burette";
-    private const string Volume = "volume";
+    private const string Standard = "standard";
     private const string Normality = "normality";
-    private const string Titres = "titres";
-    private const string WantedDetails = "write for example 'flask 300.2mL titrant 0.025mol/L u 0.0001mol/L drawn 20.1C blank 0.01mL'";
-    private const string WantedTitres = "write two or more, for example 8.02mL,8.05mL,8.03mL";
-    private const string WantedStandardisation = "write for example 'volume 10mL normality 0.01mol/L titres 9.98mL 9.99mL 9.97mL blank 0.02mL'";
+    private const string Against = "against";
+    private const string StandardBlank = "standard-blank";
+    private const string Wanted = "write for example '8.02mL,8.05mL,8.03mL flask 300.2mL titrant 0.025mol/L u 0.0001mol/L drawn 20.1C blank 0.01mL'";
 
-    private static readonly string[] DetailWords = [Flask, Titrant, Drawn, Blank, Aliquot, Displaced, Reagents, Burette];
-    private static readonly string[] StandardisationWords = [Volume, Normality, Titres, Blank];
+    private static readonly string[] Words = [Flask, Titrant, Drawn, Blank, Aliquot, Displaced, Reagents, Burette, Standard, Normality, Against, StandardBlank];
 
-    /// <summary>Reads a titration or refuses it in one line that names the option at fault.</summary>
-    /// <param name="titres">What stands behind <c>--titres</c>.</param>
-    /// <param name="details">What stands behind <c>--titration</c>.</param>
-    /// <param name="standardisation">What stands behind <c>--standardisation</c>; null when the titrant's concentration is known otherwise.</param>
+    /// <summary>Reads a titration or refuses it in one line.</summary>
+    /// <param name="what">The option or key it was given for.</param>
+    /// <param name="text">What was given.</param>
     /// <param name="register">Concentration of a titrant by its id, mol/L; null from it for one that is not there, and null when there is no register.</param>
     /// <exception cref="InputException">Something of it is missing or wrong.</exception>
-    public static RecordedTitration Parse(string titres, string details, string? standardisation, Func<string, RecordedQuantity?>? register = null)
+    public static RecordedTitration Parse(string what, string text, Func<string, RecordedQuantity?>? register = null)
     {
-        double[] read = ParseTitres("--titres", titres);
-        double titre = read.Average();
-        Clauses clauses = new("--titration", details, WantedDetails);
+        Clauses clauses = new(what, text, Wanted);
+        double[] titres = Titres(clauses, "the titres come first");
+        double titre = titres.Average();
         HashSet<string> seen = [];
         RecordedQuantity blank = NoBlank(titre);
         RecordedQuantity displaced = UsualDisplaced();
@@ -54,14 +51,18 @@ public static class TitrationText
         RecordedQuantity? titrant = null;
         RecordedQuantity? aliquot = null;
         RecordedQuantity? reagents = null;
+        RecordedQuantity? standard = null;
+        RecordedQuantity? normality = null;
+        RecordedQuantity? standardBlank = null;
+        double[] against = [];
         double burette = MethodDefaults.BuretteRelative * titre;
         double drawn = double.NaN;
         while (!clauses.IsAtEnd)
         {
-            switch (clauses.Keyword(DetailWords, seen))
+            switch (clauses.Keyword(Words, seen))
             {
                 case Flask:
-                    flask = Positive(clauses, Flask, KnownVolume(clauses, Flask));
+                    flask = KnownVolume(clauses, Flask);
                     break;
                 case Titrant:
                     titrant = Positive(clauses, Titrant, ParseTitrant(clauses, register));
@@ -70,10 +71,10 @@ public static class TitrationText
                     drawn = clauses.Plain(Drawn, QuantityKind.Temperature);
                     break;
                 case Blank:
-                    blank = ParseBlank(clauses, titre);
+                    blank = ParseBlank(clauses, Blank, titre);
                     break;
                 case Aliquot:
-                    aliquot = Positive(clauses, Aliquot, KnownVolume(clauses, Aliquot));
+                    aliquot = KnownVolume(clauses, Aliquot);
                     break;
                 case Displaced:
                     displaced = NotNegative(clauses, Displaced, clauses.Value(
@@ -83,26 +84,39 @@ public static class TitrationText
                     reagents = NotNegative(clauses, Reagents, clauses.Value(
                         Reagents, QuantityKind.Mass, "mg", static value => MethodDefaults.ReagentOxygenRelative * value, MethodDefaults.ReagentOxygenUncertaintySource));
                     break;
-                default:
+                case Burette:
                     burette = clauses.Known(Burette, QuantityKind.Volume, 0, "mL", null, null).StandardUncertainty;
+                    break;
+                case Standard:
+                    standard = KnownVolume(clauses, Standard);
+                    break;
+                case Normality:
+                    normality = Positive(clauses, Normality, clauses.Value(
+                        Normality, QuantityKind.TitrantConcentration, "mol/L", static value => MethodDefaults.VolumeRelative * value, MethodDefaults.StandardSource));
+                    break;
+                case StandardBlank:
+                    standardBlank = ParseBlank(clauses, StandardBlank, titre);
+                    break;
+                default:
+                    against = Titres(clauses, "the titres of the standard are missing");
                     break;
             }
         }
 
-        RecordedStandardisation? standard = standardisation == null ? null : ParseStandardisation("--standardisation", standardisation);
-        if (standard != null && titrant != null)
+        RecordedStandardisation? standardisation = Standardisation(clauses, standard, normality, against, standardBlank);
+        if (standardisation != null && titrant != null)
         {
-            throw clauses.Wrong("--standardisation gives the titrant's concentration; give one of the two");
+            throw clauses.Wrong("titrant and standard both give the titrant's concentration; give one of the two");
         }
 
         RecordedTitration titration = new()
         {
-            TitreMillilitres = read,
+            TitreMillilitres = titres,
             Blank = blank,
-            Titrant = titrant ?? (standard != null
-                ? TitrationReference.Titrant(standard, burette)
-                : throw clauses.Wrong("the concentration of the titrant is missing (titrant, or --standardisation)")),
-            Standardisation = standard,
+            Titrant = titrant ?? (standardisation != null
+                ? TitrationReference.Titrant(standardisation, burette)
+                : throw clauses.Wrong("the concentration of the titrant is missing (titrant, or standard with normality and against)")),
+            Standardisation = standardisation,
             Flask = flask ?? throw clauses.Wrong("the volume of the flask is missing"),
             Aliquot = aliquot,
             Displaced = displaced,
@@ -114,68 +128,50 @@ public static class TitrationText
         return titration;
     }
 
-    /// <summary>Reads titres or refuses them in one line.</summary>
-    /// <exception cref="InputException">One is no volume or negative, or there are fewer than two.</exception>
-    public static double[] ParseTitres(string what, string text)
+    /// <summary>None of its four parts, or all that it needs.</summary>
+    private static RecordedStandardisation? Standardisation(
+        Clauses clauses, RecordedQuantity? volume, RecordedQuantity? normality, double[] titres, RecordedQuantity? blank)
     {
-        Clauses clauses = new(what, text, WantedTitres);
-        List<double> titres = [];
-        while (!clauses.IsAtEnd)
+        if (volume == null && normality == null && titres.Length == 0 && blank == null)
         {
-            titres.Add(Titre(clauses));
+            return null;
         }
 
-        return titres.Count < MethodFacts.LeastTitres
-            ? throw clauses.Wrong($"one titre has no scatter, and nobody could say how good it is ({MethodFacts.UsualTitresSource})")
-            : [.. titres];
-    }
-
-    private static RecordedStandardisation ParseStandardisation(string what, string text)
-    {
-        Clauses clauses = new(what, text, WantedStandardisation);
-        HashSet<string> seen = [];
-        RecordedQuantity? volume = null;
-        RecordedQuantity? normality = null;
-        RecordedQuantity? blank = null;
-        List<double> titres = [];
-        while (!clauses.IsAtEnd)
+        if (titres.Length == 0)
         {
-            switch (clauses.Keyword(StandardisationWords, seen))
-            {
-                case Volume:
-                    volume = Positive(clauses, Volume, KnownVolume(clauses, Volume));
-                    break;
-                case Normality:
-                    normality = Positive(clauses, Normality, clauses.Value(
-                        Normality, QuantityKind.TitrantConcentration, "mol/L", static value => MethodDefaults.VolumeRelative * value, MethodDefaults.StandardSource));
-                    break;
-                case Blank:
-                    blank = ParseBlank(clauses, 0);
-                    break;
-                default:
-                    while (clauses.IsNumberNext)
-                    {
-                        titres.Add(Titre(clauses));
-                    }
-
-                    break;
-            }
+            throw clauses.Wrong("the titres of the standard are missing (against)");
         }
 
-        if (titres.Count < MethodFacts.LeastTitres)
-        {
-            throw clauses.Wrong(titres.Count == 0 ? "the titres are missing" : "one titre has no scatter; titrate the standard at least twice");
-        }
-
+        double titre = titres.Average();
         RecordedStandardisation standardisation = new()
         {
-            StandardVolume = volume ?? throw clauses.Wrong("the volume of the standard is missing"),
-            StandardNormality = normality ?? throw clauses.Wrong("the normality of the standard is missing"),
-            TitreMillilitres = [.. titres],
-            Blank = blank is { UncertaintySource: null } given ? given : (blank ?? NoBlank(0)) with { StandardUncertainty = MethodDefaults.BlankRelative * titres.Average() },
+            StandardVolume = volume ?? throw clauses.Wrong("the volume of the standard is missing (standard)"),
+            StandardNormality = normality ?? throw clauses.Wrong("the normality of the standard is missing (normality)"),
+            TitreMillilitres = titres,
+            // A blank's usual uncertainty is a share of the titre that it is taken from.
+            Blank = blank == null ? NoBlank(titre)
+                : blank.UncertaintySource == MethodDefaults.BlankSource ? blank with { StandardUncertainty = MethodDefaults.BlankRelative * titre }
+                : blank,
         };
-        BelowBlank(clauses, standardisation.TitreMillilitres, standardisation.Blank.Value);
+        BelowBlank(clauses, titres, standardisation.Blank.Value);
         return standardisation;
+    }
+
+    private static double[] Titres(Clauses clauses, string missing)
+    {
+        List<double> titres = [];
+        while (clauses.IsNumberNext)
+        {
+            double titre = clauses.Plain("titre", QuantityKind.Volume);
+            titres.Add(0 <= titre ? titre : throw clauses.Wrong($"a titre of {Number.Print(titre)} mL cannot be; titres are zero or above"));
+        }
+
+        return titres.Count switch
+        {
+            0 => throw clauses.Wrong(missing),
+            1 => throw clauses.Wrong($"one titre has no scatter, and nobody could say how good it is; give two or more ({MethodFacts.UsualTitresSource})"),
+            _ => [.. titres],
+        };
     }
 
     private static RecordedQuantity ParseTitrant(Clauses clauses, Func<string, RecordedQuantity?>? register)
@@ -191,14 +187,14 @@ public static class TitrationText
             : $"'{Wrong.Shown(id)}' is no concentration, and the register holds no titrant of that id");
     }
 
-    private static RecordedQuantity ParseBlank(Clauses clauses, double titre)
+    private static RecordedQuantity ParseBlank(Clauses clauses, string name, double titre)
     {
-        return clauses.Value(Blank, QuantityKind.Volume, "mL", _ => MethodDefaults.BlankRelative * titre, MethodDefaults.BlankSource);
+        return clauses.Value(name, QuantityKind.Volume, "mL", _ => MethodDefaults.BlankRelative * titre, MethodDefaults.BlankSource);
     }
 
     private static RecordedQuantity KnownVolume(Clauses clauses, string name)
     {
-        return clauses.Value(name, QuantityKind.Volume, "mL", static value => MethodDefaults.VolumeRelative * value, MethodDefaults.VolumeSource);
+        return Positive(clauses, name, clauses.Value(name, QuantityKind.Volume, "mL", static value => MethodDefaults.VolumeRelative * value, MethodDefaults.VolumeSource));
     }
 
     private static RecordedQuantity NoBlank(double titre)
@@ -230,12 +226,6 @@ public static class TitrationText
             Source = MethodDefaults.ReagentOxygenSource,
             UncertaintySource = MethodDefaults.ReagentOxygenUncertaintySource,
         };
-    }
-
-    private static double Titre(Clauses clauses)
-    {
-        double titre = clauses.Plain("titre", QuantityKind.Volume);
-        return 0 <= titre ? titre : throw clauses.Wrong($"a titre of {Number.Print(titre)} mL cannot be; titres are zero or above");
     }
 
     private static void Judge(Clauses clauses, RecordedTitration titration)

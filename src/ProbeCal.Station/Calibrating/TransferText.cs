@@ -13,7 +13,7 @@ namespace ProbeCal.Station.Calibrating;
 /// refused: at 500 m the two differ by 6 %. Without a correction, the register's for that id is taken where it is in the same unit. The option is <c>--transfer</c>, and the text behind
 /// <c>transfer-standard:</c> of a further level.
 /// </remarks>
-public static class TransferText
+internal static class TransferText
 {
     private const string Wanted = "write ID SHOWN u UNCERTAINTY, for example 'STD-3 8.41mg/L u 0.05mg/L'";
 
@@ -48,9 +48,13 @@ public static class TransferText
             throw clauses.Wrong($"the reading is in {shown.Unit} and the correction in {correction.Unit}; give both in one unit");
         }
 
-        return clauses.IsAtEnd
-            ? new RecordedTransfer { Standard = id, Shown = shown, Correction = correction }
-            : throw clauses.Wrong($"'{Wrong.Shown(clauses.Next(""))}' is not understood there{NearestName.DidYouMean("", ["correction"])}");
+        if (!clauses.IsAtEnd)
+        {
+            string word = clauses.Next("");
+            throw clauses.Wrong($"'{Wrong.Shown(word)}' is not understood there{NearestName.DidYouMean(word, ["correction"])}");
+        }
+
+        return new RecordedTransfer { Standard = id, Shown = shown, Correction = correction };
     }
 
     /// <summary>The transfer as text that <see cref="Parse"/> reads back to the same values.</summary>

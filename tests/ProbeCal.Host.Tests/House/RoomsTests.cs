@@ -63,7 +63,7 @@ public class RoomsTests
         ["Configuration"] = ["Entry", "Sources"],
         ["Journal"] = ["Entry", "Storage"],
         ["Publishing"] = ["Entry", "Journal"],
-        ["Calibrating"] = ["Entry", "CalibrationLog"],
+        ["Calibrating"] = ["Entry", "CalibrationLog", "Uncertainty"],
         ["Engine"] = ["Entry", "Sources", "CalibrationLog", "Configuration", "Journal", "Publishing"],
     };
 
