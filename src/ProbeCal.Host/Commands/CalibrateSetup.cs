@@ -320,7 +320,7 @@ internal sealed class CalibrateSetup
         if (_reader.Given(_options.ConfirmPressure) is string why)
         {
             string reason = OptionReader.NotEmpty(_options.ConfirmPressure)(why);
-            foreach (string guard in new[] { GuardNames.PressureAtAltitude, GuardNames.PressureReduced, GuardNames.PressureHere })
+            foreach (string guard in GuardNames.OnPressureWithReason)
             {
                 reasons.TryAdd(guard, reason);
             }

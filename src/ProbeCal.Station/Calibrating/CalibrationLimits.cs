@@ -38,6 +38,15 @@ public sealed record CalibrationLimits
     /// <summary>Upper end of it.</summary>
     public double? SlopeHigh { get; init; }
 
+    /// <summary>Lower end of the window of the zero signal that the person entered; none when not entered.</summary>
+    public double? ZeroSignalLow { get; init; }
+
+    /// <summary>Upper end of it.</summary>
+    public double? ZeroSignalHigh { get; init; }
+
+    /// <summary>True to draw the limits in by the expanded uncertainty of what is judged; false for simple acceptance.</summary>
+    public bool GuardBand { get; init; }
+
     /// <summary>The saturation limit in words.</summary>
     internal string SaturationText => $"{Number.Print(SaturationMilligramsPerLitre)} mg/L or {Number.Print(SaturationPercent)} %, the larger";
 

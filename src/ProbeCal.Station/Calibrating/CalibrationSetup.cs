@@ -141,6 +141,9 @@ public sealed record CalibrationSetup
     /// <summary>What is done about the zero: <see cref="CalibrationIds.ZeroKeep"/> … <see cref="CalibrationIds.ZeroAdjust"/>.</summary>
     public string ZeroPlan { get; init; } = CalibrationIds.ZeroKeep;
 
+    /// <summary>What else is known about the bath or the chamber, for the guards; none when nothing was stated.</summary>
+    public Surroundings? Surroundings { get; init; }
+
     /// <summary>Limits that decide.</summary>
     public CalibrationLimits Limits { get; init; } = new();
 
@@ -181,6 +184,19 @@ public sealed record CalibrationSetup
             ? [main, new PlannedPoint { Role = CalibrationIds.ZeroPoint, Method = MethodIds.ZeroSolution }]
             : [main];
     }
+}
+
+/// <summary>What bears on how near a bath or a chamber is to equilibrium. What is not stated is not judged.</summary>
+public sealed record Surroundings
+{
+    /// <summary>Depth of the stone or pump that releases the bubbles, m below the surface.</summary>
+    public double? StoneDepthMetres { get; init; }
+
+    /// <summary>Temperature at which the water was last in equilibrium with air, °C: of the tap or of the end of aeration.</summary>
+    public double? EquilibratedCelsius { get; init; }
+
+    /// <summary>Temperature of the air in the chamber, or around it, °C.</summary>
+    public double? AirCelsius { get; init; }
 }
 
 /// <summary>When a window counts as steady, and how long a step may take. The defaults are our choice, no source.</summary>

@@ -83,7 +83,7 @@ public sealed record PossibleError
         return new PossibleError { WhyUnknown = why };
     }
 
-    private const string NotYet = "how large the error would be cannot be said before temperature and pressure are known";
+    private const string NotYet = "how large the error would be in mg/L cannot be said here: temperature or pressure is not known, or has no oxygen value";
 
     private static string Sized(double error)
     {

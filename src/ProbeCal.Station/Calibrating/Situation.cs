@@ -1,4 +1,5 @@
 using System;
+using System.Collections.Generic;
 using ProbeCal.Station.CalibrationLog;
 
 namespace ProbeCal.Station.Calibrating;
@@ -36,24 +37,37 @@ internal sealed record Situation
     /// <summary>The point before the adjustment.</summary>
     public RecordedPoint? Span { get; init; }
 
+    /// <summary>
+    /// The point that is about to be taken, read by the calibration in force where there is one; only while
+    /// <see cref="BeforePointGuards"/> look.
+    /// </summary>
+    public RecordedPoint? Point { get; init; }
+
+    /// <summary>Earlier calibrations of this probe that passed and were not withdrawn, oldest first.</summary>
+    public IReadOnlyList<CalibrationRecord> History { get; init; } = [];
+
+    /// <summary>The method by which the truth of <see cref="Point"/> is known, one of <see cref="MethodIds"/>; null when there is no point.</summary>
+    public string? PointMethod => Point == null ? null : Point.Method ?? Setup.PlannedFor(Point.Role).Method;
+
     /// <summary>Concentration at 100 % there, mg/L; null while temperature or pressure is not known or out of range.</summary>
     public double? SaturationMilligramsPerLitre => SaturationAt(TemperatureCelsius, PressureHectopascal);
 
     /// <summary>Concentration at 100 %, mg/L, at some temperature and pressure; null where one is not known or out of range.</summary>
     public double? SaturationAt(double? temperatureCelsius, double? pressureHectopascal)
     {
-        if (temperatureCelsius is not double celsius || pressureHectopascal is not double hectopascal)
+        return SaturationAt(temperatureCelsius, pressureHectopascal, Setup.Salinity.Value);
+    }
+
+    /// <summary>The same at some salinity.</summary>
+    public double? SaturationAt(double? temperatureCelsius, double? pressureHectopascal, double salinity)
+    {
+        // Errors in mg/L are those of oxygen; other gases have findings without a size.
+        if (Setup.Gas != Gas.Oxygen || temperatureCelsius is not double celsius || pressureHectopascal is not double hectopascal)
         {
             return null;
         }
 
-        Status status = OxygenEquilibrium.MilligramsPerLitre(Setup.Equation, celsius, Setup.Salinity.Value, hectopascal, RangeRule.Refuse, out double value);
+        Status status = OxygenEquilibrium.MilligramsPerLitre(Setup.Equation, celsius, salinity, hectopascal, RangeRule.Refuse, out double value);
         return status == Status.Ok ? value : null;
     }
 }
-
-/// <summary>One guard: what it watches, and how it looks at a situation.</summary>
-/// <param name="Name">One of <see cref="GuardNames"/>.</param>
-/// <param name="Watches">What it watches, for people.</param>
-/// <param name="Look">Gives a finding, or null when there is nothing to say or not enough known.</param>
-internal sealed record Guard(string Name, string Watches, Func<Situation, Finding?> Look);
