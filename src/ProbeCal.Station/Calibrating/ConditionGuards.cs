@@ -27,6 +27,7 @@ internal static class ConditionGuards
             Severities = [FindingSeverity.Note],
         },
         BathGuards.Bubbles,
+        .. EquipmentGuards.All,
     ];
 
     private static Finding? Clock(Situation now)

@@ -1,5 +1,6 @@
 using System;
 using System.Collections.Generic;
+using System.Linq;
 using ProbeCal.Station.CalibrationLog;
 
 namespace ProbeCal.Station.Calibrating;
@@ -43,11 +44,39 @@ internal sealed record Situation
     /// </summary>
     public RecordedPoint? Point { get; init; }
 
+    /// <summary>How the truth of <see cref="Point"/> is known; null when there is no point.</summary>
+    public PlannedPoint? Planned { get; init; }
+
     /// <summary>Earlier calibrations of this probe that passed and were not withdrawn, oldest first.</summary>
     public IReadOnlyList<CalibrationRecord> History { get; init; } = [];
 
+    /// <summary>The register as it stands now; null where there is none to look at.</summary>
+    public IReadOnlyList<EquipmentRecord>? Register { get; init; }
+
+    /// <summary>What was done to this probe, oldest first.</summary>
+    public IReadOnlyList<ServiceRecord> Service { get; init; } = [];
+
+    /// <summary>The day of <see cref="NowUtc"/>.</summary>
+    public DateOnly Today => DateOnly.FromDateTime(NowUtc.UtcDateTime);
+
+    /// <summary>The same with what the log knows: the register, what was done to the probe, its earlier calibrations.</summary>
+    public Situation WithLog(CalibrationLogStore log)
+    {
+        return this with
+        {
+            Register = log.AllEquipment(NowUtc),
+            Service = log.ServiceFor(Setup.Probe.Id),
+            History =
+            [
+                .. log.Records.Select(static stored => stored.Record)
+                    .Where(record => record.Probe.Id == Setup.Probe.Id && log.MayBeInForce(record))
+                    .OrderBy(static record => record.CompletedUtc),
+            ],
+        };
+    }
+
     /// <summary>The method by which the truth of <see cref="Point"/> is known, one of <see cref="MethodIds"/>; null when there is no point.</summary>
-    public string? PointMethod => Point == null ? null : Point.Method ?? Setup.PlannedFor(Point.Role).Method;
+    public string? PointMethod => Point == null ? null : Planned?.Method ?? Point.Method ?? Setup.PlannedFor(Point.Role).Method;
 
     /// <summary>Concentration at 100 % there, mg/L; null while temperature or pressure is not known or out of range.</summary>
     public double? SaturationMilligramsPerLitre => SaturationAt(TemperatureCelsius, PressureHectopascal);

@@ -56,7 +56,11 @@ public class TypedTests
     {
         using Bench bench = new();
         CalibrationSetup setup = Meter("mg/L");
-        setup = setup with { Probe = setup.Probe with { MeterSettings = setup.Probe.MeterSettings! with { Salinity = 35 } } };
+        setup = setup with
+        {
+            Probe = setup.Probe with { MeterSettings = setup.Probe.MeterSettings! with { Salinity = 35 } },
+            Reasons = { [GuardNames.SalinityLeftOver] = "the meter is set for the bay, the bath is tap water" },
+        };
         ScriptedDialogue answers = Reads(7.2, 7.29);
         CalibrationRecord record = await bench.TypedAsync(setup, answers);
 
