@@ -59,7 +59,7 @@ public class TypedTests
         setup = setup with
         {
             Probe = setup.Probe with { MeterSettings = setup.Probe.MeterSettings! with { Salinity = 35 } },
-            Reasons = { [GuardNames.SalinityLeftOver] = "the meter is set for the bay, the bath is tap water" },
+            Reasons = new() { [GuardNames.SalinityLeftOver] = "the meter is set for the bay, the bath is tap water" },
         };
         ScriptedDialogue answers = Reads(7.2, 7.29);
         CalibrationRecord record = await bench.TypedAsync(setup, answers);
