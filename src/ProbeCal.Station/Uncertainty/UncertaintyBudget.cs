@@ -21,7 +21,10 @@ internal sealed class UncertaintyBudget
         Contributions = contributions;
         StandardUncertainty = standardUncertainty;
         Dominant = contributions.FirstOrDefault(static c => c.Distribution != Distribution.Normal && DominantShare < c.Share);
-        CoverageFactor = Dominant is null ? Uncertainty.CoverageFactor.Normal : Uncertainty.CoverageFactor.Of(Math.Min(1.0, Dominant.Share));
+        EffectiveDegreesOfFreedom = Effective(contributions, standardUncertainty);
+        CoverageFactor = Dominant is not null
+            ? Uncertainty.CoverageFactor.Of(Math.Min(1.0, Dominant.Share))
+            : double.IsInfinity(EffectiveDegreesOfFreedom) ? Uncertainty.CoverageFactor.Normal : FactorFor(0.95);
     }
 
     /// <summary>The value.</summary>
@@ -36,7 +39,14 @@ internal sealed class UncertaintyBudget
     /// <summary>Combined standard uncertainty (k = 1), in the unit of the value.</summary>
     public double StandardUncertainty { get; }
 
-    /// <summary>How many standard uncertainties hold 95 %: 1.96, or from the shape of the <see cref="Dominant"/> contribution.</summary>
+    /// <summary>
+    /// Degrees of freedom of the combined uncertainty by the Welch–Satterthwaite formula (JCGM 100, G.4.1); infinite where every contribution's are.
+    /// </summary>
+    public double EffectiveDegreesOfFreedom { get; }
+
+    /// <summary>
+    /// How many standard uncertainties hold 95 %: 1.96, or Student's t for the <see cref="EffectiveDegreesOfFreedom"/>, or from the shape of the <see cref="Dominant"/> contribution.
+    /// </summary>
     public double CoverageFactor { get; }
 
     /// <summary>Low end of the interval that holds 95 %.</summary>
@@ -53,6 +63,15 @@ internal sealed class UncertaintyBudget
         ? null
         : string.Create(CultureInfo.InvariantCulture,
             $"{Dominant.Name} ({Dominant.Distribution.ToString().ToLowerInvariant()}) makes {100.0 * Dominant.Share:F0} % of the variance: the interval takes k = {CoverageFactor:F2} from its distribution; with the usual k = 1.96 it would be too wide");
+
+    /// <summary>Student's t for another level, the degrees of freedom cut to a whole number (JCGM 100, G.4.1).</summary>
+    /// <param name="level">What the interval holds: 0.99.</param>
+    /// <exception cref="InvalidOperationException">Fewer than one degree of freedom: nothing can be said of an interval.</exception>
+    public double FactorFor(double level)
+    {
+        double whole = Math.Floor(EffectiveDegreesOfFreedom);
+        return 1.0 <= whole ? Quantiles.StudentHalfWidth(level, whole) : throw new InvalidOperationException("less than one effective degree of freedom");
+    }
 
     /// <summary>Makes the budget of a value.</summary>
     /// <param name="value">The value.</param>
@@ -73,6 +92,11 @@ internal sealed class UncertaintyBudget
 
         foreach (UncertaintyContribution c in contributions)
         {
+            if (!(1.0 <= c.DegreesOfFreedom))
+            {
+                throw new ArgumentException(string.Create(CultureInfo.InvariantCulture, $"{c.Name}: {c.DegreesOfFreedom:R} degrees of freedom; at least one"), nameof(contributions));
+            }
+
             if (!(0.0 <= c.StandardUncertainty) || !double.IsFinite(c.Estimate) || !double.IsFinite(c.Part))
             {
                 throw new ArgumentException(string.Create(CultureInfo.InvariantCulture,
@@ -85,6 +109,18 @@ internal sealed class UncertaintyBudget
         UncertaintyContribution[] shared =
             [.. contributions.Select(c => c with { Share = variance == 0.0 ? 0.0 : c.Part * c.Part / variance })];
         return new UncertaintyBudget(value, unit, shared, combined);
+    }
+
+    private static double Effective(IReadOnlyList<UncertaintyContribution> contributions, double combined)
+    {
+        double sum = 0.0;
+        foreach (UncertaintyContribution c in contributions)
+        {
+            double share = combined == 0.0 ? 0.0 : c.Part / combined;
+            sum += share * share * share * share / c.DegreesOfFreedom;
+        }
+
+        return sum == 0.0 ? double.PositiveInfinity : 1.0 / sum;
     }
 
     /// <summary>Core's own sum, six at a time, so that an equilibrium value carries the very figure that a device gives.</summary>

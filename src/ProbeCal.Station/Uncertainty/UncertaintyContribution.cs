@@ -13,6 +13,9 @@ internal sealed record UncertaintyContribution(
     /// <summary>Sensitivity times standard uncertainty, with its sign, in the unit of the value.</summary>
     public double Part => Sensitivity * StandardUncertainty;
 
+    /// <summary>How well the uncertainty itself is known: degrees of freedom of the readings it comes from; infinite for one that is taken as known.</summary>
+    public double DegreesOfFreedom { get; init; } = double.PositiveInfinity;
+
     /// <summary>Share of the variance of the value, 0–1; NaN until the contribution stands in a budget.</summary>
     public double Share { get; internal init; } = double.NaN;
 }
