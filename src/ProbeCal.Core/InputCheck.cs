@@ -133,6 +133,12 @@ internal static class InputCheck
         return Status.Ok;
     }
 
+    /// <summary>Pressure of the water above a probe, dbar, from 0 to that of the deepest trench.</summary>
+    internal static Status Hydrostatic(double decibar)
+    {
+        return Depth(decibar, 11000.0);
+    }
+
     /// <summary>
     /// The graver of two findings: not finite (or unknown) before out of range, out of range before just outside it, and the first before the second.
     /// </summary>

@@ -81,7 +81,7 @@ ReadingConditions conditions = new(SolubilityEquation.BensonKrause1984, 0.03, tr
 Reading reading = new();
 for (int i = 0; i < count; i++)
 {
-    readings.Add(Correction.Correct(calibration, conditions, inputs.Between(-1, 120), inputs.Between(0, 40), inputs.Between(550, 1100), inputs.Between(0, 40), RangeRule.Refuse, reading), 0);
+    readings.Add(Correction.Correct(calibration, conditions, inputs.Between(-1, 120), inputs.Between(0, 40), inputs.Between(550, 1100), inputs.Between(0, 40), 0.0, RangeRule.Refuse, reading), 0);
     for (int quantity = 0; quantity < Reading.QuantityCount; quantity++)
     {
         readings.Add(reading.Value((ReadingQuantity)quantity));

@@ -49,6 +49,7 @@ public static class CalibrationFit
     /// </summary>
     /// <param name="model">The probe.</param>
     /// <param name="slope">Response per hPa, positive.</param>
+    /// <param name="signal">Raw signal at the reference; only a probe whose response bends with the signal looks at it.</param>
     /// <param name="equation">Solubility equation.</param>
     /// <param name="temperatureCelsius">Temperature of the reference, °C.</param>
     /// <param name="pressureHectopascal">Absolute station pressure, hPa.</param>
@@ -58,6 +59,7 @@ public static class CalibrationFit
     public static Status SignalSize(
         IProbeModel model,
         double slope,
+        double signal,
         SolubilityEquation equation,
         double temperatureCelsius,
         double pressureHectopascal,
@@ -65,7 +67,7 @@ public static class CalibrationFit
         out double milligramsPerLitrePerSignal)
     {
         milligramsPerLitrePerSignal = double.NaN;
-        Status status = model.ResponsePerSignal(temperatureCelsius, pressureHectopascal, RangeRule.Refuse, out double responsePerSignal);
+        Status status = model.ResponsePerSignal(signal, temperatureCelsius, pressureHectopascal, 0.0, RangeRule.Refuse, out double responsePerSignal);
         if (status != Status.Ok) { return status; }
         status = model.Gain(temperatureCelsius, RangeRule.Refuse, out double gain);
         if (status != Status.Ok) { return status; }
@@ -110,7 +112,7 @@ public static class CalibrationFit
         if (reference <= 0.0) { return Status.PressureBelowRange; }
         status = OxygenEquilibrium.MilligramsPerLitre(equation, temperature, salinity, pressure, RangeRule.Refuse, out double concentration);
         if (status != Status.Ok) { return status; }
-        status = model.Response(point.Signal, temperature, pressure, RangeRule.Refuse, out double response);
+        status = model.Response(point.Signal, temperature, pressure, 0.0, RangeRule.Refuse, out double response);
         if (status != Status.Ok) { return status; }
         status = model.Gain(temperature, RangeRule.Refuse, out double gain);
         if (status != Status.Ok) { return status; }
@@ -144,7 +146,7 @@ public static class CalibrationFit
     {
         milligramsPerLitre = double.NaN;
         double temperature = zero.TemperatureCelsius;
-        Status status = model.Response(zero.Signal, temperature, zero.PressureHectopascal, RangeRule.Refuse, out double response);
+        Status status = model.Response(zero.Signal, temperature, zero.PressureHectopascal, 0.0, RangeRule.Refuse, out double response);
         if (status != Status.Ok) { return status; }
         status = model.Gain(temperature, RangeRule.Refuse, out double gain);
         if (status != Status.Ok) { return status; }

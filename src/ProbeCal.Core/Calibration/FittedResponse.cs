@@ -116,4 +116,52 @@ public sealed class FittedResponse
 
     /// <summary>Highest partial pressure of the points, hPa: beyond it a reading is an extrapolation.</summary>
     public double HighestHectopascal { get; }
+
+    /// <summary>Judges the figures: finite, a slope, a range over which the curve does not turn round, covariances that their variances allow.</summary>
+    internal Status Check(bool isLogarithmic)
+    {
+        if (InputCheck.NotFinite(Zero)) { return Status.ZeroNotFinite; }
+        if (InputCheck.NotFinite(Slope)) { return Status.SlopeNotFinite; }
+        if (Slope == 0.0) { return Status.SlopeBelowRange; }
+        if (InputCheck.NotFinite(Curvature)) { return Status.CoefficientNotFinite; }
+        Status status = CheckRange(isLogarithmic);
+        if (status != Status.Ok) { return status; }
+        status = CheckPair(VarianceZero, VarianceSlope, CovarianceZeroSlope);
+        if (status != Status.Ok) { return status; }
+        status = CheckPair(VarianceZero, VarianceCurvature, CovarianceZeroCurvature);
+        if (status != Status.Ok) { return status; }
+        status = CheckPair(VarianceSlope, VarianceCurvature, CovarianceSlopeCurvature);
+        if (status != Status.Ok) { return status; }
+        if (InputCheck.NotFinite(ZeroPerKelvin) || InputCheck.NotFinite(SlopePerKelvin) || InputCheck.NotFinite(CurvaturePerKelvin)
+            || InputCheck.NotFinite(ZeroPerCoefficient) || InputCheck.NotFinite(SlopePerCoefficient) || InputCheck.NotFinite(CurvaturePerCoefficient))
+        {
+            return Status.CoefficientNotFinite;
+        }
+
+        return Status.Ok;
+    }
+
+    private Status CheckRange(bool isLogarithmic)
+    {
+        Status status = ResponseCurve.Abscissa(LowestHectopascal, isLogarithmic, out double lowest, out _);
+        if (status != Status.Ok) { return status; }
+        status = ResponseCurve.Abscissa(HighestHectopascal, isLogarithmic, out double highest, out _);
+        if (status != Status.Ok) { return status; }
+        if (highest <= lowest) { return Status.PointsDegenerate; }
+        // The slope of the curve over that at zero: positive along the whole branch that the inverse takes.
+        double relative = 2.0 * (Curvature / Slope);
+        return 1.0 + (relative * lowest) <= 0.0 || 1.0 + (relative * highest) <= 0.0 ? Status.PointsDegenerate : Status.Ok;
+    }
+
+    private static Status CheckPair(double first, double second, double covariance)
+    {
+        Status status = InputCheck.Uncertainty(first);
+        if (status != Status.Ok) { return status; }
+        status = InputCheck.Uncertainty(second);
+        if (status != Status.Ok) { return status; }
+        if (InputCheck.NotFinite(covariance)) { return Status.UncertaintyNotFinite; }
+        // A correlation of exactly one is allowed, and its rounding.
+        double most = Numerics.Sqrt(first) * Numerics.Sqrt(second) * 1.000000001;
+        return most < covariance || covariance < -most ? Status.UncertaintyAboveRange : Status.Ok;
+    }
 }

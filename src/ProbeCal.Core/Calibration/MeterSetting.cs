@@ -40,7 +40,7 @@ public static class MeterSetting
         if (status != Status.Ok) { return status; }
         // In air the probe gives the air-to-water ratio times what it gives in water of the same partial pressure.
         double response = reference * gain * point.FlowFactor * point.AirToWaterRatio;
-        status = meter.Signal(response, temperature, pressure, RangeRule.Refuse, out double value);
+        status = meter.Signal(response, temperature, pressure, 0.0, RangeRule.Refuse, out double value);
         if (status != Status.Ok) { return status; }
         double equation = 0.0;
         if (meter.Scale == MeterScale.MilligramsPerLitre)

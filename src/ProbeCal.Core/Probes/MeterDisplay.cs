@@ -102,6 +102,18 @@ public sealed class MeterDisplay : IProbeModel
         get { return hasOwnThermometer; }
     }
 
+    /// <inheritdoc/>
+    public bool IsLogarithmic
+    {
+        get { return false; }
+    }
+
+    /// <inheritdoc/>
+    public bool IsTotalPressure
+    {
+        get { return false; }
+    }
+
     /// <summary>
     /// The partial pressure that one shown unit stands for, hPa per mg/L or hPa per %: every scale is proportional to pO2.
     /// </summary>
@@ -145,11 +157,12 @@ public sealed class MeterDisplay : IProbeModel
     }
 
     /// <inheritdoc/>
-    public Status Response(double signal, double temperatureCelsius, double pressureHectopascal, RangeRule rule, out double response)
+    public Status Response(
+        double signal, double temperatureCelsius, double pressureHectopascal, double hydrostaticDecibar, RangeRule rule, out double response)
     {
         response = double.NaN;
         if (InputCheck.NotFinite(signal)) { return Status.SignalNotFinite; }
-        Status status = ResponsePerSignal(temperatureCelsius, pressureHectopascal, rule, out double scale);
+        Status status = PerUnit(temperatureCelsius, pressureHectopascal, rule, out double scale);
         double value = signal * scale;
         if (double.IsInfinity(value)) { return Status.SignalAboveRange; }
         response = value;
@@ -160,14 +173,16 @@ public sealed class MeterDisplay : IProbeModel
     /// <param name="response">Partial pressure as the meter sees it, hPa.</param>
     /// <param name="temperatureCelsius">Temperature the meter measures, °C.</param>
     /// <param name="pressureHectopascal">Pressure its barometer measures, hPa; NaN where there is none.</param>
+    /// <param name="hydrostaticDecibar">Pressure of the water above the probe, dbar; a meter takes no notice of it.</param>
     /// <param name="rule">What to do outside a stated range.</param>
     /// <param name="signal">The shown value, mg/L or %; NaN unless the status allows a value.</param>
     /// <returns>The input at fault, or Ok.</returns>
-    public Status Signal(double response, double temperatureCelsius, double pressureHectopascal, RangeRule rule, out double signal)
+    public Status Signal(
+        double response, double temperatureCelsius, double pressureHectopascal, double hydrostaticDecibar, RangeRule rule, out double signal)
     {
         signal = double.NaN;
         if (InputCheck.NotFinite(response)) { return Status.PartialPressureNotFinite; }
-        Status status = ResponsePerSignal(temperatureCelsius, pressureHectopascal, rule, out double scale);
+        Status status = PerUnit(temperatureCelsius, pressureHectopascal, rule, out double scale);
         if (double.IsNaN(scale)) { return status; }
         // No air left beside the vapour: only extrapolation reaches it.
         if (scale <= 0.0) { return Status.PressureBelowRange; }
@@ -178,16 +193,17 @@ public sealed class MeterDisplay : IProbeModel
     }
 
     /// <inheritdoc/>
-    public Status ResponsePerSignal(double temperatureCelsius, double pressureHectopascal, RangeRule rule, out double responsePerSignal)
+    public Status ResponsePerSignal(
+        double signal, double temperatureCelsius, double pressureHectopascal, double hydrostaticDecibar, RangeRule rule, out double responsePerSignal)
     {
-        return PartialPressurePerUnit(
-            Scale,
-            Equation,
-            hasOwnThermometer ? temperatureCelsius : TemperatureSetCelsius,
-            SalinitySet,
-            hasOwnBarometer ? pressureHectopascal : PressureSetHectopascal,
-            rule,
-            out responsePerSignal);
+        return PerUnit(temperatureCelsius, pressureHectopascal, rule, out responsePerSignal);
+    }
+
+    /// <inheritdoc/>
+    public Status ResponsePerKelvin(double signal, double temperatureCelsius, double hydrostaticDecibar, out double perKelvin)
+    {
+        perKelvin = 0.0;
+        return Status.Ok;
     }
 
     /// <inheritdoc/>
@@ -237,5 +253,17 @@ public sealed class MeterDisplay : IProbeModel
         // The gain is f(T)/f(Tset): set to the water's own temperature, the coefficient says nothing.
         perCoefficient = status == Status.Ok ? perCoefficient - atSet : double.NaN;
         return status;
+    }
+
+    private Status PerUnit(double temperatureCelsius, double pressureHectopascal, RangeRule rule, out double responsePerSignal)
+    {
+        return PartialPressurePerUnit(
+            Scale,
+            Equation,
+            hasOwnThermometer ? temperatureCelsius : TemperatureSetCelsius,
+            SalinitySet,
+            hasOwnBarometer ? pressureHectopascal : PressureSetHectopascal,
+            rule,
+            out responsePerSignal);
     }
 }

@@ -14,6 +14,8 @@ public enum TemperatureCoefficientForm
     Linear = 3,
     /// <summary>f = exp(−(E/R)·(1/T − 1/Tref)), T in kelvin; coefficient E (activation energy) in J/mol.</summary>
     Arrhenius = 4,
+    /// <summary>ln f = c1·d + c2·d² + c3·d³, d = T − Tref; c1 in 1/K, c2 in 1/K², c3 in 1/K³. With c1 alone it is the exponential form.</summary>
+    Polynomial = 5,
 }
 
 /// <summary>
@@ -22,7 +24,8 @@ public enum TemperatureCoefficientForm
 /// </summary>
 /// <remarks>
 /// Permeation through a polymer follows the Arrhenius law; the other three are its usual short forms. A rate of r per kelvin
-/// at the reference is E = r·R·Tref² (22 kJ/mol is 3.0 %/K at 25 °C). Rounding of f is a few units in the last place.
+/// at the reference is E = r·R·Tref² (22 kJ/mol is 3.0 %/K at 25 °C). Rounding of f is a few units in the last place. The functions
+/// with one coefficient take it as c1 of a polynomial; those named polynomial take all three.
 /// </remarks>
 public static class TemperatureCoefficient
 {
@@ -87,6 +90,7 @@ public static class TemperatureCoefficient
         switch (form)
         {
             case TemperatureCoefficientForm.Exponential:
+            case TemperatureCoefficientForm.Polynomial:
                 value = coefficient;
                 break;
             case TemperatureCoefficientForm.Compound:
@@ -129,6 +133,7 @@ public static class TemperatureCoefficient
         switch (form)
         {
             case TemperatureCoefficientForm.Exponential:
+            case TemperatureCoefficientForm.Polynomial:
                 value = difference;
                 break;
             case TemperatureCoefficientForm.Compound:
@@ -145,6 +150,52 @@ public static class TemperatureCoefficient
         }
 
         return InputCheck.Deliver(value, status, Status.CoefficientAboveRange, out perCoefficient);
+    }
+
+    /// <summary>The factor of the polynomial form: f = exp(c1·d + c2·d² + c3·d³), d = T − Tref.</summary>
+    /// <param name="first">c1, 1/K.</param>
+    /// <param name="second">c2, 1/K².</param>
+    /// <param name="third">c3, 1/K³.</param>
+    /// <param name="referenceCelsius">Temperature at which f is 1, °C.</param>
+    /// <param name="lowestCelsius">Lower end of the fitted range, °C.</param>
+    /// <param name="highestCelsius">Upper end of the fitted range, °C.</param>
+    /// <param name="temperatureCelsius">Temperature of the membrane, °C.</param>
+    /// <param name="rule">What to do outside the fitted range.</param>
+    /// <param name="factor">f(T), always positive; NaN unless the status allows a value.</param>
+    /// <returns>As <see cref="Factor"/>.</returns>
+    public static Status PolynomialFactor(
+        double first, double second, double third, double referenceCelsius, double lowestCelsius, double highestCelsius,
+        double temperatureCelsius, RangeRule rule, out double factor)
+    {
+        double difference = temperatureCelsius - referenceCelsius;
+        // The range, the reference and the first coefficient are judged by the form with that alone.
+        Status status = Factor(
+            TemperatureCoefficientForm.Polynomial, first, referenceCelsius, lowestCelsius, highestCelsius, temperatureCelsius, rule, out double judged);
+        factor = double.NaN;
+        if (double.IsNaN(judged)) { return status; }
+        if (InputCheck.NotFinite(second) || InputCheck.NotFinite(third)) { return Status.CoefficientNotFinite; }
+        double value = Numerics.Exp(difference * (first + (difference * (second + (difference * third)))));
+        if (value <= 0.0) { return Status.CoefficientBelowRange; }
+        return InputCheck.Deliver(value, status, Status.CoefficientAboveRange, out factor);
+    }
+
+    /// <summary>d ln f/dT of the polynomial form at T, 1/K: c1 + 2·c2·d + 3·c3·d².</summary>
+    /// <param name="first">c1, 1/K.</param>
+    /// <param name="second">c2, 1/K².</param>
+    /// <param name="third">c3, 1/K³.</param>
+    /// <param name="referenceCelsius">Temperature at which f is 1, °C.</param>
+    /// <param name="temperatureCelsius">Temperature of the membrane, °C.</param>
+    /// <param name="perKelvin">1/K; NaN unless Ok.</param>
+    /// <returns>The input at fault, or Ok.</returns>
+    public static Status PolynomialLogDerivative(
+        double first, double second, double third, double referenceCelsius, double temperatureCelsius, out double perKelvin)
+    {
+        perKelvin = double.NaN;
+        if (InputCheck.NotFinite(temperatureCelsius)) { return Status.TemperatureNotFinite; }
+        if (InputCheck.NotFinite(referenceCelsius)) { return Status.CoefficientNotFinite; }
+        double difference = temperatureCelsius - referenceCelsius;
+        double value = first + (difference * ((2.0 * second) + (3.0 * difference * third)));
+        return InputCheck.Deliver(value, Status.Ok, Status.CoefficientNotFinite, out perKelvin);
     }
 
     /// <summary>
@@ -170,12 +221,13 @@ public static class TemperatureCoefficient
         return Status.Ok;
     }
 
-    /// <summary>True for the four forms that Core knows.</summary>
+    /// <summary>True for the forms that Core knows.</summary>
     /// <param name="form">The form to test.</param>
     public static bool IsKnown(TemperatureCoefficientForm form)
     {
         return form == TemperatureCoefficientForm.Exponential || form == TemperatureCoefficientForm.Compound
-            || form == TemperatureCoefficientForm.Linear || form == TemperatureCoefficientForm.Arrhenius;
+            || form == TemperatureCoefficientForm.Linear || form == TemperatureCoefficientForm.Arrhenius
+            || form == TemperatureCoefficientForm.Polynomial;
     }
 
     private static Status Evaluate(
@@ -196,6 +248,7 @@ public static class TemperatureCoefficient
         switch (form)
         {
             case TemperatureCoefficientForm.Exponential:
+            case TemperatureCoefficientForm.Polynomial:
                 value = Numerics.Exp(coefficient * difference);
                 break;
             case TemperatureCoefficientForm.Compound:

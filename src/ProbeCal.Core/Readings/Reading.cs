@@ -10,7 +10,7 @@ public sealed class Reading
     public const int QuantityCount = 6;
 
     /// <summary>Number of <see cref="UncertaintySource"/>.</summary>
-    public const int SourceCount = 14;
+    public const int SourceCount = 15;
 
     private readonly double[] values = new double[QuantityCount];
     private readonly Status[] statuses = new Status[QuantityCount];
@@ -68,6 +68,14 @@ public sealed class Reading
     {
         for (int i = 0; i < QuantityCount; i++) { statuses[i] = status; }
         UncertaintyStatus = status;
+    }
+
+    internal void RefuseAllBut(ReadingQuantity kept, Status status)
+    {
+        for (int i = 0; i < QuantityCount; i++)
+        {
+            if (i != (int)kept) { statuses[i] = status; }
+        }
     }
 
     internal void SetContribution(UncertaintySource source, ReadingQuantity quantity, double value)

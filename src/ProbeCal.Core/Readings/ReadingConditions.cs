@@ -75,11 +75,11 @@ public sealed class ReadingConditions
     /// True when the probe is used in water that moves otherwise than at its calibration. A point in air stands for stirred
     /// water, by its air-to-water ratio.
     /// </summary>
-    /// <param name="point">The 100 % point.</param>
-    public bool IsStirringMismatch(CalibrationPoint point)
+    /// <param name="calibration">The calibration in force.</param>
+    public bool IsStirringMismatch(ProbeCalibration calibration)
     {
-        if (Stirring == Stirring.FlowInsensitive || point.Stirring == Stirring.FlowInsensitive) { return false; }
-        Stirring calibrated = point.Method == CalibrationMethod.WaterSaturatedAir ? Stirring.Stirred : point.Stirring;
+        if (Stirring == Stirring.FlowInsensitive || calibration.Stirring == Stirring.FlowInsensitive) { return false; }
+        Stirring calibrated = calibration.IsAirPoint ? Stirring.Stirred : calibration.Stirring;
         return calibrated != Stirring;
     }
 

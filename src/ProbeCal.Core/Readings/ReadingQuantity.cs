@@ -3,7 +3,7 @@ namespace ProbeCal;
 /// <summary>The quantities that a corrected reading holds. The numbers are indices of its arrays.</summary>
 public enum ReadingQuantity
 {
-    /// <summary>Partial pressure of oxygen, hPa.</summary>
+    /// <summary>Partial pressure of the gas at the probe, or the total pressure of a total-gas probe, hPa.</summary>
     PartialPressure = 0,
     /// <summary>Concentration, mg/L.</summary>
     MilligramsPerLitre = 1,
@@ -11,9 +11,9 @@ public enum ReadingQuantity
     MicromolesPerLitre = 2,
     /// <summary>Content, µmol/kg.</summary>
     MicromolesPerKilogram = 3,
-    /// <summary>Saturation relative to air at the local pressure, %.</summary>
+    /// <summary>Saturation relative to air at the local pressure, %; of a total-gas probe its pressure over the local one.</summary>
     PercentLocal = 4,
-    /// <summary>Saturation relative to air at 1 atm, %.</summary>
+    /// <summary>Saturation relative to air at 1 atm, %; of a total-gas probe its pressure over 1 atm.</summary>
     PercentOneAtmosphere = 5,
 }
 
@@ -48,4 +48,6 @@ public enum UncertaintySource
     ReferenceState = 12,
     /// <summary>Stirring at the reading against that at the calibration.</summary>
     Stirring = 13,
+    /// <summary>The parameters of a fit through several points, with their covariance.</summary>
+    Fit = 14,
 }

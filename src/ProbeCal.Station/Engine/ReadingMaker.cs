@@ -39,7 +39,7 @@ internal sealed class ReadingMaker
         if (calibration != null)
         {
             _conditions = Conditions(configuration, calibration);
-            _stirringDiffers = _conditions.IsStirringMismatch(calibration.Core.Point);
+            _stirringDiffers = _conditions.IsStirringMismatch(calibration.Core);
         }
     }
 
@@ -80,6 +80,7 @@ internal sealed class ReadingMaker
             inputs.Temperature.Value ?? double.NaN,
             inputs.UsablePressure,
             inputs.Salinity.Value ?? double.NaN,
+            0.0,
             RangeRule.NearEdge,
             _reading);
         return double.IsNaN(_reading.Value(ReadingQuantity.PartialPressure))
@@ -92,7 +93,7 @@ internal sealed class ReadingMaker
     {
         if (_stirringDiffers)
         {
-            return "calibrated " + Words(_calibration!.Core.Point.Stirring) + " and used " + Words(_configuration.Stirring);
+            return "calibrated " + Words(_calibration!.Core.Stirring) + " and used " + Words(_configuration.Stirring);
         }
 
         return _calibration != null && raw.TimeUtc < _calibration.Record.CompletedUtc ? "taken before its calibration was made" : "";
@@ -110,7 +111,7 @@ internal sealed class ReadingMaker
             configuration.Pressure.StandardUncertainty,
             configuration.Salinity.StandardUncertainty,
             configuration.Stirring,
-            calibration.Core.Point.FlowFactor,
+            calibration.Core.FlowFactor,
             UncertaintyDefaults.StirringRelative(configuration.Stirring));
         Status status = conditions.Check();
         return status == Status.Ok ? conditions : throw new InputException("the station's uncertainties make no conditions for a reading: " + status);

@@ -81,7 +81,7 @@ public class CalibrationFitTests
     {
         AmperometricProbe probe = Bench.Probe();
         double signal = Bench.Signal(probe, Bench.Slope, Bench.Zero, 1.0, 12.0, 990.0, Bench.Air(12.0, 990.0));
-        Assert.Equal(Status.Ok, CalibrationFit.SignalSize(probe, Bench.Slope, Equation, 12.0, 990.0, 0.0, out double size));
+        Assert.Equal(Status.Ok, CalibrationFit.SignalSize(probe, Bench.Slope, signal, Equation, 12.0, 990.0, 0.0, out double size));
         OxygenEquilibrium.MilligramsPerLitre(Equation, 12.0, 0.0, 990.0, RangeRule.Refuse, out double reference);
         Assert.Equal(1.0, size * (signal - Bench.Zero) / reference, 12);
     }

@@ -119,7 +119,7 @@ public class TemperatureCoefficientTests
         Assert.Equal(Status.CoefficientBelowRange, Factor(TemperatureCoefficientForm.Compound, -1.0, 10.0, out _));
         Assert.Equal(Status.CoefficientAboveRange, Factor(TemperatureCoefficientForm.Exponential, 1e6, 30.0, out _));
         Assert.Equal(Status.CoefficientUnknown, Factor((TemperatureCoefficientForm)0, 0.03, 10.0, out _));
-        Assert.Equal(Status.CoefficientUnknown, Factor((TemperatureCoefficientForm)5, 0.03, 10.0, out _));
+        Assert.Equal(Status.CoefficientUnknown, Factor((TemperatureCoefficientForm)6, 0.03, 10.0, out _));
         Assert.Equal(Status.TemperatureBelowRange, TemperatureCoefficient.Factor(
             TemperatureCoefficientForm.Arrhenius, 22000.0, 25.0, 0.0, 40.0, -273.15, RangeRule.Extrapolate, out _));
     }

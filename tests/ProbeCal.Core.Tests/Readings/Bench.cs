@@ -17,7 +17,7 @@ internal static class Bench
     {
         Assert.Equal(Status.Ok, model.Gain(temperature, RangeRule.Refuse, out double gain));
         Assert.Equal(Status.Ok, AmperometricProbe.ResponseTo(partialPressure, zero, slope, flow, gain, out double response));
-        Assert.Equal(Status.Ok, model.Signal(response, temperature, pressure, RangeRule.Refuse, out double signal));
+        Assert.Equal(Status.Ok, model.Signal(response, temperature, pressure, 0.0, RangeRule.Refuse, out double signal));
         return signal;
     }
 

@@ -15,12 +15,16 @@ public class BoundaryTests
     private static readonly Type[] Types =
     [
         typeof(TemperatureCoefficient), typeof(AmperometricProbe), typeof(MeterDisplay), typeof(AcceptanceLimit), typeof(PressurePlausibility),
-        typeof(CalibrationFit), typeof(ExpectedEffect),
+        typeof(CalibrationFit), typeof(ExpectedEffect), typeof(ResponseCurve),
     ];
 
     private static readonly Dictionary<string, double> Good = new()
     {
         ["coefficient"] = 0.03,
+        ["first"] = 0.03,
+        ["second"] = -2e-4,
+        ["third"] = 1e-6,
+        ["curvature"] = 1e-4,
         ["referenceCelsius"] = 25.0,
         ["lowestCelsius"] = 0.0,
         ["highestCelsius"] = 40.0,
@@ -97,14 +101,14 @@ public class BoundaryTests
         Assert.Contains("TemperatureCoefficient.Factor", found);
         Assert.Contains("CalibrationFit.Slope", found);
         Assert.Contains("MeterDisplay.PartialPressurePerUnit", found);
-        Assert.Equal(13, found.Length);
+        Assert.Equal(17, found.Length);
     }
 
     private static IEnumerable<MethodInfo> Candidates()
     {
         return Types.SelectMany(t => t.GetMethods(BindingFlags.Public | BindingFlags.Static | BindingFlags.DeclaredOnly))
             .Where(m => m.ReturnType == typeof(Status))
-            .Where(m => m.GetParameters().All(p => p.IsOut || p.ParameterType == typeof(double) || p.ParameterType.IsEnum))
+            .Where(m => m.GetParameters().All(p => p.IsOut || p.ParameterType == typeof(double) || p.ParameterType == typeof(bool) || p.ParameterType.IsEnum))
             .OrderBy(m => m.DeclaringType!.Name + m.Name, StringComparer.Ordinal);
     }
 
@@ -117,6 +121,7 @@ public class BoundaryTests
             Type type = parameters[i].ParameterType;
             if (parameters[i].IsOut) { arguments[i] = null; }
             else if (type == typeof(RangeRule)) { arguments[i] = rule; }
+            else if (type == typeof(bool)) { arguments[i] = false; }
             else if (type.IsEnum) { arguments[i] = Enum.ToObject(type, 1); }
             else { arguments[i] = i == badIndex ? bad : Good[parameters[i].Name!]; }
         }

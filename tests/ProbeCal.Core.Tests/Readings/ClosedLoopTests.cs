@@ -26,7 +26,7 @@ public class ClosedLoopTests
         double raw = Bench.Signal(probe, Bench.Slope, Bench.Zero, 1.0, temperature, 1000.0, truth);
         var reading = new Reading();
         Assert.Equal(Status.Ok, Correction.Correct(
-            calibration, Bench.Conditions(), raw, temperature, 1000.0, salinity, RangeRule.Refuse, reading));
+            calibration, Bench.Conditions(), raw, temperature, 1000.0, salinity, 0.0, RangeRule.Refuse, reading));
 
         Assert.Equal(truth, reading.Value(ReadingQuantity.PartialPressure), 10);
         OxygenEquilibrium.ConcentrationFromPartialPressure(

@@ -182,12 +182,12 @@ public class CorrectionTests
         ProbeCalibration calibration = Calibration();
         var reading = new Reading();
         Assert.Equal(Status.Ok, Correction.Correct(
-            calibration, Bench.Conditions(signalUncertainty: double.NaN), 50.0, 15.0, 1000.0, 0.0, RangeRule.Refuse, reading));
+            calibration, Bench.Conditions(signalUncertainty: double.NaN), 50.0, 15.0, 1000.0, 0.0, 0.0, RangeRule.Refuse, reading));
         Assert.Equal(Status.UncertaintyNotFinite, reading.UncertaintyStatus);
         Assert.True(double.IsFinite(reading.Value(ReadingQuantity.MilligramsPerLitre)));
         Assert.True(double.IsNaN(reading.StandardUncertainty(ReadingQuantity.MilligramsPerLitre)));
         Correction.Correct(
-            calibration, Bench.Conditions(pressure: -1.0), 50.0, 15.0, 1000.0, 0.0, RangeRule.Refuse, reading);
+            calibration, Bench.Conditions(pressure: -1.0), 50.0, 15.0, 1000.0, 0.0, 0.0, RangeRule.Refuse, reading);
         Assert.Equal(Status.UncertaintyBelowRange, reading.UncertaintyStatus);
     }
 
@@ -196,11 +196,11 @@ public class CorrectionTests
     {
         ProbeCalibration calibration = Calibration();
         var reading = new Reading();
-        Correction.Correct(calibration, Bench.Conditions(), 50.0, 15.0, 1000.0, 0.0, RangeRule.Refuse, reading);
-        Correction.Correct(calibration, Bench.Conditions(), 50.0, 15.0, 1000.0, double.NaN, RangeRule.Refuse, reading);
+        Correction.Correct(calibration, Bench.Conditions(), 50.0, 15.0, 1000.0, 0.0, 0.0, RangeRule.Refuse, reading);
+        Correction.Correct(calibration, Bench.Conditions(), 50.0, 15.0, 1000.0, double.NaN, 0.0, RangeRule.Refuse, reading);
         AssertRefused(reading, ReadingQuantity.MilligramsPerLitre, Status.SalinityNotFinite);
         Assert.True(double.IsNaN(reading.Contribution(UncertaintySource.Zero, ReadingQuantity.MilligramsPerLitre)));
-        Correction.Correct(calibration, Bench.Conditions(), 50.0, double.NaN, 1000.0, 0.0, RangeRule.Refuse, reading);
+        Correction.Correct(calibration, Bench.Conditions(), 50.0, double.NaN, 1000.0, 0.0, 0.0, RangeRule.Refuse, reading);
         foreach (ReadingQuantity quantity in All) { AssertRefused(reading, quantity, Status.TemperatureNotFinite); }
     }
 
@@ -211,7 +211,7 @@ public class CorrectionTests
         double raw = Bench.Signal(Bench.Probe(), Bench.Slope, Bench.Zero, 1.0, 10.0, 1013.25, Bench.Air(10.0, 1013.25));
         var reading = new Reading();
         Correction.Correct(
-            calibration, Bench.Conditions(equation: SolubilityEquation.GarciaGordon1992), raw, 10.0, 1013.25, 35.0, RangeRule.Refuse, reading);
+            calibration, Bench.Conditions(equation: SolubilityEquation.GarciaGordon1992), raw, 10.0, 1013.25, 35.0, 0.0, RangeRule.Refuse, reading);
         GarciaGordon1992.MicromolesPerKilogram(10.0, 35.0, 1013.25, RangeRule.Refuse, out double expected);
         Assert.Equal(1.0, reading.Value(ReadingQuantity.MicromolesPerKilogram) / expected, 12);
     }
@@ -219,12 +219,13 @@ public class CorrectionTests
     [Fact]
     public void StirringMismatch_IsSeen()
     {
-        CalibrationPoint stirred = Bench.WaterPoint(60.0, 20.0, 1013.25);
+        var zero = new ZeroPoint(true, Bench.Zero, 0.0, 20.0, 1013.25);
+        ProbeCalibration stirred = Bench.Calibrate(Bench.Probe(), Bench.WaterPoint(60.0, 20.0, 1013.25), zero);
         Assert.False(Water(Stirring.Stirred).IsStirringMismatch(stirred));
         Assert.True(Water(Stirring.Still).IsStirringMismatch(stirred));
         Assert.False(Water(Stirring.FlowInsensitive).IsStirringMismatch(stirred));
-        var air = new CalibrationPoint(
-            CalibrationMethod.WaterSaturatedAir, 60.0, 0.0, 20.0, 0.0, 1013.25, 0.0, Stirring.Still, 1.0, 1.0, 0.0, 0.0);
+        ProbeCalibration air = Bench.Calibrate(
+            Bench.Probe(), new CalibrationPoint(CalibrationMethod.WaterSaturatedAir, 60.0, 0.0, 20.0, 0.0, 1013.25, 0.0, Stirring.Still, 1.0, 1.0, 0.0, 0.0), zero);
         Assert.False(Water(Stirring.Stirred).IsStirringMismatch(air));
         Assert.True(Water(Stirring.Still).IsStirringMismatch(air));
     }
@@ -235,11 +236,11 @@ public class CorrectionTests
         ProbeCalibration calibration = Calibration();
         ReadingConditions conditions = Bench.Conditions(0.05, true, 0.0, 0.03, 0.8, 0.25, 0.01);
         var reading = new Reading();
-        Correction.Correct(calibration, conditions, 50.0, 15.0, 1000.0, 5.0, RangeRule.Refuse, reading);
+        Correction.Correct(calibration, conditions, 50.0, 15.0, 1000.0, 5.0, 0.0, RangeRule.Refuse, reading);
         long before = GC.GetAllocatedBytesForCurrentThread();
         for (int i = 0; i < 1000; i++)
         {
-            Correction.Correct(calibration, conditions, 50.0 + (0.01 * i), 15.0, 1000.0, 5.0, RangeRule.Refuse, reading);
+            Correction.Correct(calibration, conditions, 50.0 + (0.01 * i), 15.0, 1000.0, 5.0, 0.0, RangeRule.Refuse, reading);
         }
 
         Assert.Equal(0L, GC.GetAllocatedBytesForCurrentThread() - before);
@@ -262,7 +263,7 @@ public class CorrectionTests
     {
         var reading = new Reading();
         Correction.Correct(
-            Calibration(), Bench.Conditions(0.05, true, 0.0, 0.03, 0.8, 0.25, 0.01), signal, temperature, pressure, salinity, rule, reading);
+            Calibration(), Bench.Conditions(0.05, true, 0.0, 0.03, 0.8, 0.25, 0.01), signal, temperature, pressure, salinity, 0.0, rule, reading);
         return reading;
     }
 

@@ -136,7 +136,7 @@ public class ReadingUncertaintyTests
             probe, Bench.WaterPoint(signal, calibrationTemperature, 1013.25), new ZeroPoint(true, 0.0, 0.0, calibrationTemperature, 1013.25), 1.0);
         double raw = Bench.Signal(probe, Bench.Slope, 0.0, 1.0, 15.0, 1013.25, 200.0);
         var reading = new Reading();
-        Correction.Correct(calibration, Bench.Conditions(temperature: 1.0), raw, 15.0, 1013.25, 0.0, RangeRule.Refuse, reading);
+        Correction.Correct(calibration, Bench.Conditions(temperature: 1.0), raw, 15.0, 1013.25, 0.0, 0.0, RangeRule.Refuse, reading);
         double value = reading.Value(ReadingQuantity.MilligramsPerLitre);
         double common = 100.0 * reading.Contribution(UncertaintySource.ThermometerOffset, ReadingQuantity.MilligramsPerLitre) / value;
         double alone = 100.0 * reading.Contribution(UncertaintySource.TemperatureAtReading, ReadingQuantity.MilligramsPerLitre) / value;
@@ -154,14 +154,14 @@ public class ReadingUncertaintyTests
         var meter = new MeterDisplay(
             MeterScale.MilligramsPerLitre, SolubilityEquation.BensonKrause1984, 0.0, double.NaN, double.NaN,
             TemperatureCoefficientForm.Exponential, 0.03, 25.0, 0.0, 40.0);
-        Assert.Equal(Status.Ok, meter.Signal(Bench.Air(20.65, 1013.25), 20.65, 1013.25, RangeRule.Refuse, out double shown));
+        Assert.Equal(Status.Ok, meter.Signal(Bench.Air(20.65, 1013.25), 20.65, 1013.25, 0.0, RangeRule.Refuse, out double shown));
         Assert.Equal(8.97, shown, 0.02);
         ProbeCalibration calibration = Bench.Calibrate(
             meter, Bench.WaterPoint(shown, 20.65, 1013.25, 0.0039, stateUncertainty: 0.031 / shown), new ZeroPoint(true, 0.0, 0.0049, 20.65, 1013.25));
         double Uncertainty(double reading, out double zero)
         {
             var result = new Reading();
-            Correction.Correct(calibration, Bench.Conditions(0.0686), reading, 20.65, 1013.25, 0.0, RangeRule.Refuse, result);
+            Correction.Correct(calibration, Bench.Conditions(0.0686), reading, 20.65, 1013.25, 0.0, 0.0, RangeRule.Refuse, result);
             zero = result.Contribution(UncertaintySource.Zero, ReadingQuantity.MilligramsPerLitre);
             double equation = result.Contribution(UncertaintySource.Equation, ReadingQuantity.MilligramsPerLitre);
             double combined = result.StandardUncertainty(ReadingQuantity.MilligramsPerLitre);
@@ -197,7 +197,7 @@ public class ReadingUncertaintyTests
             equation, USignal, sameThermometer, UOffset, UTemperature, UPressure, USalinity, Stirring.Stirred, inputs.Flow, UStirring);
         var reading = new Reading();
         Assert.Equal(Status.Ok, Correction.Correct(
-            calibration, conditions, inputs.Signal, inputs.Temperature, inputs.Pressure, inputs.Salinity, RangeRule.Refuse, reading));
+            calibration, conditions, inputs.Signal, inputs.Temperature, inputs.Pressure, inputs.Salinity, 0.0, RangeRule.Refuse, reading));
         Assert.Equal(Status.Ok, reading.UncertaintyStatus);
         return reading;
     }

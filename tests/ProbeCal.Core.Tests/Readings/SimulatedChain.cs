@@ -80,7 +80,7 @@ internal sealed class SimulatedChain
         var conditions = new ReadingConditions(
             Equation, uSignal, SameThermometer, UOffset, UTemperature, UPressure, USalinity, Stirring.Stirred, 1.0, UStirring);
         Assert.Equal(Status.Ok, Correction.Correct(
-            calibration, conditions, signal + (uSignal * Normal()), takenTemperature, takenPressure, takenSalinity, RangeRule.Extrapolate, reading));
+            calibration, conditions, signal + (uSignal * Normal()), takenTemperature, takenPressure, takenSalinity, 0.0, RangeRule.Extrapolate, reading));
         Assert.Equal(Status.Ok, reading.UncertaintyStatus);
 
         OxygenUncertainty.EquationRelative(Equation, Salinity, RangeRule.Refuse, out double equationRelative);

@@ -110,7 +110,7 @@ public class UncertaintyDocumentTests
             UncertaintyDefaults.TemperatureKelvin, UncertaintyDefaults.BarometerHectopascal, UncertaintyDefaults.Salinity,
             Stirring.Stirred, 1.0, UncertaintyDefaults.StirredRelative);
         var reading = new Reading();
-        Assert.Equal(Status.Ok, Correction.Correct(calibration, conditions, raw, 15.0, 1000.0, 0.0, RangeRule.Refuse, reading));
+        Assert.Equal(Status.Ok, Correction.Correct(calibration, conditions, raw, 15.0, 1000.0, 0.0, 0.0, RangeRule.Refuse, reading));
         return reading;
     }
 

@@ -20,7 +20,7 @@ public sealed class ReadmeTests
 
         var conditions = new ReadingConditions(SolubilityEquation.BensonKrause1984, 0.05, true, 0.0, 0.03, 0.8, 0.1, Stirring.Stirred, 1.0, 0.0);
         var reading = new Reading();   // made once, filled for every sample
-        Status corrected = Correction.Correct(calibration!, conditions, 45.2, 12.4, 941.0, 0.0, RangeRule.Refuse, reading);
+        Status corrected = Correction.Correct(calibration!, conditions, 45.2, 12.4, 941.0, 0.0, 0.0, RangeRule.Refuse, reading);
         double oxygen = reading.Value(ReadingQuantity.MilligramsPerLitre);
         double u = reading.StandardUncertainty(ReadingQuantity.MilligramsPerLitre);
         // to here

@@ -34,7 +34,7 @@ public class ReadingMakerTests
 
         Reading expected = new();
         ReadingConditions conditions = new(SolubilityEquation.BensonKrause1984, 0.12, true, UncertaintyDefaults.ThermometerOffsetKelvin, 0.03, 0.8, 0.1, Stirring.Stirred, 1, UncertaintyDefaults.StirredRelative);
-        Assert.Equal(Status.Ok, Correction.Correct(calibration.Core, conditions, 101.5, 18.25, 941.5, 0.3, RangeRule.Refuse, expected));
+        Assert.Equal(Status.Ok, Correction.Correct(calibration.Core, conditions, 101.5, 18.25, 941.5, 0.3, 0.0, RangeRule.Refuse, expected));
         foreach ((string name, ReadingQuantity quantity) in _quantities)
         {
             Assert.Equal(expected.Value(quantity), (double)json[name]!["value"]!);
