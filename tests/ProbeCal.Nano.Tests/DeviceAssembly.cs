@@ -1,5 +1,6 @@
 using System;
 using System.IO;
+using System.Linq;
 using Mono.Cecil;
 using Mono.Cecil.Cil;
 
@@ -8,11 +9,18 @@ namespace ProbeCal.Nano.Tests;
 /// <summary>The device assembly as it was built, the mscorlib it was built against, and the folder the sources are in.</summary>
 internal static class DeviceAssembly
 {
+    /// <summary>The assemblies that a device gets; the later ones refer to the earlier.</summary>
+    public static readonly string[] PartNames = ["ProbeCal.Nano.Equilibrium", "ProbeCal.Nano.Calibration"];
+
     private static readonly Lazy<AssemblyDefinition> BuiltAssembly = new(() => Read("ProbeCal.Nano.dll", symbols: true));
     private static readonly Lazy<AssemblyDefinition> MscorlibAssembly = new(() => Read("mscorlib.dll", symbols: false));
+    private static readonly Lazy<AssemblyDefinition[]> PartAssemblies = new(() => [.. PartNames.Select(name => Read(name + ".dll", symbols: false))]);
     private static readonly Lazy<AssemblyDefinition> ThisAssembly = new(ReadThisAssembly);
 
-    /// <summary>ProbeCal.Nano.dll with its symbols.</summary>
+    /// <summary>The parts as they were built, in the order of <see cref="PartNames"/>.</summary>
+    public static AssemblyDefinition[] Parts => PartAssemblies.Value;
+
+    /// <summary>ProbeCal.Nano.dll, all of Core's portable files in one, with its symbols.</summary>
     public static AssemblyDefinition Nano => BuiltAssembly.Value;
 
     /// <summary>The microcontroller's mscorlib.</summary>

@@ -10,41 +10,49 @@ using Xunit;
 
 namespace ProbeCal.Nano.Tests;
 
-/// <summary>Core's portable files on disk, the compile gate and the device project name the same files.</summary>
+/// <summary>Core's portable files on disk, the compile gate and the device projects name the same files.</summary>
 public class FileListTests
 {
     private static readonly string[] DesktopOnlyRooms = ["Batch", "Catalogue", "Fitting", "Throwing", "Titration"];
     private static readonly string CoreFolder = Path.Combine(DeviceAssembly.Root, "src", "ProbeCal.Core");
-    private static readonly string NanoFolder = Path.Combine(DeviceAssembly.Root, "src", "ProbeCal.Nano");
-    private static readonly string DeviceProject = Path.Combine(NanoFolder, "ProbeCal.Nano.nfproj");
+
+    public static TheoryData<string> Parts => new(DeviceAssembly.PartNames);
 
     [Fact]
     public void The_compile_gate_compiles_exactly_the_portable_files()
     {
-        Assert.Equal(OnDisk(), CompiledByTheGate());
+        Assert.Equal(OnDisk(), CompiledBy("ProbeCal.Nano"));
     }
 
     [Fact]
-    public void The_device_project_lists_exactly_the_portable_files()
+    public void The_parts_together_compile_every_portable_file_once()
     {
-        List<string> onDisk = OnDisk();
+        Assert.Equal(OnDisk(), DeviceAssembly.PartNames.SelectMany(CompiledBy).Order(StringComparer.Ordinal));
+    }
+
+    [Theory]
+    [MemberData(nameof(Parts))]
+    public void A_device_project_lists_exactly_the_files_of_its_part(string part)
+    {
+        List<string> compiled = CompiledBy(part);
         if (DeviceAssembly.UpdateRequested)
         {
-            WriteDeviceProject(onDisk);
+            WriteDeviceProject(part, compiled);
         }
-        List<string> listed = ListedForTheDevice();
-        if (!onDisk.SequenceEqual(listed))
+        List<string> listed = ListedForTheDevice(part);
+        if (!compiled.SequenceEqual(listed))
         {
-            Assert.Fail("src/ProbeCal.Nano/ProbeCal.Nano.nfproj is behind Core (" +
-                string.Join(", ", onDisk.Except(listed).Select(f => "+" + f).Concat(listed.Except(onDisk).Select(f => "-" + f))) +
-                "). Run these tests once with PROBECAL_UPDATE=1, or paste into the group labelled Core:\n" + Items(onDisk));
+            Assert.Fail("src/" + part + "/" + part + ".nfproj is behind Core (" +
+                string.Join(", ", compiled.Except(listed).Select(f => "+" + f).Concat(listed.Except(compiled).Select(f => "-" + f))) +
+                "). Run these tests once with PROBECAL_UPDATE=1, or paste into the group labelled Core:\n" + Items(compiled));
         }
     }
 
-    [Fact]
-    public void Every_item_of_the_device_project_has_a_link_with_the_place_it_has_in_Core()
+    [Theory]
+    [MemberData(nameof(Parts))]
+    public void Every_item_of_a_device_project_has_a_link_with_the_place_it_has_in_Core(string part)
     {
-        foreach (XElement item in CoreItems())
+        foreach (XElement item in CoreItems(part))
         {
             string include = item.Attribute("Include")!.Value;
             XNamespace ns = item.Name.Namespace;
@@ -52,16 +60,27 @@ public class FileListTests
         }
     }
 
-    [Fact]
-    public void The_device_project_takes_the_mscorlib_that_the_compile_gate_takes()
+    [Theory]
+    [MemberData(nameof(Parts))]
+    public void A_device_project_takes_the_mscorlib_that_the_compile_gate_takes(string part)
     {
         const string Package = "nanoFramework.CoreLibrary";
         string central = XDocument.Load(Path.Combine(DeviceAssembly.Root, "Directory.Packages.props")).Descendants("PackageVersion")
             .Single(e => e.Attribute("Include")!.Value == Package).Attribute("Version")!.Value;
-        string device = XDocument.Load(Path.Combine(NanoFolder, "packages.config")).Descendants("package")
+        string device = XDocument.Load(Path.Combine(Folder(part), "packages.config")).Descendants("package")
             .Single(e => e.Attribute("id")!.Value == Package).Attribute("version")!.Value;
         Assert.Equal(central, device);
-        Assert.Contains($"{Package}.{central}", File.ReadAllText(DeviceProject), StringComparison.Ordinal);
+        Assert.Contains($"{Package}.{central}", File.ReadAllText(DeviceProject(part)), StringComparison.Ordinal);
+    }
+
+    private static string Folder(string project)
+    {
+        return Path.Combine(DeviceAssembly.Root, "src", project);
+    }
+
+    private static string DeviceProject(string part)
+    {
+        return Path.Combine(Folder(part), part + ".nfproj");
     }
 
     private static List<string> OnDisk()
@@ -73,16 +92,16 @@ public class FileListTests
             .Order(StringComparer.Ordinal).ToList();
     }
 
-    private static List<string> CompiledByTheGate()
+    private static List<string> CompiledBy(string project)
     {
         string dotnet = Environment.GetEnvironmentVariable("DOTNET_HOST_PATH") ?? "dotnet";
         var start = new ProcessStartInfo(dotnet)
         {
-            WorkingDirectory = NanoFolder,
+            WorkingDirectory = Folder(project),
             RedirectStandardOutput = true,
             UseShellExecute = false,
         };
-        foreach (string argument in new[] { "msbuild", "ProbeCal.Nano.csproj", "-getItem:Compile", "-nologo" })
+        foreach (string argument in new[] { "msbuild", project + ".csproj", "-getItem:Compile", "-nologo" })
         {
             start.ArgumentList.Add(argument);
         }
@@ -96,16 +115,16 @@ public class FileListTests
             .Order(StringComparer.Ordinal).ToList();
     }
 
-    private static List<XElement> CoreItems()
+    private static List<XElement> CoreItems(string part)
     {
-        XDocument project = XDocument.Load(DeviceProject);
+        XDocument project = XDocument.Load(DeviceProject(part));
         XNamespace ns = project.Root!.Name.Namespace;
         return project.Descendants(ns + "Compile").ToList();
     }
 
-    private static List<string> ListedForTheDevice()
+    private static List<string> ListedForTheDevice(string part)
     {
-        return CoreItems().Select(item => item.Attribute("Include")!.Value.Replace('\\', '/'))
+        return CoreItems(part).Select(item => item.Attribute("Include")!.Value.Replace('\\', '/'))
             .Select(path => path.StartsWith("../ProbeCal.Core/", StringComparison.Ordinal) ? path["../ProbeCal.Core/".Length..] : path)
             .ToList();
     }
@@ -122,13 +141,13 @@ public class FileListTests
         return text.ToString();
     }
 
-    private static void WriteDeviceProject(IEnumerable<string> files)
+    private static void WriteDeviceProject(string part, IEnumerable<string> files)
     {
         const string Start = "  <ItemGroup Label=\"Core\">\n";
         const string End = "  </ItemGroup>";
-        string text = File.ReadAllText(DeviceProject);
+        string text = File.ReadAllText(DeviceProject(part));
         int start = text.IndexOf(Start, StringComparison.Ordinal) + Start.Length;
         int end = text.IndexOf(End, start, StringComparison.Ordinal);
-        File.WriteAllText(DeviceProject, text[..start] + Items(files) + text[end..]);
+        File.WriteAllText(DeviceProject(part), text[..start] + Items(files) + text[end..]);
     }
 }

@@ -2,8 +2,6 @@ using System;
 using System.Collections.Generic;
 using System.IO;
 using System.Linq;
-using System.Reflection.Metadata.Ecma335;
-using System.Reflection.PortableExecutable;
 using Mono.Cecil;
 using Mono.Cecil.Cil;
 using ProbeCal.Nano.Tests.Gate;
@@ -40,19 +38,6 @@ public class GateTests
             TypeDefinition? definition = DeviceAssembly.Mscorlib.MainModule.GetType(type);
             Assert.True(definition != null && definition.Methods.Any(m => ReferenceRules.NameOf(m) == name), name);
         }
-    }
-
-    /// <summary>The device's offsets into code, strings and signatures are 16 bits wide; a quarter is kept free.</summary>
-    [Fact]
-    public void The_device_assembly_stays_well_below_the_64_KB_that_its_offsets_reach()
-    {
-        const int Most = 48 * 1024;
-        int code = DeviceAssembly.Nano.MainModule.GetTypes().SelectMany(t => t.Methods).Where(m => m.HasBody).Sum(m => m.Body.CodeSize);
-        Assert.InRange(code, 1, Most);
-        using var reader = new PEReader(File.OpenRead(Path.Combine(AppContext.BaseDirectory, "device", "ProbeCal.Nano.dll")));
-        System.Reflection.Metadata.MetadataReader metadata = System.Reflection.Metadata.PEReaderExtensions.GetMetadataReader(reader);
-        Assert.InRange(metadata.GetHeapSize(HeapIndex.String) + metadata.GetHeapSize(HeapIndex.UserString), 1, Most);
-        Assert.InRange(metadata.GetHeapSize(HeapIndex.Blob), 1, Most);
     }
 
     [Fact]

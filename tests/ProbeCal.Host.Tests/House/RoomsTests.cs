@@ -43,8 +43,16 @@ public class RoomsTests
     [Fact]
     public void Nano_holds_no_source_of_its_own()
     {
-        Assert.Empty(Repository.SourceFiles("src/ProbeCal.Nano"));
+        foreach (string project in (string[])["ProbeCal.Nano", "ProbeCal.Nano.Equilibrium", "ProbeCal.Nano.Calibration"])
+        {
+            Assert.Empty(Repository.SourceFiles("src/" + project));
+        }
+
         Assert.Empty(References("src/ProbeCal.Nano/ProbeCal.Nano.csproj", "ProjectReference"));
+        Assert.Empty(References("src/ProbeCal.Nano.Equilibrium/ProbeCal.Nano.Equilibrium.csproj", "ProjectReference"));
+        XElement[] below = [.. References("src/ProbeCal.Nano.Calibration/ProbeCal.Nano.Calibration.csproj", "ProjectReference")];
+        Assert.Single(below);
+        Assert.EndsWith("ProbeCal.Nano.Equilibrium.csproj", below[0].Attribute("Include")!.Value, StringComparison.Ordinal);
     }
 
     /// <summary>Which room of Station may use which: data flows from sources to the broker, and nothing reaches back.</summary>
