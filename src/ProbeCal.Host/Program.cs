@@ -47,6 +47,8 @@ internal static class Program
             HenryCommand.Create(terminal),
             CalibrateCommand.Create(terminal),
             CalibrationsCommand.Create(terminal),
+            RegisterCommand.Create(terminal),
+            ServiceCommand.Create(terminal),
             StationCommand.Create(terminal),
             SimulateCommand.Create(terminal),
             DemoCommand.Create(terminal),

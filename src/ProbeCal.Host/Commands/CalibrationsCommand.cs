@@ -1,13 +1,9 @@
 using System;
-using System.Collections.Generic;
 using System.CommandLine;
 using System.IO;
 using System.Linq;
 using System.Text;
-using System.Text.Json;
-using System.Text.Json.Serialization;
 using ProbeCal.Station;
-using ProbeCal.Station.Calibrating;
 using ProbeCal.Station.CalibrationLog;
 using ProbeCal.Station.Entry;
 
@@ -18,171 +14,141 @@ internal static class CalibrationsCommand
 {
     internal static Command Create(Terminal terminal)
     {
-        return new Command("calibrations", "What the calibration log holds: list, show.")
+        return new Command("calibrations", "What the calibration log holds: list, show, verify, withdraw.")
         {
-            List(terminal),
+            CalibrationsList.Create(terminal),
             Show(terminal),
+            CalibrationsVerify.Create(terminal),
+            Withdraw(terminal),
         };
     }
 
-    private static Command List(Terminal terminal)
+    /// <summary>The option that every command on the log has.</summary>
+    internal static Option<string> DataOption()
     {
-        Option<string> data = new("--data") { Description = "Folder of the calibration log (default probecal-data).", HelpName = "DIR" };
-        Option<string> probe = new("--probe") { Description = "Only this probe.", HelpName = "ID" };
-        Option<string> format = new("--format") { Description = "text (default) or json.", HelpName = "text|json" };
-        Command command = new("list", "One line for each calibration, oldest first, and whether the chain of records is whole.") { data, probe, format };
-        command.SetAction(parsed =>
-        {
-            bool json = OutputShape.IsJson(parsed.GetValue(format));
-            using CalibrationLogStore log = Open(parsed.GetValue(data));
-            string? only = parsed.GetValue(probe);
-            List<StoredCalibration> wanted = [.. log.Records.Where(stored => only == null || stored.Record.Probe.Id == only)];
-            if (json)
-            {
-                terminal.Output.WriteLine(JsonSerializer.Serialize(Json(log, wanted), CalibrationListContext.Default.CalibrationList));
-            }
-            else
-            {
-                WriteList(terminal.Output, wanted);
-            }
-
-            return ReportChain(log, terminal, json);
-        });
-        return command;
+        return new Option<string>("--data") { Description = "Folder of the calibration log (default probecal-data).", HelpName = "DIR" };
     }
 
-    private static Command Show(Terminal terminal)
-    {
-        Argument<string> id = new("id") { Description = "Id of the calibration, as list shows it.", HelpName = "ID" };
-        Option<string> data = new("--data") { Description = "Folder of the calibration log (default probecal-data).", HelpName = "DIR" };
-        Option<string> format = new("--format") { Description = "text (default), or json: the record as it is stored.", HelpName = "text|json" };
-        Command command = new("show", "One record, whole.") { id, data, format };
-        command.SetAction(parsed =>
-        {
-            bool json = OutputShape.IsJson(parsed.GetValue(format));
-            using CalibrationLogStore log = Open(parsed.GetValue(data));
-            string wanted = parsed.GetValue(id)!;
-            StoredCalibration stored = log.Find(wanted)
-                ?? throw new InputException($"calibration {Wrong.Shown(wanted)}: not in this log{NearestName.DidYouMean(wanted, log.Records.Select(static known => known.Record.Id))}; 'probecal calibrations list' shows the ids");
-            if (json)
-            {
-                terminal.Output.WriteLine(Encoding.UTF8.GetString(log.BytesOf(stored)));
-            }
-            else
-            {
-                CalibrationText.Write(terminal.Output, stored.Record);
-                terminal.Output.WriteLine("record SHA-256 " + stored.Sha256);
-            }
-
-            return ReportChain(log, terminal, json);
-        });
-        return command;
-    }
-
-    private static CalibrationLogStore Open(string? folder)
+    /// <summary>The log for reading, beside whoever writes.</summary>
+    internal static CalibrationLogStore Open(string? folder)
     {
         using DataDirectory data = DataDirectory.OpenForReading(folder ?? CalibrateCommand.UsualData);
         return CalibrationLogStore.OpenForReading(data.CalibrationLogFile);
     }
 
-    private static void WriteList(TextWriter output, List<StoredCalibration> records)
+    /// <summary>Opens the log for writing, does the work and closes both.</summary>
+    internal static int Write(string? folder, Terminal terminal, Func<CalibrationLogStore, int> work)
     {
-        List<string[]> rows = [["id", "time (UTC)", "probe", "in", "slope", "zero", "as found", "as left", "result"]];
-        foreach (StoredCalibration stored in records)
+        using DataDirectory data = DataDirectory.OpenForWriting(folder ?? CalibrateCommand.UsualData);
+        using CalibrationLogStore log = CalibrationLogStore.OpenForWriting(data.CalibrationLogFile, terminal.Time, Guid.NewGuid);
+        if (log.BackupPath is string backup)
         {
-            CalibrationRecord record = stored.Record;
-            rows.Add(
-            [
-                record.Id,
-                CalibrationText.Time(record.CompletedUtc),
-                record.Probe.Id,
-                record.Method == CalibrationIds.AirSaturatedWater ? "water" : "air",
-                Number.Significant(record.Result.Slope, CalibrationText.Digits) + Unit(record, "/hPa"),
-                Number.Significant(record.Result.Zero, CalibrationText.Digits) + (record.Probe.MeterSettings == null ? Unit(record, "") : " hPa"),
-                Error(record, "span"),
-                Error(record, "as-left"),
-                (record.Result.Pass ? "pass" : "fail") + (record.Simulated ? " (simulated)" : ""),
-            ]);
+            terminal.Error.WriteLine("probecal: the calibration log was of an older version and is migrated; the copy before is " + backup);
         }
 
-        TextTable.Write(output, rows, "");
-        output.WriteLine("as found, as left: error at 100 % before and after the adjustment, mg/L");
+        log.RequireWhole();
+        return work(log);
     }
 
-    private static string Unit(CalibrationRecord record, string per)
+    /// <summary>The entry with an id.</summary>
+    /// <exception cref="InputException">There is none.</exception>
+    internal static StoredEntry Find(CalibrationLogStore log, string wanted)
     {
-        bool none = record.Probe.MeterSettings != null || record.Probe.SignalUnit.Length == 0;
-        return none ? "" : " " + record.Probe.SignalUnit + per;
+        return log.FindEntry(wanted)
+            ?? throw new InputException($"calibration {Wrong.Shown(wanted)}: not in this log{NearestName.DidYouMean(wanted, log.Entries.Select(static known => known.Entry.Id))}; 'probecal calibrations list --all' shows the ids");
     }
 
-    private static string Error(CalibrationRecord record, string role)
+    private static Command Show(Terminal terminal)
     {
-        return record.Points.FirstOrDefault(point => point.Role == role)?.ErrorMilligramsPerLitre is double error ? CalibrationText.Signed(error, 3) : "-";
-    }
-
-    private static int ReportChain(CalibrationLogStore log, Terminal terminal, bool json)
-    {
-        ChainState chain = log.Chain;
-        if (chain.IsWhole)
+        Argument<string> id = new("id") { Description = "Id of the calibration, or of another entry of the log, as list shows it.", HelpName = "ID" };
+        Option<string> data = DataOption();
+        Option<string> format = new("--format") { Description = "text (default), or json: the record as it is stored.", HelpName = "text|json" };
+        Command command = new("show", "One record, whole: a calibration, a check, or another entry of the log.") { id, data, format };
+        command.SetAction(parsed =>
         {
-            if (!json)
+            bool json = OutputShape.IsJson(parsed.GetValue(format));
+            using CalibrationLogStore log = Open(parsed.GetValue(data));
+            StoredEntry stored = Find(log, parsed.GetValue(id)!);
+            if (json)
             {
-                terminal.Output.WriteLine($"log {log.LogId}: {Number.Print(chain.Count)} {(chain.Count == 1 ? "record" : "records")}, chain whole, head {chain.HeadSha256}");
-                terminal.Output.WriteLine("  Keep count and head elsewhere: records cut off at the end show only against them.");
+                terminal.Output.WriteLine(Encoding.UTF8.GetString(log.BytesOf(stored.Entry)));
+            }
+            else
+            {
+                LogText.WriteEntry(terminal.Output, log, stored);
             }
 
-            return ExitCode.Done;
-        }
-
-        foreach (ChainFault fault in chain.Faults)
-        {
-            terminal.Error.WriteLine($"probecal: calibration log {log.LogId}: CHAIN BROKEN: {fault}");
-        }
-
-        return ExitCode.WorkFailed;
+            return LogText.ReportChain(log, terminal, json);
+        });
+        return command;
     }
 
-    private static CalibrationList Json(CalibrationLogStore log, List<StoredCalibration> records)
+    private static Command Withdraw(Terminal terminal)
     {
-        return new CalibrationList(
-            "probecal-calibration-list",
-            1,
-            log.LogId,
-            log.Chain.Count,
-            log.Chain.HeadSha256,
-            [.. log.Chain.Faults.Select(static fault => fault.Text)],
-            [.. records.Select(static stored => new CalibrationListItem(
-                stored.Record.Id,
-                stored.Record.CompletedUtc,
-                stored.Record.Probe.Id,
-                stored.Record.Method,
-                stored.Record.Result.Slope,
-                stored.Record.Result.Zero,
-                stored.Record.Points.FirstOrDefault(static point => point.Role == "span")?.ErrorMilligramsPerLitre,
-                stored.Record.Points.FirstOrDefault(static point => point.Role == "as-left")?.ErrorMilligramsPerLitre,
-                stored.Record.Result.Pass,
-                stored.Record.Simulated,
-                stored.Sha256))]);
+        Argument<string> id = new("id") { Description = "Id of the calibration, check or other entry, as list shows it.", HelpName = "ID" };
+        Option<string> reason = new("--reason") { Description = "Why; it stands in the log for ever.", HelpName = "TEXT", Required = true };
+        Option<string> by = new("--by") { Description = "Who withdraws it.", HelpName = "NAME" };
+        Option<string> data = DataOption();
+        Option<string> format = new("--format") { Description = "text (default), or json: the entry as it is stored.", HelpName = "text|json" };
+        Command command = new(
+            "withdraw",
+            """
+            Take an entry back: it stays in the log, is shown as withdrawn everywhere and is never in force again.
+            A withdrawal made in error is itself withdrawn by its own id.
+
+            Examples:
+              probecal calibrations withdraw c3a41f09b2e7-0004 --reason "barometer read in inHg taken for kPa"
+            """)
+        {
+            id, reason, by, data, format,
+        };
+        command.SetAction(parsed =>
+        {
+            bool json = OutputShape.IsJson(parsed.GetValue(format));
+            string why = PlainText.OneLine("--reason", parsed.GetValue(reason)!.Trim());
+            if (why.Length == 0)
+            {
+                throw new InputException("--reason is empty: say why; it stands in the log for ever");
+            }
+
+            string? who = parsed.GetValue(by) is string given ? PlainText.OneLine("--by", given) : null;
+            // Looked at first: nothing is made or migrated for a folder or an id that is wrong.
+            using (CalibrationLogStore looked = Open(parsed.GetValue(data)))
+            {
+                RefuseWithdrawn(looked, Find(looked, parsed.GetValue(id)!));
+            }
+
+            return Write(parsed.GetValue(data), terminal, log =>
+            {
+                StoredEntry of = Find(log, parsed.GetValue(id)!);
+                RefuseWithdrawn(log, of);
+                StoredEntry stored = log.Append(new AmendmentRecord { Of = of.Entry.Id, Reason = why, By = who, Software = ProgramIdentity.Text });
+                if (json)
+                {
+                    terminal.Output.WriteLine(Encoding.UTF8.GetString(log.BytesOf(stored.Entry)));
+                    return ExitCode.Done;
+                }
+
+                terminal.Output.WriteLine($"{of.Entry.Id} is withdrawn by entry {stored.Entry.Id}.");
+                if (of.Entry is CalibrationRecord record)
+                {
+                    StoredCalibration? inForce = log.LatestFor(record.Probe.Id, terminal.Time.GetUtcNow());
+                    terminal.Output.WriteLine(inForce == null
+                        ? $"No calibration of {record.Probe.Id} is in force now."
+                        : $"In force for {record.Probe.Id} now: {inForce.Record.Id} of {CalibrationText.Time(inForce.Record.CompletedUtc)}. A running station takes it up when it is started anew.");
+                }
+
+                return ExitCode.Done;
+            });
+        });
+        return command;
+    }
+
+    private static void RefuseWithdrawn(CalibrationLogStore log, StoredEntry stored)
+    {
+        if (log.WithdrawalOf(stored.Entry.Id) is AmendmentRecord already)
+        {
+            throw new InputException($"calibration {stored.Entry.Id}: it was withdrawn already by entry {already.Id} ({already.Reason})");
+        }
     }
 }
-
-/// <summary>The list as JSON.</summary>
-internal sealed record CalibrationList(string Format, int Version, string LogId, long Count, string HeadSha256, string[] ChainFaults, CalibrationListItem[] Calibrations);
-
-/// <summary>One calibration of the list.</summary>
-internal sealed record CalibrationListItem(
-    string Id,
-    DateTimeOffset CompletedUtc,
-    string Probe,
-    string Method,
-    double Slope,
-    double Zero,
-    double? AsFoundErrorMilligramsPerLitre,
-    double? AsLeftErrorMilligramsPerLitre,
-    bool Pass,
-    bool Simulated,
-    string Sha256);
-
-[JsonSerializable(typeof(CalibrationList))]
-[JsonSourceGenerationOptions(PropertyNamingPolicy = JsonKnownNamingPolicy.CamelCase, WriteIndented = true)]
-internal sealed partial class CalibrationListContext : JsonSerializerContext;

@@ -39,7 +39,7 @@ internal sealed class Brackets
     /// <summary>The brackets of a probe from the records of a log that hold.</summary>
     internal static Brackets Of(CalibrationLogStore log, string probe)
     {
-        return Of([.. log.Records.Where(stored => !log.IsWithdrawn(stored.Record.Id) && log.ReplacementOf(stored.Record.Id) == null)], probe);
+        return Of([.. log.Records.Where(stored => log.Holds(stored.Record.Id))], probe);
     }
 
     /// <summary>The brackets of a probe.</summary>
@@ -80,6 +80,18 @@ internal sealed class Brackets
         }
 
         return _gaps[low].At(milligramsPerLitre);
+    }
+
+    /// <summary>The time before a record's first check and after its last, a line each.</summary>
+    internal IEnumerable<string> Around(CalibrationRecord record)
+    {
+        int first = Array.FindIndex(_checks, check => check.Id == record.Id);
+        int last = Array.FindLastIndex(_checks, check => check.Id == record.Id);
+        if (0 <= first)
+        {
+            yield return "readings before it" + _gaps[first].Words(first == 0 ? null : _checks[first - 1].Id, "since ");
+            yield return "readings after it" + _gaps[last + 1].Words(last + 1 == _checks.Length ? null : _checks[last + 1].Id, "until ");
+        }
     }
 
     private static void Add(List<Check> checks, CalibrationRecord record)
@@ -165,6 +177,14 @@ internal sealed class Brackets
             }
 
             return _above;
+        }
+
+        internal string Words(string? other, string preposition)
+        {
+            string span = other == null ? "" : ", " + preposition + other + ",";
+            return _inTime
+                ? $"{span} are bracketed between {Number.Fixed(_lowest, 2)} and {Number.Fixed(_highest, 2)} mg/L"
+                : $"{span} are not bracketed: {_inside.Reason}";
         }
 
         private static double Width(double level)

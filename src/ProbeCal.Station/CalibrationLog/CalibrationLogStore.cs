@@ -58,6 +58,14 @@ public sealed class CalibrationLogStore : IDisposable
     /// <summary>Logs made elsewhere and imported, each with its own id and chain, in the order in which they came.</summary>
     public IReadOnlyList<ImportedLog> ImportedLogs => _imported;
 
+    /// <summary>An imported log by its id.</summary>
+    /// <exception cref="InputException">None of this id was imported.</exception>
+    public ImportedLog Imported(string logId)
+    {
+        return _imported.Find(log => log.LogId == logId)
+            ?? throw new InputException($"log {Wrong.Shown(logId)}: it was not imported here{NearestName.DidYouMean(logId, _imported.Select(static log => log.LogId))}; the log of this folder is {LogId}, imported are {(_imported.Count == 0 ? "none" : string.Join(", ", _imported.Select(static log => log.LogId)))}");
+    }
+
     /// <summary>Opens the log for writing, making it when it is not there and migrating an older one after a backup copy.</summary>
     /// <param name="path">The file, <see cref="DataDirectory.CalibrationLogFile"/>.</param>
     /// <param name="time">Gives the time at which entries are written, and that in the names of backup copies.</param>
@@ -111,7 +119,7 @@ public sealed class CalibrationLogStore : IDisposable
         _entries.Add(stored);
         _records.AddRange(CalibrationsOf([stored]));
         _standing = new Standing(_entries, _imported);
-        Chain = Chain with { Count = index, HeadSha256 = hash };
+        Chain = Chain with { Count = index, HeadSha256 = hash, Hashes = new Dictionary<long, string>(Chain.Hashes) { [index] = hash } };
         return stored;
     }
 
@@ -271,7 +279,8 @@ public sealed class CalibrationLogStore : IDisposable
         return entries.Where(static stored => stored.Entry is CalibrationRecord).Select(static stored => new StoredCalibration((CalibrationRecord)stored.Entry, stored.Sha256));
     }
 
-    private bool Holds(string id)
+    /// <summary>True when an entry was neither withdrawn nor replaced.</summary>
+    public bool Holds(string id)
     {
         return _standing.WithdrawalOf(id) == null && _standing.ReplacementOf(id) == null;
     }

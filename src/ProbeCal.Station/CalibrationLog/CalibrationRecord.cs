@@ -20,9 +20,6 @@ public sealed record CalibrationRecord : LogEntry
     /// <summary>The version this program writes. Version 2 added checks, several points, references, and the decision with its uncertainty.</summary>
     public const int CurrentVersion = 2;
 
-    // What a record leaves out must have its default: the generated reader hands null to an init-only property that is not in the
-    // JSON, so those with a default put it back themselves.
-
     /// <summary>An empty record; the version is the one this program writes.</summary>
     public CalibrationRecord()
         : base(FormatName, CurrentVersion)

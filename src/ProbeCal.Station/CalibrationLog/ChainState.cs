@@ -15,6 +15,9 @@ public sealed record ChainState(long Count, string HeadSha256, IReadOnlyList<Cha
     /// <summary>True when no fault was found.</summary>
     public bool IsWhole => Faults.Count == 0;
 
+    /// <summary>The hash over the bytes that stand at each place.</summary>
+    internal IReadOnlyDictionary<long, string> Hashes { get; init; } = new Dictionary<long, string>();
+
     /// <summary>Count and hash as they are printed, published and compared: <c>12:4a9f…</c>.</summary>
     public string Head => new LogHead(Count, HeadSha256).ToString();
 }

@@ -1,4 +1,5 @@
 using System;
+using System.Text.Json.Serialization;
 
 namespace ProbeCal.Station.CalibrationLog;
 
@@ -63,7 +64,8 @@ public sealed record EquipmentRecord : LogEntry
     /// The last day on which it may be used: <see cref="DueOn"/>, or the end of <see cref="LifeDays"/>, whichever comes first; null when
     /// neither was stated.
     /// </summary>
-    internal DateOnly? LastDay
+    [JsonIgnore]
+    public DateOnly? LastDay
     {
         get
         {

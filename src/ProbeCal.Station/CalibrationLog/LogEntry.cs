@@ -18,6 +18,9 @@ public abstract record LogEntry
         Version = version;
     }
 
+    // What the JSON leaves out must have its default: the generated reader hands null to an init-only property that it does not
+    // find, so those with a default put it back themselves, here and in the records.
+
     /// <summary>Name of the format, by which the kind is told.</summary>
     [JsonPropertyOrder(-9)]
     public string Format { get; init; }
@@ -28,11 +31,11 @@ public abstract record LogEntry
 
     /// <summary>Id of the entry: log id and index. Empty until the log has taken it.</summary>
     [JsonPropertyOrder(-7)]
-    public string Id { get; init; } = "";
+    public string Id { get; init => field = value ?? ""; } = "";
 
     /// <summary>Id of the log that took it. Empty until then.</summary>
     [JsonPropertyOrder(-6)]
-    public string LogId { get; init; } = "";
+    public string LogId { get; init => field = value ?? ""; } = "";
 
     /// <summary>Place in the log, from 1. 0 until the log has taken it.</summary>
     [JsonPropertyOrder(-5)]
@@ -40,7 +43,7 @@ public abstract record LogEntry
 
     /// <summary>SHA-256 over the stored bytes of the entry before, in lower-case hex; 64 zeros for the first.</summary>
     [JsonPropertyOrder(-4)]
-    public string PreviousSha256 { get; init; } = "";
+    public string PreviousSha256 { get; init => field = value ?? ""; } = "";
 
     /// <summary>When the log took it, UTC, by the clock of the computer; none in calibrations of version 1.</summary>
     [JsonPropertyOrder(-3)]

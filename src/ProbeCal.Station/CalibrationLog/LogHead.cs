@@ -13,7 +13,7 @@ namespace ProbeCal.Station.CalibrationLog;
 /// </summary>
 /// <param name="Count">Number of entries.</param>
 /// <param name="Sha256">Hash of the last of them, lower-case hex.</param>
-internal sealed partial record LogHead(long Count, string Sha256)
+public sealed partial record LogHead(long Count, string Sha256)
 {
     private const string Form = "write COUNT:HASH as 'calibrations list' prints it: the number of entries, a colon, 64 hex digits";
 

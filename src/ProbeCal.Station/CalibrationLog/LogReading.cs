@@ -16,11 +16,12 @@ internal sealed class LogReading
     internal const string NoHash = "0000000000000000000000000000000000000000000000000000000000000000";
 
     private readonly List<ChainFault> _faults = [];
+    private readonly Dictionary<long, string> _hashes = [];
 
     internal LogReading(string logId)
     {
         LogId = logId;
-        Chain = new ChainState(0, NoHash, _faults);
+        Chain = new ChainState(0, NoHash, _faults) { Hashes = _hashes };
     }
 
     internal string LogId { get; }
@@ -70,6 +71,7 @@ internal sealed class LogReading
             Fault(index, "unreadable", unreadable.Message);
         }
 
+        _hashes[index] = actual;
         Chain = Chain with { Count = index, HeadSha256 = actual };
     }
 

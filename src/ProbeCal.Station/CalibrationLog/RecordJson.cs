@@ -18,6 +18,8 @@ internal static class RecordJson
         PropertyNamingPolicy = JsonNamingPolicy.CamelCase,
         DefaultIgnoreCondition = JsonIgnoreCondition.WhenWritingNull,
         Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping,
+        // A null where a record has none is a damaged record and not a crash of its reader.
+        RespectNullableAnnotations = true,
         WriteIndented = true,
         NewLine = "\n",
     });
