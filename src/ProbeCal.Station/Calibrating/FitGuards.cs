@@ -102,8 +102,13 @@ internal static class FitGuards
                 "look at membrane, electrolyte and reference before going on; the calibration fails by this limit");
         }
 
-        double zero = fit.Zero.Signal;
-        bool outside = fit.Zero.IsMeasured && (zero < limits.ZeroSignalLow || limits.ZeroSignalHigh < zero);
+        if (fit.Zero is not ZeroPoint zeroPoint)
+        {
+            return null;
+        }
+
+        double zero = zeroPoint.Signal;
+        bool outside = zeroPoint.IsMeasured && (zero < limits.ZeroSignalLow || limits.ZeroSignalHigh < zero);
         return !outside ? null : new Finding(GuardNames.MakerWindow, FindingSeverity.Note, Text(
             $"zero {Number.Significant(zero, 4)} {unit} is outside the maker's window ({Number.Print(limits.ZeroSignalLow ?? double.NaN)} to {Number.Print(limits.ZeroSignalHigh ?? double.NaN)}, {LimitSources.Entered}); were its nearest end right"),
             ZeroError(now, zero - (zero < limits.ZeroSignalLow ? limits.ZeroSignalLow.Value : limits.ZeroSignalHigh!.Value)),

@@ -283,6 +283,7 @@ internal static class SeveralPoints
     private sealed class Point
     {
         private double _perKelvinGain;
+        private double _perKelvinResponse;
         private double _perCoefficientGain;
         private double _referencePerKelvin;
         private double _temperature;
@@ -309,15 +310,17 @@ internal static class SeveralPoints
         {
             point = null!;
             double celsius = recorded.Temperature.Value;
-            Status status = model.Response(recorded.Signal.Mean, celsius, recorded.Pressure.Value, RangeRule.Refuse, out double response);
+            Status status = model.Response(recorded.Signal.Mean, celsius, recorded.Pressure.Value, 0, RangeRule.Refuse, out double response);
             double perSignal = double.NaN;
             double gain = double.NaN;
-            if (status == Status.Ok) { status = model.ResponsePerSignal(celsius, recorded.Pressure.Value, RangeRule.Refuse, out perSignal); }
+            if (status == Status.Ok) { status = model.ResponsePerSignal(recorded.Signal.Mean, celsius, recorded.Pressure.Value, 0, RangeRule.Refuse, out perSignal); }
             if (status == Status.Ok) { status = model.Gain(celsius, RangeRule.Refuse, out gain); }
             double perKelvin = double.NaN;
             double perCoefficient = double.NaN;
             if (status == Status.Ok) { status = model.GainPerKelvin(celsius, out perKelvin); }
             if (status == Status.Ok) { status = model.GainPerCoefficient(celsius, out perCoefficient); }
+            double responsePerKelvin = 0;
+            if (status == Status.Ok) { status = model.ResponsePerKelvin(recorded.Signal.Mean, celsius, 0, out responsePerKelvin); }
             if (status != Status.Ok)
             {
                 return $"its signal {Number.Print(recorded.Signal.Mean)} at {Number.Print(celsius)} C makes no response ({status})";
@@ -341,6 +344,7 @@ internal static class SeveralPoints
                 Response = response,
                 _signal = perSignal * recorded.SignalStandardUncertainty,
                 _perKelvinGain = perKelvin,
+                _perKelvinResponse = responsePerKelvin,
                 _perCoefficientGain = model.CompensatesTemperature ? 0 : perCoefficient,
                 _temperature = recorded.Temperature.StandardUncertainty,
             };
@@ -357,7 +361,7 @@ internal static class SeveralPoints
         /// <summary>Response that the fit would miss by for one kelvin of the thermometer: through the gain, and through the reference.</summary>
         internal double PerKelvin(double[] parameters)
         {
-            return -Gain * ((_perKelvinGain * ((parameters[1] * X) + (parameters[2] * X * X))) + (SlopeAt(parameters) * _referencePerKelvin));
+            return _perKelvinResponse - (Gain * ((_perKelvinGain * ((parameters[1] * X) + (parameters[2] * X * X))) + (SlopeAt(parameters) * _referencePerKelvin)));
         }
 
         internal double PerCoefficient(double[] parameters)
