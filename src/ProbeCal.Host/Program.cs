@@ -46,6 +46,7 @@ internal static class Program
             TotalGasCommand.Create(terminal),
             HenryCommand.Create(terminal),
             CalibrateCommand.Create(terminal),
+            CalibrateCommand.CreateCheck(terminal),
             CalibrationsCommand.Create(terminal),
             RegisterCommand.Create(terminal),
             ServiceCommand.Create(terminal),

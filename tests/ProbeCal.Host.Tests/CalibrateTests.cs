@@ -93,8 +93,8 @@ public sealed class CalibrateTests : IDisposable
     public async Task TypedTemperatureBesideALine_IsNotTheProbesThermometer()
     {
         CalibrationRecord byLine = await RecordAsync();
-        CalibrationRecord typed = await RecordAsync("--temperature", "20.0C");
-        CalibrationRecord named = await RecordAsync("--temperature", "20.0C", "--thermometer", "T-7");
+        CalibrationRecord typed = await RecordAsync("--temperature", "20.0C", "--confirm", "steady=bath with a thermostat");
+        CalibrationRecord named = await RecordAsync("--temperature", "20.0C", "--thermometer", "T-7", "--confirm", "steady=bath with a thermostat");
         Assert.Equal(["P-1", "not named", "T-7"], new[] { byLine, typed, named }.Select(record => record.Probe.Thermometer.Id));
         Assert.Equal(["line", "typed", "typed"], new[] { byLine, typed, named }.Select(record => record.Points[0].Temperature.Source));
 
@@ -227,7 +227,7 @@ public sealed class CalibrateTests : IDisposable
     public async Task Interactive_AsksForWhatIsMissing_AndAsksAgainAfterNonsense()
     {
         string[] arguments = [.. Unattended(("--salinity", null), ("--stirring", null)).Where(word => word != "--unattended")];
-        Ran ran = await RunAsync(arguments, "none\n0,0\n0\nsure\nstirred\n\n\n");
+        Ran ran = await RunAsync(arguments, "none\n0,0\n0\nsure\nstirred\n" + Enter(4));
         Assert.True(ran.Code == 0, ran.Error);
         Assert.Contains("Practical salinity of the water (0 for fresh)?", ran.Error, StringComparison.Ordinal);
         Assert.Contains("--salinity none: ", ran.Error, StringComparison.Ordinal);
@@ -241,11 +241,10 @@ public sealed class CalibrateTests : IDisposable
     {
         string script = "simulated?seed=3&faster=0&temperature=20C&pressure=940hPa&phase=air:9min,zero";
         string[] arguments = [.. Unattended(("--source", script), ("--method", "water-saturated-air")).Where(word => word != "--unattended"), "--zero", "check"];
-        Ran ran = await RunAsync(arguments, "\nperhaps\nno\n\n\n");
+        Ran ran = await RunAsync(arguments, Enter(4) + "perhaps\nno\n" + Enter(2) + "lot 7, made today\n" + Enter(3));
         Assert.True(ran.Code == 0, ran.Error);
         Assert.Contains("'perhaps' is neither yes nor no", ran.Error, StringComparison.Ordinal);
-        Assert.Contains("Caution: sulfite irritates", ran.Error, StringComparison.Ordinal);
-        Assert.Contains("Caution: nitrogen suffocates", ran.Error, StringComparison.Ordinal);
+        Assert.Contains("Caution: Sulfite irritates", ran.Error, StringComparison.Ordinal);
         Assert.Contains("looked for, none seen", ran.Output, StringComparison.Ordinal);
     }
 
@@ -266,7 +265,7 @@ public sealed class CalibrateTests : IDisposable
             .. Unattended(("--method", null), ("--pressure-source", null), ("--altitude", null), ("--stirring", null), ("--line", "{time},{signal},{temperature}")).Where(word => word != "--unattended"),
             "--simulated",
         ];
-        Ran ran = await RunAsync(arguments, "1\nbarometer:B-12\n2100\n2100ft\n760mmHg\n705mmHg\n1\n\n\n");
+        Ran ran = await RunAsync(arguments, "1\nbarometer:B-12\n2100\n2100ft\n760mmHg\n705mmHg\n1\n" + Enter(4));
         Assert.True(ran.Code == 0, ran.Error);
         Assert.Contains("--altitude 2100: an altitude carries its unit", ran.Error, StringComparison.Ordinal);
         Assert.Contains("--pressure 760mmHg is not possible at 2100ft", ran.Error, StringComparison.Ordinal);
@@ -279,7 +278,7 @@ public sealed class CalibrateTests : IDisposable
     public async Task Interactive_PressureFromTheAltitude_AsksForTheAltitudeUntilItIsThere()
     {
         string[] arguments = [.. Unattended(("--pressure-source", null), ("--altitude", null), ("--line", "{time},{signal},{temperature}")).Where(word => word != "--unattended")];
-        Ran ran = await RunAsync(arguments, "altitude\n\n640m\n\n\n");
+        Ran ran = await RunAsync(arguments, "altitude\n\n640m\n" + Enter(4));
         Assert.True(ran.Code == 0, ran.Error);
         Assert.DoesNotContain("Enter if not known", ran.Error, StringComparison.Ordinal);
     }
@@ -408,6 +407,12 @@ public sealed class CalibrateTests : IDisposable
         }
 
         return ["calibrate", "--unattended", .. options.Where(pair => pair.Value != null).SelectMany(pair => new[] { pair.Key, pair.Value! })];
+    }
+
+    /// <summary>The Enter key, some times: once for each step that a person says is done.</summary>
+    private static string Enter(int times)
+    {
+        return new string('\n', times);
     }
 
     private Task<Ran> RunAsync(params string[] arguments)

@@ -1,5 +1,6 @@
 using System;
 using System.CommandLine;
+using System.CommandLine.Help;
 using System.Linq;
 using System.Threading;
 using System.Threading.Tasks;
@@ -12,7 +13,7 @@ using ProbeCal.Station.Sources;
 
 namespace ProbeCal.Host.Commands;
 
-/// <summary><c>probecal calibrate</c>: a probe against water or air in equilibrium, into the calibration log.</summary>
+/// <summary><c>probecal calibrate</c> and <c>probecal check</c>: a probe against a reference, into the calibration log.</summary>
 internal static class CalibrateCommand
 {
     /// <summary>The data folder where none is named.</summary>
@@ -20,37 +21,50 @@ internal static class CalibrateCommand
 
     internal static Command Create(Terminal terminal)
     {
-        CalibrateOptions options = new();
-        Command command = new(
-            "calibrate",
-            """
-            Calibrate a probe in air-saturated water or water-saturated air, from a live source or a meter's display.
-            Asks for what is missing, waits for steady readings, and writes the record into the calibration log.
+        return Create(terminal, "calibrate", CalibrationRecord.CalibrationPurpose, CalibrateHelp.OfCalibrate);
+    }
 
-            Examples:
-              probecal calibrate --source serial:/dev/ttyUSB0 --line "{time},{signal:nA},{temperature}" --probe P-17 \
-                --method air-saturated-water --pressure 706mmHg --pressure-source barometer:B-12 --altitude 640m \
-                --salinity 0 --stirring stirred --coefficient "exponential 0.03/K at 25C fitted 5..35C"
-              probecal calibrate --manual --probe M-3 --meter-shows mg/L --method water-saturated-air \
-                --temperature 20.1C --pressure 706mmHg --pressure-source barometer:B-12 --altitude 640m
-            """);
+    /// <summary><c>probecal check</c>: the same options, guards and record, and no change of coefficients.</summary>
+    internal static Command CreateCheck(Terminal terminal)
+    {
+        return Create(terminal, "check", CalibrationRecord.CheckPurpose, CalibrateHelp.OfCheck);
+    }
+
+    private static Command Create(Terminal terminal, string name, string purpose, string description)
+    {
+        CalibrateOptions options = new(purpose == CalibrationRecord.CheckPurpose);
+        Command command = new(name, description);
         foreach (Option option in options.All)
         {
             command.Options.Add(option);
         }
 
-        command.SetAction((parsed, cancellationToken) => RunAsync(options, parsed, terminal, cancellationToken));
+        command.Options.Add(new HelpOption { Action = new CalibrateHelp(name, description, options, terminal, whole: false) });
+        command.SetAction((parsed, cancellationToken) => RunAsync(options, purpose, parsed, terminal, cancellationToken));
         return command;
     }
 
-    private static async Task<int> RunAsync(CalibrateOptions options, ParseResult parsed, Terminal terminal, CancellationToken cancellationToken)
+    private static async Task<int> RunAsync(CalibrateOptions options, string purpose, ParseResult parsed, Terminal terminal, CancellationToken cancellationToken)
     {
+        if (parsed.GetValue(options.Options))
+        {
+            CalibrateHelp.WriteAll(terminal.Output, options);
+            return ExitCode.Done;
+        }
+
+        if (parsed.GetValue(options.Steps))
+        {
+            return CalibrateHelp.WriteSteps(terminal.Output, options, purpose, parsed);
+        }
+
         bool json = OutputShape.IsJson(parsed.GetValue(options.Format));
         bool manual = parsed.GetValue(options.Manual);
         SourceAddress? address = Address(parsed.GetValue(options.Source), manual);
         LineTemplate? line = address == null ? null : LineTemplate.Parse("--line", parsed.GetValue(options.Line) ?? LineTemplate.UsualText);
         Questions? questions = Asks(parsed.GetValue(options.Unattended), address, terminal) ? new Questions(terminal) : null;
-        CalibrateSetup entries = new(options, parsed, questions);
+        string folder = parsed.GetValue(options.Data) ?? UsualData;
+        EquipmentValues register = EquipmentValues.In(folder, terminal.Time.GetUtcNow());
+        CalibrateSetup entries = new(options, purpose, register, parsed, questions);
         CalibrationSetup setup = await entries.BuildAsync(address, line, cancellationToken).ConfigureAwait(false);
         if (entries.Answered.Count != 0)
         {
@@ -58,9 +72,9 @@ internal static class CalibrateCommand
             terminal.Error.WriteLine(CommandLineText.Of(parsed.Tokens.Select(static token => token.Value).Concat(entries.Answered), OperatingSystem.IsWindows()));
         }
 
-        ICalibrationDialogue dialogue = Dialogue(options, parsed, terminal, questions, setup);
+        ICalibrationDialogue dialogue = Dialogue(options, parsed, terminal, questions, setup, register);
 
-        using DataDirectory data = DataDirectory.OpenForWriting(parsed.GetValue(options.Data) ?? UsualData);
+        using DataDirectory data = DataDirectory.OpenForWriting(folder);
         using CalibrationLogStore log = CalibrationLogStore.OpenForWriting(data.CalibrationLogFile, terminal.Time, Guid.NewGuid);
         CalibrationSession session = CalibrationSession.Begin(setup, data, log, terminal.Time, parsed.GetValue(options.StartOver), dialogue.Say);
         CalibrationRun run = new(session, dialogue, terminal.Time);
@@ -82,14 +96,14 @@ internal static class CalibrateCommand
         {
             throw new WorkFailedException(session.State.Points.Count == 0
                 ? "stopped before a point was taken; nothing was recorded"
-                : "stopped before the calibration was finished; the points taken are kept, and the same command goes on with them", stopped);
+                : $"stopped before the {purpose} was finished; the points taken are kept, and the same command goes on with them", stopped);
         }
 
-        Print(stored, json, log, terminal);
+        Print(stored, json, log, terminal, parsed.CommandResult.Command.Name);
         return stored.Record.Result.Pass ? ExitCode.Done : ExitCode.WorkFailed;
     }
 
-    private static void Print(StoredCalibration stored, bool json, CalibrationLogStore log, Terminal terminal)
+    private static void Print(StoredCalibration stored, bool json, CalibrationLogStore log, Terminal terminal, string command)
     {
         if (json)
         {
@@ -102,7 +116,7 @@ internal static class CalibrateCommand
 
         foreach (string reason in stored.Record.Result.Reasons)
         {
-            terminal.Error.WriteLine("probecal: calibrate: failed: " + reason);
+            terminal.Error.WriteLine($"probecal: {command}: failed: {reason}");
         }
     }
 
@@ -132,26 +146,60 @@ internal static class CalibrateCommand
 
         return terminal.IsInteractive
             ? true
-            : throw new InputException("calibrate asks questions and there is no terminal to answer at; give every option and --unattended");
+            : throw new InputException("this command asks questions and there is no terminal to answer at; give every option and --unattended");
     }
 
-    private static ICalibrationDialogue Dialogue(CalibrateOptions options, ParseResult parsed, Terminal terminal, Questions? questions, CalibrationSetup setup)
+    private static ICalibrationDialogue Dialogue(CalibrateOptions options, ParseResult parsed, Terminal terminal, Questions? questions, CalibrationSetup setup, EquipmentValues register)
     {
         CalibrationProgress progress = new(terminal.Error);
         return questions == null
             ? new UnattendedDialogue(progress, Reading)
-            : new InteractiveDialogue(progress, questions, Reading, text => Shown("reading", text, setup));
+            : new InteractiveDialogue(progress, questions, Reading, text => Shown("reading", text, setup), Reference);
 
-        double? Reading(CalibrationStep step)
+        double? Reading(ProcedureStep step)
         {
-            Option<string> option = step switch
+            Option<string>? option = step.Role switch
             {
-                CalibrationStep.Zero => options.ZeroReading,
-                CalibrationStep.AsLeft => options.AsLeft,
-                _ => options.AsFound,
+                CalibrationIds.ZeroPoint => options.ZeroReading,
+                CalibrationIds.AsLeftPoint => options.AsLeft,
+                CalibrationIds.SpanPoint => options.AsFound,
+                _ => null,
             };
-            return parsed.GetValue(option) is string given ? Shown(option.Name, given, setup) : null;
+            return option != null
+                ? parsed.GetValue(option) is string given ? Shown(option.Name, given, setup) : null
+                : LevelReading(parsed.GetValue(options.Reading) ?? [], step.Role!, setup);
         }
+
+        PlannedPoint? Reference(PlannedPoint planned, string text)
+        {
+            return PlanText.Read(planned.Method == MethodIds.Titration ? options.Titration.Name : options.Transfer.Name, planned, text, setup.Gas, register);
+        }
+    }
+
+    private static double? LevelReading(string[] readings, string role, CalibrationSetup setup)
+    {
+        foreach (string reading in readings)
+        {
+            int equals = reading.IndexOf('=', StringComparison.Ordinal);
+            if (equals < 0)
+            {
+                throw Wrong.Input("--reading", reading, "write ROLE=VALUE, for example level-1=4.2mg/L");
+            }
+
+            string named = reading[..equals].Trim();
+            string[] roles = [.. setup.Plan.Select(static point => point.Role)];
+            if (Array.IndexOf(roles, named) < 0)
+            {
+                throw Wrong.Input("--reading", reading, $"there is no point {named}{NearestName.DidYouMean(named, roles)}; the points are {string.Join(", ", roles)}");
+            }
+
+            if (named == role)
+            {
+                return Shown("--reading", reading[(equals + 1)..].Trim(), setup);
+            }
+        }
+
+        return null;
     }
 
     /// <summary>Reads what a meter shows: with its unit, or a bare number in the unit that was stated for it.</summary>

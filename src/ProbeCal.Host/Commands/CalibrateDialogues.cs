@@ -16,7 +16,7 @@ internal sealed class CalibrationProgress
     private const double EverySeconds = 15;
 
     private readonly TextWriter _error;
-    private CalibrationStep? _step;
+    private ProcedureStep? _step;
     private DateTimeOffset _told;
 
     internal CalibrationProgress(TextWriter error)
@@ -29,17 +29,15 @@ internal sealed class CalibrationProgress
         _error.WriteLine(line);
     }
 
-    internal void Instruct(IReadOnlyList<string> instructions)
+    /// <summary>Shows a step of a procedure: what it is, what to do, what to beware of, how long it takes.</summary>
+    internal void Instruct(ProcedureStep step)
     {
-        foreach (string line in instructions)
-        {
-            TextTable.WriteWrapped(_error, "  ", "    ", line);
-        }
+        ProcedureText.Write(_error, step, withSource: false);
     }
 
     internal void Report(WaitProgress wait)
     {
-        bool due = _step != wait.Step || EverySeconds <= (wait.SampleTimeUtc - _told).TotalSeconds;
+        bool due = _step?.Id != wait.Step.Id || EverySeconds <= (wait.SampleTimeUtc - _told).TotalSeconds;
         if (!due)
         {
             return;
@@ -58,13 +56,15 @@ internal sealed class CalibrationProgress
         _error.WriteLine($"{CalibrationText.Role(point)} point taken: {(point.Typed ? "shown" : "signal")} {Number.Fixed(point.Signal.Mean, 3)} at {Number.Fixed(point.Temperature.Value, 2)} °C, reference {Number.Fixed(point.ReferenceMilligramsPerLitre, 2)} mg/L{error}");
     }
 
-    private static string Name(CalibrationStep step)
+    private static string Name(ProcedureStep step)
     {
-        return step switch
+        return step.Role switch
         {
-            CalibrationStep.Zero => "zero point",
-            CalibrationStep.AsLeft => "as left",
-            _ => "100 % point",
+            CalibrationIds.ZeroPoint => "zero point",
+            CalibrationIds.AsLeftPoint => "as left",
+            CalibrationIds.SpanPoint => "100 % point",
+            string level => level + " point",
+            null => step.Title,
         };
     }
 
@@ -76,8 +76,13 @@ internal sealed class CalibrationProgress
 }
 
 /// <summary>A calibration without anybody to ask: reasons and readings come from options, or not at all.</summary>
-internal sealed class UnattendedDialogue(CalibrationProgress progress, Func<CalibrationStep, double?> reading) : ICalibrationDialogue
+internal sealed class UnattendedDialogue(CalibrationProgress progress, Func<ProcedureStep, double?> reading) : ICalibrationDialogue
 {
+    /// <summary>What the record says of a step that no person has done or looked at.</summary>
+    internal const string NotConfirmed = "unattended: no person confirmed it";
+
+    private readonly HashSet<string> _cautioned = [];
+
     public void Say(string line)
     {
         progress.Say(line);
@@ -93,13 +98,21 @@ internal sealed class UnattendedDialogue(CalibrationProgress progress, Func<Cali
         progress.Taken(point);
     }
 
-    public Task ReadyAsync(CalibrationStep step, IReadOnlyList<string> instructions, CancellationToken cancellationToken)
+    public Task<string?> DoAsync(ProcedureStep step, CancellationToken cancellationToken)
     {
-        progress.Instruct(instructions);
-        return Task.CompletedTask;
+        // Whoever started the script may stand beside the probe all the same.
+        foreach (string caution in step.Cautions)
+        {
+            if (_cautioned.Add(caution))
+            {
+                progress.Say("Caution: " + caution);
+            }
+        }
+
+        return Task.FromResult<string?>(NotConfirmed);
     }
 
-    public Task<string> DropletsAsync(IReadOnlyList<string> instructions, CancellationToken cancellationToken)
+    public Task<string> DropletsAsync(ProcedureStep step, CancellationToken cancellationToken)
     {
         progress.Say("note: nobody looks for droplets in an unattended calibration; the record says so");
         return Task.FromResult(Droplets.NotChecked);
@@ -110,15 +123,26 @@ internal sealed class UnattendedDialogue(CalibrationProgress progress, Func<Cali
         return Task.FromResult<string?>(null);
     }
 
-    public Task<double?> ReadingAsync(CalibrationStep step, string unit, IReadOnlyList<string> instructions, CancellationToken cancellationToken)
+    public Task<double?> ReadingAsync(ProcedureStep step, string unit, CancellationToken cancellationToken)
     {
-        progress.Instruct(instructions);
+        progress.Instruct(step);
         return Task.FromResult(reading(step));
+    }
+
+    public Task<PlannedPoint?> ReferenceAsync(ProcedureStep step, PlannedPoint planned, CancellationToken cancellationToken)
+    {
+        return Task.FromResult<PlannedPoint?>(null);
     }
 }
 
 /// <summary>A calibration with a person at the terminal.</summary>
-internal sealed class InteractiveDialogue(CalibrationProgress progress, Questions questions, Func<CalibrationStep, double?> reading, Func<string, double> readShown) : ICalibrationDialogue
+/// <param name="progress">Where lines go.</param>
+/// <param name="questions">Who asks.</param>
+/// <param name="reading">Readings given as options.</param>
+/// <param name="readShown">Reads what a meter shows.</param>
+/// <param name="readReference">Reads what the truth of a planned point rests on.</param>
+internal sealed class InteractiveDialogue(
+    CalibrationProgress progress, Questions questions, Func<ProcedureStep, double?> reading, Func<string, double> readShown, Func<PlannedPoint, string, PlannedPoint?> readReference) : ICalibrationDialogue
 {
     private static readonly string[] Yes = ["y", "yes"];
     private static readonly string[] No = ["n", "no"];
@@ -138,15 +162,22 @@ internal sealed class InteractiveDialogue(CalibrationProgress progress, Question
         progress.Taken(point);
     }
 
-    public async Task ReadyAsync(CalibrationStep step, IReadOnlyList<string> instructions, CancellationToken cancellationToken)
+    public async Task<string?> DoAsync(ProcedureStep step, CancellationToken cancellationToken)
     {
-        progress.Instruct(instructions);
-        await questions.EnterAsync("Press Enter when it is so.", cancellationToken).ConfigureAwait(false);
+        progress.Instruct(step);
+        if (step.WriteDown == null)
+        {
+            await questions.EnterAsync(step.Role != null ? "Press Enter when it is so." : "Press Enter when it is done.", cancellationToken).ConfigureAwait(false);
+            return null;
+        }
+
+        string note = await questions.AskAsync("Write down (Enter for nothing):", static text => PlainText.OneLine("note", text), cancellationToken).ConfigureAwait(false);
+        return note.Length == 0 ? null : note;
     }
 
-    public async Task<string> DropletsAsync(IReadOnlyList<string> instructions, CancellationToken cancellationToken)
+    public async Task<string> DropletsAsync(ProcedureStep step, CancellationToken cancellationToken)
     {
-        progress.Instruct(instructions);
+        progress.Instruct(step);
         bool seen = await questions.AskAsync("Droplets on membrane or thermometer (yes or no)?", YesOrNo, cancellationToken).ConfigureAwait(false);
         if (seen)
         {
@@ -163,11 +194,19 @@ internal sealed class InteractiveDialogue(CalibrationProgress progress, Question
         return reason.Length == 0 ? null : reason;
     }
 
-    public async Task<double?> ReadingAsync(CalibrationStep step, string unit, IReadOnlyList<string> instructions, CancellationToken cancellationToken)
+    public async Task<double?> ReadingAsync(ProcedureStep step, string unit, CancellationToken cancellationToken)
     {
-        progress.Instruct(instructions);
+        progress.Instruct(step);
         return reading(step)
             ?? await questions.AskAsync($"What does the meter show, in {unit}?", readShown, cancellationToken).ConfigureAwait(false);
+    }
+
+    public async Task<PlannedPoint?> ReferenceAsync(ProcedureStep step, PlannedPoint planned, CancellationToken cancellationToken)
+    {
+        string question = planned.Method == MethodIds.Titration
+            ? "Titres and what they rest on (for example 8.02mL,8.05mL,8.03mL flask 300.2mL titrant 0.025mol/L u 0.0001mol/L drawn 20.1C; Enter when not titrated yet)?"
+            : "What did the standard show (for example STD-3 8.41mg/L u 0.05mg/L; Enter when nobody has read it yet)?";
+        return await questions.AskAsync(question, text => text.Length == 0 ? null : readReference(planned, text), cancellationToken).ConfigureAwait(false);
     }
 
     private static bool YesOrNo(string text)

@@ -1,15 +1,22 @@
 using System.Collections.Generic;
 using System.CommandLine;
+using ProbeCal.Station.Calibrating;
 
 namespace ProbeCal.Host.Commands;
 
-/// <summary>The options of <c>probecal calibrate</c>: names and help only. Every value is text; Station's parsers read it.</summary>
+/// <summary>
+/// The options of <c>probecal calibrate</c> and <c>probecal check</c>: names, groups and help only. Every value is text;
+/// Station's parsers read it.
+/// </summary>
 internal sealed class CalibrateOptions
 {
     private readonly List<Option> _all = [];
+    private readonly List<(string Title, List<Option> Options)> _groups = [];
 
-    internal CalibrateOptions()
+    /// <param name="check">True for a check, which also says when in the day it is.</param>
+    internal CalibrateOptions(bool check)
     {
+        Begin("Where readings come from");
         Data = Text("--data", "DIR", "Folder of the calibration log and of unfinished calibrations (default probecal-data).");
         Source = Text("--source", "ADDRESS", "Where readings come from: serial:/dev/ttyUSB0?baud=9600, tcp:HOST:PORT, file:PATH, stdin, simulated.");
         Line = Text("--line", "TEMPLATE", "How a line reads (default {time},{signal},{temperature},{pressure}).");
@@ -19,7 +26,11 @@ internal sealed class CalibrateOptions
         Simulated = Flag("--simulated", "Mark the record as simulated, for a line that a simulation writes.");
         Format = Text("--format", "text|json", "Result as text (default) or as the record in JSON.");
 
+        Begin("The probe");
         Probe = Text("--probe", "ID", "The probe.");
+        Model = Text("--model", "NAME", "Response model (default amperometric; meter-display with --manual): " + string.Join(", ", ModelNames.All) + ".");
+        ModelCoefficients = Text("--model-coefficients", "TEXT", "Coefficients of the model that a calibration does not change, from its maker or a characterisation: 'NAME=VALUE ...'.");
+        GasOption = Text("--gas", "GAS", "Gas that the probe answers to (default O2).");
         Membrane = Text("--membrane", "ID", "Membrane or cap on it.");
         MembraneInstalled = Text("--membrane-installed", "DATE", "Day it was put on: 2026-05-01.");
         Coefficient = Text("--coefficient", "TEXT", "Temperature coefficient with its form: 'exponential 0.03/K at 25C fitted 5..35C u 0.002/K'; also compound, linear, arrhenius 22kJ/mol.");
@@ -29,7 +40,18 @@ internal sealed class CalibrateOptions
         Thermometer = Text("--thermometer", "ID", "Thermometer that gives the temperature (default: the probe's own; for a --temperature typed beside live signals, one without a name).");
         ThermometerUncertainty = Text("--thermometer-uncertainty", "u", "Standard uncertainty of its offset, common to calibration and readings: 0.05K.");
 
-        Method = Text("--method", "NAME", "air-saturated-water or water-saturated-air.");
+        Begin("The method, and what its truth rests on");
+        Method = Text("--method", "NAME", string.Join(", ", MethodIds.All) + ".");
+        Mixture = Text("--mixture", "TEXT", "For gas-mixture: cylinder, content, dry or humid: 'CYL-21 20.95% u 0.02% dry'.");
+        Titration = Text("--titration", "TEXT", "For titration: '8.02mL,8.05mL,8.03mL flask 300.2mL titrant 0.025mol/L u 0.0001mol/L drawn 20.1C'; also blank, aliquot, displaced, reagents, burette, standard. Left out while the samples wait to be titrated (24 h).");
+        Transfer = Text("--transfer", "TEXT", "For transfer-standard: what it showed beside the probe: 'STD-3 8.41mg/L u 0.05mg/L'.");
+        Level = Many("--level", "METHOD: TEXT", "One more point of a fit: 'gas-mixture: CYL-22 10.02% u 0.02% dry'. May be given several times.");
+        Form = Text("--form", "FORM", "Fit through several points: line (default) or quadratic.");
+        Zero = Text("--zero", "PLAN", "keep (default): the last measured zero of this membrane; assume; check: read and judge; adjust: read and use.");
+        ZeroMethod = Text("--zero-method", "NAME", "zero-solution (default, sulfite) or zero-gas (nitrogen).");
+        ZeroMixture = Text("--zero-mixture", "TEXT", "Purity of the zero gas, where it is certified: 'CYL-2 0ppm u 1ppm dry'.");
+        Equipment = Many("--equipment", "ID", "Reference equipment used, by its id in the register (barometers, cylinders and standards named elsewhere are added). May be given several times.");
+        Begin("Conditions");
         Pressure = Text("--pressure", "P", "Absolute station pressure with its unit: 742mmHg. Left out when the line carries it.");
         PressureSource = Text("--pressure-source", "SOURCE", "barometer:ID, weather-service:NAME, airport:NAME, telephone, or altitude when there is no pressure at all.");
         PressureUncertainty = Text("--pressure-uncertainty", "u", "Standard uncertainty of the pressure: 1hPa.");
@@ -43,11 +65,12 @@ internal sealed class CalibrateOptions
         AirToWaterUncertainty = Text("--air-to-water-uncertainty", "u", "Its standard uncertainty: 1.5%.");
         ReferenceUncertainty = Text("--reference-uncertainty", "u", "How near to equilibrium the bath or chamber is, standard uncertainty: 0.5%.");
         Equation = Text("--equation", "NAME", "benson-krause-1984 (default) or garcia-gordon-1992.");
-        Zero = Text("--zero", "PLAN", "keep (default): the last measured zero of this membrane; assume; check: read and judge; adjust: read and use.");
 
+        Begin("Limits and waiting");
         Limit = Text("--limit", "X", "Limit of the error at 100 %: 0.2mg/L (default, TM 9-A6.2).");
         LimitPercent = Text("--limit-percent", "X", "The same in % of the reference; the larger of the two applies: 2% (default).");
         ZeroLimit = Text("--zero-limit", "X", "Limit of the zero reading: 0.2mg/L (default, TM 9-A6.2).");
+        GuardBand = Flag("--guard-band", "Accept only what lies within a limit by its whole expanded uncertainty (default: simple acceptance).");
         SlopeWindow = Text("--slope-window", "LOW..HIGH", "Slope that the probe's maker allows, per hPa; none unless entered.");
         Window = Text("--window", "TIME", "Length of a steady window: 3min (default).");
         Samples = Text("--samples", "N", "Least number of samples in it: 30 (default).");
@@ -55,12 +78,14 @@ internal sealed class CalibrateOptions
         StableTemperature = Text("--stable-temperature", "X", "The same for temperature: 0.05K (default).");
         GiveUpAfter = Text("--give-up-after", "TIME", "Longest wait for one point: 30min (default).");
 
+        Begin("Reasons and the record");
         Confirm = Many("--confirm", "GUARD=REASON", "Reason for going on past a guard; it goes into the record. May be given several times.");
         ConfirmPressure = Text("--confirm-pressure", "REASON", "The same for all guards on the pressure.");
         By = Text("--by", "NAME", "Who calibrates.");
         Site = Text("--site", "NAME", "Site; the pressure is compared with the last one here.");
         Remarks = Text("--remarks", "TEXT", "Remarks for the record.");
 
+        Begin("A meter that you read (--manual)");
         MeterShows = Text("--meter-shows", "UNIT", "With --manual: mg/L, %local (100 % is equilibrium at the pressure here) or %1atm (at 1 atm).");
         MeterSalinity = Text("--meter-salinity", "S", "Salinity set in the meter (default 0).");
         MeterPressure = Text("--meter-pressure", "P", "Pressure set in the meter; left out when it has its own barometer.");
@@ -69,9 +94,18 @@ internal sealed class CalibrateOptions
         AsFound = Text("--as-found", "X", "What the meter shows before it is set: 8.61mg/L or 98.2%.");
         AsLeft = Text("--as-left", "X", "What it shows after it was set.");
         ZeroReading = Text("--zero-reading", "X", "What it shows in the zero solution.");
+        Reading = Many("--reading", "ROLE=X", "What it shows at another point: level-1=4.2mg/L. May be given several times.");
+
+        Begin("Help");
+        As = Text("--as", "KIND", "initial, continuing or end-of-day: which readings of the day the check brackets.", listed: check);
+        Steps = Flag("--steps", "Print the guided procedure of --method and do nothing.");
+        Options = Flag("--options", "Print all options by group and do nothing.");
     }
 
     internal IReadOnlyList<Option> All => _all;
+
+    /// <summary>The options in groups, for help.</summary>
+    internal IReadOnlyList<(string Title, List<Option> Options)> Groups => _groups;
 
     internal Option<string> Data { get; }
     internal Option<string> Source { get; }
@@ -127,25 +161,49 @@ internal sealed class CalibrateOptions
     internal Option<string> AsFound { get; }
     internal Option<string> AsLeft { get; }
     internal Option<string> ZeroReading { get; }
+    internal Option<bool> Options { get; }
+    internal Option<bool> Steps { get; }
+    internal Option<string> As { get; }
+    internal Option<string[]> Reading { get; }
+    internal Option<bool> GuardBand { get; }
+    internal Option<string[]> Equipment { get; }
+    internal Option<string> ZeroMixture { get; }
+    internal Option<string> ZeroMethod { get; }
+    internal Option<string> Form { get; }
+    internal Option<string[]> Level { get; }
+    internal Option<string> Transfer { get; }
+    internal Option<string> Titration { get; }
+    internal Option<string> Mixture { get; }
+    internal Option<string> GasOption { get; }
+    internal Option<string> ModelCoefficients { get; }
+    internal Option<string> Model { get; }
 
-    private Option<string> Text(string name, string placeholder, string help)
+    private void Begin(string title)
+    {
+        _groups.Add((title, []));
+    }
+
+    private Option<string> Text(string name, string placeholder, string help, bool listed = true)
     {
         Option<string> option = new(name) { Description = help, HelpName = placeholder };
-        _all.Add(option);
-        return option;
+        return listed ? Add(option) : option;
     }
 
     private Option<string[]> Many(string name, string placeholder, string help)
     {
-        Option<string[]> option = new(name) { Description = help, HelpName = placeholder, Arity = ArgumentArity.ZeroOrMore };
-        _all.Add(option);
-        return option;
+        return Add(new Option<string[]>(name) { Description = help, HelpName = placeholder, Arity = ArgumentArity.ZeroOrMore });
     }
 
     private Option<bool> Flag(string name, string help)
     {
-        Option<bool> option = new(name) { Description = help };
+        return Add(new Option<bool>(name) { Description = help });
+    }
+
+    private T Add<T>(T option)
+        where T : Option
+    {
         _all.Add(option);
+        _groups[^1].Options.Add(option);
         return option;
     }
 }

@@ -20,7 +20,9 @@ internal sealed class CalibrateSetup
 
     private const string UnnamedThermometer = "not named";
 
-    private static readonly string[] Methods = [CalibrationIds.AirSaturatedWater, CalibrationIds.WaterSaturatedAir];
+    private static readonly string[] ZeroMethods = [MethodIds.ZeroSolution, MethodIds.ZeroGas];
+    private static readonly string[] Forms = ["line", "quadratic"];
+    private static readonly string[] CheckKinds = [CalibrationIds.Initial, CalibrationIds.Continuing, CalibrationIds.EndOfDay];
     private static readonly string[] ZeroPlans = [CalibrationIds.ZeroKeep, CalibrationIds.ZeroAssume, CalibrationIds.ZeroCheck, CalibrationIds.ZeroAdjust];
     private static readonly string[] Stirrings = ["stirred", "still", "flow-insensitive"];
     private static readonly string[] Scales = ["mg/L", "%local", "%1atm"];
@@ -30,14 +32,20 @@ internal sealed class CalibrateSetup
         CoefficientText.Parse("typical membrane", "exponential 0.03/K at 25C fitted 0..40C") with { Source = "typical membrane (from memory); serves the uncertainty only" };
 
     private readonly CalibrateOptions _options;
+    private readonly string _purpose;
+    private readonly EquipmentValues _register;
     private readonly OptionReader _reader;
 
     /// <param name="options">The options.</param>
+    /// <param name="purpose">Calibration or check.</param>
+    /// <param name="register">What the register knows of reference equipment.</param>
     /// <param name="parsed">What was given.</param>
     /// <param name="questions">Who asks for what is missing; null refuses instead.</param>
-    internal CalibrateSetup(CalibrateOptions options, ParseResult parsed, Questions? questions)
+    internal CalibrateSetup(CalibrateOptions options, string purpose, EquipmentValues register, ParseResult parsed, Questions? questions)
     {
         _options = options;
+        _purpose = purpose;
+        _register = register;
         _reader = new OptionReader(parsed, questions);
     }
 
@@ -47,8 +55,11 @@ internal sealed class CalibrateSetup
     internal async Task<CalibrationSetup> BuildAsync(SourceAddress? address, LineTemplate? line, CancellationToken cancellationToken)
     {
         bool manual = address == null;
-        string method = await _reader.NeedChoiceAsync(_options.Method, "Method:", Methods, cancellationToken).ConfigureAwait(false);
-        bool air = method == CalibrationIds.WaterSaturatedAir;
+        string method = await _reader.NeedChoiceAsync(_options.Method, "Method:", MethodIds.All, cancellationToken).ConfigureAwait(false);
+        bool air = method == MethodIds.WaterSaturatedAir;
+        // In gas, as in air, nobody stirs and the salinity only says at which salinity the errors are expressed in mg/L.
+        bool inGas = air || method is MethodIds.GasMixture or MethodIds.ZeroGas;
+        Gas gas = _reader.Given(_options.GasOption) is string named ? GasNames.Parse("--gas", named) : Gas.Oxygen;
         string probe = await _reader.NeedAsync(_options.Probe, "Probe id?", OptionReader.Id(_options.Probe), cancellationToken).ConfigureAwait(false);
         double? temperature = Temperature(line, manual);
         if (temperature == null && line is not { HasTemperature: true })
@@ -64,16 +75,22 @@ internal sealed class CalibrateSetup
         string? height = await HeightAsync(pressureSource, cancellationToken).ConfigureAwait(false);
         RecordedQuantity? altitude = height == null ? null : Measured(Quantity.AltitudeMetres("--altitude", height), "m", 5, "typed");
         EnteredPressure pressure = await PressureAsync(pressureSource, line, height, altitude, cancellationToken).ConfigureAwait(false);
-        // In air the salinity only says at which salinity the errors are expressed in mg/L.
-        double salinity = _reader.Given(_options.Salinity) == null && air
+        double salinity = _reader.Given(_options.Salinity) == null && inGas
             ? 0
             : await _reader.NeedAsync(_options.Salinity, "Practical salinity of the water (0 for fresh)?", text => Quantity.Salinity("--salinity", text), cancellationToken).ConfigureAwait(false);
-        Stirring stirring = _reader.Given(_options.StirringOption) == null && air
+        Stirring stirring = _reader.Given(_options.StirringOption) == null && inGas
             ? Stirring.Stirred
             : StirringOf(await _reader.NeedChoiceAsync(_options.StirringOption, "The water at the probe:", Stirrings, cancellationToken).ConfigureAwait(false));
         CalibrationLimits limits = Limits();
+        IReadOnlyList<PlannedPoint> plan = await PlanAsync(method, gas, cancellationToken).ConfigureAwait(false);
         return new CalibrationSetup
         {
+            Purpose = _purpose,
+            CheckKind = _reader.Given(_options.As) is string kind ? OptionReader.Choice(_options.As, CheckKinds)(kind) : null,
+            Gas = gas,
+            Plan = plan,
+            FitForm = _reader.Given(_options.Form) is string form ? OptionReader.Choice(_options.Form, Forms)(form) : "line",
+            Equipment = [.. _reader.Many(_options.Equipment).Select(static id => PlainText.Id("--equipment", id))],
             Probe = await ProbeAsync(probe, line, manual, temperature != null, cancellationToken).ConfigureAwait(false),
             Method = method,
             Readings = manual ? CalibrationIds.Typed : CalibrationIds.Live,
@@ -88,8 +105,8 @@ internal sealed class CalibrateSetup
             Stirring = stirring,
             AirToWaterRatio = air ? Ratio() : null,
             ReferenceStateRelative = (_reader.NotNegative(_options.ReferenceUncertainty, QuantityKind.Percent) / 100)
-                ?? UncertaintyDefaults.ReferenceStateRelative(RecordNames.Method(method)),
-            ZeroPlan = ZeroPlan(manual),
+                ?? UncertaintyDefaults.ReferenceStateRelative(air ? CalibrationMethod.WaterSaturatedAir : CalibrationMethod.AirSaturatedWater),
+            ZeroPlan = ZeroPlan(manual, method),
             Limits = limits,
             Waiting = Waiting(limits),
             Reasons = Reasons(),
@@ -131,13 +148,14 @@ internal sealed class CalibrateSetup
                 : await _reader.NeedAsync(_options.Pressure, "Absolute station pressure with its unit (for example 742mmHg)?", text => Pressure(text, height, altitude), cancellationToken).ConfigureAwait(false);
         }
 
-        return new EnteredPressure
+        EnteredPressure pressure = new()
         {
             Hectopascal = value,
             Source = source.Text,
             StandardUncertaintyHectopascal = uncertainty ?? source.DefaultUncertaintyHectopascal,
             UncertaintySource = uncertainty == null ? source.DefaultUncertaintySource : null,
         };
+        return _register.CorrectionOfPressure(source.Text) is RecordedQuantity correction ? pressure.Corrected(correction) : pressure;
     }
 
     /// <summary>The altitude as typed. A person is asked for it, since a sea-level pressure shows against nothing else.</summary>
@@ -192,13 +210,14 @@ internal sealed class CalibrateSetup
         RecordedTemperatureCoefficient coefficient = meter is { TemperatureCelsius: null } && _reader.Given(_options.Coefficient) == null
             ? TypicalMembrane
             : await _reader.NeedAsync(_options.Coefficient, "Temperature coefficient of the membrane, from its maker (for example: exponential 0.03/K at 25C fitted 5..35C)?", text => CoefficientText.Parse("--coefficient", text), cancellationToken).ConfigureAwait(false);
+        string model = _reader.Given(_options.Model) is string name ? OptionReader.Choice(_options.Model, ModelNames.All)(name) : manual ? ModelNames.MeterDisplay : ModelNames.Amperometric;
         (double Low, double High)? range = _reader.Range(_options.SignalRange);
         double? common = _reader.NotNegative(_options.ThermometerUncertainty, QuantityKind.TemperatureDifference);
         string signalUnit = meter?.Shows ?? (line is { SignalUnit.Length: > 0 } ? line.SignalUnit : _reader.Given(_options.SignalUnit) ?? "");
         return new RecordedProbe
         {
             Id = id,
-            Model = manual ? "meter-display" : "amperometric",
+            Model = model,
             SignalUnit = signalUnit,
             TemperatureCoefficient = coefficient,
             MeterSettings = meter,
@@ -329,12 +348,82 @@ internal sealed class CalibrateSetup
         return reasons;
     }
 
-    private string ZeroPlan(bool manual)
+    private string ZeroPlan(bool manual, string method)
     {
+        if (MethodIds.IsZero(method))
+        {
+            return CalibrationIds.ZeroCheck;
+        }
+
         string plan = _reader.Given(_options.Zero) is string given ? OptionReader.Choice(_options.Zero, ZeroPlans)(given) : CalibrationIds.ZeroKeep;
+        if (plan == CalibrationIds.ZeroAdjust && _purpose == CalibrationRecord.CheckPurpose)
+        {
+            throw new InputException("--zero adjust: a check changes nothing; use check to read and judge the zero");
+        }
+
         return manual && plan == CalibrationIds.ZeroAdjust
             ? throw new InputException("--zero adjust: the zero of a meter is adjusted in the meter; use check to read and judge it")
             : plan;
+    }
+
+    /// <summary>The points in the order of the options: the main one, further levels, a zero. One point by one of the two usual methods is the usual plan.</summary>
+    private async Task<IReadOnlyList<PlannedPoint>> PlanAsync(string method, Gas gas, CancellationToken cancellationToken)
+    {
+        bool zeroAlone = MethodIds.IsZero(method);
+        PlannedPoint main = new() { Role = zeroAlone ? CalibrationIds.ZeroPoint : CalibrationIds.SpanPoint, Method = method };
+        (Option<string>? option, string question) = method switch
+        {
+            MethodIds.GasMixture => (_options.Mixture, "The mixture (for example CYL-21 20.95% u 0.02% dry)?"),
+            MethodIds.TransferStandard => (_options.Transfer, ""),
+            MethodIds.Titration => (_options.Titration, ""),
+            MethodIds.ZeroGas => (_options.ZeroMixture, ""),
+            MethodIds.WaterSaturatedAir => (_options.Mixture, ""),
+            _ => ((Option<string>?)null, ""),
+        };
+        RefuseOthers(method, option);
+        if (question.Length != 0 && _reader.CanAsk)
+        {
+            main = await _reader.NeedAsync(option!, question, text => PlanText.Read(option!.Name, main, text, gas, _register), cancellationToken).ConfigureAwait(false);
+        }
+        else if (option != null)
+        {
+            main = PlanText.Read(option.Name, main, _reader.Given(option), gas, _register);
+        }
+
+        List<PlannedPoint> plan = [main];
+        string[] levels = _reader.Many(_options.Level);
+        for (int i = 0; i < levels.Length; i++)
+        {
+            plan.Add(PlanText.Level("--level", CalibrationIds.LevelPrefix + Number.Print(i + 1), levels[i], gas, _register));
+        }
+
+        string? zeroMethod = _reader.Given(_options.ZeroMethod) is string given ? OptionReader.Choice(_options.ZeroMethod, ZeroMethods)(given) : null;
+        bool readsZero = !zeroAlone && _reader.Given(_options.Zero) is CalibrationIds.ZeroCheck or CalibrationIds.ZeroAdjust;
+        if (readsZero && (zeroMethod != null || plan.Count != 1 || !IsUsual(method)))
+        {
+            PlannedPoint zero = new() { Role = CalibrationIds.ZeroPoint, Method = zeroMethod ?? MethodIds.ZeroSolution };
+            plan.Add(PlanText.Read("--zero-mixture", zero, zero.Method == MethodIds.ZeroGas ? _reader.Given(_options.ZeroMixture) : null, gas, _register));
+        }
+
+        // The usual plan is left to the set-up, so that a state saved by an older program is taken up again.
+        return plan.Count == 1 && IsUsual(method) && main.Mixture == null ? [] : plan;
+    }
+
+    private static bool IsUsual(string method)
+    {
+        return method is MethodIds.AirSaturatedWater or MethodIds.WaterSaturatedAir;
+    }
+
+    /// <summary>An option of another method would be passed over in silence.</summary>
+    private void RefuseOthers(string method, Option<string>? own)
+    {
+        foreach (Option<string> other in new[] { _options.Mixture, _options.Transfer, _options.Titration })
+        {
+            if (other != own && _reader.Given(other) is string given)
+            {
+                throw Wrong.Input(other.Name, given, $"the method {method} has no use for it; leave it out, or take the method it belongs to");
+            }
+        }
     }
 
     private static Stirring StirringOf(string text)

@@ -1,5 +1,6 @@
 using System;
 using System.Collections.Generic;
+using System.Linq;
 using System.Threading;
 using System.Threading.Tasks;
 using ProbeCal.Station.CalibrationLog;
@@ -42,35 +43,21 @@ public sealed class CalibrationRun
     {
         await LookAtEntriesAsync(cancellationToken).ConfigureAwait(false);
         await using SamplePump pump = new(source, cancellationToken);
-        while (_session.State.Next is CalibrationStep step && step != CalibrationStep.Finished)
+        return await RunAsync(new Reader(Wait, AskAsync), software, cancellationToken).ConfigureAwait(false);
+
+        Task<TakenReading> Wait(ProcedureStep step)
         {
-            IReadOnlyList<string> instructions = Instructions.For(_session.State, step);
-            if (step == CalibrationStep.Droplets)
-            {
-                _session.TakeDroplets(await AskAsync(_dialogue.DropletsAsync(instructions, cancellationToken)).ConfigureAwait(false));
-                continue;
-            }
-
-            if (step == CalibrationStep.AsLeft)
-            {
-                await AskAsync(LookAtFitAsync(cancellationToken)).ConfigureAwait(false);
-            }
-
-            await AskAsync(ReadyAsync(step, instructions, cancellationToken)).ConfigureAwait(false);
-            PointWait wait = new(_session, step, _dialogue, _time, _desk);
-            Take(await wait.RunAsync(pump, cancellationToken).ConfigureAwait(false));
+            return new PointWait(_session, step, _dialogue, _time, _desk).RunAsync(pump, cancellationToken);
         }
 
-        return _session.Finish(software);
-
-        async Task<T> AskAsync<T>(Task<T> answer)
+        async Task AskAsync(Task answer)
         {
             if (readOnWhileAsking)
             {
                 await pump.DropUntilAsync(answer).ConfigureAwait(false);
             }
 
-            return await answer.ConfigureAwait(false);
+            await answer.ConfigureAwait(false);
         }
     }
 
@@ -86,63 +73,110 @@ public sealed class CalibrationRun
         Conditions conditions = new(
             setup.TypedTemperatureCelsius ?? throw new InputException("--temperature: a typed calibration needs the temperature of the water, for example 20.1C"),
             "typed",
-            setup.Pressure.Hectopascal ?? throw new InputException("--pressure: a typed calibration needs the absolute station pressure, for example 742mmHg"));
+            setup.Pressure.At(null) ?? throw new InputException("--pressure: a typed calibration needs the absolute station pressure, for example 742mmHg"));
         await LookAtEntriesAsync(cancellationToken).ConfigureAwait(false);
         string unit = setup.Probe.MeterSettings?.Shows ?? setup.Probe.SignalUnit;
-        while (_session.State.Next is CalibrationStep step && step != CalibrationStep.Finished)
+        return await RunAsync(new Reader(ReadAsync, static answer => answer), software, cancellationToken).ConfigureAwait(false);
+
+        async Task<TakenReading> ReadAsync(ProcedureStep step)
         {
-            List<string> instructions = [.. Instructions.For(_session.State, step)];
-            if (step == CalibrationStep.Droplets)
-            {
-                _session.TakeDroplets(await _dialogue.DropletsAsync(instructions, cancellationToken).ConfigureAwait(false));
-                continue;
-            }
+            ProcedureStep shown = step.Role == CalibrationIds.AsLeftPoint && setup.Probe.MeterSettings != null
+                ? step with { Do = [MeterText.Set(setup, Fitting.Point(_session.State.Points, CalibrationIds.SpanPoint)!)] }
+                : step;
+            double reading = await _dialogue.ReadingAsync(shown, unit, cancellationToken).ConfigureAwait(false)
+                ?? throw new WorkFailedException($"unfinished: the {step.Role} reading of the meter is missing; what was entered so far is kept and the same command goes on with it");
+            return PointMaker.FromTyped(step.Role!, setup, conditions, reading, _time.GetUtcNow());
+        }
+    }
 
-            if (step == CalibrationStep.AsLeft)
+    private async Task<StoredCalibration> RunAsync(Reader reader, string software, CancellationToken cancellationToken)
+    {
+        while (_session.State.Next is ProcedureStep step)
+        {
+            switch (step.Kind)
             {
-                await LookAtFitAsync(cancellationToken).ConfigureAwait(false);
-                instructions = [Instructions.SetMeter(setup, Fitting.Point(_session.State.Points, CalibrationIds.SpanPoint)!)];
+                case StepKind.Point:
+                    await TakePointAsync(step, reader, cancellationToken).ConfigureAwait(false);
+                    break;
+                case StepKind.Droplets:
+                    Task<string> looked = _dialogue.DropletsAsync(step, cancellationToken);
+                    await reader.AskAsync(looked).ConfigureAwait(false);
+                    _session.TakeDroplets(step, await looked.ConfigureAwait(false));
+                    break;
+                default:
+                    Task<string?> done = _dialogue.DoAsync(step, cancellationToken);
+                    await reader.AskAsync(done).ConfigureAwait(false);
+                    _session.Done(step, await done.ConfigureAwait(false));
+                    break;
             }
+        }
 
-            double shown = await _dialogue.ReadingAsync(step, unit, instructions, cancellationToken).ConfigureAwait(false)
-                ?? throw new WorkFailedException($"unfinished: the {RoleOf(step)} reading of the meter is missing; what was entered so far is kept and the same command goes on with it");
-            Take(PointMaker.FromTyped(RoleOf(step), setup, conditions, shown, _time.GetUtcNow()));
+        if (!_session.State.Points.Any(static point => point.Role == CalibrationIds.AsLeftPoint))
+        {
+            // Nothing was read again after the adjustment, so nobody has looked at slope and zero yet.
+            await reader.AskAsync(LookAtFitAsync(cancellationToken)).ConfigureAwait(false);
         }
 
         return _session.Finish(software);
     }
 
-    /// <summary>The role of the point that a step takes.</summary>
-    internal static string RoleOf(CalibrationStep step)
+    private async Task TakePointAsync(ProcedureStep step, Reader reader, CancellationToken cancellationToken)
     {
-        return step switch
+        if (step.Role == CalibrationIds.AsLeftPoint)
         {
-            CalibrationStep.Zero => CalibrationIds.ZeroPoint,
-            CalibrationStep.AsLeft => CalibrationIds.AsLeftPoint,
-            _ => CalibrationIds.SpanPoint,
-        };
+            await reader.AskAsync(LookAtFitAsync(cancellationToken)).ConfigureAwait(false);
+        }
+
+        TakenReading reading;
+        if (_session.State.Waiting is TakenReading waiting && waiting.Role == step.Role)
+        {
+            reading = waiting;
+        }
+        else
+        {
+            if (_session.Setup.Readings == CalibrationIds.Live)
+            {
+                await reader.AskAsync(_dialogue.DoAsync(step, cancellationToken)).ConfigureAwait(false);
+            }
+
+            reading = await reader.ReadAsync(step).ConfigureAwait(false);
+        }
+
+        Task<PlannedPoint> planning = PlannedAsync(step, reading, cancellationToken);
+        await reader.AskAsync(planning).ConfigureAwait(false);
+        PlannedPoint planned = await planning.ConfigureAwait(false);
+        RecordedPoint point = PointMaker.Make(reading, planned, _session.Setup);
+        await reader.AskAsync(_desk.PassAsync(BeforePointGuards.All, _session.PointSituation(point, planned), aboutEntries: true, cancellationToken)).ConfigureAwait(false);
+        _dialogue.Taken(_session.Take(step, point));
     }
 
-    private void Take(RecordedPoint point)
+    /// <summary>The planned point with what its truth rests on; a reading whose truth nobody can say yet is kept until then.</summary>
+    private async Task<PlannedPoint> PlannedAsync(ProcedureStep step, TakenReading reading, CancellationToken cancellationToken)
     {
-        _dialogue.Taken(_session.Take(point));
+        PlannedPoint planned = _session.Setup.PlannedFor(step.Role!);
+        if (!PlanCheck.IsMissingItsReference(planned))
+        {
+            return planned;
+        }
+
+        _session.Hold(reading);
+        PlannedPoint? answered = await _dialogue.ReferenceAsync(step, planned, cancellationToken).ConfigureAwait(false);
+        return answered != null && !PlanCheck.IsMissingItsReference(answered)
+            ? answered
+            : throw new WorkFailedException($"unfinished: the {step.Role} reading is kept and waits for its {planned.Method}; the same command with {(planned.Method == MethodIds.Titration ? "--titration" : "--transfer")} goes on with it, within {CalibrationSession.LongestWaitForReference.TotalHours.ToString(System.Globalization.CultureInfo.InvariantCulture)} h");
     }
 
     private Task LookAtEntriesAsync(CancellationToken cancellationToken)
     {
         CalibrationSetup setup = _session.Setup;
-        return _desk.PassAsync(ConditionGuards.All, _session.Situation(setup.TypedTemperatureCelsius, null, setup.Pressure.Hectopascal), aboutEntries: true, cancellationToken);
+        return _desk.PassAsync(ConditionGuards.All, _session.Situation(setup.TypedTemperatureCelsius, null, setup.Pressure.At(null)), aboutEntries: true, cancellationToken);
     }
 
-    private async Task<bool> LookAtFitAsync(CancellationToken cancellationToken)
+    private Task LookAtFitAsync(CancellationToken cancellationToken)
     {
-        await _desk.PassAsync(FitGuards.All, _session.FittedSituation(), aboutEntries: false, cancellationToken).ConfigureAwait(false);
-        return true;
+        return _desk.PassAsync(FitGuards.All, _session.FittedSituation(), aboutEntries: false, cancellationToken);
     }
 
-    private async Task<bool> ReadyAsync(CalibrationStep step, IReadOnlyList<string> instructions, CancellationToken cancellationToken)
-    {
-        await _dialogue.ReadyAsync(step, instructions, cancellationToken).ConfigureAwait(false);
-        return true;
-    }
+    /// <summary>Where readings come from, and how a question is asked meanwhile.</summary>
+    private sealed record Reader(Func<ProcedureStep, Task<TakenReading>> ReadAsync, Func<Task, Task> AskAsync);
 }

@@ -16,6 +16,9 @@ public sealed class CalibrationSession
     /// <summary>A saved state older than this is set aside instead of taken up again: water and weather have moved on (our choice, no source).</summary>
     public static readonly TimeSpan LongestPause = TimeSpan.FromHours(4);
 
+    /// <summary>The same for a reading that waits for its titration: fixed samples are titrated 2 to 12 h after they were drawn, and the next morning is the latest (our choice, no source).</summary>
+    public static readonly TimeSpan LongestWaitForReference = TimeSpan.FromHours(24);
+
     private readonly CalibrationLogStore _log;
     private readonly SessionFile _file;
     private readonly TimeProvider _time;
@@ -48,11 +51,12 @@ public sealed class CalibrationSession
     /// <param name="time">The clock.</param>
     /// <param name="startOver">True to set a saved state aside, whatever it is.</param>
     /// <param name="say">Takes what a person should know about a saved state, one line at a time.</param>
-    /// <exception cref="InputException">The saved state is from a newer version.</exception>
+    /// <exception cref="InputException">The planned points make no calibration, a check has nothing to check, or the saved state is from a newer version.</exception>
     /// <exception cref="WorkFailedException">The log's chain is broken, or a file could not be read or written.</exception>
     public static CalibrationSession Begin(CalibrationSetup setup, DataDirectory data, CalibrationLogStore log, TimeProvider time, bool startOver, Action<string> say)
     {
         log.RequireWhole();
+        PlanCheck.Require(setup, log.LatestFor(setup.Probe.Id, DateTimeOffset.MaxValue)?.Record);
         SessionFile file = new(data.SessionsFolder, setup.Probe.Id, time);
         SessionState? saved = file.Load(say);
         DateTimeOffset now = time.GetUtcNow();
@@ -72,7 +76,7 @@ public sealed class CalibrationSession
 
         if (saved != null)
         {
-            say($"taking up the calibration begun {Time(saved.StartedUtc)}, with {string.Join(" and ", saved.Points.Select(static point => point.Role))} taken");
+            say($"taking up the {setup.Purpose} begun {Time(saved.StartedUtc)}, with {Taken(saved)}");
         }
 
         SessionState state = saved == null
@@ -84,7 +88,7 @@ public sealed class CalibrationSession
     /// <summary>The situation for the guards on the conditions.</summary>
     internal Situation Situation(double? temperature, double? probeTemperature, double? pressure)
     {
-        return new Situation
+        Situation now = new()
         {
             Setup = Setup,
             NowUtc = _time.GetUtcNow(),
@@ -94,6 +98,7 @@ public sealed class CalibrationSession
             ProbeTemperatureCelsius = probeTemperature,
             PressureHectopascal = pressure,
         };
+        return now.WithLog(_log);
     }
 
     /// <summary>The situation for the guards on the fit.</summary>
@@ -101,7 +106,22 @@ public sealed class CalibrationSession
     {
         RecordedPoint? span = Fitting.Point(State.Points, CalibrationIds.SpanPoint);
         Fit fit = CurrentFit();
+        if (fit.Why != null)
+        {
+            throw new WorkFailedException(fit.Why + "; what was taken so far is kept");
+        }
+
         return Situation(span?.Temperature.Value, null, span?.Pressure.Value) with { Span = span, Fit = fit.Calibration, FitStatus = fit.Status };
+    }
+
+    /// <summary>The situation for the guards that look at a point before it is accepted.</summary>
+    internal Situation PointSituation(RecordedPoint point, PlannedPoint planned)
+    {
+        return Situation(point.Temperature.Value, point.TemperatureStatistics?.Mean, point.Pressure.Value) with
+        {
+            Point = Fitting.Read(Setup, point, State.Points, _previous),
+            Planned = planned,
+        };
     }
 
     internal Fit CurrentFit()
@@ -116,25 +136,55 @@ public sealed class CalibrationSession
         State = State with { Findings = findings };
     }
 
-    /// <summary>Takes a point and saves.</summary>
-    internal RecordedPoint Take(RecordedPoint point)
+    /// <summary>Notes that a step was done and saves.</summary>
+    internal void Done(ProcedureStep step, string? note)
     {
-        RecordedPoint read = point.Role switch
+        Save(State with { Steps = [.. State.Steps, new RecordedStep(step.Id, _time.GetUtcNow(), note)] });
+    }
+
+    /// <summary>Keeps a reading that waits for its reference, and saves.</summary>
+    internal void Hold(TakenReading reading)
+    {
+        Save(State with { Waiting = reading });
+    }
+
+    /// <summary>Takes a point, read by the calibration in force or by the new one, and saves.</summary>
+    internal RecordedPoint Take(ProcedureStep step, RecordedPoint point)
+    {
+        RecordedPoint read = Fitting.Read(Setup, point, State.Points, _previous);
+        Save(State with
         {
-            CalibrationIds.SpanPoint => Fitting.ReadAsFound(Setup, point, _previous),
-            CalibrationIds.AsLeftPoint => Fitting.ReadAsLeft(Setup, point, CurrentFit().Calibration ?? throw new InvalidOperationException("The as-left point needs a fit.")),
-            _ => Fitting.ReadZero(Setup, point, Fitting.Point(State.Points, CalibrationIds.SpanPoint) ?? throw new InvalidOperationException("The zero point comes after the 100 % point."), _previous),
-        };
-        Save(State with { Points = [.. State.Points, read] });
+            Points = [.. State.Points, read],
+            Steps = [.. State.Steps, new RecordedStep(step.Id, _time.GetUtcNow(), null)],
+            Waiting = null,
+        });
         return read;
     }
 
-    /// <summary>Notes the look for droplets; when some were seen, the point in air is taken again.</summary>
-    internal void TakeDroplets(string check)
+    /// <summary>Notes the look for droplets; when some were seen, the point in air before it is taken again.</summary>
+    internal void TakeDroplets(ProcedureStep step, string check)
     {
-        Save(check == Droplets.Seen
-            ? State with { Points = [], DropletCheck = null }
-            : State with { DropletCheck = check });
+        if (check != Droplets.Seen)
+        {
+            Save(State with { DropletCheck = check, Steps = [.. State.Steps, new RecordedStep(step.Id, _time.GetUtcNow(), check)] });
+            return;
+        }
+
+        IReadOnlyList<ProcedureStep> plan = Procedures.For(Setup);
+        int point = 0;
+        for (int i = 0; i < plan.Count && plan[i].Id != step.Id; i++)
+        {
+            point = plan[i].Kind == StepKind.Point ? i : point;
+        }
+
+        HashSet<string> again = [.. plan.Skip(point).Select(static later => later.Id)];
+        HashSet<string?> roles = [.. plan.Skip(point).Select(static later => later.Role)];
+        Save(State with
+        {
+            Points = [.. State.Points.Where(taken => !roles.Contains(taken.Role))],
+            Steps = [.. State.Steps.Where(done => !again.Contains(done.Step))],
+            DropletCheck = null,
+        });
     }
 
     /// <summary>Writes the record into the log and removes the saved state.</summary>
@@ -152,9 +202,10 @@ public sealed class CalibrationSession
             return "as asked";
         }
 
-        if (LongestPause < now - saved.SavedUtc)
+        TimeSpan longest = saved.Waiting == null ? LongestPause : LongestWaitForReference;
+        if (longest < now - saved.SavedUtc)
         {
-            return "more than 4 hours ago";
+            return $"more than {longest.TotalHours.ToString(System.Globalization.CultureInfo.InvariantCulture)} hours ago";
         }
 
         if (now < saved.SavedUtc)
@@ -162,13 +213,32 @@ public sealed class CalibrationSession
             return "the clock stands before it";
         }
 
-        // Reasons may be given on the way; everything else decides what the points mean.
-        return Text(saved.Setup) == Text(setup) ? null : "it was set up otherwise";
+        // Reasons, and a titration that was still missing, may be given on the way; everything else decides what the points mean.
+        return Text(saved.Setup, saved.Setup) == Text(setup, saved.Setup) ? null : "it was set up otherwise";
     }
 
-    private static string Text(CalibrationSetup setup)
+    private static string Text(CalibrationSetup setup, CalibrationSetup saved)
     {
-        return JsonSerializer.Serialize(setup with { Reasons = [] }, SessionJsonContext.Readable.CalibrationSetup);
+        List<PlannedPoint> plan = [];
+        for (int i = 0; i < setup.Plan.Count; i++)
+        {
+            PlannedPoint? before = i < saved.Plan.Count ? saved.Plan[i] : null;
+            plan.Add(setup.Plan[i] with
+            {
+                Titration = before?.Titration == null ? null : setup.Plan[i].Titration,
+                Transfer = before?.Transfer == null ? null : setup.Plan[i].Transfer,
+            });
+        }
+
+        return JsonSerializer.Serialize(setup with { Reasons = [], Plan = plan }, SessionJsonContext.Readable.CalibrationSetup);
+    }
+
+    private static string Taken(SessionState saved)
+    {
+        string waiting = saved.Waiting == null ? "" : $"; the {saved.Waiting.Role} reading waits for its reference";
+        return saved.Points.Count != 0
+            ? string.Join(" and ", saved.Points.Select(static point => point.Role)) + " taken" + waiting
+            : $"{saved.Steps.Count.ToString(System.Globalization.CultureInfo.InvariantCulture)} {(saved.Steps.Count == 1 ? "step" : "steps")} done and no point taken yet" + waiting;
     }
 
     private static string Time(DateTimeOffset time)

@@ -59,6 +59,9 @@ public sealed record EnteredPressure
     /// <summary>Absolute station pressure, hPa; none when it comes with each line.</summary>
     public double? Hectopascal { get; init; }
 
+    /// <summary>What is added to it, or to that of each line: the correction of the barometer by the register, hPa.</summary>
+    public double CorrectionHectopascal { get; init; }
+
     /// <summary>Where it comes from, see <see cref="Entry.PressureSource"/>.</summary>
     public required string Source { get; init; }
 
@@ -67,25 +70,43 @@ public sealed record EnteredPressure
 
     /// <summary>Where that uncertainty comes from; none when it was entered.</summary>
     public string? UncertaintySource { get; init; }
+
+    /// <summary>The same with the correction of its barometer, whose uncertainty adds to that of reading it.</summary>
+    public EnteredPressure Corrected(RecordedQuantity correction)
+    {
+        return this with
+        {
+            CorrectionHectopascal = correction.Value,
+            StandardUncertaintyHectopascal = PointMaker.Combine(StandardUncertaintyHectopascal, correction.StandardUncertainty),
+            UncertaintySource = (UncertaintySource ?? "entered") + "; correction of " + correction.Source,
+        };
+    }
+
+    /// <summary>The absolute pressure, corrected: as entered, or of the line; null where neither is there.</summary>
+    internal double? At(double? ofLine)
+    {
+        return (Hectopascal ?? ofLine) + CorrectionHectopascal;
+    }
 }
 
 /// <summary>
 /// Everything that is decided before the first sample: probe, method, conditions, limits, waiting. It is kept in the saved
 /// state, so that a calibration that is taken up again is the same one.
 /// </summary>
+/// <remarks>What a state saved by an older program does not have is null there, so later members stand in for it themselves.</remarks>
 public sealed record CalibrationSetup
 {
     /// <summary>The probe, its membrane, its thermometer.</summary>
     public required RecordedProbe Probe { get; init; }
 
     /// <summary><see cref="CalibrationRecord.CalibrationPurpose"/>, or <see cref="CalibrationRecord.CheckPurpose"/>: the same points and guards, and no change of coefficients.</summary>
-    public string Purpose { get; init; } = CalibrationRecord.CalibrationPurpose;
+    public string Purpose { get => field ?? CalibrationRecord.CalibrationPurpose; init; }
 
     /// <summary>For a check: <see cref="CalibrationIds.Initial"/>, <see cref="CalibrationIds.Continuing"/> or <see cref="CalibrationIds.EndOfDay"/>; none when not stated.</summary>
     public string? CheckKind { get; init; }
 
     /// <summary>The gas whose partial pressure the probe answers to; of no meaning for a probe of total gas pressure.</summary>
-    public Gas Gas { get; init; } = Gas.Oxygen;
+    public Gas Gas { get => field == default ? Gas.Oxygen : field; init; }
 
     /// <summary>The method of the main point, one of <see cref="MethodIds"/>.</summary>
     public required string Method { get; init; }
@@ -94,13 +115,13 @@ public sealed record CalibrationSetup
     /// The points that are planned, each with its method and what its truth rests on. Where none is named: the 100 % point by
     /// <see cref="Method"/>, and a zero in zero solution when <see cref="ZeroPlan"/> asks for one.
     /// </summary>
-    public IReadOnlyList<PlannedPoint> Plan { get => field.Count == 0 ? UsualPlan() : field; init; } = [];
+    public IReadOnlyList<PlannedPoint> Plan { get => field is null or { Count: 0 } ? UsualPlan() : field; init; }
 
     /// <summary>Form of a fit over several points: <c>line</c> or <c>quadratic</c>.</summary>
-    public string FitForm { get; init; } = "line";
+    public string FitForm { get => field ?? "line"; init; }
 
     /// <summary>Reference equipment by the ids of the register: barometer, thermometer, cylinder, titrant, zero solution.</summary>
-    public string[] Equipment { get; init; } = [];
+    public string[] Equipment { get => field ?? []; init; }
 
     /// <summary><see cref="CalibrationIds.Live"/> or <see cref="CalibrationIds.Typed"/>.</summary>
     public required string Readings { get; init; }

@@ -1,4 +1,3 @@
-using System.Collections.Generic;
 using System.Threading;
 using System.Threading.Tasks;
 using ProbeCal.Station.CalibrationLog;
@@ -36,15 +35,24 @@ public interface ICalibrationDialogue
     /// <summary>A point was taken.</summary>
     void Taken(RecordedPoint point);
 
-    /// <summary>Shows what to do at a step and returns when it is done; at once when nobody is there.</summary>
-    Task ReadyAsync(CalibrationStep step, IReadOnlyList<string> instructions, CancellationToken cancellationToken);
+    /// <summary>
+    /// Shows a step and returns when it is done (of a point: when the probe is in place); at once when nobody is there.
+    /// </summary>
+    /// <returns>What the person wrote down where the step asks for it; null when nothing.</returns>
+    Task<string?> DoAsync(ProcedureStep step, CancellationToken cancellationToken);
 
     /// <summary>Asks for droplets on membrane and thermometer: one of <see cref="Droplets"/>.</summary>
-    Task<string> DropletsAsync(IReadOnlyList<string> instructions, CancellationToken cancellationToken);
+    Task<string> DropletsAsync(ProcedureStep step, CancellationToken cancellationToken);
 
     /// <summary>Asks for the reason for going on past a finding; null refuses.</summary>
     Task<string?> ReasonAsync(Finding finding, CancellationToken cancellationToken);
 
     /// <summary>Asks for what the meter shows, in its unit; null when nobody can say.</summary>
-    Task<double?> ReadingAsync(CalibrationStep step, string unit, IReadOnlyList<string> instructions, CancellationToken cancellationToken);
+    Task<double?> ReadingAsync(ProcedureStep step, string unit, CancellationToken cancellationToken);
+
+    /// <summary>
+    /// Asks for what the truth of a point rests on, where the set-up does not say it yet: the titration of samples that were
+    /// drawn beside the reading just taken. Null when nobody can say it now; the reading then waits.
+    /// </summary>
+    Task<PlannedPoint?> ReferenceAsync(ProcedureStep step, PlannedPoint planned, CancellationToken cancellationToken);
 }

@@ -1,5 +1,6 @@
 using System;
 using System.Collections.Generic;
+using System.Linq;
 using ProbeCal.Station.CalibrationLog;
 using ProbeCal.Station.Entry;
 
@@ -9,15 +10,39 @@ namespace ProbeCal.Station.Calibrating;
 /// <param name="Calibration">What Core made; null unless the status is Ok.</param>
 /// <param name="Status">Why there is none.</param>
 /// <param name="Zero">The zero it rests on.</param>
-/// <param name="SlopeFrom">Role of the point that gave the slope.</param>
-internal sealed record Fit(ProbeCalibration? Calibration, Status Status, RecordedZero Zero, string SlopeFrom);
+/// <param name="SlopeFrom">Role of the point that gave the slope, <c>fit</c> for several points, <c>previous</c> for a check.</param>
+internal sealed record Fit(ProbeCalibration? Calibration, Status Status, RecordedZero Zero, string SlopeFrom)
+{
+    /// <summary>The fit through several points; null where one point and a zero give the slope.</summary>
+    public RecordedFit? Several { get; init; }
+
+    /// <summary>Why several points make no fit, in one line; null when they do.</summary>
+    public string? Why { get; init; }
+}
 
 /// <summary>Slope and zero from the points taken so far, and readings by a calibration, all through Core.</summary>
 internal static class Fitting
 {
-    /// <summary>The fit, by the same call with which a record is loaded later.</summary>
+    /// <summary>What <see cref="Fit.SlopeFrom"/> says of several points.</summary>
+    internal const string FromFit = "fit";
+
+    /// <summary>What <see cref="Fit.SlopeFrom"/> says of a check, which changes nothing.</summary>
+    internal const string FromPrevious = "previous";
+
+    /// <summary>The fit, by the same call with which a record is loaded later; for a check the calibration in force.</summary>
     internal static Fit Of(CalibrationSetup setup, IReadOnlyList<RecordedPoint> points, CalibrationRecord? previous)
     {
+        if (setup.Purpose == CalibrationRecord.CheckPurpose)
+        {
+            CalibrationRecord inForce = previous ?? throw new InvalidOperationException("A check needs a calibration.");
+            return new Fit(inForce.ToProbeCalibration(), Status.Ok, inForce.Zero, FromPrevious) { Several = inForce.Fit };
+        }
+
+        if (!PlanCheck.IsOnePoint(setup))
+        {
+            return ThroughSeveral(setup, points, previous);
+        }
+
         RecordedPoint span = Point(points, CalibrationIds.SpanPoint) ?? throw new InvalidOperationException("A fit needs the 100 % point.");
         // What a meter shows after it was set is what readings will be computed from.
         RecordedPoint slopePoint = setup.Readings == CalibrationIds.Typed ? Point(points, CalibrationIds.AsLeftPoint) ?? span : span;
@@ -32,62 +57,62 @@ internal static class Fitting
         return new Fit(calibration, status, zero, slopePoint.Role);
     }
 
-    /// <summary>The 100 % point as the previous calibration (or the meter itself) reads it.</summary>
-    internal static RecordedPoint ReadAsFound(CalibrationSetup setup, RecordedPoint span, CalibrationRecord? previous)
+    /// <summary>A point as somebody would have read it: as found by the previous calibration, as left by the new one, a meter by itself.</summary>
+    internal static RecordedPoint Read(CalibrationSetup setup, RecordedPoint point, IReadOnlyList<RecordedPoint> before, CalibrationRecord? previous)
     {
-        bool meter = setup.Probe.MeterSettings != null;
-        if (meter && (setup.Readings == CalibrationIds.Typed || previous == null))
+        bool onePoint = PlanCheck.IsOnePoint(setup) && setup.Purpose == CalibrationRecord.CalibrationPurpose;
+        if (point.Role == CalibrationIds.AsLeftPoint)
         {
-            return Read(setup, span, RecordConversion.Model(setup.Probe), 1, 0, "meter");
+            ProbeCalibration fitted = Of(setup, before, previous).Calibration ?? throw new InvalidOperationException("The as-left point needs a fit.");
+            return onePoint ? ReadAsLeft(setup, point, fitted) : ReadBy(setup, point, fitted, IsMeterOfItsOwn(setup) ? "meter" : "this");
         }
 
-        if (previous == null || !IsComparable(previous.Probe, setup.Probe))
+        if (onePoint && point.Role == CalibrationIds.ZeroPoint)
         {
-            return span;
+            return ReadZero(setup, point, Point(before, CalibrationIds.SpanPoint) ?? throw new InvalidOperationException("The zero point comes after the 100 % point."), previous);
         }
 
-        ProbeCalibration before = previous.ToProbeCalibration();
-        return Read(setup, span, before.Model, before.Slope, before.ZeroResponse, previous.Id);
-    }
-
-    /// <summary>The point after the adjustment as the new calibration (or the meter itself) reads it.</summary>
-    internal static RecordedPoint ReadAsLeft(CalibrationSetup setup, RecordedPoint asLeft, ProbeCalibration calibration)
-    {
-        return setup.Readings == CalibrationIds.Typed
-            ? Read(setup, asLeft, calibration.Model, 1, 0, "meter")
-            : Read(setup, asLeft, calibration.Model, calibration.Slope, calibration.ZeroResponse, "this");
-    }
-
-    /// <summary>The zero point in mg/L: as the new calibration reads it, or before an adjustment to it as a zero of 0 would.</summary>
-    internal static RecordedPoint ReadZero(CalibrationSetup setup, RecordedPoint zero, RecordedPoint span, CalibrationRecord? previous)
-    {
-        bool adjusts = setup.ZeroPlan == CalibrationIds.ZeroAdjust;
-        CalibrationSetup before = adjusts ? setup with { ZeroPlan = CalibrationIds.ZeroKeep } : setup;
-        ProbeCalibration? calibration = Of(before, [span], previous).Calibration;
-        if (calibration == null)
+        if (onePoint && point.Role == CalibrationIds.SpanPoint)
         {
-            return zero;
+            return ReadAsFound(setup, point, previous);
         }
 
-        bool meter = setup.Readings == CalibrationIds.Typed;
-        RecordedZero read = Measured(zero, span);
-        Status status = CalibrationFit.AsFoundZero(
-            calibration.Model, meter ? 1 : calibration.Slope, meter ? 0 : calibration.ZeroResponse, RecordConversion.Zero(read), setup.Equation, out double milligrams);
-        return status == Status.Ok
-            ? zero with { ReadingMilligramsPerLitre = milligrams, ErrorMilligramsPerLitre = milligrams, ReadBy = meter ? "meter" : adjusts ? "this before the zero was adjusted" : "this" }
-            : zero;
+        if (setup.Probe.MeterSettings != null && (setup.Readings == CalibrationIds.Typed || previous == null))
+        {
+            return ReadBy(setup, point, null, "meter");
+        }
+
+        return previous == null || !IsComparable(previous.Probe, setup.Probe)
+            ? point
+            : ReadBy(setup, point, previous.ToProbeCalibration(), previous.Id);
     }
 
     /// <summary>What a meter has to show at a reference so that it shows the truth in water afterwards.</summary>
     /// <returns>Value and its standard uncertainty in the unit the meter shows.</returns>
     internal static (double Value, double StandardUncertainty) ValueToSet(CalibrationSetup setup, RecordedPoint span)
     {
-        Status status = MeterSetting.ValueToSet(
-            (MeterDisplay)RecordConversion.Model(setup.Probe),
-            RecordConversion.Point(setup.Method, span, setup.AirToWaterRatio, setup.ReferenceStateRelative),
-            setup.Probe.Thermometer.CommonStandardUncertaintyCelsius,
-            out double shown,
-            out double uncertainty);
+        MeterDisplay meter = (MeterDisplay)RecordConversion.Model(setup.Probe);
+        Status status;
+        double shown;
+        double uncertainty;
+        if (PlanCheck.IsOnePoint(setup))
+        {
+            status = MeterSetting.ValueToSet(
+                meter,
+                RecordConversion.Point(setup.Method, span, setup.AirToWaterRatio, setup.ReferenceStateRelative),
+                setup.Probe.Thermometer.CommonStandardUncertaintyCelsius,
+                out shown,
+                out uncertainty);
+        }
+        else
+        {
+            // The response of a meter is the partial pressure that its display stands for.
+            status = meter.Signal(span.ReferencePartialPressureHectopascal, span.Temperature.Value, span.Pressure.Value, RangeRule.Refuse, out shown);
+            uncertainty = 0 < span.ReferencePartialPressureHectopascal
+                ? shown * span.ReferencePartialPressureUncertaintyHectopascal / span.ReferencePartialPressureHectopascal
+                : 0;
+        }
+
         return status == Status.Ok
             ? (shown, uncertainty)
             : throw new InputException($"the value to set in the meter cannot be computed ({status}); check what is set in it");
@@ -107,9 +132,179 @@ internal static class Fitting
     }
 
     /// <summary>True when the signals of two calibrations mean the same.</summary>
-    private static bool IsComparable(RecordedProbe before, RecordedProbe now)
+    internal static bool IsComparable(RecordedProbe before, RecordedProbe now)
     {
         return before.Model == now.Model && before.SignalUnit == now.SignalUnit;
+    }
+
+    private static Fit ThroughSeveral(CalibrationSetup setup, IReadOnlyList<RecordedPoint> points, CalibrationRecord? previous)
+    {
+        // A meter that was set is read again; what it shows then is what readings will be computed from.
+        RecordedPoint? asLeft = IsMeterOfItsOwn(setup) ? Point(points, CalibrationIds.AsLeftPoint) : null;
+        List<RecordedPoint> fitted = [.. points.Where(point => point.Role switch
+        {
+            CalibrationIds.AsLeftPoint => asLeft != null,
+            CalibrationIds.SpanPoint => asLeft == null,
+            CalibrationIds.ZeroPoint => setup.ZeroPlan == CalibrationIds.ZeroAdjust,
+            _ => true,
+        })];
+        RecordedPoint main = asLeft ?? Point(points, CalibrationIds.SpanPoint) ?? fitted[0];
+        RecordedZero? zero = null;
+        if (PlanCheck.NeedsAZero(setup) && fitted.TrueForAll(static point => point.Role != CalibrationIds.ZeroPoint))
+        {
+            zero = Zero(setup, main, points, previous);
+            fitted.Add(AsPoint(zero, main));
+        }
+
+        return new Fit(null, Status.PointsDegenerate, zero ?? NoZero(main), FromFit) { Why = "this program does not fit several points yet" };
+    }
+
+    private static bool IsMeterOfItsOwn(CalibrationSetup setup)
+    {
+        return setup.Probe.MeterSettings != null && setup.Readings == CalibrationIds.Typed;
+    }
+
+    /// <summary>A zero that was assumed or carried over, as a point of a fit.</summary>
+    private static RecordedPoint AsPoint(RecordedZero zero, RecordedPoint main)
+    {
+        return main with
+        {
+            Role = CalibrationIds.ZeroPoint,
+            Method = null,
+            Reference = null,
+            Signal = main.Signal with { Count = 1, Mean = zero.Signal, StandardDeviation = 0, SlopePerMinute = 0, SlopeStandardErrorPerMinute = 0, Minimum = zero.Signal, Maximum = zero.Signal, WindowSeconds = 0 },
+            SignalStandardUncertainty = zero.SignalStandardUncertainty,
+            Temperature = main.Temperature with { Value = zero.TemperatureCelsius },
+            Pressure = main.Pressure with { Value = zero.PressureHectopascal },
+            // What is left in the solution is part of the signal's uncertainty already.
+            ReferencePartialPressureHectopascal = 0,
+            ReferencePartialPressureUncertaintyHectopascal = 0,
+            ReferenceMilligramsPerLitre = 0,
+            ReferenceUncertaintyMilligramsPerLitre = 0,
+        };
+    }
+
+    private static RecordedZero NoZero(RecordedPoint main)
+    {
+        return new RecordedZero
+        {
+            IsMeasured = false,
+            Signal = 0,
+            SignalStandardUncertainty = 0,
+            TemperatureCelsius = main.Temperature.Value,
+            PressureHectopascal = main.Pressure.Value,
+            Source = FromFit,
+        };
+    }
+
+    /// <summary>A point as a calibration reads it, or as a meter shows it, in mg/L.</summary>
+    private static RecordedPoint ReadBy(CalibrationSetup setup, RecordedPoint point, ProbeCalibration? calibration, string readBy)
+    {
+        Status status;
+        double hectopascal;
+        bool asShown = readBy == "meter";
+        if (asShown)
+        {
+            status = RecordConversion.Model(setup.Probe).Response(point.Signal.Mean, point.Temperature.Value, point.Pressure.Value, RangeRule.Refuse, out hectopascal);
+        }
+        else
+        {
+            double ratio = point.Method == MethodIds.WaterSaturatedAir ? setup.AirToWaterRatio?.Value ?? 1 : 1;
+            status = Correction.PartialPressure(
+                calibration!, point.FlowFactor * ratio, point.Signal.Mean, point.Temperature.Value, point.Pressure.Value, RangeRule.Extrapolate, out hectopascal);
+        }
+
+        if (double.IsNaN(hectopascal) || (asShown && status != Status.Ok))
+        {
+            return point;
+        }
+
+        double reference = point.ReferencePartialPressureHectopascal;
+        double off = hectopascal - reference;
+        double? milligrams = MilligramsPerHectopascal(setup, point) * off;
+        return point with
+        {
+            ReadingHectopascal = hectopascal,
+            ErrorHectopascal = off,
+            ReadingMilligramsPerLitre = milligrams + point.ReferenceMilligramsPerLitre,
+            ErrorMilligramsPerLitre = milligrams,
+            ReadBy = readBy,
+        };
+    }
+
+    /// <summary>Concentration per partial pressure in the water of a point, mg/(L·hPa); null where the gas has none.</summary>
+    private static double? MilligramsPerHectopascal(CalibrationSetup setup, RecordedPoint point)
+    {
+        if (point.ReferencePartialPressureHectopascal != 0)
+        {
+            return point.ReferenceMilligramsPerLitre == 0 ? null : point.ReferenceMilligramsPerLitre / point.ReferencePartialPressureHectopascal;
+        }
+
+        if (PlanCheck.IsTotalPressure(setup.Probe))
+        {
+            return null;
+        }
+
+        double celsius = point.Temperature.Value;
+        double pressure = point.Pressure.Value;
+        Status status;
+        double perHectopascal;
+        if (setup.Gas == Gas.Oxygen)
+        {
+            status = OxygenEquilibrium.ConcentrationFromPartialPressure(setup.Equation, celsius, setup.Salinity.Value, pressure, 1, RangeRule.Refuse, out perHectopascal);
+        }
+        else
+        {
+            status = GasEquilibrium.ConcentrationFromPartialPressure(setup.Gas, GasDefaults.Equation(setup.Gas), celsius, setup.Salinity.Value, pressure, 1, RangeRule.Refuse, out perHectopascal);
+        }
+
+        return status == Status.Ok ? perHectopascal : null;
+    }
+
+    /// <summary>The 100 % point as the previous calibration (or the meter itself) reads it.</summary>
+    private static RecordedPoint ReadAsFound(CalibrationSetup setup, RecordedPoint span, CalibrationRecord? previous)
+    {
+        bool meter = setup.Probe.MeterSettings != null;
+        if (meter && (setup.Readings == CalibrationIds.Typed || previous == null))
+        {
+            return Read(setup, span, RecordConversion.Model(setup.Probe), 1, 0, "meter");
+        }
+
+        if (previous == null || !IsComparable(previous.Probe, setup.Probe))
+        {
+            return span;
+        }
+
+        ProbeCalibration before = previous.ToProbeCalibration();
+        return Read(setup, span, before.Model, before.Slope, before.ZeroResponse, previous.Id);
+    }
+
+    /// <summary>The point after the adjustment as the new calibration (or the meter itself) reads it.</summary>
+    private static RecordedPoint ReadAsLeft(CalibrationSetup setup, RecordedPoint asLeft, ProbeCalibration calibration)
+    {
+        return setup.Readings == CalibrationIds.Typed
+            ? Read(setup, asLeft, calibration.Model, 1, 0, "meter")
+            : Read(setup, asLeft, calibration.Model, calibration.Slope, calibration.ZeroResponse, "this");
+    }
+
+    /// <summary>The zero point in mg/L: as the new calibration reads it, or before an adjustment to it as a zero of 0 would.</summary>
+    private static RecordedPoint ReadZero(CalibrationSetup setup, RecordedPoint zero, RecordedPoint span, CalibrationRecord? previous)
+    {
+        bool adjusts = setup.ZeroPlan == CalibrationIds.ZeroAdjust;
+        CalibrationSetup before = adjusts ? setup with { ZeroPlan = CalibrationIds.ZeroKeep } : setup;
+        ProbeCalibration? calibration = Of(before, [span], previous).Calibration;
+        if (calibration == null)
+        {
+            return zero;
+        }
+
+        bool meter = setup.Readings == CalibrationIds.Typed;
+        RecordedZero read = Measured(zero, span);
+        Status status = CalibrationFit.AsFoundZero(
+            calibration.Model, meter ? 1 : calibration.Slope, meter ? 0 : calibration.ZeroResponse, RecordConversion.Zero(read), setup.Equation, out double milligrams);
+        return status == Status.Ok
+            ? zero with { ReadingMilligramsPerLitre = milligrams, ErrorMilligramsPerLitre = milligrams, ReadBy = meter ? "meter" : adjusts ? "this before the zero was adjusted" : "this" }
+            : zero;
     }
 
     private static RecordedPoint Read(CalibrationSetup setup, RecordedPoint point, IProbeModel model, double slope, double zero, string readBy)

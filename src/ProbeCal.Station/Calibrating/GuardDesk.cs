@@ -25,9 +25,11 @@ internal sealed class GuardDesk
     /// <exception cref="WorkFailedException">The same about the fit, which nobody entered.</exception>
     internal async Task PassAsync(IReadOnlyList<Guard> guards, Situation situation, bool aboutEntries, CancellationToken cancellationToken)
     {
+        // A note made before the first sample could not say how large the error would be; it is made again with the sample.
+        bool early = situation.TemperatureCelsius == null || situation.PressureHectopascal == null;
         foreach (Guard guard in guards)
         {
-            if (guard.Look(situation) is Finding finding)
+            if (guard.Look(situation) is Finding finding && !(early && finding.Severity == FindingSeverity.Note))
             {
                 await ResolveAsync(finding, aboutEntries, cancellationToken).ConfigureAwait(false);
             }

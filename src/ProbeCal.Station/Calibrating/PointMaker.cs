@@ -21,30 +21,30 @@ internal static class PointMaker
     /// <summary>Oxygen left in a fresh sulfite solution or under flowing nitrogen, k = 1, mg/L (our choice, no source).</summary>
     internal const double ZeroSolutionMilligramsPerLitre = 0.02;
 
-    internal static RecordedPoint FromWindow(string role, CalibrationSetup setup, StabilityWatch watch)
+    internal static TakenReading FromWindow(string role, CalibrationSetup setup, StabilityWatch watch)
     {
         bool typed = setup.TypedTemperatureCelsius != null;
-        Conditions conditions = new(
-            setup.TypedTemperatureCelsius ?? watch.Temperature.Mean,
-            typed ? "typed" : RecordNames.FromLine,
-            setup.Pressure.Hectopascal ?? watch.MeanPressure);
         double step = (setup.Probe.SignalResolution ?? 0) * RectangularPerStep;
-        double uncertainty = Combine(watch.Signal.MeanUncertainty, step);
-        double temperatureUncertainty = typed
-            ? setup.TemperatureStandardUncertaintyKelvin
-            : Combine(setup.TemperatureStandardUncertaintyKelvin, watch.Temperature.MeanUncertainty);
-        RecordedPoint point = Make(role, setup, conditions, Statistics(watch.Signal), uncertainty, temperatureUncertainty);
-        return point with
+        return new TakenReading
         {
+            Role = role,
             FirstUtc = watch.FirstUtc,
             LastUtc = watch.LastUtc,
+            Typed = false,
+            Signal = Statistics(watch.Signal),
+            SignalStandardUncertainty = Combine(watch.Signal.MeanUncertainty, step),
             TemperatureStatistics = typed ? null : Statistics(watch.Temperature),
+            TemperatureCelsius = setup.TypedTemperatureCelsius ?? watch.Temperature.Mean,
+            TemperatureSource = typed ? "typed" : RecordNames.FromLine,
+            TemperatureStandardUncertaintyKelvin = typed
+                ? setup.TemperatureStandardUncertaintyKelvin
+                : Combine(setup.TemperatureStandardUncertaintyKelvin, watch.Temperature.MeanUncertainty),
+            PressureHectopascal = setup.Pressure.Hectopascal is null ? watch.MeanPressure : setup.Pressure.At(null)!.Value,
         };
     }
 
-    internal static RecordedPoint FromTyped(string role, CalibrationSetup setup, Conditions conditions, double shown, DateTimeOffset nowUtc)
+    internal static TakenReading FromTyped(string role, CalibrationSetup setup, Conditions conditions, double shown, DateTimeOffset nowUtc)
     {
-        double uncertainty = (setup.Probe.MeterSettings?.Resolution ?? setup.Probe.SignalResolution ?? 0) * RectangularPerDigit;
         RecordedStatistics once = new()
         {
             Count = 1,
@@ -56,8 +56,61 @@ internal static class PointMaker
             Maximum = shown,
             WindowSeconds = 0,
         };
-        RecordedPoint point = Make(role, setup, conditions, once, uncertainty, setup.TemperatureStandardUncertaintyKelvin);
-        return point with { Typed = true, FirstUtc = nowUtc, LastUtc = nowUtc };
+        return new TakenReading
+        {
+            Role = role,
+            FirstUtc = nowUtc,
+            LastUtc = nowUtc,
+            Typed = true,
+            Signal = once,
+            SignalStandardUncertainty = (setup.Probe.MeterSettings?.Resolution ?? setup.Probe.SignalResolution ?? 0) * RectangularPerDigit,
+            TemperatureCelsius = conditions.TemperatureCelsius,
+            TemperatureSource = conditions.TemperatureSource,
+            TemperatureStandardUncertaintyKelvin = setup.TemperatureStandardUncertaintyKelvin,
+            PressureHectopascal = conditions.PressureHectopascal,
+        };
+    }
+
+    /// <summary>The point of a reading: with what was true there.</summary>
+    /// <exception cref="InputException">No truth can be computed there, in one line.</exception>
+    internal static RecordedPoint Make(TakenReading reading, PlannedPoint planned, CalibrationSetup setup)
+    {
+        Conditions conditions = new(reading.TemperatureCelsius, reading.TemperatureSource, reading.PressureHectopascal);
+        PointReference truth = References.Of(planned, setup, conditions, reading.TemperatureStandardUncertaintyKelvin);
+        return new RecordedPoint
+        {
+            Role = reading.Role,
+            Method = planned.Method,
+            Reference = truth.Recorded,
+            FirstUtc = reading.FirstUtc,
+            LastUtc = reading.LastUtc,
+            Typed = reading.Typed,
+            Signal = reading.Signal,
+            SignalStandardUncertainty = reading.SignalStandardUncertainty,
+            TemperatureStatistics = reading.TemperatureStatistics,
+            Temperature = new RecordedQuantity
+            {
+                Value = reading.TemperatureCelsius,
+                Unit = "degC",
+                StandardUncertainty = reading.TemperatureStandardUncertaintyKelvin,
+                Source = reading.TemperatureSource,
+            },
+            Pressure = new RecordedQuantity
+            {
+                Value = reading.PressureHectopascal,
+                Unit = "hPa",
+                StandardUncertainty = setup.Pressure.StandardUncertaintyHectopascal,
+                Source = setup.Pressure.Source,
+                UncertaintySource = setup.Pressure.UncertaintySource,
+            },
+            Salinity = setup.Salinity,
+            Stirring = RecordNames.Of(setup.Stirring),
+            FlowFactor = 1,
+            ReferencePartialPressureHectopascal = truth.Hectopascal,
+            ReferencePartialPressureUncertaintyHectopascal = truth.StandardUncertaintyHectopascal,
+            ReferenceMilligramsPerLitre = truth.MilligramsPerLitre ?? 0,
+            ReferenceUncertaintyMilligramsPerLitre = truth.StandardUncertaintyMilligramsPerLitre ?? 0,
+        };
     }
 
     /// <summary>Root of the sum of squares.</summary>
@@ -70,47 +123,6 @@ internal static class PointMaker
         }
 
         return Math.Sqrt(squares);
-    }
-
-    private static RecordedPoint Make(string role, CalibrationSetup setup, Conditions conditions, RecordedStatistics signal, double signalUncertainty, double temperatureUncertainty)
-    {
-        bool zero = role == CalibrationIds.ZeroPoint;
-        double celsius = conditions.TemperatureCelsius;
-        double hectopascal = conditions.PressureHectopascal;
-        double salinity = setup.Salinity.Value;
-        double wholeTemperature = Combine(temperatureUncertainty, setup.Probe.Thermometer.CommonStandardUncertaintyCelsius);
-        double pressureUncertainty = setup.Pressure.StandardUncertaintyHectopascal;
-        Require(OxygenEquilibrium.PartialPressure(celsius, hectopascal, RangeRule.Refuse, out double reference), conditions);
-        Require(OxygenEquilibrium.MilligramsPerLitre(setup.Equation, celsius, salinity, hectopascal, RangeRule.Refuse, out double concentration), conditions);
-        Require(OxygenUncertainty.PartialPressure(celsius, hectopascal, wholeTemperature, pressureUncertainty, RangeRule.Refuse, out double ofReference), conditions);
-        Require(OxygenUncertainty.MilligramsPerLitre(
-            setup.Equation, celsius, salinity, hectopascal, wholeTemperature, setup.Salinity.StandardUncertainty, pressureUncertainty, RangeRule.Refuse, out double ofConcentration), conditions);
-        double perConcentration = reference / concentration;
-        return new RecordedPoint
-        {
-            Role = role,
-            FirstUtc = DateTimeOffset.UnixEpoch,
-            LastUtc = DateTimeOffset.UnixEpoch,
-            Typed = false,
-            Signal = signal,
-            SignalStandardUncertainty = signalUncertainty,
-            Temperature = new RecordedQuantity { Value = celsius, Unit = "degC", StandardUncertainty = temperatureUncertainty, Source = conditions.TemperatureSource },
-            Pressure = new RecordedQuantity
-            {
-                Value = hectopascal,
-                Unit = "hPa",
-                StandardUncertainty = pressureUncertainty,
-                Source = setup.Pressure.Source,
-                UncertaintySource = setup.Pressure.UncertaintySource,
-            },
-            Salinity = setup.Salinity,
-            Stirring = RecordNames.Of(setup.Stirring),
-            FlowFactor = 1,
-            ReferencePartialPressureHectopascal = zero ? 0 : reference,
-            ReferencePartialPressureUncertaintyHectopascal = zero ? ZeroSolutionMilligramsPerLitre * perConcentration : Combine(ofReference, reference * setup.ReferenceStateRelative),
-            ReferenceMilligramsPerLitre = zero ? 0 : concentration,
-            ReferenceUncertaintyMilligramsPerLitre = zero ? ZeroSolutionMilligramsPerLitre : Combine(ofConcentration, concentration * setup.ReferenceStateRelative),
-        };
     }
 
     private static RecordedStatistics Statistics(WindowStatistics window)
@@ -126,14 +138,5 @@ internal static class PointMaker
             Maximum = window.Maximum,
             WindowSeconds = window.SpanSeconds,
         };
-    }
-
-    private static void Require(Status status, Conditions conditions)
-    {
-        if (status != Status.Ok)
-        {
-            throw new InputException($"temperature {Number.Print(conditions.TemperatureCelsius)} C, pressure {Number.Print(conditions.PressureHectopascal)} hPa: no reference can be computed there ({status}); "
-                + "the equation holds from 0 to 40 C and from 507 to 1114 hPa");
-        }
     }
 }

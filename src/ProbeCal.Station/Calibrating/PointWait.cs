@@ -12,37 +12,38 @@ internal sealed class PointWait
 {
     private readonly CalibrationSession _session;
     private readonly CalibrationSetup _setup;
-    private readonly CalibrationStep _step;
+    private readonly ProcedureStep _step;
+    private readonly string _role;
     private readonly ICalibrationDialogue _dialogue;
     private readonly TimeProvider _time;
     private readonly GuardDesk _desk;
     private readonly StabilityWatch _watch;
-    private readonly RecordedPoint? _span;
+    private readonly SignalScale _scale;
     private readonly DateTimeOffset _notBefore;
     private DateTimeOffset? _firstSeen;
     private bool _conditionsSeen;
     private int _rejected;
     private string _lastRejection = "";
     private string _waitingFor = "no sample came";
-    private double _zeroGuess;
+    private PointReference? _truth;
 
-    internal PointWait(CalibrationSession session, CalibrationStep step, ICalibrationDialogue dialogue, TimeProvider time, GuardDesk desk)
+    internal PointWait(CalibrationSession session, ProcedureStep step, ICalibrationDialogue dialogue, TimeProvider time, GuardDesk desk)
     {
         _session = session;
         _setup = session.Setup;
         _step = step;
+        _role = step.Role ?? throw new InvalidOperationException($"Step '{step.Id}' takes no point.");
         _dialogue = dialogue;
         _time = time;
         _desk = desk;
         RecordedProbe probe = _setup.Probe;
         _watch = new StabilityWatch(_setup.Waiting, new ConverterLimits(
             probe.SignalResolution ?? double.NaN, probe.SignalLow ?? double.NaN, probe.SignalHigh ?? double.NaN));
-        _span = Fitting.Point(session.State.Points, CalibrationIds.SpanPoint);
+        _scale = new SignalScale(_setup, _role, session.State.Points, session.Previous);
         _notBefore = session.State.Points.Count == 0 ? DateTimeOffset.MinValue : session.State.Points[^1].LastUtc;
-        _zeroGuess = session.Previous?.Result.Zero ?? 0;
     }
 
-    internal async Task<RecordedPoint> RunAsync(SamplePump pump, CancellationToken cancellationToken)
+    internal async Task<TakenReading> RunAsync(SamplePump pump, CancellationToken cancellationToken)
     {
         using CancellationTokenSource waiting = CancellationTokenSource.CreateLinkedTokenSource(cancellationToken);
         Task deadline = Task.Delay(TimeSpan.FromSeconds(_setup.Waiting.GiveUpAfterSeconds), _time, waiting.Token);
@@ -59,7 +60,7 @@ internal sealed class PointWait
 
                 if (await TakeAsync(happened, cancellationToken).ConfigureAwait(false))
                 {
-                    return PointMaker.FromWindow(CalibrationRun.RoleOf(_step), _setup, _watch);
+                    return PointMaker.FromWindow(_role, _setup, _watch);
                 }
 
                 // A stop ends the wait as well, and is told as a stop the next time round.
@@ -113,7 +114,7 @@ internal sealed class PointWait
         }
 
         double? temperature = _setup.TypedTemperatureCelsius ?? sample.TemperatureCelsius;
-        double? pressure = _setup.Pressure.Hectopascal ?? sample.PressureHectopascal;
+        double? pressure = _setup.Pressure.At(sample.PressureHectopascal);
         if (temperature is not double celsius || pressure is not double hectopascal)
         {
             _waitingFor = temperature == null
@@ -122,18 +123,20 @@ internal sealed class PointWait
             return false;
         }
 
-        if (!IsInPlace(sample.Signal))
-        {
-            _watch.Restart();
-            Report(sample, null, [_waitingFor]);
-            return false;
-        }
-
         if (!_conditionsSeen)
         {
             // Looked at on the first sample, so that a wrong entry does not cost a whole window of waiting.
             await LookAsync(celsius, sample.TemperatureCelsius, hectopascal, cancellationToken).ConfigureAwait(false);
+            _truth = Truth(celsius, hectopascal);
             _conditionsSeen = true;
+        }
+
+        if (_scale.NotInPlace(sample.Signal, _watch.IsEmpty, _truth) is string elsewhere)
+        {
+            _waitingFor = elsewhere;
+            _watch.Restart();
+            Report(sample, null, [_waitingFor]);
+            return false;
         }
 
         if (!_watch.Add(sample.TimeUtc, sample.Signal, celsius, hectopascal))
@@ -146,12 +149,12 @@ internal sealed class PointWait
 
     private bool Judge(RawSample sample, double hectopascal)
     {
-        if (!_watch.Judge(signal => MilligramsPerSignal(signal.Mean, hectopascal)))
+        if (!_watch.Judge(signal => _scale.MilligramsPerSignal(signal.Mean, MeanCelsius, hectopascal, _truth)))
         {
             return false;
         }
 
-        double size = MilligramsPerSignal(_watch.Signal.Mean, hectopascal);
+        double size = _scale.MilligramsPerSignal(_watch.Signal.Mean, MeanCelsius, hectopascal, _truth);
         Report(sample, _watch.SecondsLeft(size), _watch.Moving(size));
         RefuseDeadOrSaturated();
         _waitingFor = _watch.IsFull ? "still moving: " + string.Join("; ", _watch.Moving(size)) : "the window was not full yet";
@@ -175,7 +178,7 @@ internal sealed class PointWait
     private async ValueTask<bool> AcceptAsync(RawSample sample, CancellationToken cancellationToken)
     {
         double celsius = _setup.TypedTemperatureCelsius ?? _watch.Temperature.Mean;
-        await LookAsync(celsius, sample.TemperatureCelsius, _setup.Pressure.Hectopascal ?? _watch.MeanPressure, cancellationToken).ConfigureAwait(false);
+        await LookAsync(celsius, sample.TemperatureCelsius, _setup.Pressure.Hectopascal is null ? _watch.MeanPressure : _setup.Pressure.At(null)!.Value, cancellationToken).ConfigureAwait(false);
         return true;
     }
 
@@ -184,43 +187,15 @@ internal sealed class PointWait
         return _desk.PassAsync(ConditionGuards.All, _session.Situation(celsius, probeCelsius, hectopascal), aboutEntries: true, cancellationToken);
     }
 
-    /// <summary>Whether the probe is where the step wants it, told by the signal alone.</summary>
-    private bool IsInPlace(double signal)
+    private double MeanCelsius => _setup.TypedTemperatureCelsius ?? _watch.Temperature.Mean;
+
+    /// <summary>What will be true at the point, as far as it is known before the window; a wrong entry is told here and not after the wait.</summary>
+    private PointReference? Truth(double celsius, double hectopascal)
     {
-        if (_span == null)
-        {
-            return true;
-        }
-
-        double share = signal / _span.Signal.Mean;
-        if (_step == CalibrationStep.Zero && _watch.IsEmpty && _setup.Waiting.ZeroEntryShare < share)
-        {
-            _waitingFor = Finding.Text($"not in the zero solution yet: its signal is still {Number.Fixed(100 * share, 0)} % of the 100 % point");
-            return false;
-        }
-
-        if (_step == CalibrationStep.AsLeft && share < _setup.Waiting.SpanReturnShare)
-        {
-            _waitingFor = Finding.Text($"not back at 100 % yet: its signal is {Number.Fixed(100 * share, 0)} % of the point as found");
-            return false;
-        }
-
-        return true;
-    }
-
-    /// <summary>Size of one unit of signal at the reference, mg/L; NaN where it has none.</summary>
-    private double MilligramsPerSignal(double meanSignal, double hectopascal)
-    {
-        if (_step == CalibrationStep.Zero && _span != null)
-        {
-            double below = _span.Signal.Mean - meanSignal;
-            return below == 0 ? double.NaN : _span.ReferenceMilligramsPerLitre / below;
-        }
-
-        double celsius = _setup.TypedTemperatureCelsius ?? _watch.Temperature.Mean;
-        Status status = OxygenEquilibrium.MilligramsPerLitre(_setup.Equation, celsius, _setup.Salinity.Value, hectopascal, RangeRule.Refuse, out double reference);
-        double above = meanSignal - _zeroGuess;
-        return status == Status.Ok && above != 0 ? reference / above : double.NaN;
+        PlannedPoint planned = _setup.PlannedFor(_role);
+        return PlanCheck.IsMissingItsReference(planned)
+            ? null
+            : References.Of(planned, _setup, new Conditions(celsius, RecordNames.FromLine, hectopascal), _setup.TemperatureStandardUncertaintyKelvin);
     }
 
     private void RefuseDeadOrSaturated()
@@ -252,6 +227,6 @@ internal sealed class PointWait
     private WorkFailedException Failed(string what)
     {
         string rejected = _rejected == 0 ? "" : Finding.Text($"; {_rejected} lines were not understood, the last one because {_lastRejection}");
-        return new WorkFailedException($"{CalibrationRun.RoleOf(_step)} point: {what}; {_waitingFor}{rejected}. {Kept}");
+        return new WorkFailedException($"{_role} point: {what}; {_waitingFor}{rejected}. {Kept}");
     }
 }

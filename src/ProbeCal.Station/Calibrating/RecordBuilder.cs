@@ -20,7 +20,10 @@ internal static class RecordBuilder
     {
         CalibrationSetup setup = state.Setup;
         ProbeCalibration calibration = fit.Calibration ?? throw new InvalidOperationException("A record needs a fit.");
-        RecordedPoint slopePoint = state.Points.First(point => point.Role == fit.SlopeFrom);
+        bool check = setup.Purpose == CalibrationRecord.CheckPurpose;
+        RecordedPoint slopePoint = state.Points.FirstOrDefault(point => point.Role == fit.SlopeFrom)
+            ?? Fitting.Point(state.Points, CalibrationIds.SpanPoint)
+            ?? state.Points[0];
         DateTimeOffset last = state.Points.Max(static point => point.LastUtc);
         List<RecordedLimit> limits = Judgement.Limits(setup, state.Points, calibration);
         string[] reasons = Judgement.Reasons(limits);
@@ -33,7 +36,12 @@ internal static class RecordBuilder
             By = setup.By,
             Site = setup.Site,
             Altitude = setup.Altitude,
-            Gas = "O2",
+            Purpose = setup.Purpose,
+            CheckKind = setup.CheckKind,
+            Equipment = Equipment(setup, state.Points),
+            Steps = [.. state.Steps],
+            Fit = fit.Several,
+            Gas = PlanCheck.IsTotalPressure(setup.Probe) ? "total" : GasNames.NameOf(setup.Gas),
             Probe = setup.Probe,
             Method = setup.Method,
             Readings = setup.Readings,
@@ -53,11 +61,11 @@ internal static class RecordBuilder
             SlopeFrom = fit.SlopeFrom,
             Zero = fit.Zero,
             PreviousCalibration = previous?.Id,
-            DropletCheck = setup.Method == CalibrationIds.WaterSaturatedAir ? state.DropletCheck ?? Droplets.NotChecked : Droplets.NotNeeded,
+            DropletCheck = setup.Plan.Any(static point => point.Method == MethodIds.WaterSaturatedAir) ? state.DropletCheck ?? Droplets.NotChecked : Droplets.NotNeeded,
             Result = new RecordedResult
             {
                 Slope = calibration.Slope,
-                SlopeStandardUncertainty = Math.Abs(calibration.Slope) * calibration.SlopeRelativeUncertainty(),
+                SlopeStandardUncertainty = check ? previous!.Result.SlopeStandardUncertainty : Math.Abs(calibration.Slope) * calibration.SlopeRelativeUncertainty(),
                 Zero = calibration.ZeroResponse,
                 ZeroStandardUncertainty = calibration.ZeroResponseUncertainty,
                 Pass = reasons.Length == 0,
@@ -70,5 +78,11 @@ internal static class RecordBuilder
             Software = software,
             Remarks = setup.Remarks,
         };
+    }
+
+    /// <summary>What was named for the whole work, and what a point's reference names of its own.</summary>
+    private static string[] Equipment(CalibrationSetup setup, IEnumerable<RecordedPoint> points)
+    {
+        return [.. setup.Equipment.Concat(points.SelectMany(static point => point.Reference?.Equipment ?? [])).Distinct()];
     }
 }

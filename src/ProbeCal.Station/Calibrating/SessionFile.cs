@@ -119,7 +119,8 @@ internal sealed class SessionFile
                 $"{_path}: version {head.Version} of the saved state is newer than this program, which knows up to {SessionState.CurrentVersion}; use the newer program or move the file away, nothing was changed"));
         }
 
-        return JsonSerializer.Deserialize(bytes, SessionJsonContext.Readable.SessionState) ?? throw new JsonException("it is empty");
+        SessionState state = JsonSerializer.Deserialize(bytes, SessionJsonContext.Readable.SessionState) ?? throw new JsonException("it is empty");
+        return state.Version < 2 ? state.WithStepsOfVersion1() : state;
     }
 
     /// <summary>A file name of any probe id: what a file system might refuse is replaced, and a hash keeps such ids apart.</summary>

@@ -1,5 +1,6 @@
 using System;
 using System.Collections.Generic;
+using System.Linq;
 using System.Text.Encodings.Web;
 using System.Text.Json;
 using System.Text.Json.Serialization;
@@ -7,33 +8,14 @@ using ProbeCal.Station.CalibrationLog;
 
 namespace ProbeCal.Station.Calibrating;
 
-/// <summary>What a calibration waits for next.</summary>
-public enum CalibrationStep
-{
-    /// <summary>The 100 % point as found.</summary>
-    Span,
-
-    /// <summary>The look for droplets on membrane and thermometer, after a point in air.</summary>
-    Droplets,
-
-    /// <summary>The zero point.</summary>
-    Zero,
-
-    /// <summary>The 100 % point again, in a new window after the adjustment.</summary>
-    AsLeft,
-
-    /// <summary>Nothing: the record can be written.</summary>
-    Finished,
-}
-
 /// <summary>A calibration under way, as it is saved after each step: the state machine's whole state.</summary>
 public sealed record SessionState
 {
     /// <summary>Name of the format.</summary>
     public const string FormatName = "probecal-calibration-session";
 
-    /// <summary>The version this program writes.</summary>
-    public const int CurrentVersion = 1;
+    /// <summary>The version this program writes. Version 2 added the steps done, planned points and readings that wait for their reference.</summary>
+    public const int CurrentVersion = 2;
 
     /// <summary><see cref="FormatName"/>.</summary>
     public string Format { get; init; } = FormatName;
@@ -53,6 +35,12 @@ public sealed record SessionState
     /// <summary>The points taken so far, in their order.</summary>
     public IReadOnlyList<RecordedPoint> Points { get; init; } = [];
 
+    /// <summary>The steps done so far, in their order, points among them.</summary>
+    public IReadOnlyList<RecordedStep> Steps { get => field ?? []; init; }
+
+    /// <summary>A reading whose reference is not known yet: samples that wait to be titrated. None otherwise.</summary>
+    public TakenReading? Waiting { get; init; }
+
     /// <summary>What the guards saw so far.</summary>
     public IReadOnlyList<RecordedFinding> Findings { get; init; } = [];
 
@@ -60,40 +48,80 @@ public sealed record SessionState
     public string? DropletCheck { get; init; }
 
     /// <summary>
-    /// What comes next. The 100 % point always precedes the zero point: residue of a zero solution would bias it (TM 9-A6.2).
-    /// A zero that adjusts comes before the as-left point, one that only checks after it.
+    /// What comes next: the first step of the procedure that is not done, null when the record can be written. It follows from
+    /// set-up, points and steps done alone, so that a state taken up again goes on where it stopped.
     /// </summary>
     [JsonIgnore]
-    public CalibrationStep Next
+    public ProcedureStep? Next => Procedures.For(Setup).FirstOrDefault(step => !IsDone(step));
+
+    /// <summary>Whether a step is done. A point is done when it is there, whatever the list of steps says.</summary>
+    internal bool IsDone(ProcedureStep step)
     {
-        get
+        return step.Kind switch
         {
-            bool adjusts = Setup.ZeroPlan == CalibrationIds.ZeroAdjust;
-            bool checks = Setup.ZeroPlan == CalibrationIds.ZeroCheck;
-            bool hasZero = Fitting.Point(Points, CalibrationIds.ZeroPoint) != null;
-            if (Fitting.Point(Points, CalibrationIds.SpanPoint) == null)
-            {
-                return CalibrationStep.Span;
-            }
-
-            if (Setup.Method == CalibrationIds.WaterSaturatedAir && DropletCheck == null)
-            {
-                return CalibrationStep.Droplets;
-            }
-
-            if (adjusts && !hasZero)
-            {
-                return CalibrationStep.Zero;
-            }
-
-            if (Fitting.Point(Points, CalibrationIds.AsLeftPoint) == null)
-            {
-                return CalibrationStep.AsLeft;
-            }
-
-            return checks && !hasZero ? CalibrationStep.Zero : CalibrationStep.Finished;
-        }
+            StepKind.Point => Fitting.Point(Points, step.Role!) != null,
+            StepKind.Droplets => DropletCheck != null,
+            _ => Steps.Any(done => done.Step == step.Id),
+        };
     }
+
+    /// <summary>
+    /// A state of version 1 knew points and the look for droplets only: what the procedure asks for before the last of them
+    /// counts as done.
+    /// </summary>
+    internal SessionState WithStepsOfVersion1()
+    {
+        IReadOnlyList<ProcedureStep> plan = Procedures.For(Setup);
+        int done = 0;
+        for (int i = 0; i < plan.Count; i++)
+        {
+            bool known = plan[i].Kind is StepKind.Point or StepKind.Droplets;
+            if (known && IsDone(plan[i]))
+            {
+                done = i + 1;
+            }
+        }
+
+        CalibrationSetup setup = Setup with { Probe = Setup.Probe with { Coefficients = Setup.Probe.Coefficients ?? [] } };
+        return this with { Version = CurrentVersion, Setup = setup, Steps = [.. plan.Take(done).Select(step => new RecordedStep(step.Id, SavedUtc, null))] };
+    }
+}
+
+/// <summary>What the probe gave at a point, before the truth there is known.</summary>
+public sealed record TakenReading
+{
+    /// <summary>Role of the point.</summary>
+    public required string Role { get; init; }
+
+    /// <summary>Time of the first sample, UTC.</summary>
+    public required DateTimeOffset FirstUtc { get; init; }
+
+    /// <summary>Time of the last sample, UTC.</summary>
+    public required DateTimeOffset LastUtc { get; init; }
+
+    /// <summary>True when a person typed it.</summary>
+    public required bool Typed { get; init; }
+
+    /// <summary>The raw signal over the window.</summary>
+    public required RecordedStatistics Signal { get; init; }
+
+    /// <summary>Standard uncertainty of its mean, with resolution and drift.</summary>
+    public required double SignalStandardUncertainty { get; init; }
+
+    /// <summary>The temperature over the window; none when it was typed.</summary>
+    public RecordedStatistics? TemperatureStatistics { get; init; }
+
+    /// <summary>Temperature the point goes by, °C.</summary>
+    public required double TemperatureCelsius { get; init; }
+
+    /// <summary>Where it comes from.</summary>
+    public required string TemperatureSource { get; init; }
+
+    /// <summary>Its standard uncertainty without the thermometer's own offset, K.</summary>
+    public required double TemperatureStandardUncertaintyKelvin { get; init; }
+
+    /// <summary>Absolute station pressure, hPa.</summary>
+    public required double PressureHectopascal { get; init; }
 }
 
 [JsonSerializable(typeof(SessionState))]

@@ -15,7 +15,7 @@ namespace ProbeCal.Station.Calibrating;
 /// <param name="Signal">Newest signal.</param>
 /// <param name="TemperatureCelsius">Newest temperature, °C.</param>
 public sealed record WaitProgress(
-    CalibrationStep Step,
+    ProcedureStep Step,
     DateTimeOffset SampleTimeUtc,
     double ElapsedSeconds,
     int Samples,

@@ -98,7 +98,7 @@ public sealed record CalibrationRecord : LogEntry
     /// <summary>The points in the order in which they were taken.</summary>
     public required RecordedPoint[] Points { get; init; }
 
-    /// <summary>Role of the point that gave the slope: <c>span</c>, <c>as-left</c> for a meter that was adjusted itself, or <c>fit</c> for <see cref="Fit"/>.</summary>
+    /// <summary>Role of the point that gave the slope: <c>span</c>, <c>as-left</c> for a meter that was adjusted itself, <c>fit</c> for <see cref="Fit"/>, or <c>previous</c> for a check, which changes nothing.</summary>
     public required string SlopeFrom { get; init; }
 
     /// <summary>The zero that the slope rests on.</summary>

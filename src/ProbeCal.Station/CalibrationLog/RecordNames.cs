@@ -3,7 +3,7 @@ using ProbeCal.Station.Entry;
 namespace ProbeCal.Station.CalibrationLog;
 
 /// <summary>The names by which records call what Core calls by an enum, both ways. They never change.</summary>
-public static class RecordNames
+internal static class RecordNames
 {
     /// <summary>Source of a temperature that came with the signal.</summary>
     internal const string FromLine = "line";

@@ -142,6 +142,6 @@ public sealed record RecordedZero
     /// <summary>Absolute pressure at which it was read, hPa.</summary>
     public required double PressureHectopascal { get; init; }
 
-    /// <summary><c>measured</c>, <c>assumed</c>, or <c>previous:ID</c> for one carried over from an earlier calibration.</summary>
+    /// <summary><c>measured</c>, <c>assumed</c>, <c>fit</c> for one that a fit over several points gave, or <c>previous:ID</c> for one carried over from an earlier calibration.</summary>
     public required string Source { get; init; }
 }

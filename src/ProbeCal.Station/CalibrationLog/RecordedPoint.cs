@@ -84,7 +84,7 @@ public sealed record RecordedPoint
     /// <summary>Its standard uncertainty, hPa.</summary>
     public required double ReferencePartialPressureUncertaintyHectopascal { get; init; }
 
-    /// <summary>The same as a concentration, mg/L.</summary>
+    /// <summary>The same as a concentration, mg/L; 0 for a total gas pressure, which is no concentration.</summary>
     public required double ReferenceMilligramsPerLitre { get; init; }
 
     /// <summary>Its standard uncertainty, mg/L, the equation's own included.</summary>
@@ -95,6 +95,12 @@ public sealed record RecordedPoint
 
     /// <summary>Reading minus reference, mg/L; none when there was no calibration to read by.</summary>
     public double? ErrorMilligramsPerLitre { get; init; }
+
+    /// <summary>The reading as a partial pressure (or total pressure), hPa; none where it was only worked out in mg/L.</summary>
+    public double? ReadingHectopascal { get; init; }
+
+    /// <summary>The error as a pressure: reading minus reference, hPa; none where it was only worked out in mg/L.</summary>
+    public double? ErrorHectopascal { get; init; }
 
     /// <summary>The calibration by which <see cref="ReadingMilligramsPerLitre"/> was computed; <c>this</c> for the new one.</summary>
     public string? ReadBy { get; init; }

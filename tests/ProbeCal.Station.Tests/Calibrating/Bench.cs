@@ -125,6 +125,18 @@ internal sealed class ScriptedDialogue : ICalibrationDialogue
 
     internal Queue<double?> Readings { get; } = new();
 
+    /// <summary>The steps shown, in their order.</summary>
+    internal List<ProcedureStep> Steps { get; } = [];
+
+    /// <summary>What is written down where a step asks for it.</summary>
+    internal string Note { get; set; } = "written";
+
+    /// <summary>Called when a step is shown, before it is done.</summary>
+    internal Action<ProcedureStep>? OnStep { get; set; }
+
+    /// <summary>Gives the titration of samples that wait for it; null where nobody has titrated them.</summary>
+    internal Func<PlannedPoint, PlannedPoint?>? Reference { get; set; }
+
     /// <summary>Called when a point was taken: where a test pulls the plug.</summary>
     internal Action<RecordedPoint>? OnTaken { get; set; }
 
@@ -146,15 +158,23 @@ internal sealed class ScriptedDialogue : ICalibrationDialogue
         OnTaken?.Invoke(point);
     }
 
-    public Task ReadyAsync(CalibrationStep step, IReadOnlyList<string> instructions, CancellationToken cancellationToken)
+    public Task<string?> DoAsync(ProcedureStep step, CancellationToken cancellationToken)
     {
-        Shown.AddRange(instructions);
-        _source?.Enter(step == CalibrationStep.Zero ? SimulationPhase.Zero : SpanPhase);
-        return Task.CompletedTask;
+        Steps.Add(step);
+        Shown.AddRange(step.Do);
+        OnStep?.Invoke(step);
+        if (step.Role != null)
+        {
+            Place(step);
+        }
+
+        return Task.FromResult(step.WriteDown == null ? null : Note);
     }
 
-    public Task<string> DropletsAsync(IReadOnlyList<string> instructions, CancellationToken cancellationToken)
+    public Task<string> DropletsAsync(ProcedureStep step, CancellationToken cancellationToken)
     {
+        Steps.Add(step);
+        OnStep?.Invoke(step);
         return Task.FromResult(DropletAnswers.TryDequeue(out string? answer) ? answer : Droplets.NoneSeen);
     }
 
@@ -163,10 +183,22 @@ internal sealed class ScriptedDialogue : ICalibrationDialogue
         return Task.FromResult(Reasons.GetValueOrDefault(finding.Guard));
     }
 
-    public Task<double?> ReadingAsync(CalibrationStep step, string unit, IReadOnlyList<string> instructions, CancellationToken cancellationToken)
+    public Task<double?> ReadingAsync(ProcedureStep step, string unit, CancellationToken cancellationToken)
     {
-        Shown.AddRange(instructions);
+        Steps.Add(step);
+        Shown.AddRange(step.Do);
+        OnStep?.Invoke(step);
         return Task.FromResult(Readings.TryDequeue(out double? reading) ? reading : null);
+    }
+
+    public Task<PlannedPoint?> ReferenceAsync(ProcedureStep step, PlannedPoint planned, CancellationToken cancellationToken)
+    {
+        return Task.FromResult(Reference?.Invoke(planned));
+    }
+
+    private void Place(ProcedureStep step)
+    {
+        _source?.Enter(step.Role == CalibrationIds.ZeroPoint ? SimulationPhase.Zero : SpanPhase);
     }
 }
 

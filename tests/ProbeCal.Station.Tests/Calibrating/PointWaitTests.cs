@@ -62,6 +62,7 @@ public class PointWaitTests
         CalibrationSetup setup = Bench.Setup with
         {
             TypedTemperatureCelsius = 20,
+            Reasons = new() { [GuardNames.Steady] = "bath with a thermostat" },
             Pressure = Bench.Setup.Pressure with { Hectopascal = 940 },
         };
         CalibrationRecord record = await RunAsync(Samples(400, Alive).Select(happened => (SourceEvent)((RawSample)happened with { TemperatureCelsius = null, PressureHectopascal = null })), setup);
@@ -166,12 +167,13 @@ public class PointWaitTests
 
         public void Taken(RecordedPoint point) { }
 
-        public Task ReadyAsync(CalibrationStep step, IReadOnlyList<string> instructions, System.Threading.CancellationToken cancellationToken)
+        public async Task<string?> DoAsync(ProcedureStep step, System.Threading.CancellationToken cancellationToken)
         {
-            return step == CalibrationStep.AsLeft ? looked : Task.CompletedTask;
+            await (step.Role == CalibrationIds.AsLeftPoint ? looked : Task.CompletedTask);
+            return null;
         }
 
-        public Task<string> DropletsAsync(IReadOnlyList<string> instructions, System.Threading.CancellationToken cancellationToken)
+        public Task<string> DropletsAsync(ProcedureStep step, System.Threading.CancellationToken cancellationToken)
         {
             return Task.FromResult(Droplets.NoneSeen);
         }
@@ -181,9 +183,14 @@ public class PointWaitTests
             return Task.FromResult<string?>(null);
         }
 
-        public Task<double?> ReadingAsync(CalibrationStep step, string unit, IReadOnlyList<string> instructions, System.Threading.CancellationToken cancellationToken)
+        public Task<double?> ReadingAsync(ProcedureStep step, string unit, System.Threading.CancellationToken cancellationToken)
         {
             return Task.FromResult<double?>(null);
+        }
+
+        public Task<PlannedPoint?> ReferenceAsync(ProcedureStep step, PlannedPoint planned, System.Threading.CancellationToken cancellationToken)
+        {
+            return Task.FromResult<PlannedPoint?>(null);
         }
     }
 }

@@ -105,11 +105,11 @@ public class SessionTests
         using Bench bench = new();
         await StopAfterAsync(bench, "span");
         string file = Directory.GetFiles(bench.Data.SessionsFolder).Single();
-        File.WriteAllText(file, "{\"format\":\"probecal-calibration-session\",\"version\":2,\"new\":true}");
+        File.WriteAllText(file, "{\"format\":\"probecal-calibration-session\",\"version\":3,\"new\":true}");
 
         InputException refused = await Assert.ThrowsAsync<InputException>(() => AgainAsync(bench, Setup));
-        Assert.Contains("version 2 of the saved state is newer", refused.Message, StringComparison.Ordinal);
-        Assert.Equal("{\"format\":\"probecal-calibration-session\",\"version\":2,\"new\":true}", File.ReadAllText(file));
+        Assert.Contains("version 3 of the saved state is newer", refused.Message, StringComparison.Ordinal);
+        Assert.Equal("{\"format\":\"probecal-calibration-session\",\"version\":3,\"new\":true}", File.ReadAllText(file));
     }
 
     [Fact]

@@ -76,7 +76,8 @@ public class FormatSamplesTests
             File.Copy(Sample("calibration-session-v1.json"), Path.Combine(folder, "M-5.calibration.json"));
             SessionState? state = new SessionFile(folder, "M-5", new FakeTimeProvider()).Load(line => Assert.Fail(line));
             Assert.NotNull(state);
-            Assert.Equal(CalibrationStep.AsLeft, state.Next);
+            Assert.Equal(CalibrationIds.AsLeftPoint, state.Next?.Role);
+            Assert.Equal(SessionState.CurrentVersion, state.Version);
             Assert.Equal(98.2, Assert.Single(state.Points).Signal.Mean);
             Assert.Equal("%local", state.Setup.Probe.MeterSettings?.Shows);
         }
@@ -99,7 +100,7 @@ public class FormatSamplesTests
             Site = null,
             Altitude = null,
             TypedTemperatureCelsius = 20.5,
-            Reasons = new() { [GuardNames.TemperatureTwice] = "the other thermometer was certified last week" },
+            Reasons = new() { [GuardNames.TemperatureTwice] = "the other thermometer was certified last week", [GuardNames.Steady] = "bath with a thermostat" },
             AirToWaterRatio = new RecordedQuantity { Value = 1.01, Unit = "1", StandardUncertainty = 0.005, Source = "entered" },
             Limits = new CalibrationLimits { SlopeLow = 0.3, SlopeHigh = 0.6 },
         };
