@@ -107,7 +107,7 @@ internal static class Fitting
         else
         {
             // The response of a meter is the partial pressure that its display stands for.
-            status = meter.Signal(span.ReferencePartialPressureHectopascal, span.Temperature.Value, span.Pressure.Value, RangeRule.Refuse, out shown);
+            status = meter.Signal(span.ReferencePartialPressureHectopascal, span.Temperature.Value, span.Pressure.Value, 0, RangeRule.Refuse, out shown);
             uncertainty = 0 < span.ReferencePartialPressureHectopascal
                 ? shown * span.ReferencePartialPressureUncertaintyHectopascal / span.ReferencePartialPressureHectopascal
                 : 0;
@@ -156,7 +156,18 @@ internal static class Fitting
             fitted.Add(AsPoint(zero, main));
         }
 
-        return new Fit(null, Status.PointsDegenerate, zero ?? NoZero(main), FromFit) { Why = "this program does not fit several points yet" };
+        (RecordedFit? several, string? why) = SeveralPoints.Of(setup.Probe, setup.Gas, fitted, setup.FitForm);
+        if (several == null)
+        {
+            return new Fit(null, Status.PointsDegenerate, zero ?? NoZero(main), FromFit) { Why = why };
+        }
+
+        Status status = FitConversion.Create(setup.Probe, setup.Gas, several, setup.Stirring, main.FlowFactor, out ProbeCalibration? calibration);
+        return new Fit(calibration, status, zero ?? ZeroOf(setup, points, several, main), FromFit)
+        {
+            Several = several,
+            Why = calibration == null ? $"the points make no calibration ({status})" : null,
+        };
     }
 
     private static bool IsMeterOfItsOwn(CalibrationSetup setup)
@@ -184,6 +195,26 @@ internal static class Fitting
         };
     }
 
+    /// <summary>The zero of a fit for the record: the measured one, or where the line meets zero.</summary>
+    private static RecordedZero ZeroOf(CalibrationSetup setup, IReadOnlyList<RecordedPoint> points, RecordedFit fit, RecordedPoint main)
+    {
+        RecordedPoint? measured = setup.ZeroPlan == CalibrationIds.ZeroAdjust ? Point(points, CalibrationIds.ZeroPoint) : null;
+        if (measured != null && main.ReferenceMilligramsPerLitre != 0)
+        {
+            return Measured(measured, main);
+        }
+
+        IProbeModel model = RecordConversion.Model(setup.Probe);
+        Status status = model.Signal(fit.Zero, main.Temperature.Value, main.Pressure.Value, 0, RangeRule.Extrapolate, out double signal);
+        Status size = model.ResponsePerSignal(signal, main.Temperature.Value, main.Pressure.Value, 0, RangeRule.Extrapolate, out double perSignal);
+        bool known = status == Status.Ok && size == Status.Ok && perSignal != 0;
+        return NoZero(main) with
+        {
+            Signal = known ? signal : 0,
+            SignalStandardUncertainty = known ? Math.Abs(Math.Sqrt(Math.Max(0, fit.Covariance[0])) / perSignal) : 0,
+        };
+    }
+
     private static RecordedZero NoZero(RecordedPoint main)
     {
         return new RecordedZero
@@ -205,13 +236,13 @@ internal static class Fitting
         bool asShown = readBy == "meter";
         if (asShown)
         {
-            status = RecordConversion.Model(setup.Probe).Response(point.Signal.Mean, point.Temperature.Value, point.Pressure.Value, RangeRule.Refuse, out hectopascal);
+            status = RecordConversion.Model(setup.Probe).Response(point.Signal.Mean, point.Temperature.Value, point.Pressure.Value, 0, RangeRule.Refuse, out hectopascal);
         }
         else
         {
-            double ratio = point.Method == MethodIds.WaterSaturatedAir ? setup.AirToWaterRatio?.Value ?? 1 : 1;
+            double ratio = point.Method == MethodIds.WaterSaturatedAir && PlanCheck.IsOnePoint(setup) ? setup.AirToWaterRatio?.Value ?? 1 : 1;
             status = Correction.PartialPressure(
-                calibration!, point.FlowFactor * ratio, point.Signal.Mean, point.Temperature.Value, point.Pressure.Value, RangeRule.Extrapolate, out hectopascal);
+                calibration!, point.FlowFactor * ratio, point.Signal.Mean, point.Temperature.Value, point.Pressure.Value, 0, RangeRule.Extrapolate, out hectopascal);
         }
 
         if (double.IsNaN(hectopascal) || (asShown && status != Status.Ok))

@@ -77,6 +77,13 @@ internal static class PointMaker
     {
         Conditions conditions = new(reading.TemperatureCelsius, reading.TemperatureSource, reading.PressureHectopascal);
         PointReference truth = References.Of(planned, setup, conditions, reading.TemperatureStandardUncertaintyKelvin);
+        // With one point the record's ratio stands beside it; among several points each carries its own.
+        bool carriesRatio = planned.Method == MethodIds.WaterSaturatedAir && setup.AirToWaterRatio != null && !PlanCheck.IsOnePoint(setup);
+        if (carriesRatio)
+        {
+            truth = WithRatio(truth, setup.AirToWaterRatio!);
+        }
+
         return new RecordedPoint
         {
             Role = reading.Role,
@@ -105,11 +112,36 @@ internal static class PointMaker
             },
             Salinity = setup.Salinity,
             Stirring = RecordNames.Of(setup.Stirring),
-            FlowFactor = 1,
+            FlowFactor = carriesRatio ? setup.AirToWaterRatio!.Value : 1,
             ReferencePartialPressureHectopascal = truth.Hectopascal,
             ReferencePartialPressureUncertaintyHectopascal = truth.StandardUncertaintyHectopascal,
             ReferenceMilligramsPerLitre = truth.MilligramsPerLitre ?? 0,
             ReferenceUncertaintyMilligramsPerLitre = truth.StandardUncertaintyMilligramsPerLitre ?? 0,
+        };
+    }
+
+    /// <summary>How well the ratio of air to water is known counts as if the reference were known less well.</summary>
+    private static PointReference WithRatio(PointReference truth, RecordedQuantity ratio)
+    {
+        double relative = ratio.StandardUncertainty / ratio.Value;
+        RecordedReferenceContribution line = new()
+        {
+            Input = "air-to-water ratio",
+            Value = ratio.Value,
+            StandardUncertainty = ratio.StandardUncertainty,
+            Unit = "1",
+            Distribution = "normal",
+            Hectopascal = -truth.Hectopascal * relative,
+            Source = ratio.UncertaintySource ?? ratio.Source,
+        };
+        RecordedReference recorded = truth.Recorded ?? new RecordedReference();
+        return truth with
+        {
+            StandardUncertaintyHectopascal = Combine(truth.StandardUncertaintyHectopascal, line.Hectopascal),
+            StandardUncertaintyMilligramsPerLitre = truth.MilligramsPerLitre is double milligrams && truth.StandardUncertaintyMilligramsPerLitre is double of
+                ? Combine(of, milligrams * relative)
+                : truth.StandardUncertaintyMilligramsPerLitre,
+            Recorded = recorded with { Budget = [.. recorded.Budget, line] },
         };
     }
 

@@ -143,8 +143,8 @@ internal sealed class SignalScale
     private double? Slope(double signal, double celsius, double hectopascal)
     {
         double step = Math.Max(Math.Abs(signal) * 1e-4, 1e-9);
-        Correction.PartialPressure(_before!, 1, signal - step, celsius, hectopascal, RangeRule.Extrapolate, out double low);
-        Correction.PartialPressure(_before!, 1, signal + step, celsius, hectopascal, RangeRule.Extrapolate, out double high);
+        Correction.PartialPressure(_before!, 1, signal - step, celsius, hectopascal, 0, RangeRule.Extrapolate, out double low);
+        Correction.PartialPressure(_before!, 1, signal + step, celsius, hectopascal, 0, RangeRule.Extrapolate, out double high);
         double slope = (high - low) / (2 * step);
         return double.IsFinite(slope) && slope != 0 ? slope : null;
     }
