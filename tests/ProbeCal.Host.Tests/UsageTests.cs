@@ -43,7 +43,7 @@ public sealed class UsageTests
         Run run = await Run.OfAsync("--help");
         Assert.Equal((0, ""), (run.ExitCode, run.Error));
         Assert.Contains("probecal total-gas ", run.Output, StringComparison.Ordinal);
-        Assert.InRange(run.Output.Split('\n').Length, 10, 20);
+        Assert.InRange(run.Output.Split('\n').Length, 10, 25);
     }
 
     [Theory]
