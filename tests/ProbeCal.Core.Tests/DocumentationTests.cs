@@ -48,6 +48,7 @@ public class DocumentationTests
     [InlineData(typeof(TotalDissolvedGas))]
     [InlineData(typeof(TotalDissolvedGasUncertainty))]
     [InlineData(typeof(SaltingOutWeisenbergerSchumpe1996))]
+    [InlineData(typeof(WinklerTitration))]
     public void Equation_StatesSourceAndAccuracy(Type type)
     {
         string text = Members.Single(member => (string?)member.Attribute("name") == "T:" + type.FullName).Value;
@@ -59,7 +60,7 @@ public class DocumentationTests
     [Fact]
     public void EveryDouble_CarriesItsUnit()
     {
-        const string InName = "(?i)celsius|hectopascal|kilopascal|atmospheres?$|bar$|mercury|psi$|kelvin|metres?$|seconds|percent|per(litre|kilogram|millilitre|mole)|siemens|kilograms?percubicmetre|relative|factor|ratio|salinity|^[xy]$|its90|ipts68";
+        const string InName = "(?i)celsius|hectopascal|kilopascal|atmospheres?$|bar$|mercury|psi$|kelvin|metres?$|seconds|percent|milli(litres|grams)$|per(litre|kilogram|millilitre|mole)|siemens|kilograms?percubicmetre|relative|factor|ratio|salinity|^[xy]$|its90|ipts68";
         const string InText = "°C|\\bK\\b|hPa|mg/L|%|mol|kg|unit|1/K|[rR]esponse|[sS]ignal|[rR]elative|percent|fraction|times|same|positive";
         string[] nameless = [.. from type in typeof(Status).Assembly.GetExportedTypes()
                                 where type.IsAbstract && type.IsSealed

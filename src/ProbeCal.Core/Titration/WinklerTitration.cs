@@ -54,7 +54,7 @@ public static class WinklerTitration
     /// <param name="titreMillilitres">Thiosulfate used, mL.</param>
     /// <param name="blankMillilitres">Blank of the standardisation, mL; its sensitivity is the titre's with the other sign.</param>
     /// <param name="perStandardMillilitre">∂c/∂(volume of the standard), mol/L per mL; NaN unless Ok.</param>
-    /// <param name="perStandardNormality">∂c/∂(its concentration), 1; NaN unless Ok.</param>
+    /// <param name="perStandardNormality">∂c/∂(its concentration), mol/L per mol/L; NaN unless Ok.</param>
     /// <param name="perTitreMillilitre">∂c/∂titre, mol/L per mL, negative; NaN unless Ok.</param>
     /// <returns>As <see cref="Titrant"/>.</returns>
     public static Status TitrantSensitivities(

@@ -58,7 +58,7 @@ internal static class TitrationReference
         double swelling = Swelling(at, titration.DrawCelsius, out double swellingPerKelvin);
         ReferenceSum sum = TransferReference.OfConcentration(at, drawn * swelling, drawn * swellingPerKelvin, out double hectopascal);
         Add(ReferenceInputs.Titre, Quantity(titre, Scatter(titration.TitreMillilitres), ScatterSource), perTitre);
-        Add(ReferenceInputs.Burette, Quantity(titre, titration.BuretteStandardUncertaintyMillilitres, BuretteSource(titration, titre)), perTitre);
+        Add(ReferenceInputs.Burette, Quantity(0, titration.BuretteStandardUncertaintyMillilitres, BuretteSource(titration, titre)), perTitre);
         Add(ReferenceInputs.Blank, titration.Blank, -perTitre);
         Add(ReferenceInputs.Titrant, titration.Titrant, perTitrant);
         Add(ReferenceInputs.Flask, titration.Flask, perFlask);
