@@ -30,6 +30,15 @@ internal sealed class Clauses
         {
             throw Wrong("there is nothing there");
         }
+
+        for (int i = 1; i + 1 < text.Length; i++)
+        {
+            // Behind a unit a comma parts two values; between digits somebody meant a decimal mark or left the unit out.
+            if (text[i] == ',' && char.IsAsciiDigit(text[i - 1]) && char.IsAsciiDigit(text[i + 1]))
+            {
+                throw Wrong("a comma between digits is no decimal mark here; write a point, and its unit behind every value");
+            }
+        }
     }
 
     internal bool IsAtEnd => _at == _words.Length;

@@ -231,8 +231,8 @@ internal static class ProcedureSteps
                     [
                         "Set out 4 to 6 flasks of known volume, manganese solution, alkaline iodide, acid, titrant and its standard.",
                         "Titrate the standard and a blank today: thiosulfate loses strength.",
-                        "Ask what is in the water: chlorine, sulfite, nitrite without azide, iron, colour or sludge spoil a titration.",
                     ],
+                    LookFor = ["What is in the water: chlorine, sulfite, nitrite without azide, iron, colour or sludge spoil a titration."],
                     WriteDown = "flask volumes, and date and result of standard and blank",
                     Cautions = [Cautions.AlkalineIodide, Cautions.Acid],
                     Source = "samples " + OceanGliders + "; standards and blanks daily " + CruiseReports + "; interferents EPA method 360.1",
