@@ -6,78 +6,59 @@ using ProbeCal.Station.Entry;
 
 namespace ProbeCal.Station.Calibrating;
 
-/// <summary>Limits against what was found, and the budget of the slope.</summary>
+/// <summary>Limits against what was found.</summary>
 internal static class Judgement
 {
-    internal const string DecisionRule = "simple acceptance: an error within its limit passes, whatever its uncertainty";
+    internal const string DecisionRule = "simple acceptance: an error within its limit passes, whatever its uncertainty U (k = 2), which is printed beside it with limit/U";
 
+    /// <summary>Every limit that applies, judged. In a calibration the errors as left and a checked zero decide, in a check those of the calibration in force.</summary>
+    /// <param name="setup">The set-up.</param>
+    /// <param name="points">The points taken.</param>
+    /// <param name="calibration">The new calibration; for a check the one in force.</param>
     internal static List<RecordedLimit> Limits(CalibrationSetup setup, IReadOnlyList<RecordedPoint> points, ProbeCalibration calibration)
     {
+        bool check = setup.Purpose == CalibrationRecord.CheckPurpose;
         List<RecordedLimit> limits = [];
-        if (Fitting.Point(points, CalibrationIds.SpanPoint) is RecordedPoint span)
+        foreach (RecordedPoint point in points)
         {
-            limits.Add(Saturation("as-found", setup, span, decides: false));
-            limits.Add(AsFoundBand(span));
+            switch (point.Role)
+            {
+                case CalibrationIds.SpanPoint:
+                    limits.Add(Saturation("as-found", setup, point, calibration, decides: check));
+                    if (point.ErrorMilligramsPerLitre != null && point.ReferenceMilligramsPerLitre != 0)
+                    {
+                        limits.Add(AsFoundBand(point));
+                    }
+
+                    break;
+                case CalibrationIds.AsLeftPoint:
+                    limits.Add(Saturation(CalibrationIds.AsLeftPoint, setup, point, calibration, decides: true));
+                    break;
+                case CalibrationIds.ZeroPoint:
+                    limits.Add(Zero(setup, point, calibration, decides: check || setup.ZeroPlan == CalibrationIds.ZeroCheck));
+                    break;
+                default:
+                    limits.Add(Saturation(point.Role, setup, point, calibration, decides: check));
+                    break;
+            }
         }
 
-        if (Fitting.Point(points, CalibrationIds.AsLeftPoint) is RecordedPoint asLeft)
+        if (!check && setup.Limits.SlopeLow is double low && setup.Limits.SlopeHigh is double high)
         {
-            limits.Add(Saturation(CalibrationIds.AsLeftPoint, setup, asLeft, decides: true));
+            limits.Add(Slope(low, high, calibration, setup));
         }
 
-        if (Fitting.Point(points, CalibrationIds.ZeroPoint) is RecordedPoint zero)
-        {
-            limits.Add(Zero(setup, zero));
-        }
-
-        if (setup.Limits.SlopeLow is double low && setup.Limits.SlopeHigh is double high)
-        {
-            limits.Add(Slope(low, high, calibration.Slope, setup.Probe.SignalUnit));
-        }
-
-        return limits;
+        return [.. limits.OrderBy(static limit => limit.Decides ? 0 : 1)];
     }
 
     internal static string[] Reasons(IEnumerable<RecordedLimit> limits)
     {
-        return [.. limits.Where(static limit => limit.Decides && limit.Verdict != "pass").Select(Sentence)];
+        return [.. limits.Where(static limit => limit.Decides && limit.Verdict != Decision.Pass).Select(Sentence)];
     }
 
     internal static RecordedContribution[] Budget(CalibrationSetup setup, RecordedPoint point, RecordedZero zero, ProbeCalibration fit)
     {
-        RecordedThermometer thermometer = setup.Probe.Thermometer;
-        RecordedTemperatureCoefficient coefficient = setup.Probe.TemperatureCoefficient;
-        bool compensates = fit.Model.CompensatesTemperature;
-        string unit = setup.Probe.SignalUnit.Length == 0 ? "signal" : setup.Probe.SignalUnit;
-        List<RecordedContribution> lines =
-        [
-            Line("thermometer offset", UncertaintySource.ThermometerOffset, thermometer.CommonStandardUncertaintyCelsius, "K", thermometer.Source),
-            Line("temperature at the point", UncertaintySource.TemperatureAtCalibration, point.Temperature.StandardUncertainty, "K", "reading and scatter over the window"),
-            Line("pressure", UncertaintySource.PressureAtCalibration, point.Pressure.StandardUncertainty, "hPa", point.Pressure.UncertaintySource ?? "entered"),
-            Line("signal at the point", UncertaintySource.SignalAtCalibration, point.SignalStandardUncertainty, unit, "scatter, drift and resolution over the window"),
-            Line("zero", UncertaintySource.Zero, zero.SignalStandardUncertainty, unit, ZeroSource(zero)),
-            Line("temperature coefficient", UncertaintySource.TemperatureCoefficient, coefficient.StandardUncertainty, coefficient.Unit,
-                compensates ? "acts only away from the temperature of the calibration" : coefficient.UncertaintySource ?? coefficient.Source),
-            Line("state of the reference", UncertaintySource.ReferenceState, setup.ReferenceStateRelative * 100, "%", ReferenceStateSource(setup)),
-        ];
-        if (setup.AirToWaterRatio is RecordedQuantity ratio)
-        {
-            lines.Add(Line("air-to-water ratio", UncertaintySource.AirToWaterRatio, ratio.StandardUncertainty, "1", ratio.UncertaintySource ?? ratio.Source));
-        }
-
-        return [.. lines];
-
-        RecordedContribution Line(string input, UncertaintySource what, double uncertainty, string itsUnit, string source)
-        {
-            return new RecordedContribution
-            {
-                Input = input,
-                StandardUncertainty = uncertainty,
-                Unit = itsUnit,
-                SlopePercent = Math.Abs(fit.SlopeContribution(what)) * 100,
-                Source = source,
-            };
-        }
+        return SlopeBudget.Of(setup, point, zero, fit);
     }
 
     internal static string ReferenceStateSource(CalibrationSetup setup)
@@ -94,28 +75,32 @@ internal static class Judgement
             return $"{limit.Check}: could not be judged against {limit.Limit}";
         }
 
-        return $"{limit.Check} {Number.Fixed(found, 3)} {limit.Unit} is outside its limit, {limit.Limit} ({limit.Source})";
+        string what = $"{limit.Check} {Number.Fixed(found, 3)} {limit.Unit} is";
+        return limit.Verdict == Decision.Inconclusive
+            ? $"{what} within its limit, {limit.Limit} ({limit.Source}), but inconclusive: {(limit.GuardBand is double band ? $"not by the guard band of {Number.Fixed(band, 3)} {limit.Unit}" : limit.Applied)}"
+            : $"{what} outside its limit, {limit.Limit} ({limit.Source})";
     }
 
-    private static RecordedLimit Saturation(string check, CalibrationSetup setup, RecordedPoint point, bool decides)
+    private static RecordedLimit Saturation(string check, CalibrationSetup setup, RecordedPoint point, ProbeCalibration calibration, bool decides)
     {
         CalibrationLimits limits = setup.Limits;
         Status status = AcceptanceLimit.AtSaturation(
-            point.ReferenceMilligramsPerLitre, limits.SaturationMilligramsPerLitre, limits.SaturationPercent, out double limit, out AppliedLimit applied);
-        string verdict = point.ErrorMilligramsPerLitre is not double error || status != Status.Ok
-            ? "not-judged"
-            : AcceptanceLimit.Passes(error, limit) ? "pass" : "fail";
-        return new RecordedLimit
+            point.ReferenceMilligramsPerLitre, limits.SaturationMilligramsPerLitre, limits.SaturationPercent, out double width, out AppliedLimit applied);
+        string which = applied == AppliedLimit.Relative
+            ? $"the {Number.Print(limits.SaturationPercent)} % applied: {Number.Fixed(width, 3)} mg/L"
+            : $"the {Number.Print(limits.SaturationMilligramsPerLitre)} mg/L applied: {Number.Fixed(width, 3)} mg/L";
+        RecordedLimit limit = new()
         {
             Check = check,
             Limit = limits.SaturationText,
-            Applied = status == Status.Ok ? Number.Fixed(limit, 3) + " mg/L" + (applied == AppliedLimit.Relative ? " (the % limit)" : "") : null,
+            Applied = status == Status.Ok ? which : null,
             Source = limits.SaturationSource,
-            Found = point.ErrorMilligramsPerLitre,
+            Found = status == Status.Ok ? point.ErrorMilligramsPerLitre : null,
             Unit = "mg/L",
-            Verdict = verdict,
+            Verdict = Decision.NotJudged,
             Decides = decides,
         };
+        return Decision.Judged(limit, width, ErrorUncertainty.InMilligramsPerLitre(setup, point, calibration), limits.GuardBand);
     }
 
     private static RecordedLimit AsFoundBand(RecordedPoint span)
@@ -128,32 +113,33 @@ internal static class Judgement
             Source = CalibrationLimits.OceanPractice,
             Found = percent,
             Unit = "%",
-            Verdict = percent is not double read ? "not-judged" : Math.Abs(read - 100) <= FitGuards.AsFoundPercent ? "pass" : "fail",
+            Verdict = percent is not double read ? Decision.NotJudged : Math.Abs(read - 100) <= FitGuards.AsFoundPercent ? Decision.Pass : Decision.Fail,
             Decides = false,
         };
     }
 
-    private static RecordedLimit Zero(CalibrationSetup setup, RecordedPoint zero)
+    private static RecordedLimit Zero(CalibrationSetup setup, RecordedPoint zero, ProbeCalibration calibration, bool decides)
     {
-        string verdict = zero.ErrorMilligramsPerLitre is not double error
-            ? "not-judged"
-            : AcceptanceLimit.Passes(error, setup.Limits.ZeroMilligramsPerLitre) ? "pass" : "fail";
-        return new RecordedLimit
+        // A zero that is adjusted was out of its limit for a reason, so that it does not decide; a check that fails fails the calibration.
+        RecordedLimit limit = new()
         {
             Check = CalibrationIds.ZeroPoint,
             Limit = setup.Limits.ZeroText,
             Source = setup.Limits.ZeroSource,
             Found = zero.ErrorMilligramsPerLitre,
             Unit = "mg/L",
-            Verdict = verdict,
-            // A zero that is adjusted was out of its limit for a reason; a check that fails fails the calibration.
-            Decides = setup.ZeroPlan == CalibrationIds.ZeroCheck,
+            Verdict = Decision.NotJudged,
+            Decides = decides,
         };
+        return Decision.Judged(limit, setup.Limits.ZeroMilligramsPerLitre, ErrorUncertainty.InMilligramsPerLitre(setup, zero, calibration), setup.Limits.GuardBand);
     }
 
-    private static RecordedLimit Slope(double low, double high, double slope, string signalUnit)
+    private static RecordedLimit Slope(double low, double high, ProbeCalibration calibration, CalibrationSetup setup)
     {
-        string unit = (signalUnit.Length == 0 ? "signal" : signalUnit) + "/hPa";
+        string unit = (setup.Probe.SignalUnit.Length == 0 ? "signal" : setup.Probe.SignalUnit) + "/hPa";
+        double slope = calibration.Slope;
+        double expanded = Decision.CoverageFactor * Math.Abs(slope) * calibration.SlopeRelativeUncertainty();
+        // A window has two ends; it is judged by simple acceptance, with U beside it.
         return new RecordedLimit
         {
             Check = "slope",
@@ -161,15 +147,11 @@ internal static class Judgement
             Source = CalibrationLimits.Entered,
             Found = slope,
             Unit = unit,
-            Verdict = low <= slope && slope <= high ? "pass" : "fail",
+            ExpandedUncertainty = double.IsFinite(expanded) ? expanded : null,
+            CoverageFactor = double.IsFinite(expanded) ? Decision.CoverageFactor : null,
+            LimitToUncertainty = double.IsFinite(expanded) && 0 < expanded ? (high - low) / 2 / expanded : null,
+            Verdict = low <= slope && slope <= high ? Decision.Pass : Decision.Fail,
             Decides = true,
         };
-    }
-
-    private static string ZeroSource(RecordedZero zero)
-    {
-        return zero.IsMeasured
-            ? "scatter over the window, and oxygen left in the zero solution (our choice, no source)"
-            : "residual current of up to 1 % of the 100 % signal, rectangular (from memory)";
     }
 }

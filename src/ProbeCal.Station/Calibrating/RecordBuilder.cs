@@ -28,6 +28,7 @@ internal static class RecordBuilder
         List<RecordedLimit> limits = Judgement.Limits(setup, state.Points, calibration);
         string[] reasons = Judgement.Reasons(limits);
         RecordedContribution[] budget = Judgement.Budget(setup, slopePoint, fit.Zero, calibration);
+        (string drawn, Finding? disagreement) = SlopeBudget.Check(setup, slopePoint, fit.Zero, calibration, budget);
         return new CalibrationRecord
         {
             Simulated = setup.Simulated,
@@ -56,7 +57,7 @@ internal static class RecordBuilder
                 UncertaintySource = Judgement.ReferenceStateSource(setup),
             },
             Equation = EquationNames.NameOf(setup.Equation),
-            Formulas = Formulas,
+            Formulas = [.. Formulas, drawn],
             Points = [.. state.Points],
             SlopeFrom = fit.SlopeFrom,
             Zero = fit.Zero,
@@ -70,10 +71,10 @@ internal static class RecordBuilder
                 ZeroStandardUncertainty = calibration.ZeroResponseUncertainty,
                 Pass = reasons.Length == 0,
                 Reasons = reasons,
-                DecisionRule = Judgement.DecisionRule,
+                DecisionRule = Decision.RuleOf(setup.Limits),
             },
             Limits = [.. limits],
-            Findings = [.. state.Findings],
+            Findings = disagreement == null ? [.. state.Findings] : [.. state.Findings, disagreement.ToRecord(null)],
             Budget = budget,
             Software = software,
             Remarks = setup.Remarks,
