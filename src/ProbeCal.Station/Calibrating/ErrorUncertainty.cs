@@ -38,7 +38,7 @@ internal static class ErrorUncertainty
         double Read(double signal, double warmer)
         {
             _ = Correction.PartialPressure(
-                calibration, point.FlowFactor * ratio, signal, point.Temperature.Value + warmer, point.Pressure.Value, RangeRule.Extrapolate, out double read);
+                calibration, point.FlowFactor * ratio, signal, point.Temperature.Value + warmer, point.Pressure.Value, 0, RangeRule.Extrapolate, out double read);
             return read;
         }
     }

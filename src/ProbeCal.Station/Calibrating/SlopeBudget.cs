@@ -136,7 +136,7 @@ internal static class SlopeBudget
     private sealed class Drawing(CalibrationSetup setup, RecordedPoint point, RecordedZero zero, string[] names)
     {
         private readonly IProbeModel _model = RecordConversion.Model(setup.Probe);
-        private readonly AmperometricProbe _membrane = Membrane(setup.Probe);
+        private readonly AmperometricProbe? _membrane = setup.Probe.MeterSettings == null ? null : Membrane(setup.Probe);
 
         internal double Slope(ReadOnlySpan<double> inputs)
         {
@@ -144,19 +144,19 @@ internal static class SlopeBudget
             double celsius = Drawn(inputs, "temperature at the point", point.Temperature.Value) + offset;
             double hectopascal = Drawn(inputs, "pressure", point.Pressure.Value);
             RecordedTemperatureCoefficient coefficient = setup.Probe.TemperatureCoefficient with { Value = Drawn(inputs, "temperature coefficient", setup.Probe.TemperatureCoefficient.Value) };
-            bool meter = _model.CompensatesTemperature;
+            bool meter = _membrane != null;
             // What a meter shows was made with its own thermometer and barometer, so that their errors went into both ways of it.
             IProbeModel model = meter ? _model : RecordConversion.Model(setup.Probe with { TemperatureCoefficient = coefficient });
             double shownAt = meter ? point.Temperature.Value : celsius;
             double shownUnder = meter ? point.Pressure.Value : hectopascal;
             // Outside a range the value goes on as it does in readings; where there is none it is NaN, and so is the slope.
-            _ = model.Response(Drawn(inputs, "signal at the point", point.Signal.Mean), shownAt, shownUnder, RangeRule.Extrapolate, out double response);
-            _ = model.Response(Drawn(inputs, "zero", zero.Signal), zero.TemperatureCelsius, zero.PressureHectopascal, RangeRule.Extrapolate, out double zeroResponse);
+            _ = model.Response(Drawn(inputs, "signal at the point", point.Signal.Mean), shownAt, shownUnder, 0, RangeRule.Extrapolate, out double response);
+            _ = model.Response(Drawn(inputs, "zero", zero.Signal), zero.TemperatureCelsius, zero.PressureHectopascal, 0, RangeRule.Extrapolate, out double zeroResponse);
             _ = OxygenEquilibrium.PartialPressure(celsius, hectopascal, RangeRule.Extrapolate, out double reference);
             _ = model.Gain(shownAt, RangeRule.Extrapolate, out double gain);
             if (meter)
             {
-                _ = _membrane.Gain(celsius, RangeRule.Extrapolate, out double taken);
+                _ = _membrane!.Gain(celsius, RangeRule.Extrapolate, out double taken);
                 _ = _membrane.Gain(point.Temperature.Value, RangeRule.Extrapolate, out double right);
                 gain *= taken / right;
             }
