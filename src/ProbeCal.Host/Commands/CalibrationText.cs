@@ -18,7 +18,7 @@ internal static class CalibrationText
     /// <summary>Writes the whole record.</summary>
     internal static void Write(TextWriter output, CalibrationRecord record)
     {
-        output.WriteLine($"Calibration {record.Id}: {(record.Result.Pass ? "PASS" : "FAIL")}{(record.Simulated ? "   (SIMULATED: no real probe was calibrated)" : "")}");
+        output.WriteLine($"Calibration {record.Id}: {Decision.Of(record).ToUpperInvariant()}{(record.Simulated ? "   (SIMULATED: no real probe was calibrated)" : "")}");
         foreach (string reason in record.Result.Reasons)
         {
             TextTable.WriteWrapped(output, "  ", "    ", reason);
@@ -120,42 +120,67 @@ internal static class CalibrationText
 
     private static void WriteLimits(TextWriter output, CalibrationRecord record)
     {
-        output.WriteLine("Limits (" + record.Result.DecisionRule + ")");
-        List<string[]> rows = [["check", "found", "limit", "verdict"]];
+        output.WriteLine("Limits");
+        TextTable.WriteWrapped(output, "  ", "  ", "Decision rule: " + record.Result.DecisionRule + ".");
+        List<string[]> rows = [["check", "found", "U (k = 2)", "limit", "limit/U", "verdict"]];
         List<string> sources = [];
         foreach (RecordedLimit limit in record.Limits)
         {
             string found = limit.Found is double value ? Number.Fixed(value, 3) + " " + limit.Unit : "-";
-            string applied = limit.Applied is string which ? $"{limit.Limit}: {which}" : limit.Limit;
-            if (!sources.Contains(limit.Source))
-            {
-                sources.Add(limit.Source);
-            }
-
-            int source = 1 + sources.IndexOf(limit.Source);
-            rows.Add([limit.Check, found, $"{applied} [{Number.Print(source)}]", limit.Verdict + (limit.Decides ? "" : " (for information)")]);
+            string expanded = limit.ExpandedUncertainty is double u ? Number.Fixed(u, 3) : "-";
+            string ratio = limit.LimitToUncertainty is double times ? Number.Fixed(times, 1) : "-";
+            string width = (limit.Applied ?? limit.Limit).Split("; ")[0];
+            rows.Add([limit.Check, found, expanded, $"{width} [{Reference(sources, $"{limit.Limit} ({limit.Source})")}]", ratio, limit.Verdict + (limit.Decides ? "" : ", for information")]);
         }
 
         TextTable.Write(output, rows, "  ");
-        for (int i = 0; i < sources.Count; i++)
-        {
-            TextTable.WriteWrapped(output, $"  [{Number.Print(i + 1)}] ", "      ", sources[i]);
-        }
-
+        WriteReferences(output, sources);
         output.WriteLine();
     }
 
     private static void WriteBudget(TextWriter output, CalibrationRecord record)
     {
-        output.WriteLine("Uncertainty of the slope (k = 1)");
-        List<string[]> rows = [["input", "u", "% of slope", "source"]];
+        output.WriteLine("Uncertainty of the slope (k = 1), largest first");
+        List<string[]> rows = [["input", "value", "u", "unit", "distribution", "%/unit", "% of slope", "share %", ""]];
+        List<string> sources = [];
         foreach (RecordedContribution line in record.Budget)
         {
-            rows.Add([line.Input, Number.Significant(line.StandardUncertainty, Digits) + " " + line.Unit, Number.Fixed(line.SlopePercent, 3), line.Source]);
+            rows.Add(
+            [
+                line.Input,
+                line.Value is double value ? Number.Significant(value, Digits) : "-",
+                Number.Significant(line.StandardUncertainty, 3),
+                line.Unit,
+                line.Distribution ?? "-",
+                line.SensitivityPercent is double per ? Number.Significant(per, 3) : "-",
+                Number.Fixed(line.SlopePercent, 3),
+                line.SharePercent is double share ? Number.Fixed(share, 1) : "-",
+                $"[{Reference(sources, line.Source)}]",
+            ]);
         }
 
         TextTable.Write(output, rows, "  ");
+        WriteReferences(output, sources);
         output.WriteLine();
+    }
+
+    /// <summary>Number of a text in a list of references, which takes it up when it is new.</summary>
+    private static string Reference(List<string> references, string text)
+    {
+        if (!references.Contains(text))
+        {
+            references.Add(text);
+        }
+
+        return Number.Print(1 + references.IndexOf(text));
+    }
+
+    private static void WriteReferences(TextWriter output, List<string> references)
+    {
+        for (int i = 0; i < references.Count; i++)
+        {
+            TextTable.WriteWrapped(output, $"  [{Number.Print(i + 1)}] ", "      ", references[i]);
+        }
     }
 
     private static void WriteFindings(TextWriter output, CalibrationRecord record)

@@ -86,9 +86,7 @@ internal static class Judgement
         CalibrationLimits limits = setup.Limits;
         Status status = AcceptanceLimit.AtSaturation(
             point.ReferenceMilligramsPerLitre, limits.SaturationMilligramsPerLitre, limits.SaturationPercent, out double width, out AppliedLimit applied);
-        string which = applied == AppliedLimit.Relative
-            ? $"the {Number.Print(limits.SaturationPercent)} % applied: {Number.Fixed(width, 3)} mg/L"
-            : $"the {Number.Print(limits.SaturationMilligramsPerLitre)} mg/L applied: {Number.Fixed(width, 3)} mg/L";
+        string which = Number.Fixed(width, 3) + (applied == AppliedLimit.Relative ? " mg/L, the % limit" : " mg/L, the mg/L limit");
         RecordedLimit limit = new()
         {
             Check = check,
