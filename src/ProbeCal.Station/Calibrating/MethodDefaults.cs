@@ -64,7 +64,7 @@ internal static class MethodDefaults
 
     /// <summary>
     /// Student's t for 95 % over 1.96: what the standard deviation of a few titres is enlarged by, so that an interval of 1.96 standard uncertainties still holds 95 %. From the tables of the
-    /// distribution (JCGM 100, table G.2); 1 beyond 30 titres is 4 % too small at most.
+    /// distribution (JCGM 100, table G.2, from memory); beyond ten titres up to 5 % too large.
     /// </summary>
     /// <param name="count">Number of titres, from 2.</param>
     internal static double FewTitres(int count)

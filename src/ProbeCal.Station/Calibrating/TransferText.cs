@@ -10,7 +10,7 @@ namespace ProbeCal.Station.Calibrating;
 /// </summary>
 /// <remarks>
 /// Units: mg/L, µmol/L, a pressure (partial pressure of the gas; total pressure for a probe of total gas), <c>%local</c> (of saturation at the local pressure), <c>%1atm</c> (at one atmosphere). A bare % is
-/// refused: at 500 m the two differ by 6 %. Without a correction, the register's for that id is taken where it is in the same unit. The option is <c>--transfer</c>, and the text behind
+/// refused: at 500 m the two differ by 6 %. Without a correction, the register's for that id is taken, which must be in the unit of the reading. The option is <c>--transfer</c>, and the text behind
 /// <c>transfer-standard:</c> of a further level.
 /// </remarks>
 internal static class TransferText
@@ -33,19 +33,13 @@ internal static class TransferText
 
         id = PlainText.Id(what, id);
         RecordedQuantity shown = Read(clauses, "reading");
-        RecordedQuantity? correction = null;
-        if (clauses.Takes("correction"))
-        {
-            correction = Read(clauses, "correction");
-        }
-        else if (clauses.IsAtEnd)
-        {
-            correction = register?.Invoke(id);
-        }
-
+        bool given = clauses.Takes("correction");
+        RecordedQuantity? correction = given ? Read(clauses, "correction") : register?.Invoke(id);
         if (correction != null && correction.Unit != shown.Unit)
         {
-            throw clauses.Wrong($"the reading is in {shown.Unit} and the correction in {correction.Unit}; give both in one unit");
+            throw clauses.Wrong(given
+                ? $"the reading is in {shown.Unit} and the correction in {correction.Unit}; give both in one unit"
+                : $"the register's correction of {id} is in {correction.Unit}; write the reading in that unit, or a correction in {shown.Unit}");
         }
 
         if (!clauses.IsAtEnd)

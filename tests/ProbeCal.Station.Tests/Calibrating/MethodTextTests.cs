@@ -82,6 +82,17 @@ public class MethodTextTests
         Assert.Equal(1013.25 / 760, pressure.Shown.StandardUncertainty, 12);
     }
 
+    /// <summary>A certificate's correction is taken unless one is given; in another unit it is neither taken nor left out in silence.</summary>
+    [Fact]
+    public void Transfer_TakesTheCorrectionOfTheRegister()
+    {
+        RecordedQuantity certified = new() { Value = 0.07, Unit = "mg/L", StandardUncertainty = 0.02, Source = "register:STD-3" };
+        Assert.Same(certified, TransferText.Parse("--transfer", "STD-3 8.41mg/L u 0.05mg/L", id => id == "STD-3" ? certified : null).Correction);
+        Assert.Null(TransferText.Parse("--transfer", "STD-4 8.41mg/L u 0.05mg/L", id => id == "STD-3" ? certified : null).Correction);
+        Assert.Equal(0.01, TransferText.Parse("--transfer", "STD-3 8.41mg/L u 0.05mg/L correction 0.01mg/L u 0mg/L", _ => certified).Correction!.Value);
+        Refused(() => TransferText.Parse("--transfer", "STD-3 165hPa u 1hPa", _ => certified), "the register's correction of STD-3 is in mg/L");
+    }
+
     [Theory]
     [InlineData("", "there is nothing there")]
     [InlineData("STD-3", "the reading is missing")]

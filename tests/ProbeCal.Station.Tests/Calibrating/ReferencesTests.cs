@@ -79,7 +79,7 @@ public class ReferencesTests(ITestOutputHelper output)
 
     /// <summary>
     /// The titration by hand: mean titre 8.035 mL, less the blank, at 0.02501 mol/L and a quarter of 31.9988 g/mol, less 0.00243 mg of the reagents, in 298.2 mL: 5.3744 mg/L where the samples were drawn. The water
-    /// warmed by 0.4 K since and its litre holds 0.0076 % less (0.19 per mille per kelvin at 20 °C).
+    /// warmed by 0.4 K since and its litre holds 0.0082 % less (water expands by 0.21 per mille per kelvin at 20 °C).
     /// </summary>
     [Fact]
     public void Titration_ByHand()
