@@ -50,6 +50,7 @@ internal static class Program
             CalibrationsCommand.Create(terminal),
             RegisterCommand.Create(terminal),
             ServiceCommand.Create(terminal),
+            CharacteriseCommand.Create(terminal),
             StationCommand.Create(terminal),
             SimulateCommand.Create(terminal),
             DemoCommand.Create(terminal),

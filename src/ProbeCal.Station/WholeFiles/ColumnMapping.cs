@@ -28,23 +28,29 @@ internal sealed class ColumnMapping
         Quantity = quantity;
         _column = column;
         _unitText = unitText;
-        Kind = quantity.Kinds[0];
+        Kind = quantity.Kinds.Length == 0 ? null : quantity.Kinds[0];
     }
 
     internal ColumnQuantity Quantity { get; }
 
-    /// <summary>The kind of the unit; of use after <see cref="Resolve"/>.</summary>
-    internal QuantityKind Kind { get; private set; }
+    /// <summary>The kind of the unit; of use after <see cref="Resolve"/>. Null for a column that is taken as it stands.</summary>
+    internal QuantityKind? Kind { get; private set; }
+
+    /// <summary>The unit; of use after <see cref="Resolve"/>. Null for a column that is taken as it stands.</summary>
+    internal QuantityUnit? Unit => _unit;
+
+    /// <summary>The text in brackets; null when there is none.</summary>
+    internal string? UnitText => _unitText;
 
     /// <summary>Which column, from 0; of use after <see cref="Resolve"/>.</summary>
     internal int Index { get; private set; } = -1;
 
     /// <summary>Name of the unit; of use after <see cref="Resolve"/>.</summary>
-    internal string UnitName => _unit!.Name;
+    internal string UnitName => _unit?.Name ?? _unitText ?? "";
 
     /// <summary>What was understood, for a person to look at.</summary>
     internal string Explanation => Quantity.Name + " from column " + (Index + 1).ToString(CultureInfo.InvariantCulture)
-        + (_unit is null || _unit.Name.Length == 0 ? "" : ", " + _unit.Name);
+        + (UnitName.Length == 0 ? "" : ", " + UnitName);
 
     /// <summary>Reads a mapping.</summary>
     /// <exception cref="InputException">It is none, or its quantity is unknown.</exception>
@@ -100,6 +106,11 @@ internal sealed class ColumnMapping
     {
         Index = Find(header);
         string? unitText = _unitText;
+        if (Kind is null)
+        {
+            return;
+        }
+
         if (unitText is null)
         {
             if (Kind.BareUnit is null)
@@ -159,7 +170,7 @@ internal sealed class ColumnMapping
             return "a point where --decimal-comma promises commas";
         }
 
-        if (Entry.Quantity.TrySplit(Kind, decimalComma ? text.Replace(',', '.') : text, _unit, out _, out QuantityUnit? unit, out string? problem))
+        if (Entry.Quantity.TrySplit(Kind!, decimalComma ? text.Replace(',', '.') : text, _unit, out _, out QuantityUnit? unit, out string? problem))
         {
             return unit == _unit ? null : $"the cell says {unit.Name} and the mapping {_unit!.Name}; one of them is wrong";
         }

@@ -6,7 +6,7 @@ namespace ProbeCal.Station.WholeFiles;
 
 /// <summary>A quantity that may come from a column, and the kinds that its unit may be of.</summary>
 /// <param name="Name">As the option for a single value is called, without its dashes.</param>
-/// <param name="Kinds">Most have one; a concentration may be a mass or an amount.</param>
+/// <param name="Kinds">Most have one; a concentration may be a mass or an amount; a raw signal and a time have none and are taken as they stand.</param>
 public sealed record ColumnQuantity(string Name, params QuantityKind[] Kinds);
 
 /// <summary>A column that is appended to each row.</summary>
