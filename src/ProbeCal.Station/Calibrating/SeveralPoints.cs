@@ -20,8 +20,9 @@ internal static class SeveralPoints
 
     private const string WeightedLeastSquares = "weighted-least-squares";
     private const string ErrorsInBoth = "errors-in-both";
-    private const string Severinghaus = "severinghaus";
-    private const string TotalGas = "total-gas";
+
+    /// <summary>Points are taken at the surface, or in a bath: no water stands above the probe, dbar.</summary>
+    private const double Surface = 0;
 
     /// <summary>Rounds in which the weights follow the slope; the third changes them by less than a thousandth.</summary>
     private const int Rounds = 6;
@@ -29,7 +30,7 @@ internal static class SeveralPoints
     private const double LnTen = 2.302585092994046;
 
     /// <summary>Models whose response may fall as the partial pressure rises.</summary>
-    private static readonly string[] EitherSign = [Severinghaus, "linear", "quadratic"];
+    private static readonly string[] EitherSign = ["severinghaus", "linear", "quadratic"];
 
     /// <summary>Fits, or says in one line why not.</summary>
     /// <param name="probe">The probe.</param>
@@ -50,7 +51,7 @@ internal static class SeveralPoints
         }
 
         IProbeModel model = RecordConversion.Model(probe);
-        bool logarithmic = probe.Model == Severinghaus;
+        bool logarithmic = model.IsLogarithmic;
         Point[] made = new Point[points.Count];
         for (int i = 0; i < made.Length; i++)
         {
@@ -78,7 +79,7 @@ internal static class SeveralPoints
             return (null, $"the quadratic turns round between {Number.Significant(low, 4)} and {Number.Significant(high, 4)} hPa, so that one response would have two answers; fit a line, or look at the points");
         }
 
-        return (Record(probe, gas, points, made, parameters, fit!, degree, low, high), null);
+        return (Record(model, gas, points, made, parameters, fit!, degree, low, high), null);
     }
 
     private static string? Solve(Point[] points, int degree, double[] parameters, out FitResult? fit)
@@ -138,7 +139,7 @@ internal static class SeveralPoints
     }
 
     private static RecordedFit Record(
-        RecordedProbe probe, Gas gas, IReadOnlyList<RecordedPoint> recorded, Point[] points, double[] parameters, FitResult fit, int degree, double low, double high)
+        IProbeModel model, Gas gas, IReadOnlyList<RecordedPoint> recorded, Point[] points, double[] parameters, FitResult fit, int degree, double low, double high)
     {
         int unknowns = degree + 1;
         Influence influence = new(points, parameters, fit);
@@ -187,7 +188,7 @@ internal static class SeveralPoints
             LackOfFit = LackOf(points, parameters, fit),
             LowestHectopascal = low,
             HighestHectopascal = high,
-            Residuals = [.. points.Select((point, i) => Residual(probe, gas, recorded[i], point, parameters, fit, i))],
+            Residuals = [.. points.Select((point, i) => Residual(model, gas, recorded[i], point, parameters, fit, i))],
         };
     }
 
@@ -214,7 +215,7 @@ internal static class SeveralPoints
             : null;
     }
 
-    private static RecordedResidual Residual(RecordedProbe probe, Gas gas, RecordedPoint recorded, Point point, double[] parameters, FitResult fit, int index)
+    private static RecordedResidual Residual(IProbeModel model, Gas gas, RecordedPoint recorded, Point point, double[] parameters, FitResult fit, int index)
     {
         double u = (point.Response - parameters[0]) / (point.Gain * parameters[1]);
         double bend = 1 + (4 * u * parameters[2] / parameters[1]);
@@ -222,11 +223,11 @@ internal static class SeveralPoints
         double x = 0 <= bend
             ? 2 * u / (1 + Math.Sqrt(bend))
             : point.X + (fit.Residual(index) / (point.Gain * point.SlopeAt(parameters)));
-        double hectopascal = probe.Model == Severinghaus ? Math.Exp(x * LnTen) : x;
+        double hectopascal = model.IsLogarithmic ? Math.Exp(x * LnTen) : x;
         double off = hectopascal - point.Hectopascal;
         double? milligrams = null;
         const double Some = 100;
-        if (probe.Model != TotalGas && GasEquilibrium.ConcentrationFromPartialPressure(
+        if (!model.IsTotalPressure && GasEquilibrium.ConcentrationFromPartialPressure(
             gas, GasDefaults.Equation(gas), recorded.Temperature.Value, recorded.Salinity.Value, recorded.Pressure.Value, Some, RangeRule.Refuse, out double concentration) == Status.Ok)
         {
             milligrams = off * concentration / Some;
@@ -282,8 +283,8 @@ internal static class SeveralPoints
     /// <summary>One point brought onto the scale of the fit, its uncertainties sorted by what they are common to.</summary>
     private sealed class Point
     {
+        private double _responsePerKelvin;
         private double _perKelvinGain;
-        private double _perKelvinResponse;
         private double _perCoefficientGain;
         private double _referencePerKelvin;
         private double _temperature;
@@ -310,17 +311,17 @@ internal static class SeveralPoints
         {
             point = null!;
             double celsius = recorded.Temperature.Value;
-            Status status = model.Response(recorded.Signal.Mean, celsius, recorded.Pressure.Value, 0, RangeRule.Refuse, out double response);
+            Status status = model.Response(recorded.Signal.Mean, celsius, recorded.Pressure.Value, Surface, RangeRule.Refuse, out double response);
             double perSignal = double.NaN;
             double gain = double.NaN;
-            if (status == Status.Ok) { status = model.ResponsePerSignal(recorded.Signal.Mean, celsius, recorded.Pressure.Value, 0, RangeRule.Refuse, out perSignal); }
+            if (status == Status.Ok) { status = model.ResponsePerSignal(recorded.Signal.Mean, celsius, recorded.Pressure.Value, Surface, RangeRule.Refuse, out perSignal); }
             if (status == Status.Ok) { status = model.Gain(celsius, RangeRule.Refuse, out gain); }
             double perKelvin = double.NaN;
             double perCoefficient = double.NaN;
+            double responsePerKelvin = double.NaN;
+            if (status == Status.Ok) { status = model.ResponsePerKelvin(recorded.Signal.Mean, celsius, Surface, out responsePerKelvin); }
             if (status == Status.Ok) { status = model.GainPerKelvin(celsius, out perKelvin); }
             if (status == Status.Ok) { status = model.GainPerCoefficient(celsius, out perCoefficient); }
-            double responsePerKelvin = 0;
-            if (status == Status.Ok) { status = model.ResponsePerKelvin(recorded.Signal.Mean, celsius, 0, out responsePerKelvin); }
             if (status != Status.Ok)
             {
                 return $"its signal {Number.Print(recorded.Signal.Mean)} at {Number.Print(celsius)} C makes no response ({status})";
@@ -343,8 +344,8 @@ internal static class SeveralPoints
                 Gain = scale,
                 Response = response,
                 _signal = perSignal * recorded.SignalStandardUncertainty,
+                _responsePerKelvin = responsePerKelvin,
                 _perKelvinGain = perKelvin,
-                _perKelvinResponse = responsePerKelvin,
                 _perCoefficientGain = model.CompensatesTemperature ? 0 : perCoefficient,
                 _temperature = recorded.Temperature.StandardUncertainty,
             };
@@ -358,10 +359,10 @@ internal static class SeveralPoints
             return parameters[1] + (2 * parameters[2] * X);
         }
 
-        /// <summary>Response that the fit would miss by for one kelvin of the thermometer: through the gain, and through the reference.</summary>
+        /// <summary>Response that the fit would miss by for one kelvin of the thermometer: through the response itself, the gain, and the reference.</summary>
         internal double PerKelvin(double[] parameters)
         {
-            return _perKelvinResponse - (Gain * ((_perKelvinGain * ((parameters[1] * X) + (parameters[2] * X * X))) + (SlopeAt(parameters) * _referencePerKelvin)));
+            return _responsePerKelvin - (Gain * ((_perKelvinGain * ((parameters[1] * X) + (parameters[2] * X * X))) + (SlopeAt(parameters) * _referencePerKelvin)));
         }
 
         internal double PerCoefficient(double[] parameters)
