@@ -66,6 +66,7 @@ if [ "$setup" = 1 ] && [ "$(id -u)" = 0 ] && command -v apt-get >/dev/null 2>&1;
   command -v socat >/dev/null 2>&1 || missing="$missing socat"
   command -v openssl >/dev/null 2>&1 || missing="$missing openssl"
   /usr/bin/python3 -c 'import gsw' >/dev/null 2>&1 || missing="$missing python3-gsw"
+  /usr/bin/python3 -c 'import scipy.odr' >/dev/null 2>&1 || missing="$missing python3-scipy"
   command -v qemu-aarch64 >/dev/null 2>&1 && [ -e /usr/aarch64-linux-gnu/lib/libstdc++.so.6 ] || missing="$missing qemu-user libc6-arm64-cross libstdc++6-arm64-cross libgcc-s1-arm64-cross"
   command -v clang >/dev/null 2>&1 || command -v gcc >/dev/null 2>&1 || missing="$missing gcc libc6-dev"
   command -v arm-none-eabi-gcc >/dev/null 2>&1 || missing="$missing gcc-arm-none-eabi"

@@ -20,6 +20,7 @@ public class ReleasedOutputTests
     [InlineData("water")]
     [InlineData("total-gas")]
     [InlineData("henry")]
+    [InlineData("characterisation")]
     public void Version1_fits_the_published_schema(string kind)
     {
         using JsonDocument released = JsonDocument.Parse(File.ReadAllText(Sample(kind, "version-1.json")));
@@ -59,6 +60,8 @@ public class ReleasedOutputTests
     [InlineData("calibration-list", "\"count\": 2", "\"count\": \"two\"")]
     [InlineData("water", "\"salinitySource\":\"conductivity\"", "\"salinitySource\":\"taste\"")]
     [InlineData("total-gas", "\"version\":1", "\"version\":2")]
+    [InlineData("characterisation", "\"part\": \"zero\"", "\"part\": \"nothing\"")]
+    [InlineData("characterisation", "\"standardUncertainty\":", "\"uncertainty\":")]
     [InlineData("henry", "\"form\":\"Kcc\"", "\"form\":\"Kxc\"")]
     [InlineData("henry", "\"given\":null", "\"given\":{\"form\":\"Hcp\",\"value\":1}")]
     public void Schema_refuses_what_is_something_else(string kind, string good, string bad)

@@ -20,7 +20,7 @@ internal static class CharacterisationText
             List<string[]> rows = [];
             foreach (Estimate each in part.Parameters.Concat(part.Derived))
             {
-                UncertainNumber number = new(each.Value, part.CoverageFactor * each.StandardUncertainty, each.Unit);
+                UncertainNumber number = new(each.Value, (each.CoverageFactor ?? part.CoverageFactor) * each.StandardUncertainty, each.Unit);
                 rows.Add([each.Name, number.Value + (number.Uncertainty is null ? "" : " ± " + number.Uncertainty) + (number.Unit.Length == 0 ? "" : " " + number.Unit), "u " + Number.Significant(each.StandardUncertainty, 3)]);
             }
 

@@ -8,7 +8,11 @@ namespace ProbeCal.Station.Characterising;
 /// <param name="Value">The value.</param>
 /// <param name="StandardUncertainty">Its standard uncertainty (k = 1), from the scatter of the run.</param>
 /// <param name="Unit">Unit of both; empty for a ratio.</param>
-public sealed record Estimate(string Name, double Value, double StandardUncertainty, string Unit);
+public sealed record Estimate(string Name, double Value, double StandardUncertainty, string Unit)
+{
+    /// <summary>How many standard uncertainties hold 95 %, where it is another figure than that of the part.</summary>
+    public double? CoverageFactor { get; init; }
+}
 
 /// <summary>One part of the run: what was found, with covariance and how well it fits.</summary>
 public sealed record CharacterisedPart

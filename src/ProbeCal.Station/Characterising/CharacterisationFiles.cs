@@ -125,6 +125,11 @@ public static class CharacterisationFiles
             w.WriteNumber("value", each.Value);
             w.WriteNumber("standardUncertainty", each.StandardUncertainty);
             w.WriteString("unit", each.Unit);
+            if (each.CoverageFactor is double k)
+            {
+                w.WriteNumber("coverageFactor95", k);
+            }
+
             w.WriteEndObject();
         }
 

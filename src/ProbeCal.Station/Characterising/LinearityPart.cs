@@ -35,6 +35,11 @@ internal static class LinearityPart
         double[] gains = Gains(run, points, gain, out string note);
         double[] y = [.. points.Select(static point => point.Signal)];
         FitResult line = Solve(run, p, gains, y, 1);
+        if (line.Parameter(1) == 0)
+        {
+            throw new InputException($"{run.Name}: the signal does not change with the partial pressure; is it the right column?");
+        }
+
         string unit = run.SignalUnit.Length == 0 ? "1" : run.SignalUnit;
         List<Estimate> derived = [LinearityError(line, level, levels, p, gains, span)];
         double[] covariance = [line.Covariance(0, 0), line.Covariance(0, 1), line.Covariance(1, 0), line.Covariance(1, 1)];
@@ -42,9 +47,10 @@ internal static class LinearityPart
         if (LeastLevels < points.Count)
         {
             FitResult curve = Solve(run, p, gains, y, 2);
-            derived.Add(new("curvature", curve.Parameter(2), curve.StandardUncertainty(2), unit + "/hPa2"));
+            double k = Quantiles.StudentHalfWidth(0.95, curve.DegreesOfFreedom);
+            derived.Add(new("curvature", curve.Parameter(2), curve.StandardUncertainty(2), unit + "/hPa2") { CoverageFactor = k });
             double t = Math.Abs(curve.Parameter(2)) / curve.StandardUncertainty(2);
-            if (Quantiles.StudentHalfWidth(0.95, curve.DegreesOfFreedom) < t)
+            if (k < t && double.IsFinite(t))
             {
                 notes.Add(string.Create(CultureInfo.InvariantCulture, $"the curvature is {t:F1} times its standard uncertainty: the probe is bent, and a quadratic calibration serves it better"));
             }

@@ -69,7 +69,7 @@ internal static class TemperaturePart
         return new CharacterisedPart
         {
             Part = Name,
-            Model = string.Create(CultureInfo.InvariantCulture, $"signal = {zero.Value:R} + S · f(T) · p, f {name}, 1 at {reference:R} C"),
+            Model = string.Create(CultureInfo.InvariantCulture, $"signal = {Number.Significant(zero.Value, 5)} + S · f(T) · p, f {name}, 1 at {reference:R} C"),
             Parameters = estimates,
             Covariance = covariance,
             Rows = run.Rows.Count,

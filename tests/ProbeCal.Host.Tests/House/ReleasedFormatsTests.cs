@@ -37,6 +37,7 @@ public class ReleasedFormatsTests
         ["probecal-water"] = ("water/version-1.json", "water"),
         ["probecal-total-gas"] = ("total-gas/version-1.json", "total-gas"),
         ["probecal-henry"] = ("henry/version-1.json", "henry"),
+        ["probecal-characterisation"] = ("characterisation/version-1.json", "characterisation"),
         ["probecal-truth"] = ("truth/version-1.csv", null),
     };
 

@@ -72,6 +72,7 @@ public class RoomsTests
         ["Journal"] = ["Entry", "Storage"],
         ["Publishing"] = ["Entry", "Journal"],
         ["Calibrating"] = ["Entry", "CalibrationLog", "Uncertainty"],
+        ["Characterising"] = ["Entry", "WholeFiles", "CalibrationLog", "Calibrating", "Uncertainty", "Storage"],
         ["Engine"] = ["Entry", "Sources", "CalibrationLog", "Configuration", "Journal", "Publishing"],
     };
 

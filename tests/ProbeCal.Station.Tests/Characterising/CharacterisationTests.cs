@@ -48,7 +48,7 @@ public sealed class CharacterisationTests(ITestOutputHelper output) : IDisposabl
             {
                 (Estimate estimate, CharacterisedPart part) = Find(found, truths[i].Name);
                 // The curvature is judged by the fit that has one parameter more.
-                double k = truths[i].Name == "curvature" ? ProbeCal.Station.Uncertainty.Quantiles.StudentHalfWidth(0.95, part.DegreesOfFreedom - 1) : part.CoverageFactor;
+                double k = estimate.CoverageFactor ?? part.CoverageFactor;
                 inside[i] += Math.Abs(estimate.Value - truths[i].Truth) <= k * estimate.StandardUncertainty ? 1 : 0;
             }
         }
@@ -182,6 +182,7 @@ public sealed class CharacterisationTests(ITestOutputHelper output) : IDisposabl
     [InlineData("linearity", "I [nA],pO2 [hPa]\n1,0\n60,200\n61,201\n", "linearity needs at least 3 levels of partial pressure, and there are 2")]
     [InlineData("linearity", "I [nA],pO2 [hPa],T [C]\n1,0,5\n30,100,15\n60,200,25\n", "the temperature runs from 5.0 to 25.0 C, and no temperature coefficient is known")]
     [InlineData("linearity", "I [nA],pO2 [hPa]\n1,0\n30,x\n", "line 3: partial-pressure unreadable, x")]
+    [InlineData("linearity", "I [nA],pO2 [hPa]\n5,0\n5,100\n5,200\n", "the signal does not change with the partial pressure")]
     [InlineData("linearity", "I [nA],pO2 [hPa]\n1,0\n30\n", "line 3: 1 cells where the header has 2")]
     [InlineData("linearity", "I [nA],pO2 [hPa]\n", "there are no rows under the header")]
     [InlineData("zero", "I [nA]\n0.4\n0.5\n", "2 readings without the gas; a residual current with its uncertainty needs at least 3")]
