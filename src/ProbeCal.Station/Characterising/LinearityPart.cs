@@ -35,7 +35,7 @@ internal static class LinearityPart
         double[] gains = Gains(run, points, gain, out string note);
         double[] y = [.. points.Select(static point => point.Signal)];
         FitResult line = Solve(run, p, gains, y, 1);
-        if (line.Parameter(1) == 0)
+        if (y.Max() == y.Min())
         {
             throw new InputException($"{run.Name}: the signal does not change with the partial pressure; is it the right column?");
         }
