@@ -14,11 +14,14 @@ internal static class CalibrationsCommand
 {
     internal static Command Create(Terminal terminal)
     {
-        return new Command("calibrations", "What the calibration log holds: list, show, verify, withdraw.")
+        return new Command("calibrations", "What the calibration log holds: list, show, verify, export, import, brackets, withdraw.")
         {
             CalibrationsList.Create(terminal),
             Show(terminal),
             CalibrationsVerify.Create(terminal),
+            CalibrationsExchange.Export(terminal),
+            CalibrationsExchange.Import(terminal),
+            CalibrationsBrackets.Create(terminal),
             Withdraw(terminal),
         };
     }

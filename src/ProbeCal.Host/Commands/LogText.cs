@@ -20,6 +20,7 @@ internal static class LogText
             EquipmentRecord => "equipment",
             ServiceRecord => "service",
             AmendmentRecord => "withdrawal",
+            PastCalibrationRecord => "past calibration",
             _ => entry.Format,
         };
     }
@@ -33,6 +34,7 @@ internal static class LogText
             EquipmentRecord equipment => equipment.Equipment,
             ServiceRecord service => service.Probe,
             AmendmentRecord amendment => amendment.Of,
+            PastCalibrationRecord past => past.Probe,
             _ => "",
         };
     }
@@ -44,6 +46,7 @@ internal static class LogText
         {
             CalibrationRecord record => record.CompletedUtc,
             ServiceRecord service => service.At,
+            PastCalibrationRecord past => past.At,
             _ => entry.WrittenUtc ?? DateTimeOffset.UnixEpoch,
         };
     }
@@ -57,6 +60,7 @@ internal static class LogText
             EquipmentRecord equipment => equipment.EquipmentKind + (equipment.Description is string what ? ", " + what : ""),
             ServiceRecord service => service.Event + (service.Membrane is string membrane ? ", " + membrane : ""),
             AmendmentRecord amendment => amendment.Reason,
+            PastCalibrationRecord past => $"{past.Method ?? "method not stated"}{(past.AsFoundErrorMilligramsPerLitre is double error ? $", as found {CalibrationText.Signed(error, 3)} mg/L" : "")}, from {past.File} line {Number.Print(past.Line)}",
             _ => "",
         };
     }
@@ -170,6 +174,9 @@ internal static class LogText
                 Add("membrane", service.Membrane);
                 Add("remarks", service.Remarks);
                 break;
+            case PastCalibrationRecord past:
+                WritePast(past, Add);
+                break;
             case AmendmentRecord amendment:
                 Add("withdraws", amendment.Of);
                 Add("reason", amendment.Reason);
@@ -187,6 +194,32 @@ internal static class LogText
             {
                 rows.Add([name, value]);
             }
+        }
+    }
+
+    private static void WritePast(PastCalibrationRecord past, Action<string, string?> add)
+    {
+        add("standing", "imported from a table: not judged again, never in force");
+        add("made (UTC)", past.DayOnly ? past.At.ToString("yyyy-MM-dd", CultureInfo.InvariantCulture) : CalibrationText.Time(past.At));
+        add("from", $"{past.File}, line {Number.Print(past.Line)}, file SHA-256 {past.FileSha256}");
+        add("row", Wrong.OneLine(past.Row));
+        add("method", past.Method);
+        add("membrane", past.Membrane);
+        Amount("temperature", past.TemperatureCelsius, " °C");
+        Amount("pressure", past.PressureHectopascal, " hPa");
+        Amount("salinity", past.Salinity, "");
+        Amount("signal", past.Signal, past.SignalUnit is string unit ? " " + unit : "");
+        Amount("slope", past.Slope, "");
+        Amount("zero", past.Zero, "");
+        Amount("reference", past.ReferenceMilligramsPerLitre, " mg/L");
+        Amount("before", past.BeforeMilligramsPerLitre, " mg/L");
+        Amount("after", past.AfterMilligramsPerLitre, " mg/L");
+        add("verdict as stated", past.StatedVerdict);
+        add("remarks", past.Remarks);
+
+        void Amount(string name, double? value, string unit)
+        {
+            add(name, value is double number ? Number.Print(number) + unit : null);
         }
     }
 

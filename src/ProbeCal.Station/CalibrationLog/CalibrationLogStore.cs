@@ -66,6 +66,13 @@ public sealed class CalibrationLogStore : IDisposable
             ?? throw new InputException($"log {Wrong.Shown(logId)}: it was not imported here{NearestName.DidYouMean(logId, _imported.Select(static log => log.LogId))}; the log of this folder is {LogId}, imported are {(_imported.Count == 0 ? "none" : string.Join(", ", _imported.Select(static log => log.LogId)))}");
     }
 
+    /// <summary>The entries of this log or of an imported one, oldest first.</summary>
+    /// <exception cref="InputException">None of this id was imported.</exception>
+    public IReadOnlyList<StoredEntry> EntriesOf(string logId)
+    {
+        return logId == LogId ? _entries : Imported(logId).Entries;
+    }
+
     /// <summary>Opens the log for writing, making it when it is not there and migrating an older one after a backup copy.</summary>
     /// <param name="path">The file, <see cref="DataDirectory.CalibrationLogFile"/>.</param>
     /// <param name="time">Gives the time at which entries are written, and that in the names of backup copies.</param>
@@ -93,34 +100,89 @@ public sealed class CalibrationLogStore : IDisposable
     /// <exception cref="WorkFailedException">The chain has a fault, or the entry could not be stored; nothing was added.</exception>
     public StoredEntry Append(LogEntry entry)
     {
+        return AppendAll([entry])[0];
+    }
+
+    /// <summary>Adds entries at the end, all of them or none. They are on the disk when this returns.</summary>
+    /// <exception cref="InputException">One amends or replaces an entry that is not there; nothing was added.</exception>
+    /// <exception cref="WorkFailedException">The chain has a fault, or the entries could not be stored; nothing was added.</exception>
+    public IReadOnlyList<StoredEntry> AppendAll(IReadOnlyList<LogEntry> entries)
+    {
         RequireWhole();
-        RequireReferred(entry);
-        long index = Chain.Count + 1;
-        LogEntry placed = entry with
+        List<(LogEntry Entry, byte[] Bytes, string Hash)> placed = [];
+        string previous = Chain.HeadSha256;
+        foreach (LogEntry entry in entries)
         {
-            LogId = LogId,
-            Index = index,
-            Id = string.Create(CultureInfo.InvariantCulture, $"{LogId}-{index:0000}"),
-            PreviousSha256 = Chain.HeadSha256,
-            WrittenUtc = _time!.GetUtcNow(),
-        };
-        byte[] bytes = RecordJson.ToBytes(placed);
-        string hash = LogReading.Hash(bytes);
-        try
-        {
-            LogTables.Insert(_file, placed, bytes, hash);
-        }
-        catch (SqliteException fault)
-        {
-            throw SqliteFaults.AsWorkFailed(fault, _file.Path);
+            RequireReferred(entry);
+            long index = Chain.Count + placed.Count + 1;
+            LogEntry next = entry with
+            {
+                LogId = LogId,
+                Index = index,
+                Id = string.Create(CultureInfo.InvariantCulture, $"{LogId}-{index:0000}"),
+                PreviousSha256 = previous,
+                WrittenUtc = _time!.GetUtcNow(),
+            };
+            byte[] bytes = RecordJson.ToBytes(next);
+            previous = LogReading.Hash(bytes);
+            placed.Add((next, bytes, previous));
         }
 
-        StoredEntry stored = new(placed, hash);
-        _entries.Add(stored);
-        _records.AddRange(CalibrationsOf([stored]));
+        Store(() => LogTables.Insert(_file, placed));
+        StoredEntry[] stored = [.. placed.Select(static each => new StoredEntry(each.Entry, each.Hash))];
+        _entries.AddRange(stored);
+        _records.AddRange(CalibrationsOf(stored));
         _standing = new Standing(_entries, _imported);
-        Chain = Chain with { Count = index, HeadSha256 = hash, Hashes = new Dictionary<long, string>(Chain.Hashes) { [index] = hash } };
+        Dictionary<long, string> hashes = new(Chain.Hashes);
+        foreach (StoredEntry each in stored)
+        {
+            hashes[each.Entry.Index] = each.Sha256;
+        }
+
+        Chain = Chain with { Count = Chain.Count + stored.Length, HeadSha256 = previous, Hashes = hashes };
         return stored;
+    }
+
+    /// <summary>Keeps a log made elsewhere beside this one, with its own id and chain, or lengthens the one that was imported before.</summary>
+    /// <returns>Number of entries that were new.</returns>
+    /// <exception cref="InputException">It is this log itself with entries that this one lacks, or it diverges from what is here; nothing was imported.</exception>
+    /// <exception cref="WorkFailedException">A chain here has a fault, or the entries could not be stored; nothing was imported.</exception>
+    public long Import(LogImport log)
+    {
+        RequireWhole();
+        ImportedLog? known = _imported.Find(each => each.LogId == log.LogId);
+        ChainState here = log.LogId == LogId ? Chain : known?.Chain ?? new ChainState(0, LogReading.NoHash, []);
+        long common = Math.Min(here.Count, log.Chain.Count);
+        for (long index = 1; index <= common; index++)
+        {
+            if (here.Hashes[index] != log.Chain.Hashes[index])
+            {
+                throw Wrong.Input("file", log.Origin, string.Create(CultureInfo.InvariantCulture,
+                    $"entry {index} of log {log.LogId} is another here than in the file: one of the two was written anew; nothing was imported, compare both with a head kept elsewhere"));
+            }
+        }
+
+        if (log.LogId == LogId && here.Count < log.Chain.Count)
+        {
+            throw Wrong.Input("file", log.Origin, string.Create(CultureInfo.InvariantCulture,
+                $"this is the log of this folder itself, and it has {log.Chain.Count - here.Count} entries more than the folder's: that one was cut off or is an older copy; nothing was imported, put the newer file back"));
+        }
+
+        List<(LogEntry Entry, byte[] Bytes, string Hash)> more = [];
+        for (int i = (int)common; i < log.Entries.Count; i++)
+        {
+            more.Add((log.Entries[i].Entry, log.Bytes[i], log.Entries[i].Sha256));
+        }
+
+        if (more.Count != 0)
+        {
+            Store(() => LogTables.InsertImported(_file, log.LogId, log.Origin, _time!.GetUtcNow(), more));
+            _imported.Clear();
+            _imported.AddRange(LogTables.ReadImported(_file));
+            _standing = new Standing(_entries, _imported);
+        }
+
+        return more.Count;
     }
 
     /// <summary>Adds a calibration or check at the end, as <see cref="Append(LogEntry)"/> does.</summary>
@@ -271,6 +333,18 @@ public sealed class CalibrationLogStore : IDisposable
         {
             file.Dispose();
             throw;
+        }
+    }
+
+    private void Store(Action insert)
+    {
+        try
+        {
+            insert();
+        }
+        catch (SqliteException fault)
+        {
+            throw SqliteFaults.AsWorkFailed(fault, _file.Path);
         }
     }
 

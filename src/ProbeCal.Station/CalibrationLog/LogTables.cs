@@ -64,13 +64,20 @@ internal static class LogTables
         return logs;
     }
 
-    /// <summary>Adds an entry to the log of this file.</summary>
-    internal static void Insert(SqliteFile file, LogEntry placed, byte[] bytes, string hash)
+    /// <summary>Adds entries to the log of this file: all of them or none.</summary>
+    internal static void Insert(SqliteFile file, IEnumerable<(LogEntry Entry, byte[] Bytes, string Hash)> entries)
     {
-        using SqliteCommand command = file.Connection.CreateCommand();
-        command.CommandText = "INSERT INTO records (idx, calibration_id, kind, probe_id, completed_us, bytes, sha256) VALUES ($idx, $id, $kind, $subject, $at, $bytes, $sha256)";
-        AddEntry(command, placed, bytes, hash);
-        command.ExecuteNonQuery();
+        using SqliteTransaction transaction = file.Connection.BeginTransaction();
+        foreach ((LogEntry entry, byte[] bytes, string hash) in entries)
+        {
+            using SqliteCommand command = file.Connection.CreateCommand();
+            command.Transaction = transaction;
+            command.CommandText = "INSERT INTO records (idx, calibration_id, kind, probe_id, completed_us, bytes, sha256) VALUES ($idx, $id, $kind, $subject, $at, $bytes, $sha256)";
+            AddEntry(command, entry, bytes, hash);
+            command.ExecuteNonQuery();
+        }
+
+        transaction.Commit();
     }
 
     /// <summary>Adds entries to an imported log, which it begins when it is not there: all of them or none.</summary>

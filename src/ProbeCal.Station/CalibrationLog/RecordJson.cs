@@ -31,6 +31,7 @@ internal static class RecordJson
         [EquipmentRecord.FormatName] = (EquipmentRecord.CurrentVersion, "equipment entry", Context.EquipmentRecord),
         [ServiceRecord.FormatName] = (ServiceRecord.CurrentVersion, "service entry", Context.ServiceRecord),
         [AmendmentRecord.FormatName] = (AmendmentRecord.CurrentVersion, "amendment", Context.AmendmentRecord),
+        [PastCalibrationRecord.FormatName] = (PastCalibrationRecord.CurrentVersion, "past calibration", Context.PastCalibrationRecord),
     };
 
     /// <summary>The entry as the bytes that the log keeps.</summary>
@@ -101,5 +102,6 @@ internal sealed record RecordHead
 [JsonSerializable(typeof(EquipmentRecord))]
 [JsonSerializable(typeof(ServiceRecord))]
 [JsonSerializable(typeof(AmendmentRecord))]
+[JsonSerializable(typeof(PastCalibrationRecord))]
 [JsonSerializable(typeof(RecordHead))]
 internal sealed partial class RecordJsonContext : JsonSerializerContext;

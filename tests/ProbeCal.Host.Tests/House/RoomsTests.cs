@@ -68,6 +68,8 @@ public class RoomsTests
         ["Simulation"] = ["Entry", "Sources"],
         ["Sources"] = ["Entry", "Simulation"],
         ["CalibrationLog"] = ["Entry", "Storage"],
+        ["PastCalibrations"] = ["Entry", "CalibrationLog", "WholeFiles"],
+        ["Bracketing"] = ["Entry", "CalibrationLog", "Journal", "WholeFiles"],
         ["Configuration"] = ["Entry", "Sources"],
         ["Journal"] = ["Entry", "Storage"],
         ["Publishing"] = ["Entry", "Journal"],
