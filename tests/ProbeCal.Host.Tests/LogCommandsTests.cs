@@ -1,36 +1,16 @@
 using System;
-using System.Collections.Generic;
 using System.IO;
 using System.Linq;
 using System.Text.Json;
 using System.Text.Json.Nodes;
 using System.Threading.Tasks;
-using Microsoft.Data.Sqlite;
-using ProbeCal.Host.Tests.House;
 using Xunit;
 
 namespace ProbeCal.Host.Tests;
 
 /// <summary><c>register</c>, <c>service</c> and the commands of <c>calibrations</c> on a log that version 1 left behind: probes P-17 and M-3.</summary>
-public sealed class LogCommandsTests : IDisposable
+public sealed class LogCommandsTests : LogFolder
 {
-    private const string First = "8c6e44e20ee5-0001";
-    private const string Head = "2:42452343d8b8997287ec3c3e138ad7af24229e7d663950528d9511748961ba6d";
-    private readonly string _folder = Directory.CreateTempSubdirectory("probecal-log-").FullName;
-    private readonly Clock _time = new();
-
-    public LogCommandsTests()
-    {
-        File.Copy(Path.Combine(Repository.Root, "tests/Formats/calibration-log-v1.db"), LogFile);
-    }
-
-    private string LogFile => Path.Combine(_folder, "calibrations.db");
-
-    public void Dispose()
-    {
-        Directory.Delete(_folder, recursive: true);
-    }
-
     [Fact]
     public async Task Register_KeepsTheNewestEntry_AndSaysWhatIsOverdue()
     {
@@ -42,7 +22,7 @@ public sealed class LogCommandsTests : IDisposable
         Assert.Contains("2026-11-30 OVERDUE", list.Output, StringComparison.Ordinal);
         Assert.Contains("0.1002, u 0.0005", list.Output, StringComparison.Ordinal);
 
-        _time.Now += TimeSpan.FromDays(1);
+        Time.Now += TimeSpan.FromDays(1);
         Run again = await Ok("register", "add", "B-12", "--due", "2027-11-30");
         Assert.Contains("takes the place of entry 8c6e44e20ee5-0003", again.Output, StringComparison.Ordinal);
         Assert.DoesNotContain("OVERDUE", (await Ok("register", "list")).Output, StringComparison.Ordinal);
@@ -131,7 +111,7 @@ public sealed class LogCommandsTests : IDisposable
         Assert.Contains("head " + Head, alone.Output, StringComparison.Ordinal);
 
         await Ok("register", "add", "CYL-4", "--kind", "cylinder");
-        string certificate = Path.Combine(_folder, "certificate.html");
+        string certificate = Path.Combine(Folder, "certificate.html");
         await File.WriteAllTextAsync(certificate, $"<p>log head <code>{Head}</code></p>");
         Run kept = await Ok("calibrations", "verify", "--head", Head, "--head", certificate);
         Assert.Contains("the first 2 entries are those of this head; 1 were added since", Unfolded(kept), StringComparison.Ordinal);
@@ -177,71 +157,5 @@ public sealed class LogCommandsTests : IDisposable
         Assert.Contains("2 records, chain whole", (await Ok("calibrations", "list")).Output, StringComparison.Ordinal);
         await Ok("calibrations", "verify", "--head", Head);
         Assert.Equal(before, await File.ReadAllBytesAsync(LogFile));
-    }
-
-    private void Raw(string sql)
-    {
-        using SqliteConnection raw = new($"Data Source={LogFile};Pooling=False");
-        raw.Open();
-        using SqliteCommand command = raw.CreateCommand();
-        command.CommandText = sql;
-        command.ExecuteNonQuery();
-    }
-
-    private async Task<Run> Ok(params string[] arguments)
-    {
-        Run run = await Run(arguments);
-        Assert.True(run.ExitCode == 0, run.Error);
-        return run;
-    }
-
-    private async Task<JsonNode> Json(string schema, params string[] arguments)
-    {
-        Run run = await Ok([.. arguments, "--format", "json"]);
-        AssertValid(schema, run.Output);
-        return JsonNode.Parse(run.Output)!;
-    }
-
-    private static void AssertValid(string schema, string output)
-    {
-        using JsonDocument parsed = JsonDocument.Parse(output);
-        Assert.True(Schemas.Of(schema).Evaluate(parsed.RootElement).IsValid, output);
-    }
-
-    /// <summary>A sample of a new format is written once, on request; from then on it must fit the schema for ever.</summary>
-    private static void Keep(JsonNode json, string kind, int version = 1)
-    {
-        string sample = Path.Combine(Repository.Root, "tests/Formats", kind, $"version-{version}.json");
-        if (Environment.GetEnvironmentVariable("PROBECAL_UPDATE") == "1" && !File.Exists(sample))
-        {
-            Directory.CreateDirectory(Path.GetDirectoryName(sample)!);
-            File.WriteAllText(sample, json.ToJsonString(new JsonSerializerOptions { WriteIndented = true }) + "\n");
-        }
-
-        AssertValid(kind, File.ReadAllText(sample));
-    }
-
-    private static string Unfolded(Run run)
-    {
-        return string.Join(' ', run.Output.Split((char[]?)null, StringSplitOptions.RemoveEmptyEntries));
-    }
-
-    private async Task<Run> Run(params string[] arguments)
-    {
-        StringWriter output = new();
-        StringWriter error = new();
-        Terminal terminal = new() { Input = TextReader.Null, Output = output, Error = error, Time = _time };
-        int code = await Program.RunAsync([.. arguments, "--data", _folder], terminal);
-        return new Run(code, output.ToString(), error.ToString());
-    }
-
-    private sealed class Clock : TimeProvider
-    {
-        internal DateTimeOffset Now { get; set; } = new(2026, 12, 1, 12, 0, 0, TimeSpan.Zero);
-
-        public override DateTimeOffset GetUtcNow()
-        {
-            return Now;
-        }
     }
 }

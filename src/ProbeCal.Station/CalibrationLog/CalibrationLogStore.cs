@@ -165,7 +165,7 @@ public sealed class CalibrationLogStore : IDisposable
         if (log.LogId == LogId && here.Count < log.Chain.Count)
         {
             throw Wrong.Input("file", log.Origin, string.Create(CultureInfo.InvariantCulture,
-                $"this is the log of this folder itself, and it has {log.Chain.Count - here.Count} entries more than the folder's: that one was cut off or is an older copy; nothing was imported, put the newer file back"));
+                $"this is the log of this folder itself, and it has {log.Chain.Count - here.Count} more {(log.Chain.Count - here.Count == 1 ? "entry" : "entries")} than the folder's: that one was cut off or is an older copy; nothing was imported, put the newer file back"));
         }
 
         List<(LogEntry Entry, byte[] Bytes, string Hash)> more = [];

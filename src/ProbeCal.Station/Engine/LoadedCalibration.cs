@@ -32,6 +32,9 @@ internal sealed class LoadedCalibration
     /// <summary>The record's JSON exactly as the log keeps it.</summary>
     public ReadOnlyMemory<byte> Bytes { get; }
 
+    /// <summary>Count and hash of the log when it was loaded, as <c>COUNT:HASH</c>; null when it was not taken from a log.</summary>
+    public string? LogHead { get; init; }
+
     /// <summary>What Core corrects with.</summary>
     public ProbeCalibration Core { get; }
 
@@ -74,7 +77,8 @@ internal sealed class LoadedCalibration
             ? log.Find(id) ?? throw Wrong.Input("calibration", id, "there is no such record in " + logFile + "; 'probecal calibrations list' shows what there is")
             : log.LatestFor(configuration.Probe, now) ?? throw None(logFile, configuration);
         Check(stored.Record, configuration);
-        return new LoadedCalibration(stored.Record, stored.Sha256, log.BytesOf(stored));
+        RefuseWhatNoLongerHolds(stored.Record, log);
+        return new LoadedCalibration(stored.Record, stored.Sha256, log.BytesOf(stored)) { LogHead = log.Chain.Head };
     }
 
     private static InputException None(string logFile, StationConfiguration configuration)
@@ -82,11 +86,29 @@ internal sealed class LoadedCalibration
         return Wrong.Input("probe", configuration.Probe, "no calibration of it that passed is in " + logFile + "; run 'probecal calibrate' first, or set \"calibration\": \"none\" to keep raw samples only");
     }
 
+    private static void RefuseWhatNoLongerHolds(CalibrationRecord record, CalibrationLogStore log)
+    {
+        if (log.WithdrawalOf(record.Id) is AmendmentRecord withdrawal)
+        {
+            throw Wrong.Input("calibration", record.Id, "it was withdrawn by entry " + withdrawal.Id + " (" + withdrawal.Reason + "); name another, or \"latest\"");
+        }
+
+        if (log.ReplacementOf(record.Id) is CalibrationRecord replacement)
+        {
+            throw Wrong.Input("calibration", record.Id, "it was replaced by " + replacement.Id + "; name that one, or \"latest\"");
+        }
+    }
+
     private static void Check(CalibrationRecord record, StationConfiguration configuration)
     {
         if (record.Probe.Id != configuration.Probe)
         {
             throw Wrong.Input("calibration", record.Id, "it is of probe " + record.Probe.Id + ", and this station has " + configuration.Probe);
+        }
+
+        if (record.Purpose != CalibrationRecord.CalibrationPurpose)
+        {
+            throw Wrong.Input("calibration", record.Id, "it is a check, which changes no coefficients; name a calibration, or \"latest\"");
         }
 
         if (!record.Result.Pass)

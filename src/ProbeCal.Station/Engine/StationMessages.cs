@@ -52,6 +52,7 @@ internal sealed class StationMessages
             writer.WriteString("calibration", _calibration?.Record.Id);
             writer.WriteString("validFromUtc", _calibration == null ? null : Json.Time(_calibration.Record.CompletedUtc));
             writer.WriteString("recordSha256", _calibration?.Sha256);
+            writer.WriteString("logHead", _calibration?.LogHead);
             writer.WritePropertyName("record");
             if (_calibration == null)
             {

@@ -9,6 +9,7 @@ using System.Threading;
 using System.Threading.Tasks;
 using Microsoft.Data.Sqlite;
 using MQTTnet.Protocol;
+using ProbeCal.Station.Bracketing;
 using ProbeCal.Station.CalibrationLog;
 using ProbeCal.Station.Configuration;
 using ProbeCal.Station.Engine;
@@ -92,6 +93,50 @@ public sealed class StationRunTests : IDisposable
         string record = Encoding.UTF8.GetString(log.BytesOf(log.Records[0]));
         Assert.Contains("\"record\":" + record, calibration.Text);
         Assert.Contains(log.Records[0].Sha256, calibration.Text);
+        // The head kept retained outside the log: whoever has the message can compare.
+        Assert.Contains("\"logHead\":\"1:" + log.Chain.HeadSha256 + "\"", calibration.Text);
+        Assert.True(LogVerification.Of(log, null, LogHead.FindAll(calibration.Text)).IsSound);
+        Assert.Single(LogHead.FindAll(calibration.Text));
+    }
+
+    [Fact]
+    public async Task JournaledReadings_AreHeldAgainstTheChecks()
+    {
+        await RunAsync(TestBroker.FreePort());
+        using CalibrationLogStore log = CalibrationLogStore.OpenForReading(_folder.File("calibrations.db"));
+        BracketList found = BracketList.OfJournal(log, "do-1", _folder.File("journal.db"));
+        string values = Journal("SELECT count(*) FROM sample WHERE json_extract(reading, '$.mgPerL.value') IS NOT NULL");
+        Assert.NotEqual("0", values);
+        Assert.Equal(values, found.Readings.ToString(System.Globalization.CultureInfo.InvariantCulture));
+        Assert.Equal("no check after it", Assert.Single(found.Spans).Reason);
+        Assert.Equal(found.Readings, found.Spans[0].Count);
+    }
+
+    [Theory]
+    [InlineData("check", "it is a check, which changes no coefficients")]
+    [InlineData("withdrawn", "it was withdrawn by entry")]
+    [InlineData("replaced", "it was replaced by")]
+    public async Task NamedCalibration_ThatDoesNotHold_IsRefused_AndTheLatestIsAnother(string what, string message)
+    {
+        string id;
+        using (CalibrationLogStore log = CalibrationLogStore.OpenForWriting(_folder.File("calibrations.db"), _time, Guid.NewGuid))
+        {
+            CalibrationRecord record = SampleRecords.Of("do-1", SampleRecords.Noon.AddHours(1));
+            id = log.Append(record with { Purpose = what == "check" ? CalibrationRecord.CheckPurpose : CalibrationRecord.CalibrationPurpose }).Record.Id;
+            if (what == "withdrawn")
+            {
+                log.Append(new AmendmentRecord { Of = id, Reason = "dry cup", Software = "probecal 9.9.9" });
+            }
+            else if (what == "replaced")
+            {
+                log.Append(SampleRecords.Of("do-1", SampleRecords.Noon.AddHours(2), pass: false) with { Replaces = id });
+            }
+
+            Assert.Equal(1, log.LatestFor("do-1", SampleRecords.Noon.AddDays(1))?.Record.Index);
+        }
+
+        InputException refused = await Assert.ThrowsAsync<InputException>(() => RunAsync(Configuration(("calibration", JsonSerializer.Serialize(id)))));
+        Assert.Contains("calibration " + id + ": " + message, refused.Message);
     }
 
     [Fact]
