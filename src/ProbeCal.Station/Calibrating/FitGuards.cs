@@ -64,6 +64,12 @@ internal static class FitGuards
             Source = LimitSources.OurChoice,
             Severities = [FindingSeverity.NeedsReason],
         },
+        new(GuardNames.GuardBand, "a guard band, if one was asked for, against the uncertainty of what it judges", GuardBand)
+        {
+            Limit = "U (k = 2) of the error at the 100 % point below its limit",
+            Source = LimitSources.Nature,
+            Severities = [FindingSeverity.Refuse],
+        },
         new(GuardNames.AsFound, "the reading before adjustment", AsFound)
         {
             Limit = "95 to 105 %",
@@ -216,6 +222,22 @@ internal static class FitGuards
             $"the slope is {Number.Fixed(Math.Abs(percent), 0)} % {(percent < 0 ? "below" : "above")} that of {now.Previous.Id}, more than ageing explains; were the old one still right"),
             PossibleError.OfSignal(now.SaturationMilligramsPerLitre, 1 + (percent / 100)),
             "look for a new or torn membrane, a bubble, a wrong pressure, or another unit of the signal");
+    }
+
+    private static Finding? GuardBand(Situation now)
+    {
+        if (!now.Setup.Limits.GuardBand || now.Fit is not ProbeCalibration fit || now.Span is not RecordedPoint span)
+        {
+            return null;
+        }
+
+        CalibrationLimits limits = now.Setup.Limits;
+        Status status = AcceptanceLimit.AtSaturation(span.ReferenceMilligramsPerLitre, limits.SaturationMilligramsPerLitre, limits.SaturationPercent, out double width, out AppliedLimit _);
+        double? expanded = Decision.CoverageFactor * ErrorUncertainty.InMilligramsPerLitre(now.Setup, span, fit);
+        return status != Status.Ok || expanded < width ? null : new Finding(GuardNames.GuardBand, FindingSeverity.Refuse,
+            Decision.NoBand(width, expanded, "mg/L"),
+            PossibleError.Unknown("no reading is wrong by this"),
+            "go on without a guard band (simple acceptance, with U printed beside the limit), or know the reference better");
     }
 
     private static Finding? AsFound(Situation now)
