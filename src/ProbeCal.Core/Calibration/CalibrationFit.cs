@@ -79,7 +79,8 @@ public static class CalibrationFit
         if (status != Status.Ok) { return status; }
         double size = hectopascal * milligramsPerHectopascal;
         if (double.IsInfinity(size)) { return Status.SlopeBelowRange; }
-        milligramsPerLitrePerSignal = size;
+        // A luminescence falls where oxygen rises; the size has no sign.
+        milligramsPerLitrePerSignal = size < 0.0 ? -size : size;
         return Status.Ok;
     }
 
