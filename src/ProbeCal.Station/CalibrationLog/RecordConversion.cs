@@ -11,6 +11,11 @@ internal static class RecordConversion
     /// <exception cref="WorkFailedException">Core refuses its figures: they make no calibration.</exception>
     public static ProbeCalibration ToProbeCalibration(this CalibrationRecord record)
     {
+        if (record.Fit is RecordedFit fit)
+        {
+            return Fitted(record, fit);
+        }
+
         RecordedPoint slopePoint = Array.Find(record.Points, point => point.Role == record.SlopeFrom)
             ?? throw new WorkFailedException($"calibration {record.Id}: it has no point '{record.SlopeFrom}' to take the slope from");
         Status status = ProbeCalibration.Create(
@@ -43,7 +48,82 @@ internal static class RecordConversion
                 coefficient.FittedHighCelsius);
         }
 
-        return new AmperometricProbe(form, coefficient.Value, coefficient.ReferenceCelsius, coefficient.FittedLowCelsius, coefficient.FittedHighCelsius);
+        double Given(string name)
+        {
+            return ModelCoefficients.Value(probe, name);
+        }
+
+        double low = coefficient.FittedLowCelsius;
+        double high = coefficient.FittedHighCelsius;
+        switch (probe.Model)
+        {
+            case "amperometric":
+                return new AmperometricProbe(
+                    form, coefficient.Value, Given(ModelCoefficients.Second), Given(ModelCoefficients.Third), coefficient.ReferenceCelsius, low, high,
+                    Given(ModelCoefficients.Pressure), Given(ModelCoefficients.Residual), Given(ModelCoefficients.ResidualPerKelvin), Given(ModelCoefficients.Flow));
+            case "stern-volmer":
+                return new SternVolmerProbe(
+                    (LuminescenceSignal)Given(ModelCoefficients.SignalKind), form, coefficient.Value, Given(ModelCoefficients.Second), Given(ModelCoefficients.Third),
+                    Given(ModelCoefficients.LifetimePerKelvin), Given(ModelCoefficients.LifetimePerSquareKelvin), Given(ModelCoefficients.Pressure),
+                    coefficient.ReferenceCelsius, low, high);
+            case "uchida-2008":
+                return new Uchida2008Probe(
+                    Given("c0"), Given("c1"), Given("c2"), Given("c3"), Given("c4"), Given("c5"), Given("c6"),
+                    Given(ModelCoefficients.Solubility) == 1 ? SolubilityEquation.BensonKrause1984 : SolubilityEquation.GarciaGordon1992,
+                    (OptodePressureCorrection)Given(ModelCoefficients.DepthCorrection), Given(ModelCoefficients.PhasePerDepth),
+                    Given(ModelCoefficients.Lowest), Given(ModelCoefficients.Highest));
+            case "bittig-2018":
+                return new Bittig2018Probe(
+                    Given("c0"), Given("c1"), Given("c2"), Given("c3"), Given("c4"), Given("c5"), Given("c6"), Given("c7"),
+                    (OptodePressureCorrection)Given(ModelCoefficients.DepthCorrection), Given(ModelCoefficients.PhasePerDepth),
+                    Given(ModelCoefficients.Lowest), Given(ModelCoefficients.Highest));
+            case "severinghaus":
+                return new SeveringhausProbe(
+                    Given(ModelCoefficients.ZeroPerKelvin), Given(ModelCoefficients.Reference), Given(ModelCoefficients.Lowest), Given(ModelCoefficients.Highest));
+            case "total-gas":
+                return new TotalGasProbe(Given(ModelCoefficients.Lowest), Given(ModelCoefficients.Highest));
+            case "linear":
+            case "quadratic":
+                return new GenericProbe(
+                    Given(ModelCoefficients.PerKelvin), Given(ModelCoefficients.Reference), Given(ModelCoefficients.Lowest), Given(ModelCoefficients.Highest));
+            default:
+                throw new InputException(
+                    $"calibration record: the model '{Wrong.Shown(probe.Model)}' is not known to this program{NearestName.DidYouMean(probe.Model, ModelCoefficients.ModelNames)}; use a newer probecal");
+        }
+    }
+
+    /// <summary>The calibration of a fit through several points. A point in air stands for stirred water by its ratio, which the fit has in it.</summary>
+    private static ProbeCalibration Fitted(CalibrationRecord record, RecordedFit fit)
+    {
+        double[] covariance = Padded(fit.Covariance, 6);
+        double[] perKelvin = Padded(fit.PerThermometerKelvin, 3);
+        double[] perCoefficient = Padded(fit.PerTemperatureCoefficient, 3);
+        FittedResponse response = new(
+            fit.Zero, fit.Slope, fit.Curvature,
+            covariance[0], covariance[1], covariance[2], covariance[3], covariance[4], covariance[5],
+            perKelvin[0], perKelvin[1], perKelvin[2], perCoefficient[0], perCoefficient[1], perCoefficient[2],
+            fit.LowestHectopascal, fit.HighestHectopascal);
+        IProbeModel model = Model(record.Probe);
+        RecordedPoint? water = Array.FindLast(record.Points, static point => !(point.Role is "zero" or "as-found"));
+        bool inAir = water == null || (water.Method ?? record.Method) == "water-saturated-air";
+        Status status = ProbeCalibration.CreateFitted(
+            model,
+            model.IsTotalPressure ? Gas.Oxygen : GasNames.Parse("calibration record: gas", record.Gas),
+            response,
+            inAir ? Stirring.Stirred : RecordNames.StirringOf(water!.Stirring),
+            inAir ? 1 : water!.FlowFactor,
+            record.Probe.Thermometer.CommonStandardUncertaintyCelsius,
+            record.Probe.TemperatureCoefficient.StandardUncertainty,
+            out ProbeCalibration? calibration);
+        return calibration ?? throw new WorkFailedException($"calibration {record.Id}: its fit makes no calibration ({status})");
+    }
+
+    /// <summary>The numbers of a line, with zeros for what only a quadratic has.</summary>
+    private static double[] Padded(double[] values, int length)
+    {
+        double[] padded = new double[length];
+        values.CopyTo(padded, 0);
+        return padded;
     }
 
     /// <summary>A recorded point as Core takes it.</summary>

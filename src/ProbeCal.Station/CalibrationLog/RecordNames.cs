@@ -8,6 +8,9 @@ internal static class RecordNames
     /// <summary>Source of a temperature that came with the signal.</summary>
     internal const string FromLine = "line";
 
+    /// <summary>Form of the temperature coefficient of a model that has none.</summary>
+    internal const string NoForm = "none";
+
     /// <summary>The stirring's name.</summary>
     public static string Of(Stirring stirring)
     {
@@ -27,6 +30,7 @@ internal static class RecordNames
             TemperatureCoefficientForm.Compound => "compound",
             TemperatureCoefficientForm.Linear => "linear",
             TemperatureCoefficientForm.Arrhenius => "arrhenius",
+            TemperatureCoefficientForm.Polynomial => "polynomial",
             _ => "exponential",
         };
     }
@@ -71,6 +75,9 @@ internal static class RecordNames
             "compound" => TemperatureCoefficientForm.Compound,
             "linear" => TemperatureCoefficientForm.Linear,
             "arrhenius" => TemperatureCoefficientForm.Arrhenius,
+            "polynomial" => TemperatureCoefficientForm.Polynomial,
+            // A polynomial without terms is 1 everywhere.
+            NoForm => TemperatureCoefficientForm.Polynomial,
             _ => throw Unknown("temperature coefficient", name),
         };
     }

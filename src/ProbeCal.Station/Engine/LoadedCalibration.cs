@@ -39,14 +39,16 @@ internal sealed class LoadedCalibration
     public ProbeCalibration Core { get; }
 
     /// <summary>
-    /// Standard uncertainty of one signal when nobody entered one: the scatter of the samples at the 100 % point and the
-    /// rectangular width of the converter's or display's last digit.
+    /// Standard uncertainty of one signal when nobody entered one: the scatter of the samples at the 100 % point (the largest of the points
+    /// of a fit) and the rectangular width of the converter's or display's last digit.
     /// </summary>
     public double SignalUncertainty
     {
         get
         {
-            double scatter = Record.Points.First(point => point.Role == Record.SlopeFrom).Signal.StandardDeviation;
+            double scatter = Record.Fit == null
+                ? Record.Points.First(point => point.Role == Record.SlopeFrom).Signal.StandardDeviation
+                : Record.Points.Max(point => point.Signal.StandardDeviation);
             double resolution = Record.Probe.MeterSettings?.Resolution ?? Record.Probe.SignalResolution ?? 0;
             return Math.Sqrt((scatter * scatter) + (resolution * resolution / 12));
         }

@@ -103,7 +103,7 @@ internal sealed class ReadingMaker
     {
         ThermometerConfiguration thermometer = configuration.Thermometer;
         ReadingConditions conditions = new(
-            configuration.Equation,
+            calibration.Core.Gas == Gas.Oxygen ? configuration.Equation : GasDefaults.Equation(calibration.Core.Gas),
             configuration.SignalUncertainty ?? calibration.SignalUncertainty,
             IsSameThermometer(thermometer, calibration.Record),
             thermometer.OffsetStandardUncertaintyKelvin,
@@ -111,10 +111,25 @@ internal sealed class ReadingMaker
             configuration.Pressure.StandardUncertainty,
             configuration.Salinity.StandardUncertainty,
             configuration.Stirring,
-            calibration.Core.FlowFactor,
+            FlowFactor(configuration.Stirring, calibration.Core),
             UncertaintyDefaults.StirringRelative(configuration.Stirring));
         Status status = conditions.Check();
         return status == Status.Ok ? conditions : throw new InputException("the station's uncertainties make no conditions for a reading: " + status);
+    }
+
+    /// <summary>
+    /// The calibration's flow factor, and where the water moves otherwise now, times what the probe was characterised to give in still water over stirred.
+    /// </summary>
+    private static double FlowFactor(Stirring stirring, ProbeCalibration calibration)
+    {
+        double still = calibration.Model is AmperometricProbe { StillFactor: > 0 } probe ? probe.StillFactor : 1;
+        Stirring calibrated = calibration.IsAirPoint ? Stirring.Stirred : calibration.Stirring;
+        return (calibrated, stirring) switch
+        {
+            (Stirring.Stirred, Stirring.Still) => calibration.FlowFactor * still,
+            (Stirring.Still, Stirring.Stirred) => calibration.FlowFactor / still,
+            _ => calibration.FlowFactor,
+        };
     }
 
     /// <summary>
@@ -128,7 +143,7 @@ internal sealed class ReadingMaker
             return thermometer.Id == record.Probe.Thermometer.Id;
         }
 
-        bool fromLine = Array.Exists(record.Points, point => point.Role == record.SlopeFrom && point.Temperature.Source == RecordNames.FromLine);
+        bool fromLine = Array.Exists(record.Points, point => (record.Fit != null || point.Role == record.SlopeFrom) && point.Temperature.Source == RecordNames.FromLine);
         return fromLine || record.Probe.Thermometer.Id == record.Probe.Id;
     }
 
