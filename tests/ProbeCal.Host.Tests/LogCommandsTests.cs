@@ -54,9 +54,20 @@ public sealed class LogCommandsTests : LogFolder
     [InlineData("it was not imported here", "calibrations", "verify", "--log", "0123456789ab")]
     public async Task WrongInput_IsOneLine_AndAddsNothing(string says, params string[] arguments)
     {
+        byte[] before = await File.ReadAllBytesAsync(LogFile);
         Run run = await Run(arguments);
         Assert.True(run.ExitCode == 2, run.Error);
-        Assert.Contains(says, run.ErrorLine.Split('\n')[^1], StringComparison.Ordinal);
+        Assert.Contains(says, run.ErrorLine, StringComparison.Ordinal);
+        Assert.DoesNotContain('\n', run.ErrorLine);
+        // Not even migrated.
+        Assert.Equal(before, await File.ReadAllBytesAsync(LogFile));
+        if (arguments[0] == "register" && arguments[1] == "add")
+        {
+            string none = Path.Combine(Folder, "none");
+            Assert.Equal(2, (await RunAt(none, arguments)).ExitCode);
+            Assert.False(Directory.Exists(none));
+        }
+
         Assert.Contains("2 entries, chain whole", (await Ok("calibrations", "verify")).Output, StringComparison.Ordinal);
     }
 

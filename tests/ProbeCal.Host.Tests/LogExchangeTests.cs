@@ -61,6 +61,7 @@ public sealed class LogExchangeTests : LogFolder
         Run list = await At(Other, "calibrations", "list");
         Assert.Contains("imported from " + Exported + ": 2 records, chain whole", list.Output, StringComparison.Ordinal);
         Assert.Contains("imported from " + Exported, (await At(Other, "calibrations", "show", First)).Output, StringComparison.Ordinal);
+        Assert.Contains(First, (await At(Other, "calibrations", "list", "--log", "8c6e44e20ee5")).Output, StringComparison.Ordinal);
         // The bytes that came in are those that went out.
         Assert.Equal((await Ok("calibrations", "show", First, "--format", "json")).Output, (await At(Other, "calibrations", "show", First, "--format", "json")).Output);
         await At(Other, "calibrations", "verify", "--log", "8c6e44e20ee5", "--head", Head);

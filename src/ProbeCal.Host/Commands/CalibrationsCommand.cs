@@ -39,6 +39,15 @@ internal static class CalibrationsCommand
         return CalibrationLogStore.OpenForReading(data.CalibrationLogFile);
     }
 
+    /// <summary>Shows the log, or null where there is none yet, to what must look at it before anything is written.</summary>
+    internal static void Look(string? folder, Action<CalibrationLogStore?> work)
+    {
+        string path = folder ?? CalibrateCommand.UsualData;
+        using DataDirectory? data = Directory.Exists(path) ? DataDirectory.OpenForReading(path) : null;
+        using CalibrationLogStore? log = data != null && File.Exists(data.CalibrationLogFile) ? CalibrationLogStore.OpenForReading(data.CalibrationLogFile) : null;
+        work(log);
+    }
+
     /// <summary>Opens the log for writing, does the work and closes both.</summary>
     internal static int Write(string? folder, Terminal terminal, Func<CalibrationLogStore, int> work)
     {

@@ -1,4 +1,5 @@
 using System;
+using System.Collections.Generic;
 using System.CommandLine;
 using System.IO;
 using ProbeCal.Station.CalibrationLog;
@@ -97,16 +98,7 @@ internal static class CalibrationsExchange
             bool isLog = mapped.Length == 0 && LogImport.IsLog(path);
             // Read before anything is opened for writing: a wrong file makes and migrates nothing.
             LogImport? exported = isLog ? LogImport.Read(path) : null;
-            PastTable table = new()
-            {
-                Path = path,
-                Columns = mapped,
-                Probe = parsed.GetValue(probe),
-                SignalUnit = parsed.GetValue(signal),
-                UtcOffset = parsed.GetValue(offset),
-                Separator = parsed.GetValue(separator),
-                DecimalComma = parsed.GetValue(comma),
-            };
+            IReadOnlyList<PastCalibrationRecord> past = isLog ? [] : Table().Read(terminal.Time.GetUtcNow(), ProgramIdentity.Text);
             return CalibrationsCommand.Write(parsed.GetValue(data), terminal, log =>
             {
                 if (exported != null)
@@ -118,10 +110,24 @@ internal static class CalibrationsExchange
                     return ExitCode.Done;
                 }
 
-                (long rows, long known) = table.Import(log, terminal.Time.GetUtcNow(), ProgramIdentity.Text);
+                (long rows, long known) = PastTable.Add(log, past);
                 terminal.Output.WriteLine($"{Number.Print(rows)} past {(rows == 1 ? "calibration" : "calibrations")} imported{(known == 0 ? "" : ", " + Number.Print(known) + " were there already")}; none is in force, and none was judged again");
                 return ExitCode.Done;
             });
+
+            PastTable Table()
+            {
+                return new PastTable
+                {
+                    Path = path,
+                    Columns = mapped,
+                    Probe = parsed.GetValue(probe),
+                    SignalUnit = parsed.GetValue(signal),
+                    UtcOffset = parsed.GetValue(offset),
+                    Separator = parsed.GetValue(separator),
+                    DecimalComma = parsed.GetValue(comma),
+                };
+            }
         });
         return command;
     }

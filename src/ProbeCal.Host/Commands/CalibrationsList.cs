@@ -18,14 +18,17 @@ internal static class CalibrationsList
         Option<string> data = CalibrationsCommand.DataOption();
         Option<string> probe = new("--probe") { Description = "Only this probe.", HelpName = "ID" };
         Option<bool> all = new("--all") { Description = "Entries of every kind: equipment, service events and withdrawals too." };
+        Option<string> which = new("--log") { Description = "An imported log by its id; the log of the folder when left out.", HelpName = "LOG" };
         Option<string> format = new("--format") { Description = "text (default) or json.", HelpName = "text|json" };
-        Command command = new("list", "One line for each calibration and check, oldest first, and whether the chain of records is whole.") { data, probe, all, format };
+        Command command = new("list", "One line for each calibration and check, oldest first, and whether the chain of records is whole.") { data, probe, all, which, format };
         command.SetAction(parsed =>
         {
             bool json = OutputShape.IsJson(parsed.GetValue(format));
             using CalibrationLogStore log = CalibrationsCommand.Open(parsed.GetValue(data));
             string? only = parsed.GetValue(probe);
-            List<StoredCalibration> wanted = [.. log.Records.Where(stored => only == null || stored.Record.Probe.Id == only)];
+            List<StoredCalibration> wanted = [.. log.EntriesOf(parsed.GetValue(which) ?? log.LogId)
+                .Where(stored => stored.Entry is CalibrationRecord record && (only == null || record.Probe.Id == only))
+                .Select(static stored => new StoredCalibration((CalibrationRecord)stored.Entry, stored.Sha256))];
             if (json)
             {
                 terminal.Output.WriteLine(JsonSerializer.Serialize(Json(log, wanted), CalibrationListContext.Default.CalibrationList));

@@ -73,6 +73,8 @@ internal static class RegisterCommand
                 Remarks = parsed.GetValue(remarks),
                 By = parsed.GetValue(by),
             };
+            // Read first: wrong input makes no folder and migrates no log.
+            CalibrationsCommand.Look(parsed.GetValue(data), log => entry.Read(log, ProgramIdentity.Text));
             return CalibrationsCommand.Write(parsed.GetValue(data), terminal, log =>
             {
                 EquipmentRecord record = entry.Read(log, ProgramIdentity.Text);

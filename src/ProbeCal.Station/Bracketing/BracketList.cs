@@ -27,7 +27,7 @@ public sealed record BracketList(long Readings, long Bracketed, IReadOnlyList<Un
     /// <summary>How the rule is read.</summary>
     public static string Rule => Brackets.Rule;
 
-    private static readonly ColumnQuantity[] Known = [new("time", QuantityKind.Salinity), new("concentration", QuantityKind.MassConcentration)];
+    private static readonly ColumnQuantity[] Known = [new("time"), new("concentration", QuantityKind.MassConcentration)];
 
     /// <summary>The readings that a station journaled.</summary>
     /// <exception cref="InputException">There is no journal, or it is from another version.</exception>

@@ -49,13 +49,13 @@ public sealed record EquipmentEntry
     public string? By { get; init; }
 
     /// <summary>Reads the texts.</summary>
-    /// <param name="log">The log that it goes into: an id keeps its kind.</param>
+    /// <param name="log">The log that it goes into: an id keeps its kind. Null where there is none yet.</param>
     /// <param name="software">Program and version.</param>
     /// <exception cref="InputException">One of them is wrong.</exception>
-    public EquipmentRecord Read(CalibrationLogStore log, string software)
+    public EquipmentRecord Read(CalibrationLogStore? log, string software)
     {
         string id = PlainText.Id("id", Id);
-        EquipmentRecord? known = log.AllEquipment(DateTimeOffset.MaxValue).FirstOrDefault(each => each.Equipment == id);
+        EquipmentRecord? known = log?.AllEquipment(DateTimeOffset.MaxValue).FirstOrDefault(each => each.Equipment == id);
         string kind = ReadKind(id, known);
         DateOnly? calibrated = Day("--calibrated", CalibratedOn);
         DateOnly? made = Day("--made", MadeOn);

@@ -15,13 +15,11 @@ namespace ProbeCal.Station.PastCalibrations;
 /// </summary>
 public sealed record PastTable
 {
-    // Texts have no unit, as salinity has none: the mapping then refuses a unit behind them.
     private static readonly ColumnQuantity[] Known =
     [
-        new("date", QuantityKind.Salinity), new("probe", QuantityKind.Salinity), new("method", QuantityKind.Salinity), new("membrane", QuantityKind.Salinity),
-        new("verdict", QuantityKind.Salinity), new("by", QuantityKind.Salinity), new("remarks", QuantityKind.Salinity),
+        new("date"), new("probe"), new("method"), new("membrane"), new("verdict"), new("by"), new("remarks"),
         new("temperature", QuantityKind.Temperature), new("pressure", QuantityKind.Pressure), new("salinity", QuantityKind.Salinity),
-        new("signal", QuantityKind.Salinity), new("slope", QuantityKind.Salinity), new("zero", QuantityKind.Salinity),
+        new("signal"), new("slope"), new("zero"),
         new("reference", QuantityKind.MassConcentration), new("before", QuantityKind.MassConcentration), new("after", QuantityKind.MassConcentration),
     ];
 
@@ -46,13 +44,12 @@ public sealed record PastTable
     /// <summary>True when commas are decimal marks.</summary>
     public bool DecimalComma { get; init; }
 
-    /// <summary>Reads the file and adds its rows to the log, all of them or none.</summary>
-    /// <param name="log">The log, open for writing.</param>
+    /// <summary>Reads the file.</summary>
     /// <param name="now">The time by the clock; a calibration after it is a mistake in the table.</param>
     /// <param name="software">Program and version.</param>
-    /// <returns>How many rows were added and how many were there already.</returns>
-    /// <exception cref="InputException">The file, its mapping or a row is wrong; nothing was added.</exception>
-    public (long Added, long Known) Import(CalibrationLogStore log, DateTimeOffset now, string software)
+    /// <returns>An entry for each row, in order.</returns>
+    /// <exception cref="InputException">The file, its mapping or a row is wrong.</exception>
+    public IReadOnlyList<PastCalibrationRecord> Read(DateTimeOffset now, string software)
     {
         byte[] bytes = ReadAll();
         string name = System.IO.Path.GetFileName(Path);
@@ -71,33 +68,27 @@ public sealed record PastTable
 
         TimeSpan? offset = UtcOffset == null ? null : UtcTime.Offset("--utc-offset", UtcOffset);
         string sha = Convert.ToHexStringLower(SHA256.HashData(bytes));
-        HashSet<(string Probe, DateTimeOffset At, string Row)> there = [.. log.Entries.Select(static stored => stored.Entry).OfType<PastCalibrationRecord>().Select(static each => (each.Probe, each.At, each.Row))];
-        List<LogEntry> added = [];
-        long known = 0;
-        foreach (MappedRow row in rows.Read())
-        {
-            PastCalibrationRecord record = Read(row, offset, now, name, sha, software);
-            if (there.Add((record.Probe, record.At, record.Row)))
-            {
-                added.Add(record);
-            }
-            else
-            {
-                known++;
-            }
-        }
+        PastCalibrationRecord[] read = [.. rows.Read().Select(row => Read(row, offset, now, name, sha, software))];
+        return read.Length != 0 ? read : throw new InputException($"{name}: there is no row below the header; nothing was added");
+    }
 
-        if (added.Count == 0 && known == 0)
-        {
-            throw new InputException($"{name}: there is no row below the header; nothing was added");
-        }
-
-        if (added.Count != 0)
+    /// <summary>Adds entries to a log, all of them or none; those that are there already are passed over.</summary>
+    /// <returns>How many were added and how many were there already.</returns>
+    public static (long Added, long Known) Add(CalibrationLogStore log, IReadOnlyList<PastCalibrationRecord> read)
+    {
+        HashSet<(string Probe, DateTimeOffset At, string Row)> there = [.. log.Entries.Select(static stored => stored.Entry).OfType<PastCalibrationRecord>().Select(Identity)];
+        LogEntry[] added = [.. read.Where(record => there.Add(Identity(record)))];
+        if (added.Length != 0)
         {
             log.AppendAll(added);
         }
 
-        return (added.Count, known);
+        return (added.Length, read.Count - added.Length);
+
+        static (string Probe, DateTimeOffset At, string Row) Identity(PastCalibrationRecord record)
+        {
+            return (record.Probe, record.At, record.Row);
+        }
     }
 
     private PastCalibrationRecord Read(MappedRow row, TimeSpan? offset, DateTimeOffset now, string name, string sha, string software)

@@ -110,12 +110,30 @@ internal sealed class MappedRow
             return null;
         }
 
+        if (mapping.Kind is not QuantityKind kind)
+        {
+            return Plain(quantity, text);
+        }
+
         if (!mapping.TryRead(text, _decimalComma, out string value, out RowOutcome outcome))
         {
             return outcome.Text.StartsWith("the cell says", System.StringComparison.Ordinal) ? null : throw new InputException($"{Where}: {quantity} {outcome.Text}");
         }
 
-        return Quantity.TryParse(mapping.Kind, value, out double canonical, out string? problem) ? canonical : throw new InputException($"{Where}: {quantity} {Wrong.Shown(text)}: {problem}");
+        return Quantity.TryParse(kind, value, out double canonical, out string? problem) ? canonical : throw new InputException($"{Where}: {quantity} {Wrong.Shown(text)}: {problem}");
+    }
+
+    /// <summary>A number without a unit of ours: a signal, its slope.</summary>
+    private double? Plain(string quantity, string text)
+    {
+        if (_decimalComma && text.Contains('.', System.StringComparison.Ordinal))
+        {
+            throw new InputException($"{Where}: {quantity} {Wrong.Shown(text)}: a point where --decimal-comma promises commas");
+        }
+
+        return Number.TryParse(_decimalComma ? text.Replace(',', '.') : text, out double value, out string? problem)
+            ? value
+            : throw new InputException($"{Where}: {quantity} {Wrong.Shown(text)}: {problem}");
     }
 
     private ColumnMapping? Find(string quantity)

@@ -197,7 +197,7 @@ public class TamperingTests
         return log;
     }
 
-    private static TemporaryLog RandomLog(Random random, out int count)
+    internal static TemporaryLog RandomLog(Random random, out int count)
     {
         TemporaryLog log = new();
         using CalibrationLogStore store = log.Write();
