@@ -17,7 +17,7 @@ internal static class ProcedureText
             Write(output, steps[i], withSource: true, Number.Print(i + 1) + ". ");
         }
 
-        string[] sources = [.. steps.Select(static step => step.Source).OfType<string>().Distinct()];
+        string[] sources = [.. steps.Select(static step => step.Source).OfType<string>().SelectMany(static source => source.Split("; ")).Distinct()];
         if (sources.Length != 0)
         {
             output.WriteLine();

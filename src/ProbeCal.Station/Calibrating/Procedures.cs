@@ -1,3 +1,4 @@
+using System;
 using System.Collections.Generic;
 using System.Linq;
 using ProbeCal.Station.CalibrationLog;
@@ -60,7 +61,7 @@ internal static class Procedures
             AddZeros();
             if (span != null)
             {
-                steps.Add(ProcedureSteps.LastLook);
+                steps.Add(ProcedureSteps.LastLook(span));
             }
         }
 
@@ -136,15 +137,19 @@ internal static class ProcedureSteps
     };
 
     /// <summary>After a zero that comes last.</summary>
-    internal static ProcedureStep LastLook { get; } = new("again-at-100", StepKind.Enter, "Look at 100 % once more")
+    internal static ProcedureStep LastLook(PlannedPoint span)
     {
-        Do = ["Put the probe back as for the 100 % point and wait until it is steady."],
-        LookFor = ["The reading must be what it was before the zero; if it is lower, rinse again."],
-        WriteDown = "the reading at 100 % after the zero",
-        LeastMinutes = 5,
-        MostMinutes = 10,
-        Source = OceanGliders + "; wait " + FieldManual,
-    };
+        string point = Main(span.Method);
+        return new ProcedureStep("again-at-100", StepKind.Enter, "Look at the " + point + " once more")
+        {
+            Do = ["Put the probe back as for the " + point + " and wait until it is steady."],
+            LookFor = ["The reading must be what it was before the zero; if it is lower, rinse again."],
+            WriteDown = "the reading there after the zero",
+            LeastMinutes = 5,
+            MostMinutes = 10,
+            Source = OceanGliders + "; wait " + FieldManual,
+        };
+    }
 
     /// <summary>True for a probe that is calibrated in total pressure.</summary>
     internal static bool IsTotalGas(CalibrationSetup setup)
@@ -239,7 +244,7 @@ internal static class ProcedureSteps
                 };
                 break;
             case MethodIds.GasMixture:
-                yield return Gas(setup, point, point.Role == CalibrationIds.SpanPoint ? "cylinder" : "cylinder-" + point.Role, "Cylinder and gas line");
+                yield return GasLine(setup, point, point.Role == CalibrationIds.SpanPoint ? "cylinder" : "cylinder-" + point.Role, "Cylinder and gas line");
                 break;
             case MethodIds.TransferStandard:
                 yield return new ProcedureStep("standard", StepKind.Enter, "The standard beside the probe")
@@ -260,7 +265,7 @@ internal static class ProcedureSteps
                 yield return ZeroSolution(setup, point);
                 break;
             case MethodIds.ZeroGas:
-                yield return Gas(setup, point, IdOf("zero-gas", point), "Zero gas");
+                yield return GasLine(setup, point, IdOf("zero-gas", point), "Zero gas");
                 break;
             default:
                 break;
@@ -273,7 +278,7 @@ internal static class ProcedureSteps
         string title = point.Role switch
         {
             CalibrationIds.SpanPoint when MethodIds.IsZero(point.Method) => "Zero point",
-            CalibrationIds.SpanPoint => "100 % point",
+            CalibrationIds.SpanPoint => Main(point.Method) is "100 % point" ? "100 % point" : "Main point",
             CalibrationIds.ZeroPoint => "Zero point",
             _ => "Point " + point.Role,
         };
@@ -332,7 +337,7 @@ internal static class ProcedureSteps
                     Cautions = [Cautions.AlkalineIodide, Cautions.Acid, Cautions.OpenWater],
                     LeastMinutes = 5,
                     MostMinutes = 10,
-                    Source = "drawing, fixing and titration " + CruiseReports + "; samples, spacing and least oxygen " + OceanGliders,
+                    Source = "wait " + FieldManual + "; drawing, fixing and titration " + CruiseReports + "; samples, spacing and least oxygen " + OceanGliders,
                 };
             case MethodIds.GasMixture:
                 return step with
@@ -342,10 +347,17 @@ internal static class ProcedureSteps
                         "Let the gas" + CylinderOf(point) + " flow over the membrane (or through the water in which the probe stands) and keep it flowing.",
                         "Leave the outlet open, so that the gas is at the barometer's pressure; wait until temperature and signal are steady, then take the point.",
                     ],
-                    LookFor = ["More flow changes nothing any more: if it does, air comes in from outside or the gas pushes up the pressure.", "No drop on the membrane when the gas is humid."],
+                    LookFor =
+                    [
+                        "More flow changes nothing any more: if it does, air comes in from outside or the gas pushes up the pressure.",
+                        "No drop on the membrane when the gas is humid.",
+                        .. setup.Probe.Model is "amperometric" or "meter-display"
+                            ? ["In gas the signal is 1 to 3 % higher than in stirred water of the same partial pressure: let the gas through water where that counts."]
+                            : Array.Empty<string>(),
+                    ],
                     Cautions = Cautions.OfCylinder(setup.Gas, point.Mixture?.MoleFraction.Value ?? double.NaN),
                     LeastMinutes = 5,
-                    Source = "through 100 mL of water or less 3 to 5 min " + OceanGliders + "; over a membrane: " + Common,
+                    Source = "through 100 mL of water or less 3 to 5 min " + OceanGliders + "; over a membrane: " + Common + "; 1 to 3 % from memory",
                 };
             case MethodIds.TransferStandard:
                 return step with
@@ -388,9 +400,10 @@ internal static class ProcedureSteps
     internal static ProcedureStep AsLeft(CalibrationSetup setup, PlannedPoint span, bool moved)
     {
         bool typed = setup.Readings == CalibrationIds.Typed;
+        string main = Main(span.Method);
         List<string> todo =
         [
-            moved ? "Put the probe back as for the 100 % point." : "Leave the probe as it stood for the 100 % point; put it back if it was taken out.",
+            moved ? "Put the probe back as for the " + main + "." : "Leave the probe as it stood for the " + main + "; put it back if it was taken out.",
             typed ? "Set the meter to the value that is shown, wait until it is steady, and read it again." : "Wait: fresh readings now check the new calibration (as left).",
         ];
         if (span.Method == MethodIds.Titration)
@@ -398,16 +411,34 @@ internal static class ProcedureSteps
             todo.Add("The water must still be that of the samples, closed off and within 0.2 C; otherwise draw and titrate again.");
         }
 
+        bool oxygen = setup.Gas == Gas.Oxygen && !IsTotalGas(setup);
         ProcedureStep point = Point(setup, span);
-        return new ProcedureStep("point-" + CalibrationIds.AsLeftPoint, StepKind.Point, "100 % point as left")
+        return new ProcedureStep("point-" + CalibrationIds.AsLeftPoint, StepKind.Point, (main is "100 % point" ? main : "Main point") + " as left")
         {
             Role = CalibrationIds.AsLeftPoint,
             Do = todo,
-            LookFor = ["Within 0.2 mg/L or 2 % of the reference, whichever is larger."],
+            LookFor = [oxygen ? "Within 0.2 mg/L or 2 % of the reference, whichever is larger." : "The reading is the reference within what the work needs."],
             Cautions = span.Method == MethodIds.GasMixture ? point.Cautions : [],
             LeastMinutes = point.LeastMinutes,
             MostMinutes = point.MostMinutes,
-            Source = "limit " + FieldManual + "; wait as for the 100 % point: " + point.Source,
+            Source = (oxygen ? "limit " + FieldManual + "; " : "") + WaitSource(setup, span.Method),
+        };
+    }
+
+    /// <summary>Only water and air in equilibrium are at 100 %.</summary>
+    private static string Main(string method)
+    {
+        return method is MethodIds.AirSaturatedWater or MethodIds.WaterSaturatedAir ? "100 % point" : "main point";
+    }
+
+    private static string WaitSource(CalibrationSetup setup, string method)
+    {
+        return "wait " + method switch
+        {
+            MethodIds.WaterSaturatedAir when IsTotalGas(setup) => Common,
+            MethodIds.GasMixture => OceanGliders + ", over a membrane " + Common,
+            MethodIds.TransferStandard => "USGS TM 9-A6.8",
+            _ => FieldManual,
         };
     }
 
@@ -430,10 +461,15 @@ internal static class ProcedureSteps
         };
     }
 
-    private static ProcedureStep Gas(CalibrationSetup setup, PlannedPoint point, string id, string title)
+    private static ProcedureStep GasLine(CalibrationSetup setup, PlannedPoint point, string id, string title)
     {
         bool humid = point.Mixture is { RelativeHumidityPercent.Value: > 0 };
         List<string> todo = ["Connect the cylinder" + CylinderOf(point) + " by a line that lets no air in, and purge line and vessel with five times their volume."];
+        if (MethodIds.IsZero(point.Method))
+        {
+            todo.Insert(0, setup.Gas == Gas.Oxygen ? "Take nitrogen that holds next to no oxygen." : "Take a gas that holds none of the gas of the probe, nitrogen or air without it.");
+        }
+
         if (humid)
         {
             todo.Add("Lead the gas through a washing bottle of clean water at the temperature of the probe, with no drop carried over.");
