@@ -70,8 +70,9 @@ if [ "$setup" = 1 ] && [ "$(id -u)" = 0 ] && command -v apt-get >/dev/null 2>&1;
   command -v qemu-aarch64 >/dev/null 2>&1 && [ -e /usr/aarch64-linux-gnu/lib/libstdc++.so.6 ] || missing="$missing qemu-user libc6-arm64-cross libstdc++6-arm64-cross libgcc-s1-arm64-cross"
   command -v clang >/dev/null 2>&1 || command -v gcc >/dev/null 2>&1 || missing="$missing gcc libc6-dev"
   command -v arm-none-eabi-gcc >/dev/null 2>&1 || missing="$missing gcc-arm-none-eabi"
-  # The browser prints the field card; without a font it would print nothing that can be measured.
+  # The browser prints the field card and certificates; without a font it would print nothing that can be measured.
   command -v chromium >/dev/null 2>&1 && [ -d /usr/share/fonts/truetype/liberation ] || missing="$missing chromium fonts-liberation"
+  command -v pdftotext >/dev/null 2>&1 || missing="$missing poppler-utils"
   if [ -n "$missing" ]; then
     echo "installing:$missing"
     # shellcheck disable=SC2086

@@ -14,10 +14,12 @@ internal static class CalibrationsCommand
 {
     internal static Command Create(Terminal terminal)
     {
-        return new Command("calibrations", "What the calibration log holds: list, show, verify, export, import, brackets, withdraw.")
+        return new Command("calibrations", "What the calibration log holds: list, show, certificate, history, verify, export, import, brackets, withdraw.")
         {
             CalibrationsList.Create(terminal),
             Show(terminal),
+            CertificateCommand.Create(terminal),
+            HistoryCommand.Create(terminal),
             CalibrationsVerify.Create(terminal),
             CalibrationsExchange.Export(terminal),
             CalibrationsExchange.Import(terminal),

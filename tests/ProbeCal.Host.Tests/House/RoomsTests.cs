@@ -75,6 +75,7 @@ public class RoomsTests
         ["Publishing"] = ["Entry", "Journal"],
         ["Calibrating"] = ["Entry", "CalibrationLog", "Uncertainty"],
         ["Characterising"] = ["Entry", "WholeFiles", "CalibrationLog", "Calibrating", "Uncertainty", "Storage"],
+        ["Reports"] = ["Entry", "Storage", "Uncertainty", "CalibrationLog", "Calibrating"],
         ["Engine"] = ["Entry", "Sources", "CalibrationLog", "Configuration", "Journal", "Publishing"],
     };
 
