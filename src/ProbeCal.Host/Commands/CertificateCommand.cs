@@ -1,6 +1,5 @@
 using System.CommandLine;
 using System.Linq;
-using ProbeCal.Station;
 using ProbeCal.Station.CalibrationLog;
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Reports;
@@ -13,7 +12,7 @@ internal static class CertificateCommand
     internal static Command Create(Terminal terminal)
     {
         Argument<string> id = new("id") { Description = "Id of the calibration or check, as list shows it.", HelpName = "ID" };
-        Option<string> data = new("--data") { Description = "Folder of the calibration log (default probecal-data).", HelpName = "DIR" };
+        Option<string> data = CalibrationsCommand.DataOption();
         Option<string> output = new("--output") { Description = "File to write: a page for the browser and its printer, or a PDF. Without it the text is shown.", HelpName = "FILE.html|FILE.pdf" };
         Option<string> name = new("--name") { Description = "Your name as it should stand on it.", HelpName = "NAME" };
         Option<string> role = new("--role") { Description = "Your role.", HelpName = "ROLE" };
@@ -29,8 +28,7 @@ internal static class CertificateCommand
             }
 
             CertificateSignature signature = new(Line("--name", parsed.GetValue(name)), Line("--role", parsed.GetValue(role)), terminal.Time.GetUtcNow(), ProgramIdentity.Release);
-            using DataDirectory folder = DataDirectory.OpenForReading(parsed.GetValue(data) ?? CalibrateCommand.UsualData);
-            using CalibrationLogStore log = CalibrationLogStore.OpenForReading(folder.CalibrationLogFile);
+            using CalibrationLogStore log = CalibrationsCommand.Open(parsed.GetValue(data));
             string wanted = parsed.GetValue(id)!;
             StoredCalibration stored = log.Find(wanted)
                 ?? throw new InputException($"calibration {Wrong.Shown(wanted)}: not in this log{NearestName.DidYouMean(wanted, log.Records.Select(static known => known.Record.Id))}; 'probecal calibrations list' shows the ids");

@@ -1,5 +1,4 @@
 using System.CommandLine;
-using ProbeCal.Station;
 using ProbeCal.Station.CalibrationLog;
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Reports;
@@ -14,7 +13,7 @@ internal static class HistoryCommand
     internal static Command Create(Terminal terminal)
     {
         Option<string> probe = new("--probe") { Description = "Id of the probe.", HelpName = "ID", Required = true };
-        Option<string> data = new("--data") { Description = "Folder of the calibration log (default probecal-data).", HelpName = "DIR" };
+        Option<string> data = CalibrationsCommand.DataOption();
         Option<string> output = new("--output") { Description = "File to write: page, PDF, picture or table. Without it the text is shown.", HelpName = "FILE.html|pdf|svg|csv" };
         Option<string> slope = new("--slope-window") { Description = "Slope that the probe's maker allows; without it the one that the newest calibration was judged by.", HelpName = "LOW..HIGH" };
         Option<string> zero = new("--zero-window") { Description = "Zero signal that the probe's maker allows.", HelpName = "LOW..HIGH" };
@@ -31,8 +30,7 @@ internal static class HistoryCommand
 
             HistoryWindow? slopeWindow = Window("--slope-window", parsed.GetValue(slope));
             HistoryWindow? zeroWindow = Window("--zero-window", parsed.GetValue(zero));
-            using DataDirectory folder = DataDirectory.OpenForReading(parsed.GetValue(data) ?? CalibrateCommand.UsualData);
-            using CalibrationLogStore log = CalibrationLogStore.OpenForReading(folder.CalibrationLogFile);
+            using CalibrationLogStore log = CalibrationsCommand.Open(parsed.GetValue(data));
             ProbeHistory history = ProbeHistory.Of(log, parsed.GetValue(probe)!, slopeWindow, zeroWindow);
             if (file is null)
             {
