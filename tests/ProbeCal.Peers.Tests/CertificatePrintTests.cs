@@ -41,7 +41,7 @@ public sealed class CertificatePrintTests(ITestOutputHelper output) : IDisposabl
             await PrintAsync(chromium, page.Replace("size: auto;", "size: " + paper + ";", StringComparison.Ordinal));
             int pages = await WithinAsync(_folder["printed.pdf"]);
             output.WriteLine($"{id} on {paper}: {pages} of the browser");
-            Assert.InRange(pages, 1, most);
+            Assert.True(pages <= most, $"{pages} pages; the last: {(await TextAsync(_folder["printed.pdf"])).Split('\f')[^2]}");
             await CertificateAsync(id, "own.pdf", "--paper", paper);
             Assert.InRange(await WithinAsync(_folder["own.pdf"]), 1, most);
         }
@@ -118,7 +118,7 @@ public sealed class CertificatePrintTests(ITestOutputHelper output) : IDisposabl
         {
             Site = "A pond whose name is just as long as anybody would care to write it",
             By = "A person with a rather long name, and a second one",
-            Findings = [finding, finding with { Guard = "stirring", Saw = "the water stood still for the whole window; a probe that consumes gas reads low by up to 10 % there", Reason = "the probe was moved by hand" }],
+            Findings = [finding, finding with { Guard = "stirring", Saw = "the water stood still for the whole window; a probe that consumes gas reads low there", Reason = "the probe was moved by hand" }],
         };
     }
 

@@ -33,7 +33,7 @@ internal static class CertificateDecision
                     $"[{Number.Print(1 + sources.IndexOf(limit.Source))}]",
                 })),
             new ReportSentence("limit-sources", string.Join("; ", sources.Select(static (source, i) => $"[{Number.Print(i + 1)}] {source}")) + "."),
-            new ReportSentence("decision-rule", "Decision rule: " + record.Result.DecisionRule + ". A check that informs does not decide."),
+            new ReportSentence("decision-rule", "Decision rule: " + record.Result.DecisionRule + ". A check that informs does not decide.", RunsOn: true),
         ];
     }
 

@@ -29,7 +29,7 @@ internal static class CertificatePoints
         if (read.Length != 0)
         {
             blocks.Add(new ReportSentence("point-read-by", "Read by " + string.Join("; ", read.GroupBy(static point => point.ReadBy!)
-                .Select(static group => $"{(group.Key == "this" ? "the new calibration" : group.Key)}: {string.Join(", ", group.Select(static point => ReportText.Role(point.Role)))}")) + "."));
+                .Select(static group => $"{(group.Key == "this" ? "the new calibration" : group.Key)}: {string.Join(", ", group.Select(static point => ReportText.Role(point.Role)))}")) + ".", RunsOn: true));
         }
 
         double[] windows = [.. record.Points.Where(static point => !point.Typed).Select(static point => point.Signal.WindowSeconds)];
@@ -37,7 +37,7 @@ internal static class CertificatePoints
         {
             string least = Number.Fixed(windows.Min(), 0);
             string most = Number.Fixed(windows.Max(), 0);
-            blocks.Add(new ReportSentence("point-windows", $"Samples were taken over {(least == most ? least : least + " to " + most)} s."));
+            blocks.Add(new ReportSentence("point-windows", $"Samples were taken over {(least == most ? least : least + " to " + most)} s.", RunsOn: true));
         }
 
         return blocks;

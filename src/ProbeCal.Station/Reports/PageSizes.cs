@@ -25,7 +25,7 @@ internal static class PageSizes
     internal const double PlotHeight = 150;
     internal const double SmallPlotWidth = 285;
     internal const double SmallPlotHeight = 80;
-    internal const double InkHeight = 24;
+    internal const double InkHeight = 21;
 
     /// <summary>Room of a value in one of two columns; what would take more than two lines of it gets the whole width.</summary>
     private const double HalfValue = 177;

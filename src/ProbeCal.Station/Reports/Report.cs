@@ -56,7 +56,8 @@ public sealed record ReportColumn(string Id, string Name, bool IsNumber);
 /// <summary>A sentence of its own.</summary>
 /// <param name="Id">As <see cref="ReportField.Id"/>.</param>
 /// <param name="Text">The sentence.</param>
-public sealed record ReportSentence(string Id, string Text) : ReportBlock;
+/// <param name="RunsOn">True when it stands in one paragraph with the sentence before.</param>
+public sealed record ReportSentence(string Id, string Text, bool RunsOn = false) : ReportBlock;
 
 /// <summary>A ruled line to write on in ink.</summary>
 /// <param name="Id">As <see cref="ReportField.Id"/>.</param>

@@ -8,13 +8,14 @@ namespace ProbeCal.Station.Reports;
 internal static class ReportHtml
 {
     private const string Style = """
-        @page { size: auto; margin: 8.5mm 9mm 9.5mm; @bottom-right { content: "page " counter(page) " of " counter(pages); font: 7pt FACES; color: #000; } }
+        @page { size: auto; margin: 8.5mm 9mm 9.5mm; @bottom-right { content: "page " counter(page) " of " counter(pages); font: 7pt FACES; color: #000; vertical-align: top; } }
         * { box-sizing: border-box; }
         body { font: 7.3pt/8.5pt FACES; color: #000; background: #fff; width: 188mm; margin: 0 auto; overflow-wrap: anywhere; }
         header { display: flex; justify-content: space-between; align-items: flex-start; gap: 4mm; }
         h1 { font-size: 12pt; line-height: 15pt; margin: 0 0 0.6mm; }
-        h2 { font-size: 8.2pt; line-height: 8.6pt; margin: 0.7mm 0 0.3mm; padding-top: 0.5mm; border-top: 0.3mm solid #000; break-after: avoid; }
+        h2 { font-size: 8.2pt; line-height: 8.6pt; margin: 0.6mm 0 0.2mm; padding-top: 0.4mm; border-top: 0.3mm solid #000; break-after: avoid; }
         p { margin: 0; }
+        p:has(+ .on), p.on { display: inline; }
         .verdict { font-size: 12pt; line-height: 15pt; font-weight: bold; border: 0.4mm solid #000; padding: 0.3mm 2.4mm; margin: 0; white-space: nowrap; }
         .warning { font-size: 8.4pt; line-height: 10.2pt; font-weight: bold; }
         dl { display: grid; grid-template-columns: 30mm 1fr 30mm 1fr; column-gap: 0; margin: 0; }
@@ -32,7 +33,7 @@ internal static class ReportHtml
         tr > :last-child { padding-right: 0 !important; }
         .figure { text-align: right; }
         svg { display: block; max-width: 100%; }
-        .ink { display: grid; grid-template-columns: 30mm 1fr; align-items: end; height: 8.5mm; break-inside: avoid; }
+        .ink { display: grid; grid-template-columns: 30mm 1fr; align-items: end; height: 7.4mm; break-inside: avoid; }
         .ink span { border-bottom: 0.2mm solid #000; height: 100%; }
         footer { border-top: 0.12mm solid #000; margin-top: 1.2mm; padding-top: 0.4mm; font-size: 7pt; line-height: 8.4pt; }
         """;
@@ -101,7 +102,7 @@ internal static class ReportHtml
                 Table(page, table);
                 break;
             case ReportSentence sentence:
-                page.Append(CultureInfo.InvariantCulture, $"<p id=\"{sentence.Id}\" dir=\"auto\">{PageText.Escape(sentence.Text)}</p>\n");
+                page.Append(CultureInfo.InvariantCulture, $"<p id=\"{sentence.Id}\" dir=\"auto\"{(sentence.RunsOn ? " class=\"on\"" : "")}>{PageText.Escape(sentence.Text)}</p>\n");
                 break;
             case ReportPlot plot:
                 page.Append(PlotSvg.Element(plot, 532, PageSizes.PlotHeight));

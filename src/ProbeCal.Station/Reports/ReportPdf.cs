@@ -129,14 +129,26 @@ internal sealed class ReportPdf
     private void Section(ReportSection section)
     {
         Need(13 + (3 * Leading));
-        _y += 3;
+        _y += 2.5;
         _page.Line(PlotStroke.Solid, 0.8, [(_left, _y), (_left + ContentWidth, _y)]);
-        _y += 8.6;
+        _y += 8.4;
         _page.Text(FontFile.Bold, 8.2, _left, _y, FontFile.Bold.Showable(section.Title));
-        _y += 2.4;
+        _y += 2.1;
         for (int i = 0; i < section.Blocks.Count; i++)
         {
-            if (section.Blocks[i] is ReportFields fields && i + 1 < section.Blocks.Count && section.Blocks[i + 1] is ReportPlot beside)
+            if (section.Blocks[i] is ReportSentence)
+            {
+                List<string> paragraph = [];
+                while (i < section.Blocks.Count && section.Blocks[i] is ReportSentence sentence && (paragraph.Count == 0 || sentence.RunsOn))
+                {
+                    paragraph.Add(sentence.Text);
+                    i++;
+                }
+
+                i--;
+                Wrapped(FontFile.Regular, Size, Leading, 0, ContentWidth, string.Join(' ', paragraph));
+            }
+            else if (section.Blocks[i] is ReportFields fields && i + 1 < section.Blocks.Count && section.Blocks[i + 1] is ReportPlot beside)
             {
                 Beside(fields, beside);
                 i++;
@@ -157,9 +169,6 @@ internal sealed class ReportPdf
                 break;
             case ReportTable table:
                 Table(table);
-                break;
-            case ReportSentence sentence:
-                Wrapped(FontFile.Regular, Size, Leading, 0, ContentWidth, sentence.Text);
                 break;
             case ReportPlot plot:
                 Need(PageSizes.PlotHeight);

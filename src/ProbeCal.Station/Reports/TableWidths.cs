@@ -8,7 +8,7 @@ namespace ProbeCal.Station.Reports;
 internal static class TableWidths
 {
     /// <summary>Widest that the longest word of a column may claim; longer ones are broken.</summary>
-    private const double WidestWord = 82;
+    private const double WidestWord = 110;
 
     /// <summary>The widths, points, without the gaps between.</summary>
     internal static double[] Of(ReportTable table, double size, double room)
