@@ -86,7 +86,7 @@ public sealed class CertificatePrintTests(ITestOutputHelper output) : IDisposabl
         string[] all = Words(string.Join(' ', body.Descendants().SelectMany(static element => element.Nodes().OfType<XText>()).Select(static text => text.Value)));
         // The other way round: the PDF has only page numbers and the words of its foot beside.
         string[] time = Words(body.Descendants().Single(static element => element.Attribute("id")?.Value == "signed-time").Value);
-        Assert.Equal([], pdf.Except(all).Except(["page", "of", "1"]).Where(word => !Regex.IsMatch(word, "^[0-9]{2}:[0-9]{2}:[0-9]{2}$")).Except(time));
+        Assert.Equal([], pdf.Except(all).Except(["page", "of", "1", "·"]).Where(word => !Regex.IsMatch(word, "^[0-9]{2}:[0-9]{2}:[0-9]{2}$")).Except(time));
     }
 
     [SkippableFact]
@@ -118,7 +118,7 @@ public sealed class CertificatePrintTests(ITestOutputHelper output) : IDisposabl
         {
             Site = "A pond whose name is just as long as anybody would care to write it",
             By = "A person with a rather long name, and a second one",
-            Findings = [finding, finding with { Guard = "stirring", Saw = "the water stood still for the whole window; a probe that consumes gas reads low there", Reason = "the probe was moved by hand" }],
+            Findings = [finding, finding with { Guard = "stirring", Saw = "the water stood still for the whole window", Reason = "the probe was moved by hand" }],
         };
     }
 

@@ -20,7 +20,7 @@ internal static class PageSizes
     internal const double Body = 7.3;
     internal const double Leading = 8.5;
     internal const double Table = 7;
-    internal const double TableLeading = 8.1;
+    internal const double TableLeading = 8;
     internal const double NameWidth = 86;
     internal const double PlotHeight = 150;
     internal const double SmallPlotWidth = 285;

@@ -1,3 +1,4 @@
+using System;
 using System.Globalization;
 using System.Text;
 using ProbeCal.Station.Entry;
@@ -8,7 +9,9 @@ namespace ProbeCal.Station.Reports;
 internal static class ReportHtml
 {
     private const string Style = """
-        @page { size: auto; margin: 8.5mm 9mm 9.5mm; @bottom-right { content: "page " counter(page) " of " counter(pages); font: 7pt FACES; color: #000; vertical-align: top; } }
+        @page { size: auto; margin: 8.5mm 9mm 9.5mm; 
+            @bottom-left { content: "FOOT"; font: 7pt FACES; color: #000; vertical-align: top; white-space: nowrap; }
+            @bottom-right { content: "page " counter(page) " of " counter(pages); font: 7pt FACES; color: #000; vertical-align: top; } }
         * { box-sizing: border-box; }
         body { font: 7.3pt/8.5pt FACES; color: #000; background: #fff; width: 188mm; margin: 0 auto; overflow-wrap: anywhere; }
         header { display: flex; justify-content: space-between; align-items: flex-start; gap: 4mm; }
@@ -35,7 +38,6 @@ internal static class ReportHtml
         svg { display: block; max-width: 100%; }
         .ink { display: grid; grid-template-columns: 30mm 1fr; align-items: end; height: 7.4mm; break-inside: avoid; }
         .ink span { border-bottom: 0.2mm solid #000; height: 100%; }
-        footer { border-top: 0.12mm solid #000; margin-top: 1.2mm; padding-top: 0.4mm; font-size: 7pt; line-height: 8.4pt; }
         """;
 
     /// <summary>The whole page.</summary>
@@ -43,7 +45,7 @@ internal static class ReportHtml
     {
         StringBuilder page = new();
         page.Append("<!DOCTYPE html>\n<html lang=\"en\">\n<head>\n<meta charset=\"utf-8\"/>\n<meta name=\"viewport\" content=\"width=device-width\"/>\n<title>").Append(PageText.Escape(report.Title)).Append("</title>\n<style>\n")
-            .Append(Style.Replace("FACES", PlotSvg.Faces, System.StringComparison.Ordinal)).Append("\n</style>\n</head>\n<body>\n<header>\n<h1 dir=\"auto\">").Append(PageText.Escape(report.Title)).Append("</h1>\n");
+            .Append(Style.Replace("FACES", PlotSvg.Faces, StringComparison.Ordinal).Replace("FOOT", CssString(report.Foot), StringComparison.Ordinal)).Append("\n</style>\n</head>\n<body>\n<header>\n<h1 dir=\"auto\">").Append(PageText.Escape(report.Title)).Append("</h1>\n");
         if (report.Verdict.Length != 0)
         {
             page.Append("<p class=\"verdict\">").Append(PageText.Escape(report.Verdict)).Append("</p>\n");
@@ -66,8 +68,21 @@ internal static class ReportHtml
             Section(page, section);
         }
 
-        page.Append("</main>\n<footer dir=\"auto\">").Append(PageText.Escape(report.Foot)).Append("</footer>\n</body>\n</html>\n");
+        page.Append("</main>\n</body>\n</html>\n");
         return page.ToString();
+    }
+
+    /// <summary>Text between the quotes of a style sheet: all but letters, digits and a few signs by their codes.</summary>
+    private static string CssString(string text)
+    {
+        StringBuilder css = new();
+        foreach (Rune rune in PageText.Shown(text).EnumerateRunes())
+        {
+            bool plain = rune.IsAscii && (Rune.IsLetterOrDigit(rune) || rune.Value is ' ' or '-' or '.' or '_');
+            css.Append(plain ? rune.ToString() : string.Create(CultureInfo.InvariantCulture, $"\\{rune.Value:X} "));
+        }
+
+        return css.ToString();
     }
 
     private static void Section(StringBuilder page, ReportSection section)

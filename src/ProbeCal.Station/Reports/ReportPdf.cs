@@ -15,8 +15,8 @@ internal sealed class ReportPdf
     internal const string Continues = "One page does not hold this record: it continues on further pages, which are numbered.";
 
     private const double ContentWidth = PageSizes.Content;
-    private const double Margin = 25.5;
-    private const double FootHeight = 13;
+    private const double Margin = 22.7;
+    private const double FootHeight = 10;
     private const double Size = PageSizes.Body;
     private const double Leading = PageSizes.Leading;
     private const double Gap = PageSizes.ColumnGap;
@@ -99,7 +99,7 @@ internal sealed class ReportPdf
             _y += 15;
         }
 
-        _y += 3;
+        _y += 1.5;
         foreach (string warning in _report.Warnings)
         {
             Wrapped(FontFile.Bold, 8.4, 10.2, 0, ContentWidth, warning);
