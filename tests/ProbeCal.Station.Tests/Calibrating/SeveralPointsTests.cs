@@ -154,7 +154,13 @@ public class SeveralPointsTests(ITestOutputHelper output)
             SignalUnit = "nA",
             TemperatureCoefficient = new RecordedTemperatureCoefficient
             {
-                Form = "exponential", Value = coefficient, Unit = "1/K", StandardUncertainty = 0.0005, ReferenceCelsius = 25, FittedLowCelsius = 0, FittedHighCelsius = 40,
+                Form = "exponential",
+                Value = coefficient,
+                Unit = "1/K",
+                StandardUncertainty = 0.0005,
+                ReferenceCelsius = 25,
+                FittedLowCelsius = 0,
+                FittedHighCelsius = 40,
             },
             Thermometer = new RecordedThermometer { Id = "P-17", CommonStandardUncertaintyCelsius = 0.1, Source = "entered" },
         };
