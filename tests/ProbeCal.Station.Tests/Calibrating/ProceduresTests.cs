@@ -287,7 +287,12 @@ public class ProceduresTests
                                 {
                                     yield return Bench.Setup with
                                     {
-                                        Probe = Bench.Setup.Probe with { Model = model }, Method = span, Plan = plan, ZeroPlan = zeroPlan, Purpose = purpose, Readings = readings,
+                                        Probe = Bench.Setup.Probe with { Model = model },
+                                        Method = span,
+                                        Plan = plan,
+                                        ZeroPlan = zeroPlan,
+                                        Purpose = purpose,
+                                        Readings = readings,
                                     };
                                 }
                             }
