@@ -51,6 +51,7 @@ internal static class Program
             RegisterCommand.Create(terminal),
             ServiceCommand.Create(terminal),
             CharacteriseCommand.Create(terminal),
+            CorrectCommand.Create(terminal),
             StationCommand.Create(terminal),
             SimulateCommand.Create(terminal),
             DemoCommand.Create(terminal),

@@ -77,7 +77,8 @@ internal static class ReadingFlags
             : new Judged(Quality.Fail, Explain(status));
     }
 
-    private static string Explain(Status status)
+    /// <summary>A status in words.</summary>
+    internal static string Explain(Status status)
     {
         string what = Name(StatusParts.Input(status));
         return StatusParts.Reason(status) switch

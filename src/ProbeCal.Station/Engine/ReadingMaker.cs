@@ -102,49 +102,16 @@ internal sealed class ReadingMaker
     private static ReadingConditions Conditions(StationConfiguration configuration, LoadedCalibration calibration)
     {
         ThermometerConfiguration thermometer = configuration.Thermometer;
-        ReadingConditions conditions = new(
-            calibration.Core.Gas == Gas.Oxygen ? configuration.Equation : GasDefaults.Equation(calibration.Core.Gas),
-            configuration.SignalUncertainty ?? calibration.SignalUncertainty,
-            IsSameThermometer(thermometer, calibration.Record),
+        return ReadingCircumstances.Of(
+            calibration,
+            configuration.Equation,
+            configuration.SignalUncertainty,
+            ReadingCircumstances.IsSameThermometer(thermometer.Id, calibration.Record),
             thermometer.OffsetStandardUncertaintyKelvin,
             thermometer.StandardUncertaintyKelvin,
             configuration.Pressure.StandardUncertainty,
             configuration.Salinity.StandardUncertainty,
-            configuration.Stirring,
-            FlowFactor(configuration.Stirring, calibration.Core),
-            UncertaintyDefaults.StirringRelative(configuration.Stirring));
-        Status status = conditions.Check();
-        return status == Status.Ok ? conditions : throw new InputException("the station's uncertainties make no conditions for a reading: " + status);
-    }
-
-    /// <summary>
-    /// The calibration's flow factor, and where the water moves otherwise now, times what the probe was characterised to give in still water over stirred.
-    /// </summary>
-    private static double FlowFactor(Stirring stirring, ProbeCalibration calibration)
-    {
-        double still = calibration.Model is AmperometricProbe { StillFactor: > 0 } probe ? probe.StillFactor : 1;
-        Stirring calibrated = calibration.IsAirPoint ? Stirring.Stirred : calibration.Stirring;
-        return (calibrated, stirring) switch
-        {
-            (Stirring.Stirred, Stirring.Still) => calibration.FlowFactor * still,
-            (Stirring.Still, Stirring.Stirred) => calibration.FlowFactor / still,
-            _ => calibration.FlowFactor,
-        };
-    }
-
-    /// <summary>
-    /// Whether the thermometer of the calibration reads the water, so that its offset largely cancels. Where the configuration
-    /// names none, the line does: it is the same when the calibration went by the line too, or by the probe's own display.
-    /// </summary>
-    private static bool IsSameThermometer(ThermometerConfiguration thermometer, CalibrationRecord record)
-    {
-        if (thermometer.Id != null)
-        {
-            return thermometer.Id == record.Probe.Thermometer.Id;
-        }
-
-        bool fromLine = Array.Exists(record.Points, point => (record.Fit != null || point.Role == record.SlopeFrom) && point.Temperature.Source == RecordNames.FromLine);
-        return fromLine || record.Probe.Thermometer.Id == record.Probe.Id;
+            configuration.Stirring);
     }
 
     internal static string Words(Stirring stirring)

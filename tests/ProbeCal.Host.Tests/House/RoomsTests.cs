@@ -76,6 +76,7 @@ public class RoomsTests
         ["Calibrating"] = ["Entry", "CalibrationLog", "Uncertainty"],
         ["Characterising"] = ["Entry", "WholeFiles", "CalibrationLog", "Calibrating", "Uncertainty", "Storage"],
         ["Reports"] = ["Entry", "Storage", "Uncertainty", "CalibrationLog", "Calibrating"],
+        ["Correcting"] = ["Entry", "CalibrationLog", "Engine", "Sources", "Storage", "WholeFiles"],
         ["Engine"] = ["Entry", "Sources", "CalibrationLog", "Configuration", "Journal", "Publishing"],
     };
 
