@@ -52,6 +52,7 @@ internal static class Program
             ServiceCommand.Create(terminal),
             CharacteriseCommand.Create(terminal),
             CorrectCommand.Create(terminal),
+            VisitCommand.Create(terminal),
             StationCommand.Create(terminal),
             SimulateCommand.Create(terminal),
             DemoCommand.Create(terminal),

@@ -32,6 +32,7 @@ internal static class RecordJson
         [ServiceRecord.FormatName] = (ServiceRecord.CurrentVersion, "service entry", Context.ServiceRecord),
         [AmendmentRecord.FormatName] = (AmendmentRecord.CurrentVersion, "amendment", Context.AmendmentRecord),
         [PastCalibrationRecord.FormatName] = (PastCalibrationRecord.CurrentVersion, "past calibration", Context.PastCalibrationRecord),
+        [VisitRecord.FormatName] = (VisitRecord.CurrentVersion, "visit", Context.VisitRecord),
     };
 
     /// <summary>The entry as the bytes that the log keeps.</summary>
@@ -103,5 +104,6 @@ internal sealed record RecordHead
 [JsonSerializable(typeof(ServiceRecord))]
 [JsonSerializable(typeof(AmendmentRecord))]
 [JsonSerializable(typeof(PastCalibrationRecord))]
+[JsonSerializable(typeof(VisitRecord))]
 [JsonSerializable(typeof(RecordHead))]
 internal sealed partial class RecordJsonContext : JsonSerializerContext;

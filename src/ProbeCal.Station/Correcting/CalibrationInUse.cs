@@ -59,6 +59,23 @@ internal sealed class CalibrationInUse
         return request.Calibration is string id ? [Of(ById(log, id), log, request, 0)] : InForce(log, request, request.Probe!);
     }
 
+    /// <summary>The calibrations that a revision corrected with, whether or not they still hold.</summary>
+    /// <exception cref="InputException">This log does not have one of them, or has it with other bytes.</exception>
+    internal static IReadOnlyList<CalibrationInUse> Of(CalibrationLogStore log, Revision revision)
+    {
+        List<CalibrationInUse> all = [];
+        foreach (RevisionCalibration each in revision.Calibrations)
+        {
+            StoredCalibration stored = log.Find(each.Id) is { } found && found.Sha256 == each.Sha256 ? found
+                : throw new InputException($"calibration {each.Id}: this log does not have it as the revision used it; name with --data the folder of log {revision.Log.LogId}");
+            CalibrationInUse use = Of(stored, log, revision.Request, each.FromUtc?.UtcTicks ?? 0);
+            use.ToTicks = each.ToUtc?.UtcTicks ?? long.MaxValue;
+            all.Add(use);
+        }
+
+        return all;
+    }
+
     private static StoredCalibration ById(CalibrationLogStore log, string id)
     {
         StoredCalibration stored = log.Find(id)

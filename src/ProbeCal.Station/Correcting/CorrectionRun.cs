@@ -59,7 +59,7 @@ public static class CorrectionRun
         string[] headers = Headers(table.Header, calibrations[0].Record.Gas, columns);
         RowStatus status = new();
         Days days = new(table.Time.Offset ?? TimeSpan.Zero);
-        Offsets offsets = new();
+        Times offsets = new();
         CopyHeader(table, output, headers);
         WriteRows(table, inputs, new RowCorrector(calibrations, plan), plan, columns, output, status, days, offsets, surroundings, stop);
         if (status.Rows == status.Refused)
@@ -68,7 +68,7 @@ public static class CorrectionRun
         }
 
         string outputHash = output.Sha256();
-        Revision revision = Describe(request, log, surroundings, because, table, calibrations, plan, columns, headers, status, days, outputHash);
+        Revision revision = Describe(request, log, surroundings, because, table, calibrations, plan, columns, headers, status, days, offsets, outputHash);
         result.Keep();
         string path = Keep(request.Output, revision);
         status.Tell(surroundings.Say);
@@ -79,7 +79,7 @@ public static class CorrectionRun
 
     private static void WriteRows(
         RawTable table, RowInputs inputs, RowCorrector corrector, ServicePlan plan, OutputColumn[] columns, ByteOutput output, RowStatus status, Days days,
-        Offsets offsets, CorrectionSurroundings surroundings, CancellationToken stop)
+        Times offsets, CorrectionSurroundings surroundings, CancellationToken stop)
     {
         ByteRows rows = table.Rows;
         byte separator = table.Separator;
@@ -107,9 +107,9 @@ public static class CorrectionRun
 
             if (corrected)
             {
-                offsets.Count(inputs.OffsetMinutes);
                 Order(inputs.UtcTicks, ref last, status);
                 corrected = Correct(inputs, corrector, plan, status);
+                offsets.Count(inputs.UtcTicks, inputs.OffsetMinutes, corrected);
             }
 
             WriteRow(rows, cellsOfHeader, separator, output);
@@ -339,7 +339,7 @@ public static class CorrectionRun
 
     private static Revision Describe(
         CorrectionRequest request, CalibrationLogStore log, CorrectionSurroundings surroundings, IReadOnlyList<string> because, RawTable table,
-        IReadOnlyList<CalibrationInUse> calibrations, ServicePlan plan, OutputColumn[] columns, string[] headers, RowStatus status, Days days, string outputHash)
+        IReadOnlyList<CalibrationInUse> calibrations, ServicePlan plan, OutputColumn[] columns, string[] headers, RowStatus status, Days days, Times offsets, string outputHash)
     {
         string folder = Path.GetDirectoryName(Path.GetFullPath(request.Output))!;
         string input = Path.GetRelativePath(folder, Path.GetFullPath(request.Input));
@@ -359,6 +359,8 @@ public static class CorrectionRun
             Probe = subject,
             Input = new RevisionFile(input, inputHash),
             Output = new RevisionFile(Path.GetFileName(request.Output), outputHash),
+            FirstUtc = Time(offsets.FirstTicks),
+            LastUtc = Time(offsets.LastTicks),
             Request = request with { Input = input, Output = Path.GetFileName(request.Output) },
             Log = new RevisionLog(log.LogId, log.Chain.Count, log.Chain.HeadSha256),
             Calibrations = [.. calibrations.Select(static each => new RevisionCalibration(
@@ -382,6 +384,8 @@ public static class CorrectionRun
                 each.Entry, each.Sha256, Time(each.AtTicks), Known(each.Fouling), Known(each.FoulingPercent), Known(each.Drift), Known(each.DriftPercent), each.Total, each.Applied))],
             Drift = [.. plan.Drift.Select(Describe)],
             Fouling = [.. plan.Fouling.Select(Describe)],
+            AtService = [.. plan.AtService.Select(static each => new RevisionSpan(Time(each.FromTicks), Time(each.ToTicks)))],
+            LastVisitUtc = plan.LastVisitTicks == 0 ? null : Time(plan.LastVisitTicks),
         };
     }
 

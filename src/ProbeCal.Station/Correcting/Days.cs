@@ -65,20 +65,30 @@ internal sealed class Days
     }
 }
 
-/// <summary>The offsets that times of a file carry themselves.</summary>
-internal sealed class Offsets
+/// <summary>The time that rows cover, and the offsets that their times carry themselves.</summary>
+internal sealed class Times
 {
     private readonly SortedDictionary<int, long> _rows = [];
 
-    internal void Count(int minutes)
+    internal long FirstTicks { get; private set; } = DateTime.MaxValue.Ticks;
+
+    internal long LastTicks { get; private set; }
+
+    internal void Count(long utcTicks, int minutes, bool corrected)
     {
+        if (corrected)
+        {
+            FirstTicks = Math.Min(FirstTicks, utcTicks);
+            LastTicks = Math.Max(LastTicks, utcTicks);
+        }
+
         if (minutes != int.MinValue)
         {
             _rows[minutes] = _rows.GetValueOrDefault(minutes) + 1;
         }
     }
 
-    /// <summary>Says so when there are several.</summary>
+    /// <summary>Says so when there are several offsets.</summary>
     internal void Tell(Action<string> say)
     {
         if (1 < _rows.Count)

@@ -44,6 +44,12 @@ internal sealed record Revision
 
     public required RevisionFile Output { get; init; }
 
+    /// <summary>Earliest time of a corrected row, UTC.</summary>
+    public required DateTimeOffset FirstUtc { get; init; }
+
+    /// <summary>Latest time of a corrected row, UTC.</summary>
+    public required DateTimeOffset LastUtc { get; init; }
+
     /// <summary>What was asked for, as the options' texts.</summary>
     public required CorrectionRequest Request { get; init; }
 
@@ -110,6 +116,12 @@ internal sealed record RevisionService
     public required RevisionRamp[] Drift { get; init; }
 
     public required RevisionRamp[] Fouling { get; init; }
+
+    /// <summary>Times in which somebody was at the probe.</summary>
+    public required RevisionSpan[] AtService { get; init; }
+
+    /// <summary>When it was last cleaned; none where fouling plays no part.</summary>
+    public DateTimeOffset? LastVisitUtc { get; init; }
 }
 
 /// <summary>What a visit or a later calibration said; numbers are none where they were not determined.</summary>
@@ -120,6 +132,9 @@ internal sealed record RevisionFinding(
 /// <summary>An error that grew from an onset to the moment at which it was found.</summary>
 internal sealed record RevisionRamp(
     DateTimeOffset FromUtc, DateTimeOffset? ToUtc, DateTimeOffset OnsetUtc, DateTimeOffset FoundUtc, ErrorState Start, ErrorState End, string Found, bool Held);
+
+/// <summary>A span of time.</summary>
+internal sealed record RevisionSpan(DateTimeOffset FromUtc, DateTimeOffset ToUtc);
 
 /// <summary>How the rows came out.</summary>
 internal sealed record RevisionCounts(long Rows, long Corrected, long Flagged, long Refused, long Blank, RevisionReason[] Reasons);

@@ -1,5 +1,6 @@
 using System;
 using System.Collections.Generic;
+using ProbeCal.Station.CalibrationLog;
 using ProbeCal.Station.Engine;
 
 namespace ProbeCal.Station.Correcting;
@@ -7,6 +8,8 @@ namespace ProbeCal.Station.Correcting;
 /// <summary>What there is to know about a corrected row, in the words of its status.</summary>
 internal static class RowFlags
 {
+    internal const string NotBracketed = "not between two passing checks";
+
     private static readonly Dictionary<(Status Status, string Form), string> Words = [];
 
     /// <summary>Sets the flags of what was corrected last; false when there is no value at all.</summary>
@@ -40,6 +43,16 @@ internal static class RowFlags
         if (calibration.StirringDiffers)
         {
             status.Flag("stirred otherwise than at its calibration");
+        }
+
+        BracketVerdict brackets = plan.Brackets.At(new DateTimeOffset(utcTicks, TimeSpan.Zero), reading.Value(ReadingQuantity.MilligramsPerLitre));
+        if (!brackets.InTime)
+        {
+            status.Flag(NotBracketed);
+        }
+        else if (!brackets.InRange)
+        {
+            status.Flag("outside the range of the checks around it");
         }
 
         if (!plan.IsEmpty)

@@ -1,4 +1,5 @@
 using System.Collections.Generic;
+using ProbeCal.Station.CalibrationLog;
 
 namespace ProbeCal.Station.Correcting;
 
@@ -28,6 +29,9 @@ internal sealed class ServicePlan
 
     /// <summary>When the last visit was; 0 when there was none.</summary>
     internal long LastVisitTicks { get; init; }
+
+    /// <summary>Which readings lie between two passing checks.</summary>
+    internal required Brackets Brackets { get; init; }
 
     /// <summary>True when nobody was there and no drift is asked for: values are as live.</summary>
     internal bool IsEmpty => Findings.Count == 0;
