@@ -128,9 +128,9 @@ public static class CorrectionAgain
             : revision.Request with { Calibration = null, Probe = revision.Probe };
     }
 
-    private static IEnumerable<(string File, Revision Revision)> Latest(string folder)
+    private static (string File, Revision Revision)[] Latest(string folder)
     {
-        (string Path, Revision Revision)[] latest = [.. RevisionJson.In(folder)
+        (string File, Revision Revision)[] latest = [.. RevisionJson.In(folder)
             .GroupBy(static each => (each.Revision.Input.Sha256, each.Revision.Probe))
             .Select(static group => group.MaxBy(static each => each.Revision.Number))
             .Select(static each => (each.Path, each.Revision))];

@@ -137,7 +137,7 @@ internal sealed class RowCorrector
             {
                 CorrectionForms.Constant => AfterDrift + Between(fouling.Start.MilligramsPerLitre, fouling.End.MilligramsPerLitre, FoulingShare),
                 CorrectionForms.Percent => AfterDrift + (concentration * Between(fouling.Start.Percent, fouling.End.Percent, FoulingShare) / 100),
-                _ => (AfterDrift - FoulingZero) / FoulingSlope,
+                _ => ServiceErrors.Undo(AfterDrift, FoulingSlope, FoulingZero),
             };
         }
 
@@ -156,7 +156,7 @@ internal sealed class RowCorrector
         DriftZero = Between(drift.Start.Zero, drift.End.Zero, DriftShare);
         if (DriftZero == 0)
         {
-            return concentration / DriftSlope;
+            return ServiceErrors.Undo(concentration, DriftSlope, 0);
         }
 
         if (calibration.Core.Model.Gain(temperature, RangeRule.Extrapolate, out double gain) != Status.Ok && double.IsNaN(gain))
@@ -165,7 +165,7 @@ internal sealed class RowCorrector
         }
 
         ResponsePerHectopascal = calibration.Core.Slope * calibration.Conditions.FlowFactor * gain;
-        double partialPressure = (Reading.Value(ReadingQuantity.PartialPressure) - (DriftZero / ResponsePerHectopascal)) / DriftSlope;
+        double partialPressure = ServiceErrors.Undo(Reading.Value(ReadingQuantity.PartialPressure), DriftSlope, DriftZero / ResponsePerHectopascal);
         return partialPressure * PerHectopascal(calibration, concentration, temperature, pressure, salinity);
     }
 

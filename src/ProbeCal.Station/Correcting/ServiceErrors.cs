@@ -1,4 +1,5 @@
 using System;
+using System.Linq;
 
 namespace ProbeCal.Station.Correcting;
 
@@ -45,6 +46,27 @@ internal static class ServiceErrors
     internal static double Prorated(long ticks, long onset, long visit)
     {
         return ticks <= onset ? 0 : visit <= ticks ? 1 : (double)(ticks - onset) / (visit - onset);
+    }
+
+    /// <summary>read = zero + slope · true: through the origin with one level, a straight line with more (least squares).</summary>
+    internal static (double Slope, double Zero) Line((double True, double Read)[] levels)
+    {
+        double meanTrue = levels.Average(static each => each.True);
+        double meanRead = levels.Average(static each => each.Read);
+        double spread = levels.Sum(each => (each.True - meanTrue) * (each.True - meanTrue));
+        if (spread == 0)
+        {
+            return meanTrue == 0 ? (1, meanRead) : (meanRead / meanTrue, 0);
+        }
+
+        double slope = levels.Sum(each => (each.True - meanTrue) * (each.Read - meanRead)) / spread;
+        return (slope, meanRead - (slope * meanTrue));
+    }
+
+    /// <summary>What is true where a probe of a moved slope and zero reads so: read = zero + slope · true.</summary>
+    internal static double Undo(double reading, double slope, double zero)
+    {
+        return (reading - zero) / slope;
     }
 
     /// <summary>Rates a value by the sum of the absolute corrections that went into it.</summary>

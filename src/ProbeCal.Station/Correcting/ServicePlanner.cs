@@ -171,7 +171,7 @@ internal sealed class ServicePlanner
     {
         VisitCleaning main = visit.Cleaning.MaxBy(static each => each.MonitorBefore)!;
         double error = FoulingOf(main);
-        (double slope, double zero) = Line([.. visit.Cleaning.Select(static each => (each.MonitorBefore + FoulingOf(each), each.MonitorBefore))]);
+        (double slope, double zero) = ServiceErrors.Line([.. visit.Cleaning.Select(static each => (each.MonitorBefore + FoulingOf(each), each.MonitorBefore))]);
         return 0 < slope && double.IsFinite(slope)
             ? new ErrorState(slope, zero, error, ServiceErrors.FoulingPercent(error, main.MonitorBefore))
             : throw new InputException($"visit {visit.Id}: fouling cannot scale with the reading, for the probe read {Number.Print(main.MonitorBefore)} mg/L before cleaning and would have read {Number.Print(main.MonitorBefore + error)} mg/L clean; use --fouling constant");
@@ -197,7 +197,7 @@ internal sealed class ServicePlanner
         RequireLine(calibration);
         (double slope, double zero) = visit.Standards.Length == 1 && main.Standard != 0
             ? (main.Reading / main.Standard, 0)
-            : Line([.. visit.Standards.Select(each => Responses(visit, each, calibration))]);
+            : ServiceErrors.Line([.. visit.Standards.Select(each => Responses(visit, each, calibration))]);
         return 0 < slope && double.IsFinite(slope) && double.IsFinite(zero)
             ? new ErrorState(slope, zero, ServiceErrors.Drift(worst.Standard, worst.Reading), percent)
             : throw new InputException($"visit {visit.Id}: its standards make no slope above zero; use --drift constant, or withdraw the visit");
@@ -221,21 +221,6 @@ internal sealed class ServicePlanner
 
         double response = calibration.Core.Slope * calibration.Conditions.FlowFactor * gain / perHectopascal;
         return (response * standard.Standard, response * standard.Reading);
-    }
-
-    /// <summary>read = zero + slope · true: through the origin with one level, a straight line with more (least squares).</summary>
-    private static (double Slope, double Zero) Line((double True, double Read)[] levels)
-    {
-        double meanTrue = levels.Average(static each => each.True);
-        double meanRead = levels.Average(static each => each.Read);
-        double spread = levels.Sum(each => (each.True - meanTrue) * (each.True - meanTrue));
-        if (spread == 0)
-        {
-            return meanTrue == 0 ? (1, meanRead) : (meanRead / meanTrue, 0);
-        }
-
-        double slope = levels.Sum(each => (each.True - meanTrue) * (each.Read - meanRead)) / spread;
-        return (slope, meanRead - (slope * meanTrue));
     }
 
     private CalibrationInUse? InForceAt(long ticks)
