@@ -10,7 +10,7 @@ internal sealed class CorrectOptions
 {
     private readonly Option<string> _input = Of("--input", "FILE", "The table of raw readings; it is only read.");
     private readonly Option<string> _output = Of("--output", "FILE", "Where the rows go with the results behind them; never over something that is there.");
-    private readonly Option<string[]> _columns = new("--column") { Description = "Which quantity is which column: \"signal=DO raw [nA]\". Once for each of time, signal, temperature, pressure, salinity.", HelpName = "Q=COLUMN [UNIT]" };
+    private readonly Option<string[]> _columns = new("--column") { Description = "Which quantity is which column: \"signal=DO raw [nA]\". Once for each of time, signal, temperature, pressure, salinity, depth.", HelpName = "Q=COLUMN [UNIT]" };
     private readonly Option<string> _probe = Of("--probe", "ID", "The probe: each row is corrected by its calibration in force then.");
     private readonly Option<string> _calibration = Of("--calibration", "ID", "Or one calibration for all rows.");
     private readonly Option<string> _timeOffset = Of("--time-offset", "OFFSET", "How the clock of the table was set, where the times do not say so: +02:00, -0330, UTC.");
@@ -18,6 +18,7 @@ internal sealed class CorrectOptions
     private readonly Option<string> _temperature = Of("--temperature", "T", "Water temperature of all rows, where no column has it: 12.5C.");
     private readonly Option<string> _pressure = Of("--pressure", "P", "Absolute station pressure of all rows: 742mmHg, 989hPa; none goes without, which costs % of local pressure.");
     private readonly Option<string> _salinity = Of("--salinity", "S", "Practical salinity of all rows, 0 for fresh water; none goes without, which costs concentrations.");
+    private readonly Option<string> _depth = Of("--depth", "Z", "Depth of the probe in all rows: 9m; a column may have it too. The surface when nothing says it.");
     private readonly Option<string> _altitude = Of("--altitude", "Z", "Judge the pressures by it, as a station does: 640m.");
     private readonly Option<string> _equation = Of("--equation", "NAME", "Solubility equation by author and year (default benson-krause-1984).");
     private readonly Option<string> _stirring = Of("--stirring", "HOW", "How the water moved: stirred, still, flow-insensitive; as at the calibration when left out.");
@@ -44,7 +45,7 @@ internal sealed class CorrectOptions
     {
         foreach (Option option in new Option[]
         {
-            _input, _output, _columns, _probe, _calibration, _timeOffset, _timeForm, _temperature, _pressure, _salinity, _altitude, _write, _separator, _headerLine,
+            _input, _output, _columns, _probe, _calibration, _timeOffset, _timeForm, _temperature, _pressure, _salinity, _depth, _altitude, _write, _separator, _headerLine,
             _decimalComma, _drift, _driftFrom, _fouling, _applyAbove, _ratings, _largest, _largestPercent, _equation, _stirring, _signalUncertainty,
             _temperatureUncertainty, _pressureUncertainty, _salinityUncertainty, _again, _data,
         })
@@ -97,6 +98,7 @@ internal sealed class CorrectOptions
             Temperature = parsed.GetValue(_temperature),
             Pressure = parsed.GetValue(_pressure),
             Salinity = parsed.GetValue(_salinity),
+            Depth = parsed.GetValue(_depth),
             Altitude = parsed.GetValue(_altitude),
             Equation = parsed.GetValue(_equation),
             Stirring = parsed.GetValue(_stirring),

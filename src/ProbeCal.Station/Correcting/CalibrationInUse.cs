@@ -19,7 +19,7 @@ internal sealed class CalibrationInUse
         Conditions = conditions;
         FromTicks = fromTicks;
         IdBytes = Encoding.UTF8.GetBytes(stored.Record.Id);
-        StirringDiffers = conditions.IsStirringMismatch(loaded.Core.Point);
+        StirringDiffers = conditions.IsStirringMismatch(loaded.Core);
     }
 
     internal StoredCalibration Stored { get; }
@@ -115,7 +115,7 @@ internal sealed class CalibrationInUse
     private static CalibrationInUse Of(StoredCalibration stored, CalibrationLogStore log, CorrectionRequest request, long fromTicks)
     {
         LoadedCalibration loaded = new(stored.Record, stored.Sha256, log.BytesOf(stored));
-        Stirring stirring = request.Stirring is string name ? StirringOf(name) : loaded.Core.Point.Stirring;
+        Stirring stirring = request.Stirring is string name ? StirringOf(name) : loaded.Core.Stirring;
         ReadingConditions conditions = ReadingCircumstances.Of(
             loaded,
             request.Equation is string equation ? EquationNames.Parse("--equation", equation) : EquationNames.Default,

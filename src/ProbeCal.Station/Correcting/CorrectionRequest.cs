@@ -45,6 +45,9 @@ public sealed record CorrectionRequest
     /// <summary>Practical salinity of all rows, or <c>none</c>; null when a column has it.</summary>
     public string? Salinity { get; init; }
 
+    /// <summary>Depth of the probe in all rows; null when a column has it, or for the surface.</summary>
+    public string? Depth { get; init; }
+
     /// <summary>Altitude by which pressures are judged; null judges none.</summary>
     public string? Altitude { get; init; }
 

@@ -159,7 +159,7 @@ public static class CorrectionRun
         }
 
         corrector.Calibration.Rows++;
-        corrector.Correct(inputs.UtcTicks, inputs.Signal, inputs.Temperature, inputs.Pressure, inputs.Salinity);
+        corrector.Correct(inputs.UtcTicks, inputs.Signal, inputs.Temperature, inputs.Pressure, inputs.Salinity, inputs.DepthDecibar);
         return RowFlags.Set(corrector, plan, inputs.UtcTicks, status);
     }
 

@@ -97,7 +97,7 @@ public sealed class ExplainedRow
         bool corrected = inputs.Read(table.Rows, status) && Find(corrector, inputs, status);
         if (corrected)
         {
-            corrector.Correct(inputs.UtcTicks, inputs.Signal, inputs.Temperature, inputs.Pressure, inputs.Salinity);
+            corrector.Correct(inputs.UtcTicks, inputs.Signal, inputs.Temperature, inputs.Pressure, inputs.Salinity, inputs.DepthDecibar);
             corrected = RowFlags.Set(corrector, plan, inputs.UtcTicks, status);
             AddInputs(table, inputs);
             AddCalibration(corrector.Calibration, inputs);
@@ -137,6 +137,7 @@ public sealed class ExplainedRow
         Read("temperature", inputs.Temperature, "degC", From(table, "temperature"));
         Read("pressure", inputs.Pressure, "hPa", From(table, "pressure"));
         Read("salinity", inputs.Salinity, "", From(table, "salinity"));
+        Read("water above", inputs.DepthDecibar, "dbar", inputs.HasDepth ? From(table, "depth") + ", depth at the density of this water" : "no depth stated, so the surface, as live");
     }
 
     private void AddCalibration(CalibrationInUse calibration, RowInputs inputs)
@@ -145,7 +146,7 @@ public sealed class ExplainedRow
         Read("slope", calibration.Core.Slope, "response/hPa", from);
         Read("zero", calibration.Core.ZeroResponse, "response", from);
         Read("flow factor", calibration.Conditions.FlowFactor, "", from);
-        calibration.Core.Model.Response(inputs.Signal, inputs.Temperature, inputs.Pressure, RangeRule.Extrapolate, out double response);
+        calibration.Core.Model.Response(inputs.Signal, inputs.Temperature, inputs.Pressure, inputs.DepthDecibar, RangeRule.Extrapolate, out double response);
         calibration.Core.Model.Gain(inputs.Temperature, RangeRule.Extrapolate, out double gain);
         _steps.Add(new CorrectionStep("response", "the signal on the scale of the probe's model", [("signal", inputs.Signal)], response, "response", "model " + calibration.Record.Probe.Model));
         _steps.Add(new CorrectionStep("gain", "response per hPa at this temperature over that at the reference temperature", [("temperature", inputs.Temperature)], gain, "", "temperature coefficient, " + calibration.Record.Probe.TemperatureCoefficient.Form));

@@ -93,11 +93,11 @@ internal sealed class RowCorrector
 
     /// <summary>Corrects a sample by the calibration that <see cref="Find"/> found.</summary>
     /// <returns>The status of the partial pressure, as live.</returns>
-    internal Status Correct(long utcTicks, double signal, double temperature, double pressure, double salinity)
+    internal Status Correct(long utcTicks, double signal, double temperature, double pressure, double salinity, double depthDecibar)
     {
         CalibrationInUse calibration = Calibration;
         Status status = Correction.Correct(
-            calibration.Core, calibration.Conditions, signal, temperature, pressure, salinity, RangeRule.NearEdge, Reading);
+            calibration.Core, calibration.Conditions, signal, temperature, pressure, salinity, depthDecibar, RangeRule.NearEdge, Reading);
         if (!_plan.IsEmpty)
         {
             TakeBack(calibration, utcTicks, temperature, pressure, salinity);

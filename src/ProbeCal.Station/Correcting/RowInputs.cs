@@ -12,7 +12,10 @@ internal sealed class RowInputs
     internal static IReadOnlyList<ColumnQuantity> Known { get; } =
     [
         new("time"), new("signal"), new("temperature", QuantityKind.Temperature), new("pressure", QuantityKind.Pressure), new("salinity", QuantityKind.Salinity),
+        new("depth", QuantityKind.Depth),
     ];
+
+    private const double HectopascalPerDecibar = 100;
 
     private readonly RawTable _table;
     private readonly int _time;
@@ -20,6 +23,7 @@ internal sealed class RowInputs
     private readonly Input _temperature;
     private readonly Input _pressure;
     private readonly Input _salinity;
+    private readonly Input _depth;
     private readonly double _altitude;
 
     /// <exception cref="InputException">Something is missing, or said twice.</exception>
@@ -31,6 +35,8 @@ internal sealed class RowInputs
         _temperature = Of("temperature", request.Temperature, QuantityKind.Temperature, "12.5C", mayBeNone: false);
         _pressure = Of("pressure", request.Pressure, QuantityKind.Pressure, "742mmHg", mayBeNone: true);
         _salinity = Of("salinity", request.Salinity, QuantityKind.Salinity, "0", mayBeNone: true);
+        HasDepth = request.Depth is not null || 0 <= table.IndexOf("depth");
+        _depth = HasDepth ? Of("depth", request.Depth, QuantityKind.Depth, "9m", mayBeNone: false) : new Input(-1, null, 0);
         _altitude = request.Altitude is string text ? Quantity.AltitudeMetres("--altitude", text) : double.NaN;
         SignalUnit = Array.Find(table.Mappings, static each => each.Quantity.Name == "signal")!.UnitText;
     }
@@ -50,6 +56,12 @@ internal sealed class RowInputs
     internal double Pressure { get; private set; }
 
     internal double Salinity { get; private set; }
+
+    /// <summary>Pressure of the water above the probe, dbar; 0 where no depth is stated, as live.</summary>
+    internal double DepthDecibar { get; private set; }
+
+    /// <summary>True when a column or an option has a depth.</summary>
+    internal bool HasDepth { get; }
 
     /// <summary>The cell at fault of a refused row.</summary>
     internal int FaultyCell { get; private set; } = -1;
@@ -123,7 +135,29 @@ internal sealed class RowInputs
             }
         }
 
-        return true;
+        return !HasDepth || ReadDepth(row, status);
+    }
+
+    private bool ReadDepth(ByteRows row, RowStatus status)
+    {
+        if (!_depth.TryRead(this, row, out double depth, out bool missing))
+        {
+            FaultyCell = _depth.Index;
+            status.Refuse(missing ? "depth missing" : "depth unreadable");
+            return false;
+        }
+
+        // Without a salinity the water is taken as fresh: 3 % of the water's pressure at most.
+        DensityEos80.Density(Temperature, double.IsNaN(Salinity) ? 0 : Salinity, RangeRule.Extrapolate, out double density);
+        Status ofDepth = HydrostaticPressure.Hectopascal(depth, density, RangeRule.Refuse, out double hectopascal);
+        DepthDecibar = hectopascal / HectopascalPerDecibar;
+        if (ofDepth != Status.Ok)
+        {
+            FaultyCell = _depth.Index;
+            status.Refuse("depth out of range");
+        }
+
+        return ofDepth == Status.Ok;
     }
 
     private void Judge(double pressure, RowStatus status)
