@@ -3,8 +3,8 @@ using System.Globalization;
 using BenchmarkDotNet.Running;
 using ProbeCal.Benchmarks;
 
-// side-by-side [RUNS COUNT]: against gsw, for side-by-side.sh. Anything else goes to BenchmarkDotNet.
-if (args.Length == 0 || args[0] != "side-by-side")
+// side-by-side [RUNS COUNT]: against gsw, for side-by-side.sh; correct [RUNS ROWS], for correct.sh. Anything else goes to BenchmarkDotNet.
+if (args.Length == 0 || args[0] is not ("side-by-side" or "correct"))
 {
     BenchmarkSwitcher.FromAssembly(typeof(Water).Assembly).Run(args);
     return 0;
@@ -21,4 +21,4 @@ if (args.Length > 1
     return 2;
 }
 
-return SideBySide.Run(runs, count);
+return args[0] == "correct" ? Corrections.Run(runs, count) : SideBySide.Run(runs, count);

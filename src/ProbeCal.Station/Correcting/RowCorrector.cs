@@ -111,37 +111,37 @@ internal sealed class RowCorrector
         double concentration = Reading.Value(ReadingQuantity.MilligramsPerLitre);
         DriftRamp = ErrorRamp.At(_plan.Drift, utcTicks);
         (DriftShare, DriftSlope, DriftZero, ResponsePerHectopascal) = (0, 1, 0, double.NaN);
-        AfterDrift = concentration;
+        Drift = 0;
         if (DriftRamp is ErrorRamp drift)
         {
             DriftShare = ServiceErrors.Prorated(utcTicks, drift.OnsetTicks, drift.VisitTicks);
-            AfterDrift = _plan.DriftForm switch
+            Drift = _plan.DriftForm switch
             {
-                CorrectionForms.Constant => concentration + Between(drift.Start.MilligramsPerLitre, drift.End.MilligramsPerLitre, DriftShare),
-                CorrectionForms.Percent => concentration + (concentration * Between(drift.Start.Percent, drift.End.Percent, DriftShare) / 100),
-                _ => WithoutDrift(calibration, drift, concentration, temperature, pressure, salinity),
+                CorrectionForms.Constant => Between(drift.Start.MilligramsPerLitre, drift.End.MilligramsPerLitre, DriftShare),
+                CorrectionForms.Percent => concentration * Between(drift.Start.Percent, drift.End.Percent, DriftShare) / 100,
+                _ => WithoutDrift(calibration, drift, concentration, temperature, pressure, salinity) - concentration,
             };
         }
 
-        Drift = AfterDrift - concentration;
+        AfterDrift = concentration + Drift;
         FoulingRamp = ErrorRamp.At(_plan.Fouling, utcTicks);
         (FoulingShare, FoulingSlope, FoulingZero) = (0, 1, 0);
-        Corrected = AfterDrift;
+        Fouling = 0;
         if (FoulingRamp is ErrorRamp fouling)
         {
             FoulingShare = ServiceErrors.Prorated(utcTicks, fouling.OnsetTicks, fouling.VisitTicks);
             FoulingSlope = Between(fouling.Start.Slope, fouling.End.Slope, FoulingShare);
             FoulingZero = Between(fouling.Start.Zero, fouling.End.Zero, FoulingShare);
             // The published forms add to the reading as it was recorded, the form in slope and zero undoes one after the other.
-            Corrected = _plan.FoulingForm switch
+            Fouling = _plan.FoulingForm switch
             {
-                CorrectionForms.Constant => AfterDrift + Between(fouling.Start.MilligramsPerLitre, fouling.End.MilligramsPerLitre, FoulingShare),
-                CorrectionForms.Percent => AfterDrift + (concentration * Between(fouling.Start.Percent, fouling.End.Percent, FoulingShare) / 100),
-                _ => ServiceErrors.Undo(AfterDrift, FoulingSlope, FoulingZero),
+                CorrectionForms.Constant => Between(fouling.Start.MilligramsPerLitre, fouling.End.MilligramsPerLitre, FoulingShare),
+                CorrectionForms.Percent => concentration * Between(fouling.Start.Percent, fouling.End.Percent, FoulingShare) / 100,
+                _ => ServiceErrors.Undo(AfterDrift, FoulingSlope, FoulingZero) - AfterDrift,
             };
         }
 
-        Fouling = Corrected - AfterDrift;
+        Corrected = AfterDrift + Fouling;
         SumOfCorrections = Math.Abs(Drift) + Math.Abs(Fouling);
         Rating = ServiceErrors.Rate(SumOfCorrections, concentration, _plan.Limits);
     }

@@ -65,9 +65,9 @@ internal static class RowFlags
 
     private static void OfService(RowCorrector corrector, ServicePlan plan, long utcTicks, RowStatus status)
     {
-        foreach ((long from, long to) in plan.AtService)
+        for (int i = 0; i < plan.AtService.Count; i++)
         {
-            if (from < utcTicks && utcTicks < to)
+            if (plan.AtService[i].FromTicks < utcTicks && utcTicks < plan.AtService[i].ToTicks)
             {
                 status.Flag("somebody was at the probe");
             }

@@ -9,6 +9,9 @@ namespace ProbeCal.Station.Correcting;
 /// </summary>
 internal static class ServiceErrors
 {
+    /// <summary>What the doubles of decimal readings may be off by, mg/L: 8.97 less 8.67 is 0.3 and not above it.</summary>
+    private const double Rounding = 1e-9;
+
     /// <summary>
     /// Fouling error Ef = (Ma − Mb) − (Fe − Fs), in the unit of the readings: what cleaning changed, less what the water changed meanwhile. It is added
     /// to readings of the fouled monitor.
@@ -69,12 +72,19 @@ internal static class ServiceErrors
         return (reading - zero) / slope;
     }
 
+    /// <summary>True when a sum of absolute errors is above the limit from which they are taken back.</summary>
+    internal static bool IsApplied(double total, ServiceLimits limits)
+    {
+        return limits.ApplyAbove < total - Rounding;
+    }
+
     /// <summary>Rates a value by the sum of the absolute corrections that went into it.</summary>
     /// <param name="sum">That sum, mg/L.</param>
     /// <param name="value">The value before drift and fouling, mg/L.</param>
     /// <param name="limits">Where the ratings end.</param>
     internal static Rating Rate(double sum, double value, ServiceLimits limits)
     {
+        sum -= Rounding;
         double largest = Math.Max(limits.LargestMilligramsPerLitre, Math.Abs(value) * limits.LargestPercent / 100);
         return largest < sum ? Rating.ConsiderDeletion
             : limits.FairUpTo < sum ? Rating.Poor

@@ -80,7 +80,7 @@ internal sealed class ServicePlanner
             ErrorState? fouled = withFouling && visit.Cleaning.Length != 0 ? FoulingOf(visit) : null;
             ErrorState? drifted = withDrift && visit.Standards.Length != 0 ? DriftOf(visit, calibration) : null;
             double total = Math.Abs(fouled?.MilligramsPerLitre ?? 0) + Math.Abs(drifted?.MilligramsPerLitre ?? 0);
-            bool applied = _request.Limits.ApplyAbove < total;
+            bool applied = ServiceErrors.IsApplied(total, _request.Limits);
             _findings.Add(new ServiceFinding(
                 visit.Id, hash, visit.BeforeUtc.UtcTicks, fouled?.MilligramsPerLitre ?? NotKnown, fouled?.Percent ?? NotKnown, drifted?.MilligramsPerLitre ?? NotKnown,
                 drifted?.Percent ?? NotKnown, total, applied));
@@ -132,7 +132,7 @@ internal sealed class ServicePlanner
 
             ErrorState drifted = DriftBetween(calibration, next);
             double total = Math.Abs(drifted.MilligramsPerLitre);
-            bool applied = _request.Limits.ApplyAbove < total;
+            bool applied = ServiceErrors.IsApplied(total, _request.Limits);
             _findings.Add(new ServiceFinding(
                 next.Record.Id, next.Stored.Sha256, next.FromTicks, NotKnown, NotKnown, drifted.MilligramsPerLitre, drifted.Percent, total, applied));
             if (applied)

@@ -26,6 +26,8 @@ public class ReleasedFormatsTests
         ["probecal-log-verification"] = ("log-verification/version-1.json", "log-verification"),
         ["probecal-equipment"] = ("equipment/version-1.json", "equipment"),
         ["probecal-service"] = ("service/version-1.json", "service"),
+        ["probecal-visit"] = ("visit/version-1.json", "visit"),
+        ["probecal-revision"] = ("revision/version-1.json", "revision"),
         ["probecal-amendment"] = ("amendment/version-1.json", "amendment"),
         ["probecal-calibration-log"] = ("calibration-log-v1.db", null),
         ["probecal-calibration-list"] = ("calibration-list/version-2.json", "calibration-list"),

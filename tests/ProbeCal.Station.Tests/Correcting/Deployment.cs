@@ -73,9 +73,9 @@ internal sealed class Deployment : IDisposable
         return [.. lines.Skip(1).Where(static line => line.Length != 0).Select(line => line.Split(';').Zip(names).ToDictionary(static pair => pair.Second, static pair => pair.First))];
     }
 
-    internal Revision Revision(string output = "out.csv")
+    internal Revision RevisionOf(string output = "out.csv")
     {
-        return RevisionJson.Read("--revision", Correcting.Revision.PathFor(Path(output)));
+        return RevisionJson.Read("--revision", Revision.PathFor(Path(output)));
     }
 
     internal VisitRecord Visit(Func<VisitEntry, VisitEntry> change)

@@ -28,7 +28,7 @@ public class RevisionTests
         using Deployment deployment = new();
         deployment.Write("raw.csv", Table(20));
         deployment.Correct("june-r1.csv");
-        Revision revision = deployment.Revision("june-r1.csv");
+        Revision revision = deployment.RevisionOf("june-r1.csv");
         Assert.Equal((1, null, "probecal 9.9.9", deployment.Time.GetUtcNow()), (revision.Number, revision.Previous, revision.Software, revision.MadeUtc));
         Assert.Equal(("raw.csv", Hash(deployment.Path("raw.csv"))), (revision.Input.File, revision.Input.Sha256));
         Assert.Equal(("june-r1.csv", Hash(deployment.Path("june-r1.csv"))), (revision.Output.File, revision.Output.Sha256));
@@ -44,7 +44,7 @@ public class RevisionTests
         deployment.Write("raw.csv", Table(5));
         deployment.Correct("a.csv");
         deployment.Correct("b.csv");
-        Revision second = deployment.Revision("b.csv");
+        Revision second = deployment.RevisionOf("b.csv");
         Assert.Equal(2, second.Number);
         Assert.Equal(new RevisionFile("a.csv.revision.json", Hash(deployment.Path("a.csv.revision.json"))), second.Previous);
     }
@@ -67,7 +67,7 @@ public class RevisionTests
         });
         string made = Assert.Single(Again(deployment, deployment.Path("")));
         Assert.Equal(deployment.Path("june-r2.csv.revision.json"), made);
-        Revision revision = deployment.Revision("june-r2.csv");
+        Revision revision = deployment.RevisionOf("june-r2.csv");
         Assert.Equal(2, revision.Number);
         Assert.Contains($"{id} was replaced by {deployment.Log.LogId}-0002: the barometer read 9 hPa low", revision.Because);
         Assert.Equal(deployment.Log.LogId + "-0002", revision.Calibrations.Single().Id);

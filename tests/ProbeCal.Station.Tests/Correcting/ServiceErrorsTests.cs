@@ -93,6 +93,15 @@ public class ServiceErrorsTests
         Assert.Equal(expected, ServiceErrors.Rate(sum, value, new ServiceLimits()).ToString());
     }
 
+    [Fact]
+    public void Just_the_limit_is_not_above_it()
+    {
+        // As doubles, 8.97 less 8.67 is a little above 0.3.
+        Assert.True(0.3 < ServiceErrors.Drift(8.97, 8.67));
+        Assert.False(ServiceErrors.IsApplied(ServiceErrors.Drift(8.97, 8.67), new ServiceLimits()));
+        Assert.True(ServiceErrors.IsApplied(0.31, new ServiceLimits()));
+    }
+
     private static double Share(string time)
     {
         TimeSpan since = TimeSpan.ParseExact(time, "hh\\:mm\\:ss", System.Globalization.CultureInfo.InvariantCulture) - new TimeSpan(12, 10, 49);
