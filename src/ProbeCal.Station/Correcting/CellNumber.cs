@@ -16,7 +16,7 @@ internal static class CellNumber
     private const ulong LargestExact = 1UL << 53;
 
     /// <summary>Powers of ten that are doubles exactly.</summary>
-    private static ReadOnlySpan<double> Powers =>
+    private static readonly double[] Powers =
     [
         1e0, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8, 1e9, 1e10, 1e11, 1e12, 1e13, 1e14, 1e15, 1e16, 1e17, 1e18, 1e19, 1e20, 1e21, 1e22,
     ];

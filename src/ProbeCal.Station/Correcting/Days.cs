@@ -70,6 +70,9 @@ internal sealed class Times
 {
     private readonly SortedDictionary<int, long> _rows = [];
 
+    private int _minutes = int.MinValue;
+    private long _count;
+
     internal long FirstTicks { get; private set; } = DateTime.MaxValue.Ticks;
 
     internal long LastTicks { get; private set; }
@@ -82,19 +85,33 @@ internal sealed class Times
             LastTicks = Math.Max(LastTicks, utcTicks);
         }
 
-        if (minutes != int.MinValue)
+        if (minutes == _minutes)
         {
-            _rows[minutes] = _rows.GetValueOrDefault(minutes) + 1;
+            _count++;
+            return;
         }
+
+        Keep();
+        (_minutes, _count) = (minutes, 1);
     }
 
     /// <summary>Says so when there are several offsets.</summary>
     internal void Tell(Action<string> say)
     {
+        Keep();
+        _count = 0;
         if (1 < _rows.Count)
         {
             say("the times carry different offsets, each was taken as written: " + string.Join(", ", _rows.Select(static each => string.Create(
                 CultureInfo.InvariantCulture, $"{(each.Key < 0 ? '-' : '+')}{Math.Abs(each.Key) / 60:00}:{Math.Abs(each.Key) % 60:00} in {each.Value} rows"))));
+        }
+    }
+
+    private void Keep()
+    {
+        if (_minutes != int.MinValue)
+        {
+            _rows[_minutes] = _rows.GetValueOrDefault(_minutes) + _count;
         }
     }
 }

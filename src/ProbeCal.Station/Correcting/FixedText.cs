@@ -23,7 +23,7 @@ internal static class FixedText
 
     private static readonly string[] Formats = ["F0", "F1", "F2", "F3", "F4", "F5", "F6", "F7", "F8", "F9", "F10", "F11", "F12"];
 
-    private static ReadOnlySpan<double> Powers => [1e0, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8, 1e9, 1e10, 1e11, 1e12];
+    private static readonly double[] Powers = [1e0, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8, 1e9, 1e10, 1e11, 1e12];
 
     /// <summary>Writes a finite value.</summary>
     /// <param name="value">The value.</param>
