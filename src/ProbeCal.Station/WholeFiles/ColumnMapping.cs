@@ -20,7 +20,6 @@ internal sealed class ColumnMapping
     private readonly string _given;
     private readonly string _column;
     private readonly string? _unitText;
-    private QuantityKind? _kind;
     private QuantityUnit? _unit;
 
     private ColumnMapping(string given, ColumnQuantity quantity, string column, string? unitText)
@@ -29,13 +28,13 @@ internal sealed class ColumnMapping
         Quantity = quantity;
         _column = column;
         _unitText = unitText;
-        _kind = quantity.Kinds.Length == 0 ? null : quantity.Kinds[0];
+        Kind = quantity.Kinds.Length == 0 ? null : quantity.Kinds[0];
     }
 
     internal ColumnQuantity Quantity { get; }
 
-    /// <summary>The kind of the unit; of use after <see cref="Resolve"/>, and not for a column that is taken as it stands.</summary>
-    internal QuantityKind Kind => _kind!;
+    /// <summary>The kind of the unit; of use after <see cref="Resolve"/>. Null for a column that is taken as it stands.</summary>
+    internal QuantityKind? Kind { get; private set; }
 
     /// <summary>The unit; of use after <see cref="Resolve"/>. Null for a column that is taken as it stands.</summary>
     internal QuantityUnit? Unit => _unit;
@@ -107,7 +106,7 @@ internal sealed class ColumnMapping
     {
         Index = Find(header);
         string? unitText = _unitText;
-        if (_kind is null)
+        if (Kind is null)
         {
             return;
         }
@@ -127,7 +126,7 @@ internal sealed class ColumnMapping
         {
             if (kind.Unit(unitText) is QuantityUnit unit)
             {
-                (_kind, _unit) = (kind, unit);
+                (Kind, _unit) = (kind, unit);
                 return;
             }
         }
@@ -171,7 +170,7 @@ internal sealed class ColumnMapping
             return "a point where --decimal-comma promises commas";
         }
 
-        if (Entry.Quantity.TrySplit(Kind, decimalComma ? text.Replace(',', '.') : text, _unit, out _, out QuantityUnit? unit, out string? problem))
+        if (Entry.Quantity.TrySplit(Kind!, decimalComma ? text.Replace(',', '.') : text, _unit, out _, out QuantityUnit? unit, out string? problem))
         {
             return unit == _unit ? null : $"the cell says {unit.Name} and the mapping {_unit!.Name}; one of them is wrong";
         }
