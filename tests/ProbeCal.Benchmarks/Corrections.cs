@@ -80,7 +80,11 @@ internal static class Corrections
                 string output = Path.Combine(folder, "out.csv");
                 CorrectionRequest request = new()
                 {
-                    Input = input, Output = output, Probe = "do-1", TimeOffset = "+02:00", Write = columns,
+                    Input = input,
+                    Output = output,
+                    Probe = "do-1",
+                    TimeOffset = "+02:00",
+                    Write = columns,
                     Columns = ["time=Time", "signal=Raw [nA]", "temperature=Water temp [C]", "pressure=Baro [hPa]", "salinity=Salinity"],
                 };
                 long allocated = GC.GetAllocatedBytesForCurrentThread();
@@ -127,26 +131,51 @@ internal static class Corrections
         RecordedQuantity Quantity(double value, string unit, double uncertainty) => new() { Value = value, Unit = unit, StandardUncertainty = uncertainty, Source = "made up" };
         RecordedPoint span = new()
         {
-            Role = "span", FirstUtc = Calibrated.AddMinutes(-3), LastUtc = Calibrated, Typed = false,
+            Role = "span",
+            FirstUtc = Calibrated.AddMinutes(-3),
+            LastUtc = Calibrated,
+            Typed = false,
             Signal = new RecordedStatistics { Count = 181, Mean = 113.25, StandardDeviation = 0.12, SlopePerMinute = 0.01, SlopeStandardErrorPerMinute = 0.01, Minimum = 112.9, Maximum = 113.6, WindowSeconds = 180 },
-            SignalStandardUncertainty = 0.02, Temperature = Quantity(20.01, "degC", 0.1), Pressure = Quantity(939.3, "hPa", 0.8), Salinity = Quantity(0, "1", 0.1),
-            Stirring = "stirred", FlowFactor = 1, ReferencePartialPressureHectopascal = 191.9, ReferencePartialPressureUncertaintyHectopascal = 0.3,
-            ReferenceMilligramsPerLitre = 8.42, ReferenceUncertaintyMilligramsPerLitre = 0.02,
+            SignalStandardUncertainty = 0.02,
+            Temperature = Quantity(20.01, "degC", 0.1),
+            Pressure = Quantity(939.3, "hPa", 0.8),
+            Salinity = Quantity(0, "1", 0.1),
+            Stirring = "stirred",
+            FlowFactor = 1,
+            ReferencePartialPressureHectopascal = 191.9,
+            ReferencePartialPressureUncertaintyHectopascal = 0.3,
+            ReferenceMilligramsPerLitre = 8.42,
+            ReferenceUncertaintyMilligramsPerLitre = 0.02,
         };
         return new CalibrationRecord
         {
-            Simulated = true, StartedUtc = Calibrated.AddMinutes(-10), CompletedUtc = Calibrated, Gas = "O2", Method = "air-saturated-water", Readings = "live", Source = "made up",
+            Simulated = true,
+            StartedUtc = Calibrated.AddMinutes(-10),
+            CompletedUtc = Calibrated,
+            Gas = "O2",
+            Method = "air-saturated-water",
+            Readings = "live",
+            Source = "made up",
             Probe = new RecordedProbe
             {
-                Id = "do-1", Model = "amperometric", SignalUnit = "nA",
+                Id = "do-1",
+                Model = "amperometric",
+                SignalUnit = "nA",
                 TemperatureCoefficient = new RecordedTemperatureCoefficient { Form = "exponential", Value = 0.03, Unit = "1/K", StandardUncertainty = 0.001, ReferenceCelsius = 25, FittedLowCelsius = 5, FittedHighCelsius = 35 },
                 Thermometer = new RecordedThermometer { Id = "do-1", CommonStandardUncertaintyCelsius = 0.1, Source = "made up" },
             },
-            ReferenceState = Quantity(1, "1", 0.0075), Equation = "benson-krause-1984", Formulas = [], Points = [span], SlopeFrom = "span",
+            ReferenceState = Quantity(1, "1", 0.0075),
+            Equation = "benson-krause-1984",
+            Formulas = [],
+            Points = [span],
+            SlopeFrom = "span",
             Zero = new RecordedZero { IsMeasured = false, Signal = 0.4, SignalStandardUncertainty = 0.2, TemperatureCelsius = 20, PressureHectopascal = 939.3, Source = "assumed" },
             DropletCheck = "not-needed",
             Result = new RecordedResult { Slope = 0.7, SlopeStandardUncertainty = 0.005, Zero = 0.4, ZeroStandardUncertainty = 0.2, Pass = true, Reasons = [], DecisionRule = "made up" },
-            Limits = [], Findings = [], Budget = [], Software = "benchmark",
+            Limits = [],
+            Findings = [],
+            Budget = [],
+            Software = "benchmark",
         };
     }
 

@@ -59,9 +59,16 @@ public class CorrectingFormatsTests
     {
         return deployment.Visit(static entry => entry with
         {
-            Site = "Invented Tarn", MonitorBefore = ["7.1mg/L", "2.25mg/L"], MonitorAfter = ["7.8mg/L", "2.5mg/L"], FieldBefore = ["8.2mg/L", "2.5mg/L"], FieldAfter = ["8.25mg/L", "2.5mg/L"],
-            FieldMeter = "FM-2", Standards = ["8.97mg/L read 8.41mg/L from air-saturated-water at 20.1C salinity 0", "0mg/L read 0.125mg/L from zero-solution at 20.1C salinity 0"],
-            StandardsAt = "2026-06-21T13:00Z", FoulingOnset = "2026-06-10T00:00Z", Remarks = "slime on the membrane since the warm week",
+            Site = "Invented Tarn",
+            MonitorBefore = ["7.1mg/L", "2.25mg/L"],
+            MonitorAfter = ["7.8mg/L", "2.5mg/L"],
+            FieldBefore = ["8.2mg/L", "2.5mg/L"],
+            FieldAfter = ["8.25mg/L", "2.5mg/L"],
+            FieldMeter = "FM-2",
+            Standards = ["8.97mg/L read 8.41mg/L from air-saturated-water at 20.1C salinity 0", "0mg/L read 0.125mg/L from zero-solution at 20.1C salinity 0"],
+            StandardsAt = "2026-06-21T13:00Z",
+            FoulingOnset = "2026-06-10T00:00Z",
+            Remarks = "slime on the membrane since the warm week",
         });
     }
 

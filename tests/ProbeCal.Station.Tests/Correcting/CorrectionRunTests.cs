@@ -277,7 +277,11 @@ public class CorrectionRunTests
         Dictionary<string, string> columns = deployment.Correct("columns.csv", request => request with { Write = write })[0];
         Dictionary<string, string> stated = deployment.Correct("stated.csv", request => request with
         {
-            Columns = ["time=Time", "signal=Raw [nA]"], Temperature = "18.25C", Pressure = "760mmHg", Salinity = "0", Write = write,
+            Columns = ["time=Time", "signal=Raw [nA]"],
+            Temperature = "18.25C",
+            Pressure = "760mmHg",
+            Salinity = "0",
+            Write = write,
         })[0];
         Assert.Equal((columns["O2 [mg/L]"], columns["O2 [% local]"]), (stated["O2 [mg/L]"], stated["O2 [% local]"]));
     }

@@ -78,7 +78,10 @@ public sealed class RecordReportTests : IDisposable
     {
         return new RecordReportRequest
         {
-            Input = path, TimeOffset = "-04:00", Salinity = "0", Pressure = Number.Print(StationPressure) + "hPa",
+            Input = path,
+            TimeOffset = "-04:00",
+            Salinity = "0",
+            Pressure = Number.Print(StationPressure) + "hPa",
             Columns = ["time=Time", "concentration=DO [mg/L]", "percent=DO [%]", "temperature=T [C]"],
         };
     }

@@ -62,7 +62,8 @@ public class RevisionTests
         CalibrationRecord corrected = SampleRecords.Of(Deployment.Probe, SampleRecords.Noon);
         deployment.Log.Append(corrected with
         {
-            Replaces = id, ReplacesReason = "the barometer read 9 hPa low",
+            Replaces = id,
+            ReplacesReason = "the barometer read 9 hPa low",
             Points = [.. corrected.Points.Select(static point => point with { Pressure = point.Pressure with { Value = point.Pressure.Value + 9 } })],
         });
         string made = Assert.Single(Again(deployment, deployment.Path("")));
@@ -134,13 +135,18 @@ public class RevisionTests
         using Deployment deployment = new();
         deployment.Visit(static entry => entry with
         {
-            MonitorBefore = ["7.1mg/L"], MonitorAfter = ["7.8mg/L"], FieldBefore = ["8.2mg/L"], FieldAfter = ["8.25mg/L"],
+            MonitorBefore = ["7.1mg/L"],
+            MonitorAfter = ["7.8mg/L"],
+            FieldBefore = ["8.2mg/L"],
+            FieldAfter = ["8.25mg/L"],
             Standards = ["8.97mg/L read 8.41mg/L from air-saturated-water at 20.1C salinity 0", "0mg/L read 0.125mg/L from zero-solution at 20.1C salinity 0"],
         });
         deployment.Write("raw.csv", Table(40));
         List<Dictionary<string, string>> rows = deployment.Correct(change: request => request with
         {
-            Drift = form, Fouling = form, Write = ["partial-pressure:shortest,mg/L:shortest,percent-local:shortest,drift:shortest,fouling:shortest,corrected:shortest,rating"],
+            Drift = form,
+            Fouling = form,
+            Write = ["partial-pressure:shortest,mg/L:shortest,percent-local:shortest,drift:shortest,fouling:shortest,corrected:shortest,rating"],
         });
         ExplainedRow explained = ExplainedRow.Of(deployment.Path("out.csv.revision.json"), 31, deployment.Log);
 

@@ -75,7 +75,11 @@ public class ServiceCorrectionTests
         // The water rises by 0.125 mg/L while the probe is cleaned; the field meter is 0.75 mg/L off, which must not matter.
         deployment.Visit(static entry => entry with
         {
-            MonitorBefore = [Milligrams(8 * Share)], MonitorAfter = ["8.125mg/L"], FieldBefore = ["8.75mg/L"], FieldAfter = ["8.875mg/L"], FieldMeter = "FM-2",
+            MonitorBefore = [Milligrams(8 * Share)],
+            MonitorAfter = ["8.125mg/L"],
+            FieldBefore = ["8.75mg/L"],
+            FieldAfter = ["8.875mg/L"],
+            FieldMeter = "FM-2",
         });
 
         List<Dictionary<string, string>> rows = deployment.Correct(change: static request => request with { Write = Full });
@@ -97,7 +101,11 @@ public class ServiceCorrectionTests
         using Deployment deployment = new();
         deployment.Visit(static entry => entry with
         {
-            MonitorBefore = ["7.90mg/L"], MonitorAfter = ["8.25mg/L"], FieldBefore = ["8.31mg/L"], FieldAfter = ["8.35mg/L"], FieldMeter = "FM-2",
+            MonitorBefore = ["7.90mg/L"],
+            MonitorAfter = ["8.25mg/L"],
+            FieldBefore = ["8.31mg/L"],
+            FieldAfter = ["8.35mg/L"],
+            FieldMeter = "FM-2",
             Standards = ["8.97mg/L read 8.61mg/L from air-saturated-water"],
         });
         DateTimeOffset quarter = Calibrated + ((VisitBefore - Calibrated) / 4);
@@ -124,7 +132,10 @@ public class ServiceCorrectionTests
         using Deployment deployment = new();
         deployment.Visit(static entry => entry with
         {
-            MonitorBefore = ["8.00mg/L"], MonitorAfter = ["8.125mg/L"], InBucket = true, Standards = ["9.0mg/L read 8.875mg/L from air-saturated-water"],
+            MonitorBefore = ["8.00mg/L"],
+            MonitorAfter = ["8.125mg/L"],
+            InBucket = true,
+            Standards = ["9.0mg/L read 8.875mg/L from air-saturated-water"],
         });
         deployment.Write("raw.csv", Deployment.Header, Deployment.Row(VisitBefore.AddDays(-1), 80));
         Dictionary<string, string> left = deployment.Correct("left.csv", static request => request with { Write = Full })[0];
@@ -184,7 +195,11 @@ public class ServiceCorrectionTests
         DateTimeOffset storm = Calibrated.AddDays(15);
         deployment.Visit(static entry => entry with
         {
-            MonitorBefore = ["7.0mg/L"], MonitorAfter = ["7.5mg/L"], InBucket = true, FoulingOnset = "2026-06-16T12:00Z", Remarks = "storm, silt on the membrane",
+            MonitorBefore = ["7.0mg/L"],
+            MonitorAfter = ["7.5mg/L"],
+            InBucket = true,
+            FoulingOnset = "2026-06-16T12:00Z",
+            Remarks = "storm, silt on the membrane",
         });
         deployment.Write("raw.csv", Deployment.Header, Deployment.Row(storm.AddDays(-1), 80), Deployment.Row(storm + ((VisitBefore - storm) / 2), 80));
         List<Dictionary<string, string>> rows = deployment.Correct(change: static request => request with { Write = Full, Fouling = "constant" });
@@ -234,7 +249,12 @@ public class ServiceCorrectionTests
         {
             InputException wrong = Assert.Throws<InputException>(() => new VisitEntry
             {
-                Probe = "do-1", Before = "2026-06-21T12:00Z", After = "2026-06-21T12:30Z", FieldMeter = "FM-2", Standards = [standard], Software = "x",
+                Probe = "do-1",
+                Before = "2026-06-21T12:00Z",
+                After = "2026-06-21T12:30Z",
+                FieldMeter = "FM-2",
+                Standards = [standard],
+                Software = "x",
             }.Read());
             Assert.Contains("the field meter is never the standard", wrong.Message, StringComparison.Ordinal);
         }
@@ -246,7 +266,11 @@ public class ServiceCorrectionTests
             using Deployment deployment = new();
             deployment.Visit(entry => entry with
             {
-                MonitorBefore = ["8mg/L"], MonitorAfter = ["8.625mg/L"], FieldBefore = [Milligrams(meter)], FieldAfter = [Milligrams(meter + 0.125)], FieldMeter = "FM-2",
+                MonitorBefore = ["8mg/L"],
+                MonitorAfter = ["8.625mg/L"],
+                FieldBefore = [Milligrams(meter)],
+                FieldAfter = [Milligrams(meter + 0.125)],
+                FieldMeter = "FM-2",
             });
             deployment.Write("raw.csv", [Deployment.Header, .. Enumerable.Range(0, 20).Select(static i => Deployment.Row(Calibrated.AddDays(i), 80 + i))]);
             outcomes.Add(string.Join('\n', deployment.Correct(change: static request => request with { Write = Full }).Select(static row => string.Join(';', row.Values))));
