@@ -71,6 +71,10 @@ internal sealed class CalibrateOptions
         LimitPercent = Text("--limit-percent", "X", "The same in % of the reference; the larger of the two applies: 2% (default).");
         ZeroLimit = Text("--zero-limit", "X", "Limit of the zero reading: 0.2mg/L (default, TM 9-A6.2).");
         GuardBand = Flag("--guard-band", "Accept only what lies within a limit by its whole expanded uncertainty (default: simple acceptance).");
+        ZeroWindow = Text("--zero-window", "LOW..HIGH", "Zero signal that the probe's maker allows, in the signal's unit; none unless entered.");
+        StoneDepth = Text("--stone-depth", "Z", "Depth at which bubbles are released into the bath: 0.3m; bubbles under water supersaturate it.");
+        EquilibratedAt = Text("--equilibrated-at", "T", "Temperature at which the water of the bath was last in equilibrium with air: 12C.");
+        AirTemperature = Text("--air-temperature", "T", "Temperature of the air in the chamber: 21C.");
         SlopeWindow = Text("--slope-window", "LOW..HIGH", "Slope that the probe's maker allows, per hPa; none unless entered.");
         Window = Text("--window", "TIME", "Length of a steady window: 3min (default).");
         Samples = Text("--samples", "N", "Least number of samples in it: 30 (default).");
@@ -143,6 +147,10 @@ internal sealed class CalibrateOptions
     internal Option<string> LimitPercent { get; }
     internal Option<string> ZeroLimit { get; }
     internal Option<string> SlopeWindow { get; }
+    internal Option<string> ZeroWindow { get; }
+    internal Option<string> StoneDepth { get; }
+    internal Option<string> EquilibratedAt { get; }
+    internal Option<string> AirTemperature { get; }
     internal Option<string> Window { get; }
     internal Option<string> Samples { get; }
     internal Option<string> StableWithin { get; }

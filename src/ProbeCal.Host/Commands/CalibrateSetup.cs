@@ -108,6 +108,7 @@ internal sealed class CalibrateSetup
                 ?? UncertaintyDefaults.ReferenceStateRelative(air ? CalibrationMethod.WaterSaturatedAir : CalibrationMethod.AirSaturatedWater),
             ZeroPlan = ZeroPlan(manual, method),
             Limits = limits,
+            Surroundings = Surroundings(),
             Waiting = Waiting(limits),
             Reasons = Reasons(),
             By = _reader.Given(_options.By),
@@ -273,12 +274,24 @@ internal sealed class CalibrateSetup
         };
     }
 
+    private Surroundings? Surroundings()
+    {
+        Surroundings around = new()
+        {
+            StoneDepthMetres = _reader.NotNegative(_options.StoneDepth, QuantityKind.Depth),
+            EquilibratedCelsius = _reader.Given(_options.EquilibratedAt) is string water ? Quantity.TemperatureCelsius("--equilibrated-at", water) : null,
+            AirCelsius = _reader.Given(_options.AirTemperature) is string air ? Quantity.TemperatureCelsius("--air-temperature", air) : null,
+        };
+        return around == new Surroundings() ? null : around;
+    }
+
     private CalibrationLimits Limits()
     {
         double? absolute = _reader.NotNegative(_options.Limit, QuantityKind.MassConcentration);
         double? percent = _reader.NotNegative(_options.LimitPercent, QuantityKind.Percent);
         double? zero = _reader.NotNegative(_options.ZeroLimit, QuantityKind.MassConcentration);
         (double Low, double High)? window = _reader.Range(_options.SlopeWindow);
+        (double Low, double High)? zeroWindow = _reader.Range(_options.ZeroWindow);
         bool entered = absolute != null || percent != null;
         return new CalibrationLimits
         {
@@ -290,6 +303,9 @@ internal sealed class CalibrateSetup
             ZeroSource = zero == null ? CalibrationLimits.FieldManual : CalibrationLimits.Entered,
             SlopeLow = window?.Low,
             SlopeHigh = window?.High,
+            GuardBand = _reader.IsSet(_options.GuardBand),
+            ZeroSignalLow = zeroWindow?.Low,
+            ZeroSignalHigh = zeroWindow?.High,
         };
     }
 

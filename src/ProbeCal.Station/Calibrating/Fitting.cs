@@ -16,6 +16,9 @@ internal sealed record Fit(ProbeCalibration? Calibration, Status Status, Recorde
     /// <summary>The fit through several points; null where one point and a zero give the slope.</summary>
     public RecordedFit? Several { get; init; }
 
+    /// <summary>The points that went into <see cref="Several"/>, with a zero that was assumed or carried over.</summary>
+    public IReadOnlyList<RecordedPoint> Fitted { get; init; } = [];
+
     /// <summary>Why several points make no fit, in one line; null when they do.</summary>
     public string? Why { get; init; }
 }
@@ -166,6 +169,7 @@ internal static class Fitting
         return new Fit(calibration, status, zero ?? ZeroOf(setup, points, several, main), FromFit)
         {
             Several = several,
+            Fitted = fitted,
             Why = calibration == null ? $"the points make no calibration ({status})" : null,
         };
     }

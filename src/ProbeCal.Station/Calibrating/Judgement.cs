@@ -56,11 +56,6 @@ internal static class Judgement
         return [.. limits.Where(static limit => limit.Decides && limit.Verdict != Decision.Pass).Select(Sentence)];
     }
 
-    internal static RecordedContribution[] Budget(CalibrationSetup setup, RecordedPoint point, RecordedZero zero, ProbeCalibration fit)
-    {
-        return SlopeBudget.Of(setup, point, zero, fit);
-    }
-
     internal static string ReferenceStateSource(CalibrationSetup setup)
     {
         return setup.Method == CalibrationIds.WaterSaturatedAir

@@ -27,8 +27,7 @@ internal static class RecordBuilder
         DateTimeOffset last = state.Points.Max(static point => point.LastUtc);
         List<RecordedLimit> limits = Judgement.Limits(setup, state.Points, calibration);
         string[] reasons = Judgement.Reasons(limits);
-        RecordedContribution[] budget = Judgement.Budget(setup, slopePoint, fit.Zero, calibration);
-        (string drawn, Finding? disagreement) = SlopeBudget.Check(setup, slopePoint, fit.Zero, calibration, budget);
+        CheckedBudget budget = CheckedBudget.Of(setup, slopePoint, fit, calibration, previous);
         return new CalibrationRecord
         {
             Simulated = setup.Simulated,
@@ -57,7 +56,7 @@ internal static class RecordBuilder
                 UncertaintySource = Judgement.ReferenceStateSource(setup),
             },
             Equation = EquationNames.NameOf(setup.Equation),
-            Formulas = [.. Formulas, drawn],
+            Formulas = budget.Text == null ? Formulas : [.. Formulas, budget.Text],
             Points = [.. state.Points],
             SlopeFrom = fit.SlopeFrom,
             Zero = fit.Zero,
@@ -74,8 +73,8 @@ internal static class RecordBuilder
                 DecisionRule = Decision.RuleOf(setup.Limits),
             },
             Limits = [.. limits],
-            Findings = disagreement == null ? [.. state.Findings] : [.. state.Findings, disagreement.ToRecord(null)],
-            Budget = budget,
+            Findings = budget.Disagreement == null ? [.. state.Findings] : [.. state.Findings, budget.Disagreement.ToRecord(null)],
+            Budget = budget.Table,
             Software = software,
             Remarks = setup.Remarks,
         };

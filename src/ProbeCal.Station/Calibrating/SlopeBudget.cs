@@ -15,9 +15,6 @@ internal static class SlopeBudget
     /// <summary>Trials of the check: enough for a standard deviation to 0.5 %, and about 30 ms.</summary>
     public const int Trials = 20_000;
 
-    /// <summary>Seed of the check.</summary>
-    public const int Seed = 101;
-
     /// <summary>
     /// Difference of the two standard uncertainties that becomes a finding, %: three times what chance does at this number of trials (1.5 %),
     /// and as much for what a first-order law leaves out (our choice, no source).
@@ -96,33 +93,6 @@ internal static class SlopeBudget
         {
             return null;
         }
-    }
-
-    /// <summary>The check as every calibration makes it: what the record says of it, and a finding where the two disagree.</summary>
-    internal static (string Text, Finding? Disagreement) Check(CalibrationSetup setup, RecordedPoint point, RecordedZero zero, ProbeCalibration fit, IReadOnlyList<RecordedContribution> table)
-    {
-        double analytic = 100 * fit.SlopeRelativeUncertainty();
-        double? drawn = DrawnPercent(setup, point, zero, fit, table, Trials, new Random(Seed));
-        return (CheckText(analytic, drawn), Disagreement(analytic, drawn));
-    }
-
-    /// <summary>Says how the check came out, for the record.</summary>
-    /// <param name="analyticPercent">Standard uncertainty by the table, % of the slope.</param>
-    /// <param name="drawnPercent">The same by drawing; null when it had no value.</param>
-    internal static string CheckText(double analyticPercent, double? drawnPercent)
-    {
-        string drawn = drawnPercent is double percent ? Finding.Text($"{percent:F3} %") : "no value";
-        return Finding.Text($"Monte Carlo check of the slope's standard uncertainty (JCGM 101:2008): {drawn} in {Trials} trials, seed {Seed}, against {analyticPercent:F3} % by the budget; tolerance {TolerancePercent} %");
-    }
-
-    /// <summary>What is said when the two disagree; null when they agree.</summary>
-    internal static Finding? Disagreement(double analyticPercent, double? drawnPercent)
-    {
-        bool agree = drawnPercent is double drawn && Math.Abs((drawn / analyticPercent) - 1) <= TolerancePercent / 100;
-        return agree || (analyticPercent == 0 && drawnPercent == 0) ? null : new Finding(GuardNames.UncertaintyCheck, FindingSeverity.Note,
-            CheckText(analyticPercent, drawnPercent),
-            PossibleError.Unknown("readings are not wrong by this, but the uncertainty stated with them is"),
-            "take the larger of the two; an input whose uncertainty is a large part of its value is the usual reason");
     }
 
     private static string ZeroSource(RecordedZero zero)
