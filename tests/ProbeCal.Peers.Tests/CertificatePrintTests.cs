@@ -68,6 +68,20 @@ public sealed class CertificatePrintTests(ITestOutputHelper output) : IDisposabl
     }
 
     [SkippableFact]
+    public async Task RecordOfACalibration_FitsOnePage()
+    {
+        Skip.If(Programs.Find("pdftotext") is null, "pdftotext is not installed");
+        using OutsideProcess calibrate = Programs.ProbeCal(CalibratedFolder.Calibrate(_folder["data"]));
+        Assert.True(await calibrate.ExitCodeAsync(Deadline) == 0, calibrate.Tail());
+        using (CalibrationLogStore log = CalibrationLogStore.OpenForReading(_folder["data/calibrations.db"]))
+        {
+            await CertificateAsync(log.Records[0].Record.Id, "own.pdf", "--paper", "Letter");
+        }
+
+        Assert.Equal(1, await WithinAsync(_folder["own.pdf"]));
+    }
+
+    [SkippableFact]
     public async Task Pdf_PageAndTerminal_SayTheSame()
     {
         Skip.If(Programs.Find("pdftotext") is null, "pdftotext is not installed");

@@ -94,7 +94,8 @@ internal static class CertificateIdentity
                 [.. referred.Select(static point => new[] { ReportText.Role(point.Role), Basis(point.Reference) })]));
         }
 
-        RecordedPoint[] budgeted = [.. record.Points.Where(static point => point.Reference is { Budget.Length: not 0 })];
+        // Where the reference rests on temperature and pressure alone, the budget of the slope has all that is in it.
+        RecordedPoint[] budgeted = [.. referred.Where(static point => point.Reference is { Budget.Length: not 0 })];
         if (budgeted.Length != 0)
         {
             blocks.Add(ColumnChoice.Table(

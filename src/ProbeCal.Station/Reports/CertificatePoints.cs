@@ -13,6 +13,7 @@ internal static class CertificatePoints
     internal static List<ReportBlock> Points(CalibrationRecord record)
     {
         RecordedResidual?[] residuals = Residuals(record);
+        bool several = record.Points.Any(point => point.Method is not null && point.Method != record.Method);
         ReportTable table = ColumnChoice.Table(
             [
                 CertificateNames.Words("point-role"), CertificateNames.Words("point-time"), CertificateNames.Words("point-method"), CertificateNames.Figures("point-samples"),
@@ -22,7 +23,7 @@ internal static class CertificatePoints
                 CertificateNames.Figures("point-reading"), CertificateNames.Figures("point-error"),
                 CertificateNames.Figures("point-residual"), CertificateNames.Figures("point-standardised"),
             ],
-            record.Points.Select((point, i) => Row(point, residuals[i])));
+            record.Points.Select((point, i) => Row(several ? point : point with { Method = null }, residuals[i])));
         string signal = record.Probe.SignalUnit.Length == 0 ? "" : " in " + record.Probe.SignalUnit;
         List<ReportBlock> blocks = [table, new ReportSentence("points-note", $"Signal{signal}: mean of the samples, or what a meter showed; u: standard uncertainty; error: reading less reference.")];
         RecordedPoint[] read = [.. record.Points.Where(static point => point.ReadBy is not null)];

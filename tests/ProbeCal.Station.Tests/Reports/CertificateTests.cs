@@ -164,7 +164,13 @@ public class CertificateTests
         using CalibrationLogStore log = folder.Write();
         log.Append(new EquipmentRecord
         {
-            Equipment = "B-12", EquipmentKind = "barometer", Description = "aneroid", Certificate = "BC-77", CertificateValue = Quantity(1000.2), Correction = Quantity(0.2), DueOn = new DateOnly(2026, 12, 1),
+            Equipment = "B-12",
+            EquipmentKind = "barometer",
+            Description = "aneroid",
+            Certificate = "BC-77",
+            CertificateValue = Quantity(1000.2),
+            Correction = Quantity(0.2),
+            DueOn = new DateOnly(2026, 12, 1),
             Software = "probecal",
         });
         DateTimeOffset later = ReportSamples.Noon.AddDays(1);

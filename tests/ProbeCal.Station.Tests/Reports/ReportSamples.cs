@@ -39,7 +39,12 @@ internal static class ReportSamples
             DropletCheck = "none-seen",
             Result = new RecordedResult
             {
-                Slope = slope, SlopeStandardUncertainty = 0.0053, Zero = 0.4, ZeroStandardUncertainty = 0.2, Pass = true, Reasons = [],
+                Slope = slope,
+                SlopeStandardUncertainty = 0.0053,
+                Zero = 0.4,
+                ZeroStandardUncertainty = 0.2,
+                Pass = true,
+                Reasons = [],
                 DecisionRule = "simple acceptance: an error within its limit passes, whatever its uncertainty",
             },
             Limits =
@@ -90,9 +95,21 @@ internal static class ReportSamples
             Probe = usual.Probe with { Coefficients = [new RecordedCoefficient { Name = "flow-factor", Value = 0.97, Unit = "1", StandardUncertainty = 0.01, Source = "entered" }] },
             Fit = new RecordedFit
             {
-                Form = "quadratic", Method = "errors-in-both", Zero = 0.4, Slope = 0.62, Curvature = -0.00012, Covariance = [0.04, -0.0001, 0.00001, 0, 0, 0], PerThermometerKelvin = [0, 0.01, 0],
-                PerTemperatureCoefficient = [0, 0.1, 0], DegreesOfFreedom = points - 3, ChiSquared = 1.8, ResidualStandardDeviation = 0.11, ChiSquaredProbability = 0.62,
-                LackOfFit = new RecordedLackOfFit(1.4, 2, 3, 0.37), LowestHectopascal = 20, HighestHectopascal = 20.0 * points,
+                Form = "quadratic",
+                Method = "errors-in-both",
+                Zero = 0.4,
+                Slope = 0.62,
+                Curvature = -0.00012,
+                Covariance = [0.04, -0.0001, 0.00001, 0, 0, 0],
+                PerThermometerKelvin = [0, 0.01, 0],
+                PerTemperatureCoefficient = [0, 0.1, 0],
+                DegreesOfFreedom = points - 3,
+                ChiSquared = 1.8,
+                ResidualStandardDeviation = 0.11,
+                ChiSquaredProbability = 0.62,
+                LackOfFit = new RecordedLackOfFit(1.4, 2, 3, 0.37),
+                LowestHectopascal = 20,
+                HighestHectopascal = 20.0 * points,
                 Residuals = [.. roles.Select(static (role, i) => new RecordedResidual(role, 20.0 * (i + 1), 12.4 * (i + 1), 0.05 * ((i % 5) - 2), null, 0.5 * ((i % 5) - 2)))],
             },
             Result = usual.Result with { Pass = false, Reasons = ["residual of level-2 is 3.1 of its standard deviation"] },
@@ -119,7 +136,9 @@ internal static class ReportSamples
             Points = [usual.Points[0] with { Typed = true, ReadBy = "c3a41f09b2e7-0001" }],
             Probe = usual.Probe with
             {
-                Model = "meter-display", SignalUnit = "", Membrane = null,
+                Model = "meter-display",
+                SignalUnit = "",
+                Membrane = null,
                 MeterSettings = new RecordedMeterSettings { Shows = "mg/L", Equation = "benson-krause-1984", Salinity = 0, Resolution = 0.01 },
             },
         };
@@ -163,7 +182,13 @@ internal static class ReportSamples
             Membrane = new RecordedMembrane { Id = "M-204", InstalledOn = new DateOnly(2026, 4, 3) },
             TemperatureCoefficient = new RecordedTemperatureCoefficient
             {
-                Form = "exponential", Value = 0.03, Unit = "1/K", StandardUncertainty = 0.001, ReferenceCelsius = 25, FittedLowCelsius = 5, FittedHighCelsius = 35,
+                Form = "exponential",
+                Value = 0.03,
+                Unit = "1/K",
+                StandardUncertainty = 0.001,
+                ReferenceCelsius = 25,
+                FittedLowCelsius = 5,
+                FittedHighCelsius = 35,
             },
             Thermometer = new RecordedThermometer { Id = "T-3", CommonStandardUncertaintyCelsius = 0.1, Source = "entered" },
         };
@@ -199,8 +224,17 @@ internal static class ReportSamples
     {
         return new RecordedLimit
         {
-            Check = check, Limit = "0.2 mg/L or 2 %, the larger", Applied = "0.200 mg/L", Source = "USGS 2020, National Field Manual A6.2 (TM 9-A6.2)", Found = found, Unit = "mg/L",
-            ExpandedUncertainty = 0.081, CoverageFactor = 1.96, LimitToUncertainty = 2.47, Verdict = verdict, Decides = decides,
+            Check = check,
+            Limit = "0.2 mg/L or 2 %, the larger",
+            Applied = "0.200 mg/L",
+            Source = "USGS 2020, National Field Manual A6.2 (TM 9-A6.2)",
+            Found = found,
+            Unit = "mg/L",
+            ExpandedUncertainty = 0.081,
+            CoverageFactor = 1.96,
+            LimitToUncertainty = 2.47,
+            Verdict = verdict,
+            Decides = decides,
         };
     }
 
@@ -208,7 +242,14 @@ internal static class ReportSamples
     {
         return new RecordedContribution
         {
-            Input = input, StandardUncertainty = uncertainty, Unit = unit, Value = value, Distribution = "normal", SensitivityPercent = percent / uncertainty, SlopePercent = percent, SharePercent = share,
+            Input = input,
+            StandardUncertainty = uncertainty,
+            Unit = unit,
+            Value = value,
+            Distribution = "normal",
+            SensitivityPercent = percent / uncertainty,
+            SlopePercent = percent,
+            SharePercent = share,
             Source = "certificate and scatter over the window",
         };
     }
@@ -220,8 +261,14 @@ internal static class ReportSamples
             Equipment = ["TI-1"],
             Titration = new RecordedTitration
             {
-                TitreMillilitres = [7.42, 7.44, 7.43], Blank = Quantity(0.01, "mL", 0.005, "typed"), Titrant = Quantity(0.0251, "mol/L", 0.00002, "standardised"), Flask = Quantity(300.1, "mL", 0.1, "typed"),
-                Displaced = Quantity(2, "mL", 0.05, "typed"), ReagentOxygenMilligrams = Quantity(0.017, "mg", 0.003, "Murray et al. 1968"), BuretteStandardUncertaintyMillilitres = 0.01, DrawCelsius = 20,
+                TitreMillilitres = [7.42, 7.44, 7.43],
+                Blank = Quantity(0.01, "mL", 0.005, "typed"),
+                Titrant = Quantity(0.0251, "mol/L", 0.00002, "standardised"),
+                Flask = Quantity(300.1, "mL", 0.1, "typed"),
+                Displaced = Quantity(2, "mL", 0.05, "typed"),
+                ReagentOxygenMilligrams = Quantity(0.017, "mg", 0.003, "Murray et al. 1968"),
+                BuretteStandardUncertaintyMillilitres = 0.01,
+                DrawCelsius = 20,
             },
             Budget = [new RecordedReferenceContribution { Input = "titre", Value = 7.43, StandardUncertainty = 0.006, Unit = "mL", Distribution = "normal", Hectopascal = 0.16, Source = "three replicates" }],
         };
