@@ -18,7 +18,7 @@ internal static class CalibrationText
     /// <summary>Writes the whole record.</summary>
     internal static void Write(TextWriter output, CalibrationRecord record)
     {
-        output.WriteLine($"Calibration {record.Id}: {Decision.Of(record).ToUpperInvariant()}{(record.Simulated ? "   (SIMULATED: no real probe was calibrated)" : "")}");
+        output.WriteLine($"{(record.Purpose == CalibrationRecord.CheckPurpose ? "Check" : "Calibration")} {record.Id}: {Decision.Of(record).ToUpperInvariant()}{(record.Simulated ? "   (SIMULATED: no real probe was calibrated)" : "")}");
         foreach (string reason in record.Result.Reasons)
         {
             TextTable.WriteWrapped(output, "  ", "    ", reason);

@@ -5,6 +5,7 @@ using System.IO;
 using System.Linq;
 using System.Text.Json;
 using System.Text.Json.Serialization;
+using ProbeCal.Station.Calibrating;
 using ProbeCal.Station.CalibrationLog;
 using ProbeCal.Station.Entry;
 
@@ -63,7 +64,7 @@ internal static class CalibrationsList
                 Number.Significant(record.Result.Zero, CalibrationText.Digits) + (record.Probe.MeterSettings == null ? Unit(record, "") : " hPa"),
                 Error(record, "span"),
                 Error(record, "as-left"),
-                (record.Purpose == CalibrationRecord.CheckPurpose ? LogText.Kind(record) + ": " : "") + (record.Result.Pass ? "pass" : "fail") + (record.Simulated ? " (simulated)" : "") + LogText.Standing(log, record),
+                (record.Purpose == CalibrationRecord.CheckPurpose ? LogText.Kind(record) + ": " : "") + Decision.Of(record) + (record.Simulated ? " (simulated)" : "") + LogText.Standing(log, record),
             ]);
         }
 
