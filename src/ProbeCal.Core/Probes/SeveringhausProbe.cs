@@ -12,7 +12,7 @@ namespace ProbeCal;
 public sealed class SeveringhausProbe : IProbeModel
 {
     /// <summary>Faraday constant, C/mol: the product of e and N_A, exact by the 2019 definition of the SI.</summary>
-    public const double FaradayConstant = 96485.33212331001;
+    public const double FaradayConstant = 96485.3321233100184;
 
     private const double LnTen = 2.302585092994046;
     private const double MillivoltPerVolt = 1000.0;
