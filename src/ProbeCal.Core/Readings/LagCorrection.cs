@@ -15,11 +15,11 @@ public static class LagCorrection
     /// <param name="timeConstantSeconds">τ, s, not negative: 63 % of a step are reached after it, 90 % after 2.303 τ.</param>
     /// <param name="secondsBefore">Time from the reading before to the middle one, s, positive.</param>
     /// <param name="secondsAfter">Time from the middle reading to the one after, s, positive.</param>
-    /// <param name="before">The reading before.</param>
-    /// <param name="middle">The middle reading.</param>
-    /// <param name="after">The reading after.</param>
+    /// <param name="before">The reading before, in any unit.</param>
+    /// <param name="middle">The middle reading, in the same unit.</param>
+    /// <param name="after">The reading after, in the same unit.</param>
     /// <param name="corrected">The value without lag, in the unit of the readings; NaN unless Ok.</param>
-    /// <param name="noiseGain">Standard uncertainty of the value over that of one reading, readings independent; at least 1. NaN unless Ok.</param>
+    /// <param name="noiseGain">Standard uncertainty of the value over that of one reading (a ratio without unit), readings independent; at least 1. NaN unless Ok.</param>
     /// <returns><see cref="Status.CoefficientNotFinite"/> and <see cref="Status.CoefficientBelowRange"/> speak of τ, those of points of the times and readings.</returns>
     public static Status Central(
         double timeConstantSeconds, double secondsBefore, double secondsAfter, double before, double middle, double after,
@@ -43,10 +43,10 @@ public static class LagCorrection
     /// <summary>The value at the last of two readings, without lag: for use as they come. It sees the change half a step late.</summary>
     /// <param name="timeConstantSeconds">τ, s, not negative.</param>
     /// <param name="secondsBetween">Time between the two readings, s, positive.</param>
-    /// <param name="before">The reading before.</param>
-    /// <param name="last">The last reading.</param>
+    /// <param name="before">The reading before, in any unit.</param>
+    /// <param name="last">The last reading, in the same unit.</param>
     /// <param name="corrected">The value without lag, in the unit of the readings; NaN unless Ok.</param>
-    /// <param name="noiseGain">Standard uncertainty of the value over that of one reading, readings independent; at least 1. NaN unless Ok.</param>
+    /// <param name="noiseGain">Standard uncertainty of the value over that of one reading (a ratio without unit), readings independent; at least 1. NaN unless Ok.</param>
     /// <returns>As <see cref="Central"/>.</returns>
     public static Status Backward(
         double timeConstantSeconds, double secondsBetween, double before, double last, out double corrected, out double noiseGain)
