@@ -370,7 +370,9 @@ internal static class Fitting
             return carried;
         }
 
-        ZeroPoint assumed = ZeroPoint.Assume(RecordConversion.Point(setup.Method, span, setup.AirToWaterRatio, setup.ReferenceStateRelative));
+        // A share of the signal at the point is assumed, whatever made its truth known.
+        string usual = PlanCheck.IsOnePoint(setup) ? setup.Method : MethodIds.AirSaturatedWater;
+        ZeroPoint assumed = ZeroPoint.Assume(RecordConversion.Point(usual, span, setup.AirToWaterRatio, setup.ReferenceStateRelative));
         return new RecordedZero
         {
             IsMeasured = false,
