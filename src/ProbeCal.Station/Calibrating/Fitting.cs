@@ -165,7 +165,7 @@ internal static class Fitting
             return new Fit(null, Status.PointsDegenerate, zero ?? NoZero(main), FromFit) { Why = why };
         }
 
-        Status status = FitConversion.Create(setup.Probe, setup.Gas, several, setup.Stirring, main.FlowFactor, out ProbeCalibration? calibration);
+        Status status = FitConversion.Create(setup.Probe, setup.Gas, several, setup.Stirring, 1, out ProbeCalibration? calibration);
         return new Fit(calibration, status, zero ?? ZeroOf(setup, points, several, main), FromFit)
         {
             Several = several,

@@ -28,7 +28,7 @@ internal static class PlanCheck
         }
 
         int unknowns = Unknowns(setup);
-        int known = setup.Plan.Count(point => !MethodIds.IsZero(point.Method) || setup.ZeroPlan == CalibrationIds.ZeroAdjust) + (NeedsAZero(setup) && !HasZero(setup) ? 1 : 0);
+        int known = setup.Plan.Count(point => !MethodIds.IsZero(point.Method) || setup.ZeroPlan == CalibrationIds.ZeroAdjust) + (NeedsAZero(setup) ? 1 : 0);
         if (known < unknowns)
         {
             throw new InputException(string.Create(CultureInfo.InvariantCulture,
@@ -139,8 +139,8 @@ internal static class PlanCheck
     private static void RequireDifferentMixtures(CalibrationSetup setup, int unknowns)
     {
         bool allMixtures = setup.Plan.All(static point => point.Mixture != null);
-        int different = setup.Plan.Select(static point => point.Mixture).Distinct().Count();
-        if (allMixtures && different < unknowns)
+        int different = setup.Plan.Select(static point => point.Mixture?.MoleFraction.Value).Distinct().Count();
+        if (allMixtures && different + (NeedsAZero(setup) ? 1 : 0) < unknowns)
         {
             throw new InputException(string.Create(CultureInfo.InvariantCulture,
                 $"{setup.Plan.Count} points at {different} different {(different == 1 ? "mixture" : "mixtures")} for {unknowns} unknowns: reading the same gas again tells nothing new; take a mixture of another content"));
