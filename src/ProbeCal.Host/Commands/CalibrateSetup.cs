@@ -301,6 +301,7 @@ internal sealed class CalibrateSetup
             SaturationSource = entered ? CalibrationLimits.Entered : CalibrationLimits.FieldManual,
             ZeroMilligramsPerLitre = zero ?? AcceptanceLimit.ZeroMilligramsPerLitre,
             ZeroSource = zero == null ? CalibrationLimits.FieldManual : CalibrationLimits.Entered,
+            GuardBand = _reader.IsSet(_options.GuardBand),
             SlopeLow = window?.Low,
             SlopeHigh = window?.High,
             GuardBand = _reader.IsSet(_options.GuardBand),
