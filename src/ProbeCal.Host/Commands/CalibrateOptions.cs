@@ -28,8 +28,7 @@ internal sealed class CalibrateOptions
 
         Begin("The probe");
         Probe = Text("--probe", "ID", "The probe.");
-        Model = Text("--model", "NAME", "Response model (default amperometric; meter-display with --manual): " + string.Join(", ", ModelNames.All) + ".");
-        ModelCoefficients = Text("--model-coefficients", "TEXT", "Coefficients of the model that a calibration does not change, from its maker or a characterisation: 'NAME=VALUE ...'.");
+        Model = Text("--model", "TEXT", "Response model (default amperometric; meter-display with --manual) with the coefficients that a calibration does not change: 'uchida-2008 c0=0.0028 c1=…'. Models: " + string.Join(", ", ModelNames.All) + ".");
         GasOption = Text("--gas", "GAS", "Gas that the probe answers to (default O2).");
         Membrane = Text("--membrane", "ID", "Membrane or cap on it.");
         MembraneInstalled = Text("--membrane-installed", "DATE", "Day it was put on: 2026-05-01.");
@@ -183,7 +182,6 @@ internal sealed class CalibrateOptions
     internal Option<string> Titration { get; }
     internal Option<string> Mixture { get; }
     internal Option<string> GasOption { get; }
-    internal Option<string> ModelCoefficients { get; }
     internal Option<string> Model { get; }
 
     private void Begin(string title)

@@ -208,17 +208,18 @@ internal sealed class CalibrateSetup
     private async Task<RecordedProbe> ProbeAsync(string id, LineTemplate? line, bool manual, bool temperatureTyped, CancellationToken cancellationToken)
     {
         RecordedMeterSettings? meter = manual ? Meter(await _reader.NeedChoiceAsync(_options.MeterShows, "The meter shows (%local: 100 % at the pressure here, %1atm: 100 % at 1 atm):", Scales, cancellationToken).ConfigureAwait(false)) : null;
-        RecordedTemperatureCoefficient coefficient = meter is { TemperatureCelsius: null } && _reader.Given(_options.Coefficient) == null
+        string? model = _reader.Given(_options.Model);
+        bool needsNone = meter is { TemperatureCelsius: null } || (model != null && !PlanText.TakesTemperatureCoefficient(model));
+        RecordedTemperatureCoefficient coefficient = needsNone && _reader.Given(_options.Coefficient) == null
             ? TypicalMembrane
             : await _reader.NeedAsync(_options.Coefficient, "Temperature coefficient of the membrane, from its maker (for example: exponential 0.03/K at 25C fitted 5..35C)?", text => CoefficientText.Parse("--coefficient", text), cancellationToken).ConfigureAwait(false);
-        string model = _reader.Given(_options.Model) is string name ? OptionReader.Choice(_options.Model, ModelNames.All)(name) : manual ? ModelNames.MeterDisplay : ModelNames.Amperometric;
         (double Low, double High)? range = _reader.Range(_options.SignalRange);
         double? common = _reader.NotNegative(_options.ThermometerUncertainty, QuantityKind.TemperatureDifference);
         string signalUnit = meter?.Shows ?? (line is { SignalUnit.Length: > 0 } ? line.SignalUnit : _reader.Given(_options.SignalUnit) ?? "");
-        return new RecordedProbe
+        RecordedProbe probe = new()
         {
             Id = id,
-            Model = model,
+            Model = manual ? ModelNames.MeterDisplay : ModelNames.Amperometric,
             SignalUnit = signalUnit,
             TemperatureCoefficient = coefficient,
             MeterSettings = meter,
@@ -234,6 +235,7 @@ internal sealed class CalibrateSetup
                 Source = common == null ? "passed a check of 0.2 C, rectangular (TM 9-A6.8)" : "entered",
             },
         };
+        return model == null ? probe : PlanText.WithModel("--model", model, probe);
     }
 
     private RecordedMembrane? Membrane()

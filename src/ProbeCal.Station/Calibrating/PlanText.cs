@@ -51,4 +51,22 @@ public static class PlanText
         string rest = colon < 0 ? "" : text[(colon + 1)..].Trim();
         return Read(what, new PlannedPoint { Role = role, Method = method }, rest.Length == 0 ? null : rest, gas, register);
     }
+
+    /// <summary>A probe with the response model of a text, <c>MODEL NAME=VALUE …</c>.</summary>
+    /// <param name="what">The option it was given for.</param>
+    /// <param name="text">What was given.</param>
+    /// <param name="probe">The probe so far.</param>
+    /// <exception cref="InputException">The model or a coefficient is unknown, missing, or no number.</exception>
+    public static RecordedProbe WithModel(string what, string text, RecordedProbe probe)
+    {
+        return ModelText.Apply(what, text, probe);
+    }
+
+    /// <summary>True when the model of a text takes a temperature coefficient of its own; also where the text names no model.</summary>
+    /// <param name="text">What was given for the model.</param>
+    public static bool TakesTemperatureCoefficient(string text)
+    {
+        string model = text.Trim().Split(' ')[0].ToLowerInvariant();
+        return Array.IndexOf(ModelNames.All, model) < 0 || ModelCoefficients.HasTemperatureCoefficient(model);
+    }
 }

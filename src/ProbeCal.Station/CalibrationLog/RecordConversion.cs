@@ -95,35 +95,16 @@ internal static class RecordConversion
     /// <summary>The calibration of a fit through several points. A point in air stands for stirred water by its ratio, which the fit has in it.</summary>
     private static ProbeCalibration Fitted(CalibrationRecord record, RecordedFit fit)
     {
-        double[] covariance = Padded(fit.Covariance, 6);
-        double[] perKelvin = Padded(fit.PerThermometerKelvin, 3);
-        double[] perCoefficient = Padded(fit.PerTemperatureCoefficient, 3);
-        FittedResponse response = new(
-            fit.Zero, fit.Slope, fit.Curvature,
-            covariance[0], covariance[1], covariance[2], covariance[3], covariance[4], covariance[5],
-            perKelvin[0], perKelvin[1], perKelvin[2], perCoefficient[0], perCoefficient[1], perCoefficient[2],
-            fit.LowestHectopascal, fit.HighestHectopascal);
-        IProbeModel model = Model(record.Probe);
         RecordedPoint? water = Array.FindLast(record.Points, static point => !(point.Role is "zero" or "as-found"));
         bool inAir = water == null || (water.Method ?? record.Method) == "water-saturated-air";
-        Status status = ProbeCalibration.CreateFitted(
-            model,
-            model.IsTotalPressure ? Gas.Oxygen : GasNames.Parse("calibration record: gas", record.Gas),
-            response,
+        Status status = FitConversion.Create(
+            record.Probe,
+            Model(record.Probe).IsTotalPressure ? Gas.Oxygen : GasNames.Parse("calibration record: gas", record.Gas),
+            fit,
             inAir ? Stirring.Stirred : RecordNames.StirringOf(water!.Stirring),
             inAir ? 1 : water!.FlowFactor,
-            record.Probe.Thermometer.CommonStandardUncertaintyCelsius,
-            record.Probe.TemperatureCoefficient.StandardUncertainty,
             out ProbeCalibration? calibration);
         return calibration ?? throw new WorkFailedException($"calibration {record.Id}: its fit makes no calibration ({status})");
-    }
-
-    /// <summary>The numbers of a line, with zeros for what only a quadratic has.</summary>
-    private static double[] Padded(double[] values, int length)
-    {
-        double[] padded = new double[length];
-        values.CopyTo(padded, 0);
-        return padded;
     }
 
     /// <summary>A recorded point as Core takes it.</summary>
