@@ -169,7 +169,7 @@ public class MethodRunTests
     {
         using Bench bench = new();
         CalibrationSetup setup = MethodBench.Setup(MethodIds.GasMixture, levels: levels) with { FitForm = form };
-        setup = setup with { Probe = setup.Probe with { Model = "linear" } };
+        setup = setup with { Probe = PlanText.WithModel("--model", "linear lowest-celsius=0 highest-celsius=40", setup.Probe) };
         InputException refused = await Assert.ThrowsAsync<InputException>(() => RunAsync(bench, setup));
         Assert.StartsWith(says, refused.Message, StringComparison.Ordinal);
     }
