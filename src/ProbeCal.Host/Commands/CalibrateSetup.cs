@@ -306,7 +306,6 @@ internal sealed class CalibrateSetup
             GuardBand = _reader.IsSet(_options.GuardBand),
             SlopeLow = window?.Low,
             SlopeHigh = window?.High,
-            GuardBand = _reader.IsSet(_options.GuardBand),
             ZeroSignalLow = zeroWindow?.Low,
             ZeroSignalHigh = zeroWindow?.High,
         };
