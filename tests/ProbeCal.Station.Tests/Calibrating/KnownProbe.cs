@@ -34,6 +34,9 @@ internal sealed class KnownProbe : ISampleSource
     /// <summary>Oxygen of water-saturated air at 20 °C and 940 hPa: (940 − 23.38) × 0.20946 hPa (vapour pressure of water at 20 °C from the tables of the field manual, 17.54 mmHg).</summary>
     internal static double AirHectopascal => (Pressure - 23.38) * 0.20946;
 
+    /// <summary>Half width of the noise, in units of signal.</summary>
+    internal double Noise { get; init; } = 0.01;
+
     internal double SlopeNow { get; set; } = Slope;
 
     internal double ZeroNow { get; set; } = Zero;
@@ -47,9 +50,9 @@ internal sealed class KnownProbe : ISampleSource
             cancellationToken.ThrowIfCancellationRequested();
             _time = _time.AddSeconds(1);
             _model.Gain(Celsius, RangeRule.Refuse, out double gain);
-            double response = ZeroNow + (SlopeNow * gain * Hectopascal);
+            double response = ZeroNow + (SlopeNow * gain * (_model.IsLogarithmic ? Math.Log10(Hectopascal) : Hectopascal));
             _model.Signal(response, Celsius, Pressure, 0, RangeRule.Refuse, out double signal);
-            yield return new RawSample(_time, "", signal + (0.01 * ((2 * _random.NextDouble()) - 1)))
+            yield return new RawSample(_time, "", signal + (Noise * ((2 * _random.NextDouble()) - 1)))
             {
                 TimeUtc = _time,
                 TemperatureCelsius = Celsius + (0.002 * ((2 * _random.NextDouble()) - 1)),
