@@ -17,6 +17,9 @@ public sealed record CalibrationLimits
     /// <summary>Source of the band before adjustment.</summary>
     public const string OceanPractice = "OceanGliders oxygen SOP";
 
+    /// <summary>Limit of the error of a total gas pressure, % of it (our choice, no source).</summary>
+    public const double TotalPressurePercent = 1;
+
     /// <summary>Limit of the as-left and as-found error in mg/L.</summary>
     public double SaturationMilligramsPerLitre { get; init; } = AcceptanceLimit.SaturationMilligramsPerLitre;
 

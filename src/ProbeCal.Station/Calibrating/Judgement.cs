@@ -79,6 +79,12 @@ internal static class Judgement
     private static RecordedLimit Saturation(string check, CalibrationSetup setup, RecordedPoint point, ProbeCalibration calibration, bool decides)
     {
         CalibrationLimits limits = setup.Limits;
+        bool oxygen = setup.Gas == Gas.Oxygen && !PlanCheck.IsTotalPressure(setup.Probe);
+        if (!oxygen)
+        {
+            return OfReference(check, setup, point, calibration, decides);
+        }
+
         Status status = AcceptanceLimit.AtSaturation(
             point.ReferenceMilligramsPerLitre, limits.SaturationMilligramsPerLitre, limits.SaturationPercent, out double width, out AppliedLimit applied);
         string which = Number.Fixed(width, 3) + (applied == AppliedLimit.Relative ? " mg/L, the % limit" : " mg/L, the mg/L limit");
@@ -94,6 +100,28 @@ internal static class Judgement
             Decides = decides,
         };
         return Decision.Judged(limit, width, ErrorUncertainty.InMilligramsPerLitre(setup, point, calibration), limits.GuardBand);
+    }
+
+    /// <summary>Of another gas, or of the total pressure, the share of the reference alone: 0.2 mg/L of oxygen says nothing about them.</summary>
+    private static RecordedLimit OfReference(string check, CalibrationSetup setup, RecordedPoint point, ProbeCalibration calibration, bool decides)
+    {
+        CalibrationLimits limits = setup.Limits;
+        bool entered = limits.SaturationSource == CalibrationLimits.Entered;
+        double percent = entered ? limits.SaturationPercent
+            : PlanCheck.IsTotalPressure(setup.Probe) ? CalibrationLimits.TotalPressurePercent : limits.SaturationPercent;
+        double width = percent / 100 * point.ReferencePartialPressureHectopascal;
+        RecordedLimit limit = new()
+        {
+            Check = check,
+            Limit = Number.Print(percent) + " % of the reference",
+            Applied = Number.Significant(width, 4) + " hPa",
+            Source = entered ? CalibrationLimits.Entered : "our choice, no source",
+            Found = point.ErrorHectopascal,
+            Unit = "hPa",
+            Verdict = Decision.NotJudged,
+            Decides = decides,
+        };
+        return Decision.Judged(limit, width, ErrorUncertainty.Of(setup, point, calibration, 1), limits.GuardBand);
     }
 
     private static RecordedLimit AsFoundBand(RecordedPoint span)

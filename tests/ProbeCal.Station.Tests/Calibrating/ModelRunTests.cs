@@ -47,6 +47,33 @@ public class ModelRunTests
         Assert.All(check.Points, point => Assert.InRange(Math.Abs(point.ErrorHectopascal!.Value), 0, 0.02 * point.ReferencePartialPressureHectopascal));
     }
 
+    [Theory]
+    [InlineData(1.001, true)]
+    [InlineData(1.02, false)]
+    public async Task TotalGasProbe_AgainstTheBarometerAndAGauge_IsJudgedInHectopascal(double slopeAtTheCheck, bool passes)
+    {
+        using Bench bench = new();
+        CalibrationSetup setup = Setup("total-gas" + Range, Gas.Oxygen, 0.2, 0.1, "line");
+        setup = setup with
+        {
+            Method = MethodIds.WaterSaturatedAir,
+            Plan =
+            [
+                new PlannedPoint { Role = "span", Method = MethodIds.WaterSaturatedAir },
+                new PlannedPoint { Role = "level-1", Method = MethodIds.TransferStandard, Transfer = TransferText.Parse("--transfer", "GAUGE-2 1240hPa u 0.5hPa") },
+            ],
+        };
+        CalibrationRecord record = await RunAsync(bench, setup, 2, 1.001);
+        Assert.Equal(("total", "fit"), (record.Gas, record.SlopeFrom));
+        Assert.True(record.Result.Pass, string.Join("; ", record.Result.Reasons));
+        Assert.InRange(Math.Abs(record.Result.Slope - 1.001), 0, 2.5 * record.Result.SlopeStandardUncertainty);
+        Assert.All(record.Limits.Where(limit => limit.Decides), limit => Assert.Equal("hPa", limit.Unit));
+
+        bench.Time.Advance(TimeSpan.FromHours(1));
+        CalibrationRecord check = await RunAsync(bench, setup with { Purpose = CalibrationRecord.CheckPurpose }, 2, slopeAtTheCheck);
+        Assert.Equal(passes, check.Result.Pass);
+    }
+
     [Fact]
     public async Task LogarithmicProbe_HasNoZero_WhichIsToldBeforeAnybodyWaits()
     {
@@ -86,7 +113,14 @@ public class ModelRunTests
     {
         KnownProbe probe = new(bench.Time.GetUtcNow(), setup.Probe) { ZeroNow = zero, SlopeNow = slope, Noise = 1e-3 };
         ScriptedDialogue person = new();
-        person.OnStep = step => probe.Hectopascal = step.Role == null ? probe.Hectopascal : MethodBench.Truth(setup, step);
+        bool total = setup.Probe.Model == "total-gas";
+        person.OnStep = step => probe.Hectopascal = step.Role switch
+        {
+            null => probe.Hectopascal,
+            "level-1" when total => 1240,
+            string when total => KnownProbe.Pressure,
+            string => MethodBench.Truth(setup, step),
+        };
         using CalibrationLogStore log = bench.Log();
         CalibrationSession session = CalibrationSession.Begin(setup, bench.Data, log, bench.Time, false, person.Say);
         CalibrationRecord record = (await new CalibrationRun(session, person, bench.Time).RunAsync(probe, false, Bench.Version, CancellationToken.None)).Record;
