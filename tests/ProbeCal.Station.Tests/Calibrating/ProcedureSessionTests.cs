@@ -126,7 +126,14 @@ public class ProcedureSessionTests(ITestOutputHelper output)
             double signal = KnownProbe.Zero + (KnownProbe.Slope * gain * MethodBench.Truth(setup, step));
             RecordedStatistics once = new()
             {
-                Count = 30, Mean = signal, StandardDeviation = 0.01, SlopePerMinute = 0, SlopeStandardErrorPerMinute = 0.001, Minimum = signal - 0.02, Maximum = signal + 0.02, WindowSeconds = 180,
+                Count = 30,
+                Mean = signal,
+                StandardDeviation = 0.01,
+                SlopePerMinute = 0,
+                SlopeStandardErrorPerMinute = 0.001,
+                Minimum = signal - 0.02,
+                Maximum = signal + 0.02,
+                WindowSeconds = 180,
             };
             TakenReading reading = new()
             {
