@@ -19,7 +19,10 @@ public static class LagCorrection
     /// <param name="middle">The middle reading, in the same unit.</param>
     /// <param name="after">The reading after, in the same unit.</param>
     /// <param name="corrected">The value without lag, in the unit of the readings; NaN unless Ok.</param>
-    /// <param name="noiseGain">Standard uncertainty of the value over that of one reading (a ratio without unit), readings independent; at least 1. NaN unless Ok.</param>
+    /// <param name="noiseGain">
+    /// Standard uncertainty of the value over that of one reading (a ratio without unit), readings independent; at least 1 for equal steps, while a much shorter step after than before
+    /// averages two readings and may bring it below. NaN unless Ok.
+    /// </param>
     /// <returns><see cref="Status.CoefficientNotFinite"/> and <see cref="Status.CoefficientBelowRange"/> speak of τ, those of points of the times and readings.</returns>
     public static Status Central(
         double timeConstantSeconds, double secondsBefore, double secondsAfter, double before, double middle, double after,

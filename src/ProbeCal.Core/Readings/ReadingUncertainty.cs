@@ -114,14 +114,19 @@ internal static class ReadingUncertainty
         }
 
         double offset = conditions.HasSameThermometer ? calibration.ThermometerOffsetUncertaintyKelvin : 0.0;
-        double temperatureAtPoint = conditions.HasSameThermometer
-            ? point.TemperatureUncertaintyKelvin
-            : RootSumSquare(point.TemperatureUncertaintyKelvin, calibration.ThermometerOffsetUncertaintyKelvin);
+        double atPoint = perKelvinAtPoint * point.TemperatureUncertaintyKelvin;
+        if (!conditions.HasSameThermometer)
+        {
+            // The offset of the calibration's thermometer was in point and zero alike.
+            atPoint = perKelvinOfZero == 0.0
+                ? perKelvinAtPoint * RootSumSquare(point.TemperatureUncertaintyKelvin, calibration.ThermometerOffsetUncertaintyKelvin)
+                : RootSumSquare(atPoint, (perKelvinAtPoint + perKelvinOfZero) * calibration.ThermometerOffsetUncertaintyKelvin);
+        }
 
         double perOffset = perKelvinAtPoint + perKelvinAtReading;
         if (perKelvinOfZero != 0.0) { perOffset += perKelvinOfZero; }
         Put(reading, UncertaintySource.ThermometerOffset, perOffset * offset);
-        Put(reading, UncertaintySource.TemperatureAtCalibration, perKelvinAtPoint * temperatureAtPoint);
+        Put(reading, UncertaintySource.TemperatureAtCalibration, atPoint);
         Put(reading, UncertaintySource.TemperatureAtReading, perKelvinAtReading * IndependentTemperature(conditions));
         Put(reading, UncertaintySource.PressureAtCalibration, partialPressure * calibration.PerHectopascalAtPoint * point.PressureUncertaintyHectopascal);
         Put(reading, UncertaintySource.SignalAtCalibration, -perPoint * calibration.PointResponseUncertainty);
