@@ -20,7 +20,9 @@ internal static class ErrorUncertainty
     /// <param name="perHectopascal">mg/L per hPa at the point; 1 for an error in hPa.</param>
     internal static double? Of(CalibrationSetup setup, RecordedPoint point, ProbeCalibration calibration, double perHectopascal)
     {
-        double ratio = setup.AirToWaterRatio != null && (point.Method ?? setup.PlannedFor(point.Role).Method) == MethodIds.WaterSaturatedAir ? setup.AirToWaterRatio.Value : 1;
+        // Among several points each carries the ratio itself: in its flow factor, and in the uncertainty of its reference.
+        RecordedQuantity? beside = PlanCheck.IsOnePoint(setup) ? setup.AirToWaterRatio : null;
+        double ratio = beside != null && (point.Method ?? setup.PlannedFor(point.Role).Method) == MethodIds.WaterSaturatedAir ? beside.Value : 1;
         double step = Math.Max(Math.Abs(point.Signal.Mean) * 1e-4, point.SignalStandardUncertainty);
         double perSignal = step == 0 ? 0 : (Read(point.Signal.Mean + step, 0) - Read(point.Signal.Mean - step, 0)) / (2 * step);
         double perKelvin = (Read(point.Signal.Mean, KelvinStep) - Read(point.Signal.Mean, -KelvinStep)) / (2 * KelvinStep);
@@ -29,7 +31,7 @@ internal static class ErrorUncertainty
         double kelvin = setup.Probe.MeterSettings == null ? ownKelvin : PointMaker.Combine(ownKelvin, setup.Probe.Thermometer.CommonStandardUncertaintyCelsius);
         // In the chamber the ratio of air to water stands on both sides, unless a calibration made elsewhere reads the point.
         bool shared = point.ReadBy is null or "this" or "meter";
-        double air = shared || setup.AirToWaterRatio == null ? 0 : point.ReferencePartialPressureHectopascal * setup.AirToWaterRatio.StandardUncertainty / ratio;
+        double air = shared || beside == null ? 0 : point.ReferencePartialPressureHectopascal * beside.StandardUncertainty / ratio;
         double hectopascal = PointMaker.Combine(
             point.ReferencePartialPressureUncertaintyHectopascal, perSignal * point.SignalStandardUncertainty, perKelvin * kelvin, air);
         double whole = hectopascal * perHectopascal;

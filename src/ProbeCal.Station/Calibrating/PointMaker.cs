@@ -126,7 +126,7 @@ internal static class PointMaker
         double relative = ratio.StandardUncertainty / ratio.Value;
         RecordedReferenceContribution line = new()
         {
-            Input = "air-to-water ratio",
+            Input = ReferenceInputs.AirToWaterRatio,
             Value = ratio.Value,
             StandardUncertainty = ratio.StandardUncertainty,
             Unit = "1",

@@ -28,6 +28,7 @@ internal static class ReferenceInputs
     internal const string Aliquot = "aliquot";
     internal const string Displaced = "sample displaced";
     internal const string ReagentOxygen = "oxygen in the reagents";
+    internal const string AirToWaterRatio = "air-to-water ratio";
 
     private const string FractionOf = "mole fraction of ";
     private const string CorrectionOf = "correction of ";
@@ -56,7 +57,7 @@ internal static class ReferenceInputs
     /// </summary>
     internal static bool IsCommon(string input)
     {
-        return input is Pressure or Salinity or Equation or Burette or Blank or Titrant or Flask or Aliquot or Displaced or ReagentOxygen
+        return input is Pressure or Salinity or Equation or Burette or Blank or Titrant or Flask or Aliquot or Displaced or ReagentOxygen or AirToWaterRatio
             || input.StartsWith(FractionOf, StringComparison.Ordinal)
             || input.StartsWith(CorrectionOf, StringComparison.Ordinal);
     }

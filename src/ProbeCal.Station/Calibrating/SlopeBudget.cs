@@ -118,10 +118,12 @@ internal static class SlopeBudget
             // What a meter shows was made with its own thermometer and barometer, so that their errors went into both ways of it.
             IProbeModel model = meter ? _model : RecordConversion.Model(setup.Probe with { TemperatureCoefficient = coefficient });
             double shownAt = meter ? point.Temperature.Value : celsius;
+            // The same thermometer read at the zero.
+            double zeroAt = meter ? zero.TemperatureCelsius : zero.TemperatureCelsius + offset;
             double shownUnder = meter ? point.Pressure.Value : hectopascal;
             // Outside a range the value goes on as it does in readings; where there is none it is NaN, and so is the slope.
             _ = model.Response(Drawn(inputs, "signal at the point", point.Signal.Mean), shownAt, shownUnder, 0, RangeRule.Extrapolate, out double response);
-            _ = model.Response(Drawn(inputs, "zero", zero.Signal), zero.TemperatureCelsius, zero.PressureHectopascal, 0, RangeRule.Extrapolate, out double zeroResponse);
+            _ = model.Response(Drawn(inputs, "zero", zero.Signal), zeroAt, zero.PressureHectopascal, 0, RangeRule.Extrapolate, out double zeroResponse);
             _ = OxygenEquilibrium.PartialPressure(celsius, hectopascal, RangeRule.Extrapolate, out double reference);
             _ = model.Gain(shownAt, RangeRule.Extrapolate, out double gain);
             if (meter)

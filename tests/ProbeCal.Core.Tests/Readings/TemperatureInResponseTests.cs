@@ -70,6 +70,26 @@ public class TemperatureInResponseTests
         Assert.Equal(atPoint * UAtPoint, calibration.SlopeContribution(UncertaintySource.TemperatureAtCalibration), 1e-8);
     }
 
+    [Theory]
+    [InlineData(ReadingQuantity.MilligramsPerLitre)]
+    [InlineData(ReadingQuantity.PercentLocal)]
+    [InlineData(ReadingQuantity.PercentOneAtmosphere)]
+    public void AtDepth_TemperatureCountsThroughTheWaterAbove(ReadingQuantity quantity)
+    {
+        // 1000 dbar: 14 % more partial pressure at the probe, which warms away by 0.05 % per kelvin.
+        ProbeCalibration calibration = Calibrate("residual current", 0, 0);
+        Reading Now(double celsius)
+        {
+            var reading = new Reading();
+            Assert.Equal(Status.Ok, Correction.Correct(calibration, Bench.Conditions(temperature: 0.1), 40, celsius, Pressure, 5, 1000, RangeRule.Refuse, reading));
+            return reading;
+        }
+
+        double perKelvin = PerUnit(by => Now(9 + by).Value(quantity));
+        Reading middle = Now(9);
+        Assert.Equal(perKelvin * 0.1, middle.Contribution(UncertaintySource.TemperatureAtReading, quantity), 1e-6 * Math.Abs(perKelvin));
+    }
+
     [Fact]
     public void TheZeroOfAFit_HasItsVarianceAndBothSharedInputs()
     {

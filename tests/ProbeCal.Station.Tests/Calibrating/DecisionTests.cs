@@ -158,6 +158,58 @@ public class DecisionTests
         Assert.True(budget.Disagreement == null, budget.Text);
     }
 
+    /// <summary>The response of a luminescence follows the temperature at the point and at the zero, by one thermometer; its offset is made to weigh more than all else.</summary>
+    [Theory]
+    [InlineData("stern-volmer signal-kind=phase lifetime-per-kelvin=-0.006", 0.6, 0.009)]
+    [InlineData("stern-volmer signal-kind=lifetime lifetime-per-kelvin=-0.006", 0.02, 0.0003)]
+    public void Budget_OfALuminescence_AgreesWithDrawing(string model, double zeroResponse, double slope)
+    {
+        RecordedProbe probe = ModelText.Apply("--model", model, Bench.Setup.Probe with
+        {
+            TemperatureCoefficient = CoefficientText.Parse("--temperature-coefficient", "exponential 0.01/K at 20C fitted 0..40C"),
+            Thermometer = Bench.Setup.Probe.Thermometer with { CommonStandardUncertaintyCelsius = 0.8 },
+        });
+        CalibrationSetup setup = Bench.Setup with { Probe = probe, ReferenceStateRelative = 0.001, ZeroPlan = CalibrationIds.ZeroAdjust };
+        RecordedPoint span = Span(24);
+        IProbeModel core = RecordConversion.Model(probe);
+        core.Gain(24, RangeRule.Refuse, out double gain);
+        core.Signal(zeroResponse + (slope * gain * span.ReferencePartialPressureHectopascal), 24, 940, 0, RangeRule.Refuse, out double atSpan);
+        core.Signal(zeroResponse, 20, 940, 0, RangeRule.Refuse, out double atZero);
+        span = span with { Signal = span.Signal with { Mean = atSpan }, SignalStandardUncertainty = 1e-4 * atSpan };
+        RecordedPoint zero = Zero();
+        zero = zero with { Signal = zero.Signal with { Mean = atZero }, SignalStandardUncertainty = 1e-4 * atZero, ReferencePartialPressureUncertaintyHectopascal = 0.01, ReferenceUncertaintyMilligramsPerLitre = 0.0005 };
+        Fit fit = Fitting.Of(setup, [span, zero], null);
+        Assert.Equal(slope, fit.Calibration!.Slope, 1e-9);
+        CheckedBudget budget = CheckedBudget.Of(setup, span, fit, fit.Calibration, null);
+        Assert.Equal("thermometer offset", budget.Table[0].Input);
+        Assert.True(90 < budget.Table[0].SharePercent, budget.Text);
+        Assert.True(budget.Disagreement == null, budget.Text);
+    }
+
+    [Fact]
+    public void Error_OfAnAirPointAmongSeveral_HasTheRatioOnce()
+    {
+        // Two levels: the air point carries its ratio in the flow factor, and how well the ratio is known in its reference.
+        RecordedQuantity ratio = new() { Value = 1.1, Unit = "1", StandardUncertainty = 0.02, Source = "entered" };
+        CalibrationSetup setup = Bench.Setup with
+        {
+            Method = MethodIds.WaterSaturatedAir,
+            AirToWaterRatio = ratio,
+            Plan = [new PlannedPoint { Role = "span", Method = MethodIds.WaterSaturatedAir }, new PlannedPoint { Role = "level-1", Method = MethodIds.TransferStandard }],
+        };
+        ProbeCalibration calibration = Fitting.Of(Bench.Setup, [Span(20)], null).Calibration!;
+        RecordedPoint point = Span(20) with { Method = MethodIds.WaterSaturatedAir, FlowFactor = 1.1, ReadBy = "CAL-0001", SignalStandardUncertainty = 0.5 };
+        point = point with { Temperature = point.Temperature with { StandardUncertainty = 0 }, ReferencePartialPressureUncertaintyHectopascal = 1.5 };
+        double expected = Math.Sqrt((1.5 * 1.5) + Math.Pow(0.5 / (calibration.Slope * Gain(calibration) * 1.1), 2));
+        Assert.Equal(expected, ErrorUncertainty.Of(setup, point, calibration, 1)!.Value, 1e-6);
+
+        static double Gain(ProbeCalibration calibration)
+        {
+            Assert.Equal(Status.Ok, calibration.Model.Gain(20, RangeRule.Refuse, out double gain));
+            return gain;
+        }
+    }
+
     [Fact]
     public void Budget_ThatDisagreesWithDrawing_BecomesAFinding()
     {

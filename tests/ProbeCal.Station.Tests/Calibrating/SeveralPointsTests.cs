@@ -79,6 +79,24 @@ public class SeveralPointsTests(ITestOutputHelper output)
         Assert.Equal(4.0, chi / count, 4.0 * Math.Sqrt(8.0 / count));
     }
 
+    /// <summary>One ratio of air to water for every point in air: repeats do not make it better known.</summary>
+    [Fact]
+    public void TheRatioOfAirToWater_IsCommonToPointsInAir()
+    {
+        RecordedPoint[] points = [.. new[] { 0.0, 205.0, 205.0, 205.0, 205.0 }.Select((hectopascal, i) =>
+        {
+            RecordedPoint point = Point(i, hectopascal, 20, Truth(hectopascal, 20, 0.0)) with { SignalStandardUncertainty = 1e-3 };
+            return point with
+            {
+                Temperature = point.Temperature with { StandardUncertainty = 0 },
+                Reference = new RecordedReference { Budget = i == 0 ? [] : [Part(ReferenceInputs.AirToWaterRatio, 0.01, -0.01 * hectopascal, "entered")] },
+                ReferencePartialPressureUncertaintyHectopascal = i == 0 ? 0 : 0.01 * hectopascal,
+            };
+        })];
+        RecordedFit fit = SeveralPoints.Of(Probe(), Gas.Oxygen, points, "line").Fit!;
+        Assert.Equal(0.01, Math.Sqrt(fit.Covariance[2]) / fit.Slope, 1e-4);
+    }
+
     /// <summary>The sensitivities that readings share, against fits to points whose thermometer, or whose probe's coefficient, is off.</summary>
     [Fact]
     public void SharedInputs_MoveTheFitAsStated()
