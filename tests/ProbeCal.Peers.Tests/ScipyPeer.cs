@@ -18,6 +18,9 @@ internal static class ScipyPeer
     private static readonly string[] Pythons = ["/usr/bin/python3", "python3"];
     private static readonly Lazy<string?> Found = new(() => Array.Find(Pythons, Has));
 
+    /// <summary>The Python that has scipy; of use after <see cref="Require"/>.</summary>
+    internal static string Python => Found.Value!;
+
     /// <summary>Skips the test, saying why, when no Python here has scipy.</summary>
     internal static void Require()
     {

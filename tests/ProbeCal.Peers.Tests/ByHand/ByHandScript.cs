@@ -38,7 +38,13 @@ internal static class ByHandScript
 
     internal static List<ByHandAnswer> Ask(IReadOnlyCollection<ByHandCase> cases)
     {
-        ProcessStartInfo start = new(Programs.Find("python3")!, [Path.Combine(AppContext.BaseDirectory, "ByHand", "by_hand.py")])
+        return [.. Run(Programs.Find("python3")!, "by_hand.py", cases.Select(static each => each.Line()), cases.Count).Select(Read)];
+    }
+
+    /// <summary>Gives a script of this folder lines and takes as many lines of numbers.</summary>
+    internal static List<double[]> Run(string python, string script, IEnumerable<string> lines, int count)
+    {
+        ProcessStartInfo start = new(python, [Path.Combine(AppContext.BaseDirectory, "ByHand", script)])
         {
             RedirectStandardInput = true,
             RedirectStandardOutput = true,
@@ -51,20 +57,20 @@ internal static class ByHandScript
         Task<string> errors = process.StandardError.ReadToEndAsync();
         using (StreamWriter writer = process.StandardInput)
         {
-            foreach (ByHandCase each in cases) { writer.WriteLine(each.Line()); }
+            foreach (string line in lines) { writer.WriteLine(line); }
         }
 
         string answer = output.GetAwaiter().GetResult();
         process.WaitForExit();
         Assert.True(process.ExitCode == 0, errors.GetAwaiter().GetResult());
-        List<ByHandAnswer> answers = [.. answer.Split('\n', StringSplitOptions.RemoveEmptyEntries).Select(Read)];
-        Assert.Equal(cases.Count, answers.Count);
+        List<double[]> answers = [.. answer.Split('\n', StringSplitOptions.RemoveEmptyEntries)
+            .Select(static line => line.Split(' ').Select(static v => double.Parse(v, NumberStyles.Float, CultureInfo.InvariantCulture)).ToArray())];
+        Assert.Equal(count, answers.Count);
         return answers;
     }
 
-    private static ByHandAnswer Read(string line)
+    private static ByHandAnswer Read(double[] n)
     {
-        double[] n = [.. line.Split(' ').Select(static v => double.Parse(v, NumberStyles.Float, CultureInfo.InvariantCulture))];
         return new ByHandAnswer(n[0], n[1], n[2], n[3], n[4], n[5], n[6], n[7]);
     }
 }

@@ -131,10 +131,14 @@ def milligrams(row, t90, s, hpa, x, humidity):
     return moles * molar_mass(gas) * 1000
 
 
-def main():
+def coefficients():
     here = os.path.dirname(os.path.abspath(__file__))
     with open(os.path.join(here, 'coefficients.csv'), encoding='utf-8') as f:
-        rows = {(r['gas'], r['equation']): r for r in csv.DictReader(line for line in f if not line.startswith('#'))}
+        return {(r['gas'], r['equation']): r for r in csv.DictReader(line for line in f if not line.startswith('#'))}
+
+
+def main():
+    rows = coefficients()
     for line in sys.stdin:
         words = line.split()
         row = rows[words[0], words[1]]
@@ -156,4 +160,5 @@ def main():
         print(*(repr(v) for v in (saturation(gas, t, s) * ATM, pp, mg, micromoles, micromoles * 1000 / density(t, s), micromoles * VOLUME.get(gas, 22.414) / 1000, u_pp, u_mg)))
 
 
-main()
+if __name__ == "__main__":
+    main()
