@@ -205,7 +205,7 @@ internal static class Fitting
         RecordedPoint? measured = setup.ZeroPlan == CalibrationIds.ZeroAdjust ? Point(points, CalibrationIds.ZeroPoint) : null;
         if (measured != null && main.ReferenceMilligramsPerLitre != 0)
         {
-            return Measured(measured, main);
+            return Measured(setup, measured, main);
         }
 
         IProbeModel model = RecordConversion.Model(setup.Probe);
@@ -334,7 +334,7 @@ internal static class Fitting
         }
 
         bool meter = setup.Readings == CalibrationIds.Typed;
-        RecordedZero read = Measured(zero, span);
+        RecordedZero read = Measured(setup, zero, span);
         Status status = CalibrationFit.AsFoundZero(
             calibration.Model, meter ? 1 : calibration.Slope, meter ? 0 : calibration.ZeroResponse, RecordConversion.Zero(read), setup.Equation, out double milligrams);
         return status == Status.Ok
@@ -362,7 +362,7 @@ internal static class Fitting
     {
         if (setup.ZeroPlan == CalibrationIds.ZeroAdjust && Point(points, CalibrationIds.ZeroPoint) is RecordedPoint measured)
         {
-            return Measured(measured, span);
+            return Measured(setup, measured, span);
         }
 
         if (setup.ZeroPlan != CalibrationIds.ZeroAssume && CarriedOver(setup, previous) is RecordedZero carried)
@@ -384,9 +384,9 @@ internal static class Fitting
         };
     }
 
-    private static RecordedZero Measured(RecordedPoint zero, RecordedPoint span)
+    private static RecordedZero Measured(CalibrationSetup setup, RecordedPoint zero, RecordedPoint span)
     {
-        double signalPerMilligram = (span.Signal.Mean - zero.Signal.Mean) / span.ReferenceMilligramsPerLitre;
+        double signalPerMilligram = SignalPerMilligramAtZero(setup, zero, span);
         return new RecordedZero
         {
             IsMeasured = true,
@@ -396,6 +396,27 @@ internal static class Fitting
             PressureHectopascal = zero.Pressure.Value,
             Source = "measured",
         };
+    }
+
+    /// <summary>
+    /// Signal for 1 mg/L next to zero. A membrane's signal is proportional, so that the 100 % point tells it; a luminescence falls much more steeply at zero than on average
+    /// up to there, and only its response is a straight line.
+    /// </summary>
+    private static double SignalPerMilligramAtZero(CalibrationSetup setup, RecordedPoint zero, RecordedPoint span)
+    {
+        double average = (span.Signal.Mean - zero.Signal.Mean) / span.ReferenceMilligramsPerLitre;
+        if (PlanCheck.IsProportional(setup.Probe))
+        {
+            return average;
+        }
+
+        IProbeModel model = RecordConversion.Model(setup.Probe);
+        Status above = model.Response(span.Signal.Mean, span.Temperature.Value, span.Pressure.Value, 0, RangeRule.Refuse, out double full);
+        Status below = model.Response(zero.Signal.Mean, zero.Temperature.Value, zero.Pressure.Value, 0, RangeRule.Refuse, out double none);
+        Status slope = model.ResponsePerSignal(zero.Signal.Mean, zero.Temperature.Value, zero.Pressure.Value, 0, RangeRule.Refuse, out double perSignal);
+        bool known = above == Status.Ok && below == Status.Ok && slope == Status.Ok && perSignal != 0;
+        // Where the model refuses, it refuses the calibration itself a moment later.
+        return known ? (full - none) / span.ReferenceMilligramsPerLitre / perSignal : average;
     }
 
     /// <summary>The last measured zero, as long as probe, signal and membrane are the same; a new membrane has a zero of its own.</summary>

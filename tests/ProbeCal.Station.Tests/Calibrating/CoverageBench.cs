@@ -138,11 +138,42 @@ internal sealed record CoverageCase(string Name, string Method, CoverageProbe Pr
     internal double StateRelative { get; init; } = UncertaintyDefaults.AirSaturatedWaterRelative;
 
     /// <summary>True partial pressure of the reading at a true place.</summary>
-    internal Func<Place, double, double> Reading { get; init; } = static (place, share) => (0.6 + (0.4 * share)) * Nature.OxygenOfAir * (place.Hectopascal - Nature.Vapour(place.Celsius));
+    internal Func<Place, double, double> Reading { get; init; } = static (place, share) => (0.02 + (0.98 * share)) * Nature.OxygenOfAir * (place.Hectopascal - Nature.Vapour(place.Celsius));
 }
 
-/// <summary>What came of many calibrations.</summary>
-internal sealed record Coverage(int Count, double Analytic, double MonteCarlo, double HalfWidth, double MonteCarloHalfWidth, double MeanRatio, double RootMeanSquareRatio);
+/// <summary>How often the truth lay in the interval, and how wide that was on average.</summary>
+internal sealed class Coverage(int count)
+{
+    private int _byBudget;
+    private int _byTrials;
+    private double _halfWidths;
+    private double _trialHalfWidths;
+    private double _squares;
+
+    internal double ByBudget => (double)_byBudget / count;
+
+    internal double ByTrials => (double)_byTrials / count;
+
+    internal double HalfWidth => _halfWidths / count;
+
+    internal double TrialHalfWidth => _trialHalfWidths / count;
+
+    /// <summary>Root mean square of error over standard uncertainty.</summary>
+    internal double Ratio => Math.Sqrt(_squares / count);
+
+    internal void Add(double truth, double value, double standardUncertainty, double low, double high)
+    {
+        double halfWidth = Station.Uncertainty.CoverageFactor.Normal * standardUncertainty;
+        _byBudget += Math.Abs(value - truth) <= halfWidth ? 1 : 0;
+        _byTrials += low <= truth && truth <= high ? 1 : 0;
+        _halfWidths += halfWidth;
+        _trialHalfWidths += (high - low) / 2;
+        _squares += (value - truth) * (value - truth) / (standardUncertainty * standardUncertainty);
+    }
+}
+
+/// <summary>A partial pressure in hPa and a concentration in mg/L, each with its standard uncertainty.</summary>
+internal readonly record struct Corrected(double Hectopascal, double HectopascalUncertainty, double Milligrams, double MilligramsUncertainty);
 
 /// <summary>Draws a truth, calibrates with what is read there, corrects a reading elsewhere, and sees whether the truth lies in the interval.</summary>
 internal static class CoverageBench
@@ -154,43 +185,57 @@ internal static class CoverageBench
 
     private static readonly DateTimeOffset Start = new(2026, 6, 1, 9, 0, 0, TimeSpan.Zero);
 
-    internal static Coverage Run(CoverageCase what, int count, int seed)
+    internal static (Coverage Hectopascal, Coverage Milligrams) Run(CoverageCase what, int count, int seed)
     {
         Random random = new(seed);
-        int analytic = 0;
-        int drawn = 0;
-        double widths = 0;
-        double drawnWidths = 0;
-        double ratios = 0;
-        double squares = 0;
+        Coverage hectopascal = new(count);
+        Coverage milligrams = new(count);
         for (int i = 0; i < count; i++)
         {
-            (Entered entered, double truth) = Live(what, random);
-            (double value, double u) = Measure(what, entered, null, withRecord: i == 0);
-            double ratio = (value - truth) / u;
-            analytic += Math.Abs(ratio) <= ProbeCal.Station.Uncertainty.CoverageFactor.Normal ? 1 : 0;
-            widths += ProbeCal.Station.Uncertainty.CoverageFactor.Normal * u;
-            ratios += ratio;
-            squares += ratio * ratio;
-            double low = double.PositiveInfinity;
-            double high = double.NegativeInfinity;
+            (Entered entered, double truth, double truthInMilligrams) = Live(what, random);
+            Corrected read = Measure(what, entered, null, withRecord: i == 0);
+            Corrected low = new(double.PositiveInfinity, 0, double.PositiveInfinity, 0);
+            Corrected high = new(double.NegativeInfinity, 0, double.NegativeInfinity, 0);
             for (int trial = 0; trial < Trials; trial++)
             {
-                double again = Measure(what, entered, new Errors(random), withRecord: false).Value;
-                low = Math.Min(low, again);
-                high = Math.Max(high, again);
+                Corrected again = Measure(what, entered, new Errors(random), withRecord: false);
+                low = new Corrected(Math.Min(low.Hectopascal, again.Hectopascal), 0, Math.Min(low.Milligrams, again.Milligrams), 0);
+                high = new Corrected(Math.Max(high.Hectopascal, again.Hectopascal), 0, Math.Max(high.Milligrams, again.Milligrams), 0);
             }
 
-            drawn += low <= truth && truth <= high ? 1 : 0;
-            drawnWidths += (high - low) / 2;
+            hectopascal.Add(truth, read.Hectopascal, read.HectopascalUncertainty, low.Hectopascal, high.Hectopascal);
+            milligrams.Add(truthInMilligrams, read.Milligrams, read.MilligramsUncertainty, low.Milligrams, high.Milligrams);
         }
 
-        return new Coverage(
-            count, (double)analytic / count, (double)drawn / count, widths / count, drawnWidths / count, ratios / count, Math.Sqrt(squares / count));
+        return (hectopascal, milligrams);
+    }
+
+    /// <summary>What is read and typed where everything is exact; only for points that need no certificate.</summary>
+    internal static Entered Exact(CoverageCase what, Place place)
+    {
+        // Errors of a generator that always gives the middle are none.
+        Errors none = new(new Middle());
+        double[] signals = [.. what.Points.Select(point => what.Probe.Signal(point.Truth(place, none), place.Celsius, place.Celsius, 0))];
+        return new Entered
+        {
+            Signals = signals,
+            Celsius = [.. signals.Select(_ => place.Celsius)],
+            Hectopascal = place.Hectopascal,
+            Salinity = place.Salinity,
+            ReadingSignal = signals[0],
+            ReadingCelsius = place.Celsius,
+            Values = [],
+        };
+    }
+
+    /// <summary>The calibration that the program makes of what was read and typed.</summary>
+    internal static ProbeCalibration Calibrate(CoverageCase what, Entered entered)
+    {
+        return Calibrate(what, entered, null, withRecord: true).Calibration;
     }
 
     /// <summary>Nature and the person: true inputs, and what is read of them.</summary>
-    private static (Entered Entered, double Truth) Live(CoverageCase what, Random random)
+    private static (Entered Entered, double Hectopascal, double Milligrams) Live(CoverageCase what, Random random)
     {
         Errors errors = new(random);
         double pressure = 880 + (140 * random.NextDouble());
@@ -235,7 +280,8 @@ internal static class CoverageBench
             ReadingCelsius = shown,
             Values = values,
         };
-        return (entered, wanted);
+        double milligrams = wanted * Nature.MilligramsPerHectopascal(there.Celsius, salinity) * (1 + errors.Normal("equation", CoverageCases.EquationRelative));
+        return (entered, wanted, milligrams);
     }
 
     /// <summary>Notes what titres and displays show of a true place: the points' own text asks for them by name.</summary>
@@ -255,8 +301,8 @@ internal static class CoverageBench
         }
     }
 
-    /// <summary>All of the program's way from what was read and typed to a corrected reading; the errors are those of a trial, taken off what was read.</summary>
-    private static (double Value, double StandardUncertainty) Measure(CoverageCase what, Entered entered, Errors? trial, bool withRecord)
+    /// <summary>The program's way from what was read and typed to a calibration; the errors are those of a trial, taken off what was read.</summary>
+    private static (ProbeCalibration Calibration, CalibrationSetup Setup) Calibrate(CoverageCase what, Entered entered, Errors? trial, bool withRecord)
     {
         double Off(string name, double u, bool rectangular = false)
         {
@@ -327,6 +373,20 @@ internal static class CoverageBench
             calibration = loaded;
         }
 
+        return (calibration, setup);
+    }
+
+    /// <summary>The same, and on to a corrected reading.</summary>
+    private static Corrected Measure(CoverageCase what, Entered entered, Errors? trial, bool withRecord)
+    {
+        double Off(string name, double u, bool rectangular = false)
+        {
+            return trial == null ? 0 : rectangular ? trial.Rectangular(name, u) : trial.Normal(name, u);
+        }
+
+        (ProbeCalibration calibration, CalibrationSetup setup) = Calibrate(what, entered, trial, withRecord);
+        double offset = Off("thermometer", OffsetKelvin);
+        double coefficient = Off("coefficient", what.Probe.CoefficientUncertainty);
         double celsius = entered.ReadingCelsius - offset - Off("celsius of the reading", UncertaintyDefaults.TemperatureKelvin, rectangular: true);
         double flow = 1 + Off("stirring", what.Probe.StirringUncertainty);
         if (trial != null && what.Probe.IsMeter)
@@ -343,7 +403,12 @@ internal static class CoverageBench
         _ = Correction.Correct(
             calibration, conditions, entered.ReadingSignal - residual - Off("signal of the reading", what.Probe.Noise), celsius,
             setup.Pressure.Hectopascal!.Value, setup.Salinity.Value, 0, RangeRule.Extrapolate, result);
-        return (result.Value(ReadingQuantity.PartialPressure), result.StandardUncertainty(ReadingQuantity.PartialPressure));
+        return new Corrected(
+            result.Value(ReadingQuantity.PartialPressure),
+            result.StandardUncertainty(ReadingQuantity.PartialPressure),
+            // What a trial's solubility makes of a reference is the other way round for a reading.
+            result.Value(ReadingQuantity.MilligramsPerLitre) / (1 + Off("equation", CoverageCases.EquationRelative)),
+            result.StandardUncertainty(ReadingQuantity.MilligramsPerLitre));
     }
 
     /// <summary>A trial of what nobody can enter: another state of the reference, oxygen left at zero, another solubility.</summary>
@@ -377,5 +442,13 @@ internal static class CoverageBench
         double gain = CoverageCases.Membrane(celsius, coefficient) / CoverageCases.Membrane(made.Temperature.Value, 0);
         double reference = (made.Pressure.Value - Nature.Vapour(celsius)) / (made.Pressure.Value - Nature.Vapour(made.Temperature.Value));
         return made with { FlowFactor = made.FlowFactor * gain * reference };
+    }
+
+    private sealed class Middle : Random
+    {
+        public override double NextDouble()
+        {
+            return 0.25;
+        }
     }
 }
