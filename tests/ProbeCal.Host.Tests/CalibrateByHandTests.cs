@@ -148,7 +148,7 @@ public sealed class CalibrateByHandTests : IDisposable
         StringWriter output = new();
         StringWriter error = new();
         Person person = new(error, answers, display ?? new Queue<string>());
-        int code = await Program.RunAsync(arguments, new Terminal { Input = person, Output = output, Error = error, Time = new StillClock() });
+        int code = await Program.RunAsync(arguments, new Terminal { Input = person, Output = output, Error = error, IsInteractive = true, Time = new StillClock() });
         Assert.True(code == 0, error.ToString());
         return (RecordJson.Read(System.Text.Encoding.UTF8.GetBytes(output.ToString()), "output"), person);
     }

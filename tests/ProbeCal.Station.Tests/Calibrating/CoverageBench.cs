@@ -344,8 +344,14 @@ internal static class CoverageBench
                 Typed = false,
                 Signal = new RecordedStatistics
                 {
-                    Count = 120, Mean = mean, StandardDeviation = what.Probe.Noise * Math.Sqrt(120), SlopePerMinute = 0, SlopeStandardErrorPerMinute = 0,
-                    Minimum = mean - (3 * what.Probe.Noise), Maximum = mean + (3 * what.Probe.Noise), WindowSeconds = 120,
+                    Count = 120,
+                    Mean = mean,
+                    StandardDeviation = what.Probe.Noise * Math.Sqrt(120),
+                    SlopePerMinute = 0,
+                    SlopeStandardErrorPerMinute = 0,
+                    Minimum = mean - (3 * what.Probe.Noise),
+                    Maximum = mean + (3 * what.Probe.Noise),
+                    WindowSeconds = 120,
                 },
                 SignalStandardUncertainty = what.Probe.Noise,
                 TemperatureCelsius = what.Probe.IsMeter ? entered.Celsius[i] : moved,
