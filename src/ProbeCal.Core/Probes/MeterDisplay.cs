@@ -211,11 +211,7 @@ public sealed class MeterDisplay : IProbeModel
     {
         if (hasOwnThermometer)
         {
-            gain = double.NaN;
-            if (InputCheck.NotFinite(LowestCelsius) || InputCheck.NotFinite(HighestCelsius)) { return Status.CoefficientNotFinite; }
-            Status inRange = InputCheck.Temperature(temperatureCelsius, LowestCelsius, HighestCelsius);
-            if (!InputCheck.Refuses(inRange, rule)) { gain = 1.0; }
-            return inRange;
+            return ConstantGain.Inside(LowestCelsius, HighestCelsius, temperatureCelsius, rule, out gain);
         }
 
         Status status = TemperatureCoefficient.Factor(

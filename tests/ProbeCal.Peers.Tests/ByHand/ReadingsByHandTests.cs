@@ -61,8 +61,16 @@ public class ReadingsByHandTests(ITestOutputHelper output)
             bool part = i % 2 == 0;
             Dictionary<string, double> u = new()
             {
-                ["standard"] = 0.01, ["normality"] = 1e-5, ["standardTitre"] = 0.005, ["standardBlank"] = 0.003, ["titre"] = 0.004, ["blank"] = 0.002,
-                ["flask"] = 0.05, ["aliquot"] = part ? 0.1 : 0, ["displaced"] = 0.03, ["reagent"] = 3e-4,
+                ["standard"] = 0.01,
+                ["normality"] = 1e-5,
+                ["standardTitre"] = 0.005,
+                ["standardBlank"] = 0.003,
+                ["titre"] = 0.004,
+                ["blank"] = 0.002,
+                ["flask"] = 0.05,
+                ["aliquot"] = part ? 0.1 : 0,
+                ["displaced"] = 0.03,
+                ["reagent"] = 3e-4,
             };
             lines.Add(new { ask = "titration", part, u, q = new { standard, normality, standardTitre, standardBlank, titre, blank, flask, aliquot, displaced, reagent } });
 
@@ -162,8 +170,18 @@ public class ReadingsByHandTests(ITestOutputHelper output)
         return (
             new
             {
-                ask = "fitted", model = described, gas = carbonDioxide ? "CO2" : "O2", equation = carbonDioxide ? "weiss-1974" : "benson-krause-1984", trace = carbonDioxide,
-                fit = new { parameters, covariance, perKelvin, perCoefficient }, signal, t = at.Celsius, s = at.Salinity, hpa = at.Hectopascal, dbar = at.Decibar, flow = at.Flow,
+                ask = "fitted",
+                model = described,
+                gas = carbonDioxide ? "CO2" : "O2",
+                equation = carbonDioxide ? "weiss-1974" : "benson-krause-1984",
+                trace = carbonDioxide,
+                fit = new { parameters, covariance, perKelvin, perCoefficient },
+                signal,
+                t = at.Celsius,
+                s = at.Salinity,
+                hpa = at.Hectopascal,
+                dbar = at.Decibar,
+                flow = at.Flow,
                 u = Uncertainties(at, gas, equation, uSignal, uCoefficient),
             },
             Read(calibration!, at, equation, signal, uSignal));
@@ -203,8 +221,18 @@ public class ReadingsByHandTests(ITestOutputHelper output)
         return (
             new
             {
-                ask = "two-points", model = described, gas = "O2", equation = "benson-krause-1984", point = new { signal = pointSignal, t = then.Celsius, hpa = then.Hectopascal, zero = zeroSignal, tz = zeroCelsius, ratio },
-                signal, t = at.Celsius, s = at.Salinity, hpa = at.Hectopascal, dbar = at.Decibar, flow = at.Flow, u,
+                ask = "two-points",
+                model = described,
+                gas = "O2",
+                equation = "benson-krause-1984",
+                point = new { signal = pointSignal, t = then.Celsius, hpa = then.Hectopascal, zero = zeroSignal, tz = zeroCelsius, ratio },
+                signal,
+                t = at.Celsius,
+                s = at.Salinity,
+                hpa = at.Hectopascal,
+                dbar = at.Decibar,
+                flow = at.Flow,
+                u,
             },
             Read(calibration!, at, SolubilityEquation.BensonKrause1984, signal, uSignal));
     }
@@ -218,7 +246,12 @@ public class ReadingsByHandTests(ITestOutputHelper output)
         double depth = Between(-0.02, 0.02);
         Dictionary<string, object> described = new()
         {
-            ["kind"] = kind, ["reference"] = Reference, ["form"] = form.ToString().ToLowerInvariant(), ["coefficient"] = coefficient, ["more"] = more, ["depth"] = depth,
+            ["kind"] = kind,
+            ["reference"] = Reference,
+            ["form"] = form.ToString().ToLowerInvariant(),
+            ["coefficient"] = coefficient,
+            ["more"] = more,
+            ["depth"] = depth,
             ["coefficientSize"] = coefficient,
         };
         switch (kind)
@@ -275,7 +308,12 @@ public class ReadingsByHandTests(ITestOutputHelper output)
             ["offset"] = at.IsSameThermometer ? at.OffsetThen : 0,
             ["offsetThen"] = at.IsSameThermometer ? 0 : at.OffsetThen,
             ["t"] = at.IsSameThermometer ? at.UCelsius : Root(at.UCelsius, at.OtherOffset),
-            ["coefficient"] = uCoefficient, ["signal"] = uSignal, ["flow"] = 0.01, ["hpa"] = 1.1, ["s"] = 0.25, ["equation"] = relative,
+            ["coefficient"] = uCoefficient,
+            ["signal"] = uSignal,
+            ["flow"] = 0.01,
+            ["hpa"] = 1.1,
+            ["s"] = 0.25,
+            ["equation"] = relative,
         };
     }
 
