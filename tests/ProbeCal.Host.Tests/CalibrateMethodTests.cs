@@ -191,6 +191,67 @@ public sealed class CalibrateMethodTests : IDisposable
         Assert.Equal(1, record.Result.Slope, 0.002);
     }
 
+    /// <summary>A CO2 electrode of 57 mV a decade and -110 mV at 1 hPa in 5 %, 0.5 % and 5 % of 940 hPa; 2 mV off, it reads 51.0 instead of 47 hPa.</summary>
+    [Theory]
+    [InlineData(2, "fail", "--limit", "2hPa")]
+    [InlineData(2, "pass", "--limit", "5hPa")]
+    [InlineData(2, "pass", "--limit-percent", "10%")]
+    [InlineData(0, "pass", "--limit", "2hPa")]
+    public async Task CarbonDioxide_IsJudgedInHectopascal_ByWhatWasEntered(double off, string verdict, string option, string limit)
+    {
+        CalibrationRecord calibration = await RecordAsync(0, ["calibrate", .. CarbonDioxide(Lines(0, 47, 4.7, 47)), "--level", "gas-mixture: CYL-6 0.5% u 0.005% dry", "--limit", "2hPa"]);
+        Assert.Equal(57, calibration.Result.Slope, 2 * calibration.Result.SlopeStandardUncertainty);
+        Ran check = await RunAsync(["check", .. CarbonDioxide(Lines(off, 47)), option, limit]);
+        Assert.Equal(verdict == "pass" ? 0 : 1, check.Code);
+        Assert.Contains(verdict == "pass" ? "PASS" : "FAIL", check.Output, StringComparison.Ordinal);
+        Assert.Contains("reference hPa CO2  47.00", check.Output, StringComparison.Ordinal);
+        Assert.Contains(off == 0 ? "reading hPa        47.00" : "error hPa          +4.0", check.Output, StringComparison.Ordinal);
+        Assert.DoesNotContain("reading mg/L", check.Output, StringComparison.Ordinal);
+        Assert.Contains("mV/decade", check.Output, StringComparison.Ordinal);
+    }
+
+    [Theory]
+    [InlineData("calibrate", "", "", "there is no published limit for CO2, and none was entered: say how far a reading may be off, with --limit in hPa")]
+    [InlineData("check", "", "", "there is no published limit for CO2")]
+    [InlineData("calibrate", "--limit", "0.2mg/L", "--limit 0.2mg/L: errors of this gas are judged as a pressure; write for example 5hPa")]
+    public async Task CarbonDioxideWithoutALimitInHectopascal_IsOneLine_AndNothingIsMeasured(string command, string option, string value, string says)
+    {
+        string[] more = option.Length == 0 ? [] : [option, value];
+        Ran ran = await RunAsync([command, .. CarbonDioxide(Lines(0, 47, 4.7, 47)), "--level", "gas-mixture: CYL-6 0.5% u 0.005% dry", .. more]);
+        Assert.Equal(2, ran.Code);
+        Assert.Contains("probecal: " + says, ran.Error, StringComparison.Ordinal);
+        Assert.DoesNotContain("point", ran.Error.Replace("decimal point", "", StringComparison.Ordinal), StringComparison.Ordinal);
+    }
+
+    private string[] CarbonDioxide(string source)
+    {
+        return
+        [
+            "--unattended", "--data", _folder, "--source", "file:" + source, "--line", "{time},{signal:mV},{temperature},{pressure}", "--probe", "P-C", "--gas", "CO2",
+            "--model", "severinghaus zero-per-kelvin=0 lowest-celsius=0 highest-celsius=40", "--method", "gas-mixture", "--mixture", "CYL-5 5% u 0.02% dry", "--pressure-source", "barometer:B-12",
+        ];
+    }
+
+    /// <summary>Lines of the electrode at 20 °C in each gas for 400 s, with a little noise that is the same each time.</summary>
+    private string Lines(double off, params double[] hectopascal)
+    {
+        string path = Path.Combine(_folder, $"lines-{Directory.GetFiles(_folder).Length}.csv");
+        System.Text.StringBuilder text = new();
+        DateTimeOffset time = _time.Now;
+        foreach (double p in hectopascal)
+        {
+            for (int i = 0; i < 400; i++)
+            {
+                time = time.AddSeconds(1);
+                double millivolts = -110 + (57 * (293.15 / 298.15) * Math.Log10(p)) + off + (0.005 * ((i % 7) - 3));
+                text.Append(System.Globalization.CultureInfo.InvariantCulture, $"{time.UtcDateTime:yyyy-MM-dd'T'HH:mm:ss}Z,{millivolts:F4},{20 + (0.001 * (i % 3))},940\n");
+            }
+        }
+
+        File.WriteAllText(path, text.ToString());
+        return path;
+    }
+
     private string[] Common(string method, string phases)
     {
         return

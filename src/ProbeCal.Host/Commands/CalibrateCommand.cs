@@ -151,7 +151,7 @@ internal static class CalibrateCommand
 
     private static ICalibrationDialogue Dialogue(CalibrateOptions options, ParseResult parsed, Terminal terminal, Questions? questions, CalibrationSetup setup, EquipmentValues register)
     {
-        CalibrationProgress progress = new(terminal.Error);
+        CalibrationProgress progress = new(terminal.Error, ErrorScale.IsHectopascal(GasNames.NameOf(setup.Gas), setup.Probe.Model));
         return questions == null
             ? new UnattendedDialogue(progress, Reading)
             : new InteractiveDialogue(progress, questions, Reading, text => Shown("reading", text, setup), Reference);

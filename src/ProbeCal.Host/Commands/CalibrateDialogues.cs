@@ -16,12 +16,16 @@ internal sealed class CalibrationProgress
     private const double EverySeconds = 15;
 
     private readonly TextWriter _error;
+    private readonly bool _inHectopascal;
     private ProcedureStep? _step;
     private DateTimeOffset _told;
 
-    internal CalibrationProgress(TextWriter error)
+    /// <param name="error">Where to.</param>
+    /// <param name="inHectopascal">True where errors are those of a pressure, see <see cref="ErrorScale"/>.</param>
+    internal CalibrationProgress(TextWriter error, bool inHectopascal)
     {
         _error = error;
+        _inHectopascal = inHectopascal;
     }
 
     internal void Say(string line)
@@ -52,8 +56,11 @@ internal sealed class CalibrationProgress
 
     internal void Taken(RecordedPoint point)
     {
-        string error = point.ErrorMilligramsPerLitre is double off ? $", off by {(off < 0 ? "" : "+")}{Number.Fixed(off, 3)} mg/L" : "";
-        _error.WriteLine($"{CalibrationText.Role(point)} point taken: {(point.Typed ? "shown" : "signal")} {Number.Fixed(point.Signal.Mean, 3)} at {Number.Fixed(point.Temperature.Value, 2)} °C, reference {Number.Fixed(point.ReferenceMilligramsPerLitre, 2)} mg/L{error}");
+        string error = _inHectopascal
+            ? point.ErrorHectopascal is double hectopascal ? $", off by {CalibrationText.Signed(hectopascal, 2)} hPa" : ""
+            : point.ErrorMilligramsPerLitre is double off ? $", off by {CalibrationText.Signed(off, 3)} mg/L" : "";
+        string reference = _inHectopascal ? $"{Number.Fixed(point.ReferencePartialPressureHectopascal, 2)} hPa" : $"{Number.Fixed(point.ReferenceMilligramsPerLitre, 2)} mg/L";
+        _error.WriteLine($"{CalibrationText.Role(point)} point taken: {(point.Typed ? "shown" : "signal")} {Number.Fixed(point.Signal.Mean, 3)} at {Number.Fixed(point.Temperature.Value, 2)} °C, reference {reference}{error}");
     }
 
     private static string Name(ProcedureStep step)

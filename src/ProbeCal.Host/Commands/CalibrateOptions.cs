@@ -66,9 +66,9 @@ internal sealed class CalibrateOptions
         Equation = Text("--equation", "NAME", "benson-krause-1984 (default) or garcia-gordon-1992.");
 
         Begin("Limits and waiting");
-        Limit = Text("--limit", "X", "Limit of the error at 100 %: 0.2mg/L (default, TM 9-A6.2).");
-        LimitPercent = Text("--limit-percent", "X", "The same in % of the reference; the larger of the two applies: 2% (default).");
-        ZeroLimit = Text("--zero-limit", "X", "Limit of the zero reading: 0.2mg/L (default, TM 9-A6.2).");
+        Limit = Text("--limit", "X", "Limit of the error: 0.2mg/L (default for oxygen, TM 9-A6.2). Other gases and total gas have no default: 5hPa.");
+        LimitPercent = Text("--limit-percent", "X", "The same in % of the reference; the larger of the two applies: 2% (default for oxygen).");
+        ZeroLimit = Text("--zero-limit", "X", "Limit of the zero reading: 0.2mg/L (default for oxygen, TM 9-A6.2); for other gases in hPa (default that of --limit).");
         GuardBand = Flag("--guard-band", "Accept only what lies within a limit by its whole expanded uncertainty (default: simple acceptance).");
         ZeroWindow = Text("--zero-window", "LOW..HIGH", "Zero signal that the probe's maker allows, in the signal's unit; none unless entered.");
         StoneDepth = Text("--stone-depth", "Z", "Depth at which bubbles are released into the bath: 0.3m; bubbles under water supersaturate it.");

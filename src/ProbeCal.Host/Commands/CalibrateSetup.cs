@@ -81,8 +81,9 @@ internal sealed class CalibrateSetup
         Stirring stirring = _reader.Given(_options.StirringOption) == null && inGas
             ? Stirring.Stirred
             : StirringOf(await _reader.NeedChoiceAsync(_options.StirringOption, "The water at the probe:", Stirrings, cancellationToken).ConfigureAwait(false));
-        CalibrationLimits limits = Limits();
         IReadOnlyList<PlannedPoint> plan = await PlanAsync(method, gas, cancellationToken).ConfigureAwait(false);
+        RecordedProbe recorded = await ProbeAsync(probe, line, manual, temperature != null, cancellationToken).ConfigureAwait(false);
+        CalibrationLimits limits = Limits(ErrorScale.IsHectopascal(GasNames.NameOf(gas), recorded.Model));
         return new CalibrationSetup
         {
             Purpose = _purpose,
@@ -91,7 +92,7 @@ internal sealed class CalibrateSetup
             Plan = plan,
             FitForm = _reader.Given(_options.Form) is string form ? OptionReader.Choice(_options.Form, Forms)(form) : "line",
             Equipment = [.. _reader.Many(_options.Equipment).Select(static id => PlainText.Id("--equipment", id))],
-            Probe = await ProbeAsync(probe, line, manual, temperature != null, cancellationToken).ConfigureAwait(false),
+            Probe = recorded,
             Method = method,
             Readings = manual ? CalibrationIds.Typed : CalibrationIds.Live,
             Source = address?.ToString() ?? "the display of the meter",
@@ -287,15 +288,24 @@ internal sealed class CalibrateSetup
         return around == new Surroundings() ? null : around;
     }
 
-    private CalibrationLimits Limits()
+    /// <param name="inHectopascal">True where the published limits, which are those of dissolved oxygen, do not apply.</param>
+    private CalibrationLimits Limits(bool inHectopascal)
     {
-        double? absolute = _reader.NotNegative(_options.Limit, QuantityKind.MassConcentration);
+        double? absolute = ErrorLimit(_options.Limit, inHectopascal);
         double? percent = _reader.NotNegative(_options.LimitPercent, QuantityKind.Percent);
-        double? zero = _reader.NotNegative(_options.ZeroLimit, QuantityKind.MassConcentration);
+        double? zero = ErrorLimit(_options.ZeroLimit, inHectopascal);
         (double Low, double High)? window = _reader.Range(_options.SlopeWindow);
         (double Low, double High)? zeroWindow = _reader.Range(_options.ZeroWindow);
         bool entered = absolute != null || percent != null;
-        return new CalibrationLimits
+        CalibrationLimits limits = new()
+        {
+            GuardBand = _reader.IsSet(_options.GuardBand),
+            SlopeLow = window?.Low,
+            SlopeHigh = window?.High,
+            ZeroSignalLow = zeroWindow?.Low,
+            ZeroSignalHigh = zeroWindow?.High,
+        };
+        return inHectopascal ? limits with { Pressure = new PressureLimits { Hectopascal = absolute, Percent = percent, ZeroHectopascal = zero } } : limits with
         {
             // Whoever enters one of the two means it: the other published one would soften it.
             SaturationMilligramsPerLitre = absolute ?? (entered ? 0 : AcceptanceLimit.SaturationMilligramsPerLitre),
@@ -303,12 +313,17 @@ internal sealed class CalibrateSetup
             SaturationSource = entered ? CalibrationLimits.Entered : CalibrationLimits.FieldManual,
             ZeroMilligramsPerLitre = zero ?? AcceptanceLimit.ZeroMilligramsPerLitre,
             ZeroSource = zero == null ? CalibrationLimits.FieldManual : CalibrationLimits.Entered,
-            GuardBand = _reader.IsSet(_options.GuardBand),
-            SlopeLow = window?.Low,
-            SlopeHigh = window?.High,
-            ZeroSignalLow = zeroWindow?.Low,
-            ZeroSignalHigh = zeroWindow?.High,
         };
+    }
+
+    private double? ErrorLimit(Option<string> option, bool inHectopascal)
+    {
+        QuantityKind kind = inHectopascal ? QuantityKind.Pressure : QuantityKind.MassConcentration;
+        return _reader.Given(option) is string given && !Quantity.TryParse(kind, given, out _, out string? problem)
+            ? throw Wrong.Input(option.Name, given, inHectopascal
+                ? "errors of this gas are judged as a pressure; write for example 5hPa"
+                : $"{problem}; errors of dissolved oxygen are judged in mg/L")
+            : _reader.NotNegative(option, kind);
     }
 
     private WaitingRules Waiting(CalibrationLimits limits)
@@ -335,7 +350,7 @@ internal sealed class CalibrateSetup
     /// <summary>What may move follows the limit that the point is judged by; null where none in mg/L decides.</summary>
     private static double? QuarterOf(CalibrationLimits limits)
     {
-        return 0 < limits.SaturationMilligramsPerLitre ? limits.SaturationMilligramsPerLitre / 4 : null;
+        return limits.Pressure == null && 0 < limits.SaturationMilligramsPerLitre ? limits.SaturationMilligramsPerLitre / 4 : null;
     }
 
     private Dictionary<string, string> Reasons()

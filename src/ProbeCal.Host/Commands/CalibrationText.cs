@@ -27,7 +27,7 @@ internal static class CalibrationText
         output.WriteLine();
         WriteIdentity(output, record);
         output.WriteLine();
-        WritePoints(output, record.Points, record.Probe.SignalUnit);
+        WritePoints(output, record);
         output.WriteLine();
         WriteResult(output, record);
         WriteLimits(output, record);
@@ -83,9 +83,12 @@ internal static class CalibrationText
         }
     }
 
-    private static void WritePoints(TextWriter output, RecordedPoint[] points, string signalUnit)
+    private static void WritePoints(TextWriter output, CalibrationRecord record)
     {
-        string unit = signalUnit.Length == 0 ? "" : " " + signalUnit;
+        RecordedPoint[] points = record.Points;
+        string unit = record.Probe.SignalUnit.Length == 0 ? "" : " " + record.Probe.SignalUnit;
+        bool total = record.Probe.Model == "total-gas";
+        bool inHectopascal = ErrorScale.IsHectopascal(record);
         List<string[]> rows =
         [
             ["point", .. points.Select(Role)],
@@ -99,13 +102,14 @@ internal static class CalibrationText
             ["  source", .. points.Select(static point => point.Pressure.Source)],
             ["salinity", .. points.Select(static point => Number.Print(point.Salinity.Value))],
             ["stirring", .. points.Select(static point => point.Stirring)],
-            ["reference hPa O2", .. points.Select(static point => $"{Number.Fixed(point.ReferencePartialPressureHectopascal, 2)} u {Number.Fixed(point.ReferencePartialPressureUncertaintyHectopascal, 2)}")],
+            [total ? "total gas pressure hPa" : "reference hPa " + record.Gas, .. points.Select(static point => $"{Number.Fixed(point.ReferencePartialPressureHectopascal, 2)} u {Number.Fixed(point.ReferencePartialPressureUncertaintyHectopascal, 2)}")],
             ["reference mg/L", .. points.Select(static point => $"{Number.Fixed(point.ReferenceMilligramsPerLitre, 3)} u {Number.Fixed(point.ReferenceUncertaintyMilligramsPerLitre, 3)}")],
-            ["reading mg/L", .. points.Select(static point => point.ReadingMilligramsPerLitre is double reading ? Number.Fixed(reading, 3) : "-")],
-            ["error mg/L", .. points.Select(static point => point.ErrorMilligramsPerLitre is double error ? Signed(error, 3) : "-")],
+            ["reading " + ErrorScale.Unit(record), .. points.Select(point => ErrorScale.Reading(record, point) is double reading ? Number.Fixed(reading, inHectopascal ? 2 : 3) : "-")],
+            [total ? "error of ΔP hPa" : "error " + ErrorScale.Unit(record), .. points.Select(point => ErrorScale.Error(record, point) is double error ? Signed(error, inHectopascal ? 2 : 3) : "-")],
             ["  read by", .. points.Select(static point => point.ReadBy ?? "-")],
         ];
-        TextTable.Write(output, rows, "  ");
+        // A total gas pressure is no concentration.
+        TextTable.Write(output, [.. rows.Where(row => !total || row[0] != "reference mg/L")], "  ");
     }
 
     private static void WriteResult(TextWriter output, CalibrationRecord record)
@@ -113,7 +117,7 @@ internal static class CalibrationText
         string unit = " " + (record.Probe.SignalUnit.Length == 0 ? "signal" : record.Probe.SignalUnit);
         RecordedResult result = record.Result;
         double percent = 100 * result.SlopeStandardUncertainty / Math.Abs(result.Slope);
-        output.WriteLine($"  slope {Number.Significant(result.Slope, Digits)}{(record.Probe.MeterSettings == null ? unit + "/hPa" : " (1 is a meter that shows the truth)")}, u {Number.Significant(result.SlopeStandardUncertainty, Digits)} ({Number.Fixed(percent, 2)} %)");
+        output.WriteLine($"  slope {Number.Significant(result.Slope, Digits)}{(record.Probe.MeterSettings == null ? unit + (record.Probe.Model == "severinghaus" ? "/decade" : "/hPa") : " (1 is a meter that shows the truth)")}, u {Number.Significant(result.SlopeStandardUncertainty, Digits)} ({Number.Fixed(percent, 2)} %)");
         output.WriteLine($"  zero  {Number.Significant(result.Zero, Digits)}{(record.Probe.MeterSettings == null ? unit : " hPa")}, u {Number.Significant(result.ZeroStandardUncertainty, Digits)} ({record.Zero.Source})");
         output.WriteLine();
     }

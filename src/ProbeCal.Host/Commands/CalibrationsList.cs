@@ -60,7 +60,7 @@ internal static class CalibrationsList
                 CalibrationText.Time(record.CompletedUtc),
                 record.Probe.Id,
                 Method(record.Method),
-                Number.Significant(record.Result.Slope, CalibrationText.Digits) + Unit(record, "/hPa"),
+                Number.Significant(record.Result.Slope, CalibrationText.Digits) + Unit(record, record.Probe.Model == "severinghaus" ? "/decade" : "/hPa"),
                 Number.Significant(record.Result.Zero, CalibrationText.Digits) + (record.Probe.MeterSettings == null ? Unit(record, "") : " hPa"),
                 Error(record, "span"),
                 Error(record, "as-left"),
@@ -69,7 +69,7 @@ internal static class CalibrationsList
         }
 
         TextTable.Write(output, rows, "");
-        output.WriteLine("as found, as left: error at 100 % before and after the adjustment, mg/L");
+        output.WriteLine("as found, as left: error at 100 % before and after the adjustment, mg/L where no unit is named");
     }
 
     private static void WriteAll(TextWriter output, CalibrationLogStore log, string? only)
@@ -104,7 +104,9 @@ internal static class CalibrationsList
 
     private static string Error(CalibrationRecord record, string role)
     {
-        return record.Points.FirstOrDefault(point => point.Role == role)?.ErrorMilligramsPerLitre is double error ? CalibrationText.Signed(error, 3) : "-";
+        return ErrorScale.Error(record, record.Points.FirstOrDefault(point => point.Role == role)) is double error
+            ? CalibrationText.Signed(error, 3) + (ErrorScale.IsHectopascal(record) ? " hPa" : "")
+            : "-";
     }
 
     private static CalibrationList Json(CalibrationLogStore log, List<StoredCalibration> records)

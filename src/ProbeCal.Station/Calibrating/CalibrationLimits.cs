@@ -17,9 +17,6 @@ public sealed record CalibrationLimits
     /// <summary>Source of the band before adjustment.</summary>
     public const string OceanPractice = "OceanGliders oxygen SOP";
 
-    /// <summary>Limit of the error of a total gas pressure, % of it (our choice, no source).</summary>
-    public const double TotalPressurePercent = 1;
-
     /// <summary>Limit of the as-left and as-found error in mg/L.</summary>
     public double SaturationMilligramsPerLitre { get; init; } = AcceptanceLimit.SaturationMilligramsPerLitre;
 
@@ -34,6 +31,9 @@ public sealed record CalibrationLimits
 
     /// <summary>Source of it.</summary>
     public string ZeroSource { get; init; } = FieldManual;
+
+    /// <summary>The limits in hPa of a gas other than oxygen or of total gas pressure; none when none was entered, and then nothing is measured.</summary>
+    public PressureLimits? Pressure { get; init; }
 
     /// <summary>Lower end of the slope window that the person entered; none when not entered. None is ever made up.</summary>
     public double? SlopeLow { get; init; }

@@ -48,24 +48,6 @@ internal static class ErrorUncertainty
     /// <summary>The same in mg/L; null where the point has no concentration.</summary>
     internal static double? InMilligramsPerLitre(CalibrationSetup setup, RecordedPoint point, ProbeCalibration calibration)
     {
-        return MilligramsPerHectopascal(setup, point) is double per ? Of(setup, point, calibration, per) : null;
-    }
-
-    /// <summary>mg/L per hPa in the water of a point; null where the gas or the temperature has none.</summary>
-    internal static double? MilligramsPerHectopascal(CalibrationSetup setup, RecordedPoint point)
-    {
-        if (0 < point.ReferencePartialPressureHectopascal && 0 < point.ReferenceMilligramsPerLitre)
-        {
-            return point.ReferenceMilligramsPerLitre / point.ReferencePartialPressureHectopascal;
-        }
-
-        if (setup.Gas != Gas.Oxygen || setup.Probe.Model == "total-gas")
-        {
-            return null;
-        }
-
-        Status status = OxygenEquilibrium.ConcentrationFromPartialPressure(
-            setup.Equation, point.Temperature.Value, setup.Salinity.Value, point.Pressure.Value, 1, RangeRule.Refuse, out double per);
-        return status == Status.Ok ? per : null;
+        return Fitting.MilligramsPerHectopascal(setup, point) is double per ? Of(setup, point, calibration, per) : null;
     }
 }

@@ -231,18 +231,18 @@ internal static class FitGuards
             return null;
         }
 
-        CalibrationLimits limits = now.Setup.Limits;
-        Status status = AcceptanceLimit.AtSaturation(span.ReferenceMilligramsPerLitre, limits.SaturationMilligramsPerLitre, limits.SaturationPercent, out double width, out AppliedLimit _);
-        double? expanded = Decision.CoverageFactor * ErrorUncertainty.InMilligramsPerLitre(now.Setup, span, fit);
-        return status != Status.Ok || expanded < width ? null : new Finding(GuardNames.GuardBand, FindingSeverity.Refuse,
-            Decision.NoBand(width, expanded, "mg/L"),
+        ErrorLimit limit = ErrorLimit.Of(now.Setup, span, fit);
+        double? expanded = Decision.CoverageFactor * limit.StandardUncertainty;
+        return double.IsNaN(limit.Width) || expanded < limit.Width ? null : new Finding(GuardNames.GuardBand, FindingSeverity.Refuse,
+            Decision.NoBand(limit.Width, expanded, limit.Unit),
             PossibleError.Unknown("no reading is wrong by this"),
             "go on without a guard band (simple acceptance, with U printed beside the limit), or know the reference better");
     }
 
     private static Finding? AsFound(Situation now)
     {
-        if (now.Span is not { ErrorMilligramsPerLitre: double error } span)
+        // The band of 95 to 105 % is one of dissolved oxygen.
+        if (!PlanCheck.IsOxygen(now.Setup) || now.Span is not { ErrorMilligramsPerLitre: double error } span)
         {
             return null;
         }

@@ -268,7 +268,7 @@ internal static class Fitting
     }
 
     /// <summary>Concentration per partial pressure in the water of a point, mg/(L·hPa); null where the gas has none.</summary>
-    private static double? MilligramsPerHectopascal(CalibrationSetup setup, RecordedPoint point)
+    internal static double? MilligramsPerHectopascal(CalibrationSetup setup, RecordedPoint point)
     {
         if (point.ReferencePartialPressureHectopascal != 0)
         {

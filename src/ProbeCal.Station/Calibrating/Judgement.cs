@@ -24,21 +24,23 @@ internal static class Judgement
             switch (point.Role)
             {
                 case CalibrationIds.SpanPoint:
-                    limits.Add(Saturation("as-found", setup, point, calibration, decides: check));
-                    if (point.ErrorMilligramsPerLitre != null && point.ReferenceMilligramsPerLitre != 0)
+                    limits.Add(Error("as-found", setup, point, calibration, decides: check));
+                    // The band is one of dissolved oxygen.
+                    if (PlanCheck.IsOxygen(setup) && point.ErrorMilligramsPerLitre != null && point.ReferenceMilligramsPerLitre != 0)
                     {
                         limits.Add(AsFoundBand(point));
                     }
 
                     break;
                 case CalibrationIds.AsLeftPoint:
-                    limits.Add(Saturation(CalibrationIds.AsLeftPoint, setup, point, calibration, decides: true));
+                    limits.Add(Error(CalibrationIds.AsLeftPoint, setup, point, calibration, decides: true));
                     break;
                 case CalibrationIds.ZeroPoint:
-                    limits.Add(Zero(setup, point, calibration, decides: check || setup.ZeroPlan == CalibrationIds.ZeroCheck));
+                    // A zero that is adjusted was out of its limit for a reason, so that it does not decide; a check that fails fails the calibration.
+                    limits.Add(Error(CalibrationIds.ZeroPoint, setup, point, calibration, decides: check || setup.ZeroPlan == CalibrationIds.ZeroCheck));
                     break;
                 default:
-                    limits.Add(Saturation(point.Role, setup, point, calibration, decides: check));
+                    limits.Add(Error(point.Role, setup, point, calibration, decides: check));
                     break;
             }
         }
@@ -76,52 +78,21 @@ internal static class Judgement
             : $"{what} outside its limit, {limit.Limit} ({limit.Source})";
     }
 
-    private static RecordedLimit Saturation(string check, CalibrationSetup setup, RecordedPoint point, ProbeCalibration calibration, bool decides)
+    private static RecordedLimit Error(string check, CalibrationSetup setup, RecordedPoint point, ProbeCalibration calibration, bool decides)
     {
-        CalibrationLimits limits = setup.Limits;
-        bool oxygen = setup.Gas == Gas.Oxygen && !PlanCheck.IsTotalPressure(setup.Probe);
-        if (!oxygen)
-        {
-            return OfReference(check, setup, point, calibration, decides);
-        }
-
-        Status status = AcceptanceLimit.AtSaturation(
-            point.ReferenceMilligramsPerLitre, limits.SaturationMilligramsPerLitre, limits.SaturationPercent, out double width, out AppliedLimit applied);
-        string which = Number.Fixed(width, 3) + (applied == AppliedLimit.Relative ? " mg/L, the % limit" : " mg/L, the mg/L limit");
+        ErrorLimit at = ErrorLimit.Of(setup, point, calibration);
         RecordedLimit limit = new()
         {
             Check = check,
-            Limit = limits.SaturationText,
-            Applied = status == Status.Ok ? which : null,
-            Source = limits.SaturationSource,
-            Found = status == Status.Ok ? point.ErrorMilligramsPerLitre : null,
-            Unit = "mg/L",
+            Limit = at.Text,
+            Applied = at.Applied,
+            Source = at.Source,
+            Found = at.Found,
+            Unit = at.Unit,
             Verdict = Decision.NotJudged,
             Decides = decides,
         };
-        return Decision.Judged(limit, width, ErrorUncertainty.InMilligramsPerLitre(setup, point, calibration), limits.GuardBand);
-    }
-
-    /// <summary>Of another gas, or of the total pressure, the share of the reference alone: 0.2 mg/L of oxygen says nothing about them.</summary>
-    private static RecordedLimit OfReference(string check, CalibrationSetup setup, RecordedPoint point, ProbeCalibration calibration, bool decides)
-    {
-        CalibrationLimits limits = setup.Limits;
-        bool entered = limits.SaturationSource == CalibrationLimits.Entered;
-        double percent = entered ? limits.SaturationPercent
-            : PlanCheck.IsTotalPressure(setup.Probe) ? CalibrationLimits.TotalPressurePercent : limits.SaturationPercent;
-        double width = percent / 100 * point.ReferencePartialPressureHectopascal;
-        RecordedLimit limit = new()
-        {
-            Check = check,
-            Limit = Number.Print(percent) + " % of the reference",
-            Applied = Number.Significant(width, 4) + " hPa",
-            Source = entered ? CalibrationLimits.Entered : "our choice, no source",
-            Found = point.ErrorHectopascal,
-            Unit = "hPa",
-            Verdict = Decision.NotJudged,
-            Decides = decides,
-        };
-        return Decision.Judged(limit, width, ErrorUncertainty.Of(setup, point, calibration, 1), limits.GuardBand);
+        return Decision.Judged(limit, at.Width, at.StandardUncertainty, setup.Limits.GuardBand);
     }
 
     private static RecordedLimit AsFoundBand(RecordedPoint span)
@@ -137,22 +108,6 @@ internal static class Judgement
             Verdict = percent is not double read ? Decision.NotJudged : Math.Abs(read - 100) <= FitGuards.AsFoundPercent ? Decision.Pass : Decision.Fail,
             Decides = false,
         };
-    }
-
-    private static RecordedLimit Zero(CalibrationSetup setup, RecordedPoint zero, ProbeCalibration calibration, bool decides)
-    {
-        // A zero that is adjusted was out of its limit for a reason, so that it does not decide; a check that fails fails the calibration.
-        RecordedLimit limit = new()
-        {
-            Check = CalibrationIds.ZeroPoint,
-            Limit = setup.Limits.ZeroText,
-            Source = setup.Limits.ZeroSource,
-            Found = zero.ErrorMilligramsPerLitre,
-            Unit = "mg/L",
-            Verdict = Decision.NotJudged,
-            Decides = decides,
-        };
-        return Decision.Judged(limit, setup.Limits.ZeroMilligramsPerLitre, ErrorUncertainty.InMilligramsPerLitre(setup, zero, calibration), setup.Limits.GuardBand);
     }
 
     private static RecordedLimit Slope(double low, double high, ProbeCalibration calibration, CalibrationSetup setup)

@@ -16,6 +16,7 @@ internal static class PlanCheck
     internal static void Require(CalibrationSetup setup, CalibrationRecord? inForce)
     {
         RequireRoles(setup);
+        RequireALimit(setup);
         if (setup.Purpose == CalibrationRecord.CheckPurpose)
         {
             RequireSomethingToCheck(setup, inForce);
@@ -70,6 +71,12 @@ internal static class PlanCheck
         return probe.Model == "severinghaus";
     }
 
+    /// <summary>True for dissolved oxygen, which the published limits speak of; false for another gas and for total gas pressure, which are judged in hPa.</summary>
+    internal static bool IsOxygen(CalibrationSetup setup)
+    {
+        return !ErrorScale.IsHectopascal(GasNames.NameOf(setup.Gas), setup.Probe.Model);
+    }
+
     /// <summary>True for a probe of the total gas pressure.</summary>
     internal static bool IsTotalPressure(RecordedProbe probe)
     {
@@ -118,6 +125,27 @@ internal static class PlanCheck
             {
                 throw new InputException($"zero by {point.Method}: a zero is read in {MethodIds.ZeroSolution} or {MethodIds.ZeroGas}");
             }
+        }
+    }
+
+    /// <summary>Nothing is measured that could not be judged afterwards, and no limit is made up.</summary>
+    private static void RequireALimit(CalibrationSetup setup)
+    {
+        if (IsOxygen(setup))
+        {
+            return;
+        }
+
+        string what = IsTotalPressure(setup.Probe) ? "total gas pressure" : GasNames.NameOf(setup.Gas);
+        PressureLimits limits = setup.Limits.Pressure ?? new PressureLimits();
+        if (limits.Hectopascal == null && limits.Percent == null && setup.Plan.Any(static point => point.Role != CalibrationIds.ZeroPoint))
+        {
+            throw new InputException($"there is no published limit for {what}, and none was entered: say how far a reading may be off, with --limit in hPa (for example --limit 5hPa) or --limit-percent in % of the reference (for example --limit-percent 3%)");
+        }
+
+        if (limits.AtZero == null && HasZero(setup))
+        {
+            throw new InputException($"there is no published limit for {what} at zero, where a share of the reference says nothing: enter one in hPa, for example --zero-limit 1hPa");
         }
     }
 

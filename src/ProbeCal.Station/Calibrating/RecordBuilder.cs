@@ -9,9 +9,10 @@ namespace ProbeCal.Station.Calibrating;
 /// <summary>From the finished state to the record.</summary>
 internal static class RecordBuilder
 {
+    private const string OxygenInAir = "oxygen in water-saturated air: 0.20946 (P - vapour pressure), vapour pressure by Benson and Krause 1980";
+
     private static readonly string[] Formulas =
     [
-        "oxygen in water-saturated air: 0.20946 (P - vapour pressure), vapour pressure by Benson and Krause 1980",
         "station pressure against sea level: ICAO standard atmosphere",
         "mean, trend and scatter by least squares; uncertainty by JCGM 100:2008",
     ];
@@ -56,7 +57,7 @@ internal static class RecordBuilder
                 UncertaintySource = Judgement.ReferenceStateSource(setup),
             },
             Equation = EquationNames.NameOf(setup.Equation),
-            Formulas = budget.Text == null ? Formulas : [.. Formulas, budget.Text],
+            Formulas = [.. PlanCheck.IsOxygen(setup) ? [OxygenInAir] : Array.Empty<string>(), .. Formulas, .. budget.Text is string trials ? [trials] : Array.Empty<string>()],
             Points = [.. state.Points],
             SlopeFrom = fit.SlopeFrom,
             Zero = fit.Zero,

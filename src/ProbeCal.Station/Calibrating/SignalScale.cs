@@ -17,6 +17,9 @@ internal sealed class SignalScale
     /// <summary>Two references that differ by less than this share are one for the signal (our choice, no source).</summary>
     private const double SameReference = 0.1;
 
+    /// <summary>The same for total gas pressures, which all lie near that of the air: 5 hPa in 1000 are another level (our choice, no source).</summary>
+    private const double SameTotalPressure = 0.005;
+
     /// <summary>Steadiness of a total gas pressure: 1 hPa counts as the usual limit for oxygen, 0.05 mg/L (our choice, no source).</summary>
     private const double MilligramsPerTotalHectopascal = 0.05;
 
@@ -60,7 +63,7 @@ internal sealed class SignalScale
 
         double? target = _role == CalibrationIds.AsLeftPoint ? _span?.ReferencePartialPressureHectopascal : truth?.Hectopascal;
         double from = _last.ReferencePartialPressureHectopascal;
-        if (target is not double to || Math.Abs(to - from) <= SameReference * Math.Max(Math.Abs(to), Math.Abs(from)))
+        if (target is not double to || Math.Abs(to - from) <= (PlanCheck.IsTotalPressure(_setup.Probe) ? SameTotalPressure : SameReference) * Math.Max(Math.Abs(to), Math.Abs(from)))
         {
             return null;
         }
@@ -111,7 +114,7 @@ internal sealed class SignalScale
         return meanSignal == 0 ? double.NaN : reference / meanSignal;
     }
 
-    private bool IsOxygen => _setup.Gas == Gas.Oxygen && !PlanCheck.IsTotalPressure(_setup.Probe);
+    private bool IsOxygen => PlanCheck.IsOxygen(_setup);
 
     private string? ByShare(double signal, bool isFirst)
     {

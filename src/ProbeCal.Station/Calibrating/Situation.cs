@@ -91,7 +91,7 @@ internal sealed record Situation
     public double? SaturationAt(double? temperatureCelsius, double? pressureHectopascal, double salinity)
     {
         // Errors in mg/L are those of oxygen; other gases have findings without a size.
-        if (Setup.Gas != Gas.Oxygen || temperatureCelsius is not double celsius || pressureHectopascal is not double hectopascal)
+        if (!PlanCheck.IsOxygen(Setup) || temperatureCelsius is not double celsius || pressureHectopascal is not double hectopascal)
         {
             return null;
         }

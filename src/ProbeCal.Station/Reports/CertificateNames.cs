@@ -76,6 +76,8 @@ internal static class CertificateNames
         ["point-reference-uncertainty"] = "u",
         ["point-reading"] = "reading mg/L",
         ["point-error"] = "error mg/L",
+        ["point-reading-pressure"] = "reading hPa",
+        ["point-error-pressure"] = "error hPa",
         ["point-read-by"] = "",
         ["point-residual"] = "resid. hPa",
         ["point-standardised"] = "resid. / s",

@@ -21,9 +21,10 @@ internal static class CertificatePoints
                 CertificateNames.Figures("point-reference-pressure"), CertificateNames.Figures("point-reference-pressure-uncertainty"),
                 CertificateNames.Figures("point-reference"), CertificateNames.Figures("point-reference-uncertainty"),
                 CertificateNames.Figures("point-reading"), CertificateNames.Figures("point-error"),
+                CertificateNames.Figures("point-reading-pressure"), CertificateNames.Figures("point-error-pressure"),
                 CertificateNames.Figures("point-residual"), CertificateNames.Figures("point-standardised"),
             ],
-            record.Points.Select((point, i) => Row(several ? point : point with { Method = null }, residuals[i])));
+            record.Points.Select((point, i) => Row(record, several ? point : point with { Method = null }, residuals[i])));
         string signal = record.Probe.SignalUnit.Length == 0 ? "" : " in " + record.Probe.SignalUnit;
         List<ReportBlock> blocks = [table, new ReportSentence("points-note", $"Signal{signal}: mean of the samples, or what a meter showed; u: standard uncertainty; error: reading less reference.")];
         RecordedPoint[] read = [.. record.Points.Where(static point => point.ReadBy is not null)];
@@ -106,7 +107,8 @@ internal static class CertificatePoints
 
     private static ReportPlot? ErrorPlot(CalibrationRecord record)
     {
-        RecordedPoint[] known = [.. record.Points.Where(static point => point.ErrorMilligramsPerLitre is not null)];
+        string unit = ErrorScale.Unit(record);
+        RecordedPoint[] known = [.. record.Points.Where(point => ErrorScale.Error(record, point) is not null)];
         if (known.Length == 0)
         {
             return null;
@@ -117,7 +119,7 @@ internal static class CertificatePoints
         foreach ((string role, string name, PlotMark mark) in kinds)
         {
             PlotPoint[] points = [.. known.Where(point => kinds.Any(kind => kind.Role == point.Role) ? point.Role == role : role.Length == 0)
-                .Select(static point => new PlotPoint(point.ReferenceMilligramsPerLitre, point.ErrorMilligramsPerLitre!.Value, point.ReferenceUncertaintyMilligramsPerLitre))];
+                .Select(point => new PlotPoint(ErrorScale.Reference(record, point), ErrorScale.Error(record, point)!.Value, ErrorScale.ReferenceUncertainty(record, point)))];
             if (points.Length != 0)
             {
                 series.Add(new PlotSeries(name, mark, points));
@@ -127,16 +129,18 @@ internal static class CertificatePoints
         PlotPoint[] all = [.. series.SelectMany(static one => one.Points)];
         double low = Math.Min(0, all.Min(static point => point.X));
         double high = all.Max(static point => point.X);
-        string told = string.Join("; ", known.Select(static point => $"{ReportText.Role(point.Role)}: {ReportText.Signed(point.ErrorMilligramsPerLitre!.Value, 3)} mg/L at {Number.Fixed(point.ReferenceMilligramsPerLitre, 3)} mg/L"));
+        string told = string.Join("; ", known.Select(point => $"{ReportText.Role(point.Role)}: {ReportText.Signed(ErrorScale.Error(record, point)!.Value, 3)} {unit} at {Number.Fixed(ErrorScale.Reference(record, point), 3)} {unit}"));
         return new ReportPlot(
             "residual-plot", $"Errors of {record.Id} before and after",
             $"Reading less reference over the reference, bars one standard uncertainty of the reference. {told}.",
-            new PlotAxis("reference, mg/L", false), new PlotAxis("error, mg/L", false), series,
+            new PlotAxis("reference, " + unit, false), new PlotAxis("error, " + unit, false), series,
             [new PlotLine("", PlotStroke.Thin, [new(low, 0, 0), new(high, 0, 0)])]);
     }
 
-    private static string?[] Row(RecordedPoint point, RecordedResidual? residual)
+    private static string?[] Row(CalibrationRecord record, RecordedPoint point, RecordedResidual? residual)
     {
+        // A row is in one unit: what is judged in hPa is not shown in mg/L beside it.
+        bool inHectopascal = ErrorScale.IsHectopascal(record);
         return
         [
             ReportText.Role(point.Role),
@@ -149,10 +153,12 @@ internal static class CertificatePoints
             Number.Fixed(point.Pressure.Value, 1),
             Number.Fixed(point.ReferencePartialPressureHectopascal, 2),
             ReportText.Uncertainty(point.ReferencePartialPressureUncertaintyHectopascal),
-            Number.Fixed(point.ReferenceMilligramsPerLitre, 3),
-            ReportText.Uncertainty(point.ReferenceUncertaintyMilligramsPerLitre),
-            ReportText.Fixed(point.ReadingMilligramsPerLitre, 3),
-            ReportText.Signed(point.ErrorMilligramsPerLitre, 3),
+            inHectopascal ? null : Number.Fixed(point.ReferenceMilligramsPerLitre, 3),
+            inHectopascal ? null : ReportText.Uncertainty(point.ReferenceUncertaintyMilligramsPerLitre),
+            inHectopascal ? null : ReportText.Fixed(point.ReadingMilligramsPerLitre, 3),
+            inHectopascal ? null : ReportText.Signed(point.ErrorMilligramsPerLitre, 3),
+            inHectopascal ? ReportText.Fixed(point.ReadingHectopascal, 2) : null,
+            inHectopascal ? ReportText.Signed(point.ErrorHectopascal, 2) : null,
             ReportText.Signed(residual?.ResidualHectopascal, 3),
             ReportText.Signed(residual?.Standardised, 2),
         ];
@@ -178,8 +184,9 @@ internal static class CertificatePoints
 
     private static string? Error(CalibrationRecord record, string role)
     {
-        return Array.Find(record.Points, point => point.Role == role) is { ErrorMilligramsPerLitre: double error } point
-            ? $"{ReportText.Signed(error, 3)} mg/L: {Number.Fixed(point.ReadingMilligramsPerLitre ?? double.NaN, 3)} at {Number.Fixed(point.ReferenceMilligramsPerLitre, 3)} mg/L"
+        string unit = ErrorScale.Unit(record);
+        return Array.Find(record.Points, point => point.Role == role) is RecordedPoint point && ErrorScale.Error(record, point) is double error
+            ? $"{ReportText.Signed(error, 3)} {unit}: {Number.Fixed(ErrorScale.Reading(record, point) ?? double.NaN, 3)} at {Number.Fixed(ErrorScale.Reference(record, point), 3)} {unit}"
             : null;
     }
 }

@@ -68,7 +68,8 @@ public static class HistoryReport
     /// <summary>Every figure as CSV, in full precision.</summary>
     public static string Csv(ProbeHistory history)
     {
-        StringBuilder csv = new(string.Join(',', _heads) + "\n");
+        string unit = history.ErrorUnit.Replace("/", "_per_", StringComparison.Ordinal);
+        StringBuilder csv = new(string.Join(',', _heads).Replace("mg_per_L", unit, StringComparison.Ordinal) + "\n");
         foreach (HistoryEntry entry in history.Entries)
         {
             string[] cells =
@@ -117,7 +118,7 @@ public static class HistoryReport
         [
             new("history-slope-plot", "Slope, " + slope, slope, static entry => entry.Slope, history.SlopeWindow, "no window of the slope was entered, and there is no published one"),
             new("history-zero-plot", "Zero, " + (history.IsMeter ? "hPa" : signal), history.IsMeter ? "hPa" : signal, static entry => entry.Zero, history.ZeroWindow, "no window of the zero was entered, and there is no published one"),
-            new("history-error-plot", "Error as found, mg/L", "mg/L", static entry => entry.Error, history.ErrorWindow, "no point at 100 % to take the published limit at"),
+            new("history-error-plot", "Error as found, " + history.ErrorUnit, history.ErrorUnit, static entry => entry.Error, history.ErrorWindow, "there is no published limit at its points"),
         ];
     }
 
@@ -212,7 +213,9 @@ public static class HistoryReport
 
     private static ReportTable Table(ProbeHistory history)
     {
-        return ColumnChoice.Table(_columns, history.Entries.Select(entry => new[]
+        return ColumnChoice.Table(
+            [.. _columns.Select(column => column.Id == "history-error" ? column with { Name = "as found " + history.ErrorUnit } : column)],
+            history.Entries.Select(entry => new[]
         {
             ReportText.Time(entry.AtUtc), entry.Id, entry.Purpose, history.Membranes[entry.Membrane],
             ReportText.Few(entry.Slope?.Value), Uncertainty(entry.Slope), ReportText.Few(entry.Zero?.Value), Uncertainty(entry.Zero),

@@ -22,7 +22,7 @@ public sealed record HistoryWindow(double Low, double High, string Source);
 /// <param name="Purpose">Calibration or check.</param>
 /// <param name="Slope">Slope; none for a check, which changes none.</param>
 /// <param name="Zero">Zero signal; none for a check.</param>
-/// <param name="Error">Error as found, mg/L; none when nothing was read by an earlier calibration.</param>
+/// <param name="Error">Error as found, in <see cref="ProbeHistory.ErrorUnit"/>; none when nothing was read by an earlier calibration.</param>
 /// <param name="LeftOut">Why it does not count in trends; empty when it does.</param>
 internal sealed record HistoryEntry(string Id, DateTimeOffset AtUtc, int Membrane, string Purpose, HistoryValue? Slope, HistoryValue? Zero, HistoryValue? Error, string LeftOut);
 
@@ -35,12 +35,13 @@ internal sealed record HistoryValue(double Value, double StandardUncertainty);
 /// </summary>
 public sealed partial class ProbeHistory
 {
-    private ProbeHistory(string probe, string signalUnit, bool isMeter, bool isLogarithmic)
+    private ProbeHistory(CalibrationRecord newest)
     {
-        Probe = probe;
-        SignalUnit = signalUnit;
-        IsMeter = isMeter;
-        IsLogarithmic = isLogarithmic;
+        Probe = newest.Probe.Id;
+        SignalUnit = newest.Probe.SignalUnit;
+        IsMeter = newest.Probe.MeterSettings != null;
+        IsLogarithmic = newest.Probe.Model == "severinghaus";
+        ErrorUnit = ErrorScale.Unit(newest);
     }
 
     internal string Probe { get; }
@@ -50,6 +51,9 @@ public sealed partial class ProbeHistory
     internal bool IsMeter { get; }
 
     internal bool IsLogarithmic { get; }
+
+    /// <summary>mg/L or hPa.</summary>
+    internal string ErrorUnit { get; }
 
     /// <summary>Names of the stretches, in the order in which the membranes were put on.</summary>
     internal List<string> Membranes { get; } = [];
@@ -80,7 +84,7 @@ public sealed partial class ProbeHistory
         }
 
         CalibrationRecord newest = records[^1];
-        ProbeHistory history = new(probe, newest.Probe.SignalUnit, newest.Probe.MeterSettings != null, newest.Probe.Model == "severinghaus");
+        ProbeHistory history = new(newest);
         DateTimeOffset[] changes = [.. log.ServiceFor(probe).Where(static service => service.Event == ServiceRecord.MembraneChanged).Select(static service => service.At).Order()];
         CalibrationRecord? before = null;
         foreach (CalibrationRecord record in records)
@@ -96,7 +100,7 @@ public sealed partial class ProbeHistory
 
         history.SlopeWindow = slopeWindow ?? WindowOfRecord(records);
         history.ZeroWindow = zeroWindow;
-        history.ErrorWindow = PublishedError(records);
+        history.ErrorWindow = ErrorScale.IsHectopascal(newest) ? null : PublishedError(records);
         return history;
     }
 
@@ -131,19 +135,24 @@ public sealed partial class ProbeHistory
     private static HistoryValue? AsFound(CalibrationRecord record)
     {
         RecordedPoint? span = Array.Find(record.Points, static point => point.Role == CalibrationIds.SpanPoint);
-        if (span?.ErrorMilligramsPerLitre is not double error)
+        if (ErrorScale.Error(record, span) is not double error)
         {
             return null;
         }
 
-        RecordedLimit? judged = Array.Find(record.Limits, static limit => limit.Check == "as-found" && limit.Unit == "mg/L");
+        RecordedLimit? judged = Array.Find(record.Limits, static limit => limit.Check == "as-found");
         if (judged is { ExpandedUncertainty: double expanded, CoverageFactor: double k } && 0 < k)
         {
             return new HistoryValue(error, expanded / k);
         }
 
+        if (ErrorScale.IsHectopascal(record))
+        {
+            return new HistoryValue(error, span!.ReferencePartialPressureUncertaintyHectopascal);
+        }
+
         // Records of version 1 keep no U with the error: reference and signal are what differs from one calibration to the next.
-        double relative = span.Signal.Mean == 0 ? 0 : span.SignalStandardUncertainty / span.Signal.Mean;
+        double relative = span!.Signal.Mean == 0 ? 0 : span.SignalStandardUncertainty / span.Signal.Mean;
         return new HistoryValue(error, Math.Sqrt(Math.Pow(span.ReferenceUncertaintyMilligramsPerLitre, 2) + Math.Pow(relative * span.ReferenceMilligramsPerLitre, 2)));
     }
 

@@ -57,6 +57,7 @@ public class ModelRunTests
         setup = setup with
         {
             Method = MethodIds.WaterSaturatedAir,
+            Limits = new CalibrationLimits { Pressure = new PressureLimits { Percent = 1 } },
             Plan =
             [
                 new PlannedPoint { Role = "span", Method = MethodIds.WaterSaturatedAir },
@@ -97,6 +98,7 @@ public class ModelRunTests
         {
             Method = MethodIds.GasMixture,
             Gas = gas,
+            Limits = new CalibrationLimits { Pressure = new PressureLimits { Percent = 2 } },
             Plan = plan,
             FitForm = form,
             Probe = PlanText.WithModel("--model", model, probe),
