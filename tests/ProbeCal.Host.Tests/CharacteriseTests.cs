@@ -59,6 +59,19 @@ public sealed class CharacteriseTests : IDisposable
         Assert.Contains("needs at least 3 temperatures more than 1 K apart, and there are 2", run.ErrorLine, StringComparison.Ordinal);
     }
 
+    [Theory]
+    [InlineData("--output")]
+    [InlineData("--firmware")]
+    public async Task AFileOfTheRun_IsNeverOverwritten(string option)
+    {
+        string temperatures = TemperatureFile();
+        string before = File.ReadAllText(temperatures);
+        Run run = await Run.OfAsync(["characterise", "--input", "temperature=" + temperatures, "--zero", "0.42", .. Columns, option, temperatures, "--force"]);
+        Assert.Equal(2, run.ExitCode);
+        Assert.Contains("this is a file of the run itself, which is never overwritten", run.Error, StringComparison.Ordinal);
+        Assert.Equal(before, File.ReadAllText(temperatures));
+    }
+
     [Fact]
     public async Task Help_ShowsHow()
     {

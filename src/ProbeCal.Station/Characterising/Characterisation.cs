@@ -75,6 +75,9 @@ public sealed record Characterisation
     /// <summary>The files, by part.</summary>
     public required IReadOnlyList<(string Part, string File)> Files { get; init; }
 
+    /// <summary>Where they were read from, so that no result is written over one of them.</summary>
+    internal IReadOnlyList<string> InputPaths { get; init; } = [];
+
     /// <summary>The parts, in the order in which they rest on each other.</summary>
     public required IReadOnlyList<CharacterisedPart> Parts { get; init; }
 

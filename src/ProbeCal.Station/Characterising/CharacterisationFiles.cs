@@ -1,11 +1,13 @@
 using System;
 using System.Globalization;
 using System.IO;
+using System.Linq;
 using System.Text;
 using System.Text.Encodings.Web;
 using System.Text.Json;
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Storage;
+using ProbeCal.Station.WholeFiles;
 
 namespace ProbeCal.Station.Characterising;
 
@@ -24,7 +26,7 @@ public static class CharacterisationFiles
     /// <exception cref="WorkFailedException">It cannot be written.</exception>
     public static void WriteJson(Characterisation characterisation, string path, bool force, DateTimeOffset madeUtc, string software)
     {
-        Write("--output", path, force, Json(characterisation, madeUtc, software));
+        Write(characterisation, "--output", path, force, Json(characterisation, madeUtc, software));
     }
 
     /// <summary>Writes the coefficients: a C header when the name ends in <c>.h</c>, otherwise lines of <c>key=value</c>.</summary>
@@ -36,7 +38,7 @@ public static class CharacterisationFiles
     public static void WriteFirmware(Characterisation characterisation, string path, bool force)
     {
         string text = path.EndsWith(".h", StringComparison.OrdinalIgnoreCase) ? Header(characterisation) : KeyValues(characterisation);
-        Write("--firmware", path, force, Encoding.UTF8.GetBytes(text));
+        Write(characterisation, "--firmware", path, force, Encoding.UTF8.GetBytes(text));
     }
 
     internal static byte[] Json(Characterisation characterisation, DateTimeOffset madeUtc, string software)
@@ -207,11 +209,16 @@ public static class CharacterisationFiles
         return Wrong.OneLine(text).Replace("*/", "* /", StringComparison.Ordinal);
     }
 
-    private static void Write(string what, string path, bool force, byte[] bytes)
+    private static void Write(Characterisation characterisation, string what, string path, bool force, byte[] bytes)
     {
         if (string.IsNullOrWhiteSpace(path) || Directory.Exists(path))
         {
             throw Wrong.Input(what, path, "name a file");
+        }
+
+        if (characterisation.InputPaths.Any(input => ResultFile.IsSameFile(path, input)))
+        {
+            throw Wrong.Input(what, path, "this is a file of the run itself, which is never overwritten; give the result another name");
         }
 
         if (File.Exists(path) && !force)

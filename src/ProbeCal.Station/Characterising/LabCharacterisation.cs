@@ -80,6 +80,7 @@ public static class LabCharacterisation
             {
                 Probe = request.Probe,
                 SignalUnit = units[0],
+                InputPaths = [.. files.Values],
                 Files = [.. runs.Select(static run => (run.Part, run.Name))],
                 Parts = parts,
                 TemperatureCoefficient = text is null ? null : recorded,

@@ -47,7 +47,7 @@ internal sealed class ResultFile : IDisposable
         }
 
         string path = Target(output);
-        if (input != Dash && string.Equals(path, Target(input), OperatingSystem.IsWindows() ? StringComparison.OrdinalIgnoreCase : StringComparison.Ordinal))
+        if (input != Dash && IsSameFile(output, input))
         {
             throw Wrong.Input("--output", output, "this is the input, which is never overwritten; give the result another name");
         }
@@ -91,6 +91,12 @@ internal sealed class ResultFile : IDisposable
     public void Dispose()
     {
         _file?.Dispose();
+    }
+
+    /// <summary>True when two paths lead to one file, through links or without.</summary>
+    internal static bool IsSameFile(string one, string other)
+    {
+        return string.Equals(Target(one), Target(other), OperatingSystem.IsWindows() ? StringComparison.OrdinalIgnoreCase : StringComparison.Ordinal);
     }
 
     private static InputException Exists(string output)
