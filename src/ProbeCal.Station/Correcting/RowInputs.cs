@@ -17,6 +17,9 @@ internal sealed class RowInputs
 
     private const double HectopascalPerDecibar = 100;
 
+    /// <summary>Standard pressure at 11 km, and the highest of all sea-level pressures brought down to 610 m below (ICAO standard atmosphere), hPa, rounded outwards.</summary>
+    private const double LowestAir = 226, HighestAir = 1130;
+
     private readonly RawTable _table;
     private readonly int _time;
     private readonly int _signal;
@@ -165,6 +168,13 @@ internal sealed class RowInputs
         Pressure = pressure;
         if (double.IsNaN(_altitude))
         {
+            // Without an altitude the highest and the deepest place decide: a slip of unit or sign shows against them.
+            if (!(LowestAir <= pressure && pressure <= HighestAir))
+            {
+                status.Flag("pressure is no air pressure");
+                Pressure = double.NaN;
+            }
+
             return;
         }
 
