@@ -76,7 +76,7 @@ internal static class VisitCommand
                 By = parsed.GetValue(by),
                 Remarks = parsed.GetValue(remarks),
                 Software = ProgramIdentity.Text,
-            }.Read();
+            }.Read(terminal.Time.GetUtcNow());
             using DataDirectory folder = DataDirectory.OpenForWriting(parsed.GetValue(data) ?? CalibrateCommand.UsualData);
             using CalibrationLogStore log = CalibrationLogStore.OpenForWriting(folder.CalibrationLogFile, terminal.Time, Guid.NewGuid);
             string[] probes = [.. log.Records.Select(static each => each.Record.Probe.Id).Distinct()];

@@ -71,6 +71,11 @@ public sealed record EquipmentEntry
             throw Wrong.Input("--due", DueOn!, "it lies before --calibrated " + CalibratedOn);
         }
 
+        if (due < made)
+        {
+            throw Wrong.Input("--due", DueOn!, "it lies before --made " + MadeOn);
+        }
+
         return new EquipmentRecord
         {
             Equipment = id,
@@ -189,6 +194,16 @@ internal static class CertificateText
         {
             if (Quantity.TryParse(kind, value, out double number, out _))
             {
+                if (what == "--value" && kind == QuantityKind.MoleFraction && !(0 <= number && number <= 1))
+                {
+                    throw Wrong.Input(what, text, "a gas holds from 0 to 100 % of another");
+                }
+
+                if (what == "--value" && kind == QuantityKind.AmountConcentration && number < 0)
+                {
+                    throw Wrong.Input(what, text, "a titrant holds nothing or more");
+                }
+
                 return Of(what, text, kind, number, uncertainty, factor);
             }
         }

@@ -10,6 +10,9 @@ namespace ProbeCal.Station.Correcting;
 /// <summary>A service visit as a person types it; <see cref="Read"/> judges it.</summary>
 public sealed record VisitEntry
 {
+    /// <summary>A sign that slipped, and not a zero that is off: more than twice the published 0.2 mg/L below nothing (our choice, no source).</summary>
+    private const double LeastReading = -0.5;
+
     private static readonly string[] NeverStandards = ["field meter", "field-meter", "fieldmeter", "meter"];
 
     /// <summary>Id of the probe.</summary>
@@ -67,14 +70,20 @@ public sealed record VisitEntry
     public required string Software { get; init; }
 
     /// <summary>The visit as the log takes it.</summary>
-    /// <exception cref="InputException">Something is wrong, missing, or uses the field meter as a standard.</exception>
-    public VisitRecord Read()
+    /// <param name="now">The time; a visit lies before it.</param>
+    /// <exception cref="InputException">Something is wrong, missing, in the future, or uses the field meter as a standard.</exception>
+    public VisitRecord Read(DateTimeOffset now)
     {
         DateTimeOffset before = Time("--before", Before);
         DateTimeOffset after = Time("--after", After);
         if (after < before)
         {
             throw Wrong.Input("--after", After, "this is before --before " + Wrong.Shown(Before));
+        }
+
+        if (now < after)
+        {
+            throw Wrong.Input("--after", After, "this lies in the future of this computer's clock; enter a visit once it is over");
         }
 
         VisitCleaning[] cleaning = Cleaning();
@@ -167,8 +176,9 @@ public sealed record VisitEntry
             throw Wrong.Input("--standard", text, "the field meter is never the standard: it shows how the water changed, not what is true (USGS TM 1-D3); name a method or a reference of the register");
         }
 
+        double standard = Concentration("--standard", value);
         return new VisitStandard(
-            Concentration("--standard", value),
+            0 <= standard ? standard : throw Wrong.Input("--standard", text, "a standard holds nothing or more; write the reading behind read"),
             Concentration("--standard", reading),
             PlainText.OneLine("--standard", from),
             parts.TryGetValue("at", out string? temperature) ? Quantity.TemperatureCelsius("--standard", temperature) : null,
@@ -188,7 +198,10 @@ public sealed record VisitEntry
 
     private static double Concentration(string option, string text)
     {
-        return Quantity.Parse(QuantityKind.MassConcentration, option, text);
+        double concentration = Quantity.Parse(QuantityKind.MassConcentration, option, text);
+        return LeastReading <= concentration
+            ? concentration
+            : throw Wrong.Input(option, text, $"no probe reads so far below nothing; a zero that is off shows down to {Number.Print(LeastReading)} mg/L here");
     }
 
     private static DateTimeOffset Time(string option, string text)

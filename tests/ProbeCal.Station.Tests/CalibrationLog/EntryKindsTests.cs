@@ -168,6 +168,16 @@ public class EntryKindsTests
         }
     }
 
+    [Theory]
+    [InlineData("120% u 1%", null, null, "--value 120% u 1%: a gas holds from 0 to 100 % of another")]
+    [InlineData("-1% u 1%", null, null, "--value -1% u 1%: a gas holds from 0 to 100 % of another")]
+    [InlineData("10% u 1%", "2027-01-01", "2026-01-01", "--due 2026-01-01: it lies before --made 2027-01-01")]
+    public void EquipmentThatCannotBe_IsOneLine(string value, string? made, string? due, string says)
+    {
+        EquipmentEntry entry = new() { Id = "CYL-1", Kind = "cylinder", Value = value, MadeOn = made, DueOn = due };
+        Assert.Equal(says, Assert.Throws<ProbeCal.Station.Entry.InputException>(() => entry.Read(null, "x")).Message);
+    }
+
     [Fact]
     public void AmendmentOfNothing_IsRefused_AndAddsNothing()
     {

@@ -81,7 +81,7 @@ internal sealed class Deployment : IDisposable
     internal VisitRecord Visit(Func<VisitEntry, VisitEntry> change)
     {
         VisitEntry entry = new() { Probe = Probe, Before = "2026-06-21T12:00Z", After = "2026-06-21T12:30Z", Software = "probecal 9.9.9" };
-        return (VisitRecord)Log.Append(change(entry).Read()).Entry;
+        return (VisitRecord)Log.Append(change(entry).Read(DateTimeOffset.MaxValue)).Entry;
     }
 
     /// <summary>A row of the table.</summary>

@@ -241,6 +241,48 @@ public class ServiceCorrectionTests
         Assert.Equal(40, days.Sum(static day => day.Rows));
     }
 
+    [Theory]
+    [InlineData("-7.9mg/L", "2026-06-21T12:30Z", "--monitor-before -7.9mg/L: no probe reads so far below nothing")]
+    [InlineData("7.9mg/L", "2026-06-22T12:30Z", "--after 2026-06-22T12:30Z: this lies in the future of this computer's clock")]
+    [InlineData("-0.3mg/L", "2026-06-21T12:30Z", "")]
+    public void A_visit_that_cannot_be_is_one_line(string monitor, string after, string says)
+    {
+        VisitEntry entry = new()
+        {
+            Probe = "do-1",
+            Before = "2026-06-21T12:00Z",
+            After = after,
+            MonitorBefore = [monitor],
+            MonitorAfter = ["8.25mg/L"],
+            InBucket = true,
+            Software = "x",
+        };
+        DateTimeOffset now = new(2026, 6, 21, 13, 0, 0, TimeSpan.Zero);
+        if (says.Length == 0)
+        {
+            Assert.Equal(-0.3, entry.Read(now).Cleaning[0].MonitorBefore);
+            return;
+        }
+
+        Assert.StartsWith(says, Assert.Throws<InputException>(() => entry.Read(now)).Message, StringComparison.Ordinal);
+    }
+
+    [Theory]
+    [InlineData(-940.0)]
+    [InlineData(29.9)]
+    [InlineData(2000.0)]
+    public void A_pressure_that_is_none_is_flagged_and_not_used_also_without_an_altitude(double pressure)
+    {
+        using Deployment deployment = new();
+        deployment.Write("raw.csv", Deployment.Header, Deployment.Row(Calibrated.AddDays(1), 80, pressure: pressure), Deployment.Row(Calibrated.AddDays(1), 80));
+        List<Dictionary<string, string>> rows = deployment.Correct();
+        Assert.Contains("pressure is no air pressure", rows[0]["status"], StringComparison.Ordinal);
+        Assert.Equal("", rows[0]["O2 [% local]"]);
+        Assert.Equal(rows[1]["O2 [mg/L]"], rows[0]["O2 [mg/L]"]);
+        Assert.NotEqual("", rows[1]["O2 [% local]"]);
+        Assert.DoesNotContain("no air pressure", rows[1]["status"], StringComparison.Ordinal);
+    }
+
     [Fact]
     public void The_field_meter_is_never_the_standard()
     {
@@ -255,7 +297,7 @@ public class ServiceCorrectionTests
                 FieldMeter = "FM-2",
                 Standards = [standard],
                 Software = "x",
-            }.Read());
+            }.Read(DateTimeOffset.MaxValue));
             Assert.Contains("the field meter is never the standard", wrong.Message, StringComparison.Ordinal);
         }
 
