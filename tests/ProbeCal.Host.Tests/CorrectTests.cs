@@ -39,8 +39,9 @@ public sealed class CorrectTests : IDisposable
         Assert.Contains("with response 60", explained.Output, StringComparison.Ordinal);
         Assert.Contains("status: flagged: not between two passing checks", explained.Output, StringComparison.Ordinal);
 
-        Run visit = await Run.OfAsync(
-            "visit", "add", "--probe", "P-17", "--before", "2027-01-30T10:00+02:00", "--after", "2027-01-30T10:30+02:00", "--monitor-before", "7.90mg/L", "--monitor-after", "8.25mg/L",
+        // The visit ends the record, in January 2027.
+        Run visit = await Run.AtAsync(
+            new Later(), null, "visit", "add", "--probe", "P-17", "--before", "2027-01-30T10:00+02:00", "--after", "2027-01-30T10:30+02:00", "--monitor-before", "7.90mg/L", "--monitor-after", "8.25mg/L",
             "--field-before", "8.31mg/L", "--field-after", "8.35mg/L", "--field-meter", "FM-2", "--standard", "8.97mg/L read 8.61mg/L from air-saturated-water", "--data", _folder);
         Assert.Contains("recorded as 8c6e44e20ee5-0003: fouling error 0.310 mg/L, drift error 0.360 mg/L", visit.Output, StringComparison.Ordinal);
         Run list = await Run.OfAsync("visit", "list", "--data", _folder);
@@ -87,5 +88,13 @@ public sealed class CorrectTests : IDisposable
     private string At(string name)
     {
         return Path.Combine(_folder, name);
+    }
+
+    private sealed class Later : TimeProvider
+    {
+        public override DateTimeOffset GetUtcNow()
+        {
+            return new DateTimeOffset(2027, 2, 1, 12, 0, 0, TimeSpan.Zero);
+        }
     }
 }

@@ -17,7 +17,13 @@ internal sealed record Run(int ExitCode, string Output, string Error)
     }
 
     /// <summary>The same in a window so many characters wide.</summary>
-    internal static async Task<Run> InWindowAsync(int? width, params string[] arguments)
+    internal static Task<Run> InWindowAsync(int? width, params string[] arguments)
+    {
+        return AtAsync(TimeProvider.System, width, arguments);
+    }
+
+    /// <summary>The same by another clock.</summary>
+    internal static async Task<Run> AtAsync(TimeProvider time, int? width, params string[] arguments)
     {
         StringWriter output = new();
         StringWriter error = new();
@@ -27,7 +33,7 @@ internal sealed record Run(int ExitCode, string Output, string Error)
             Output = output,
             Error = error,
             Width = width,
-            Time = TimeProvider.System,
+            Time = time,
             Stop = CancellationToken.None,
         };
         int code = await Program.RunAsync(arguments, terminal);

@@ -3,7 +3,9 @@ using System.Collections.Generic;
 using System.Globalization;
 using System.IO;
 using System.Linq;
+using ProbeCal.Station.Calibrating;
 using ProbeCal.Station.CalibrationLog;
+using ProbeCal.Station.Correcting;
 using ProbeCal.Station.Entry;
 
 namespace ProbeCal.Host.Commands;
@@ -21,6 +23,7 @@ internal static class LogText
             ServiceRecord => "service",
             AmendmentRecord => "withdrawal",
             PastCalibrationRecord => "past calibration",
+            VisitRecord => "visit",
             _ => entry.Format,
         };
     }
@@ -35,6 +38,7 @@ internal static class LogText
             ServiceRecord service => service.Probe,
             AmendmentRecord amendment => amendment.Of,
             PastCalibrationRecord past => past.Probe,
+            VisitRecord visit => visit.Probe,
             _ => "",
         };
     }
@@ -47,6 +51,7 @@ internal static class LogText
             CalibrationRecord record => record.CompletedUtc,
             ServiceRecord service => service.At,
             PastCalibrationRecord past => past.At,
+            VisitRecord visit => visit.BeforeUtc,
             _ => entry.WrittenUtc ?? DateTimeOffset.UnixEpoch,
         };
     }
@@ -56,11 +61,12 @@ internal static class LogText
     {
         return entry switch
         {
-            CalibrationRecord record => $"{record.Method}, {(record.Result.Pass ? "pass" : "fail")}",
+            CalibrationRecord record => $"{record.Method}, {Decision.Of(record)}",
             EquipmentRecord equipment => equipment.EquipmentKind + (equipment.Description is string what ? ", " + what : ""),
             ServiceRecord service => service.Event + (service.Membrane is string membrane ? ", " + membrane : ""),
             AmendmentRecord amendment => amendment.Reason,
             PastCalibrationRecord past => $"{past.Method ?? "method not stated"}{(past.AsFoundErrorMilligramsPerLitre is double error ? $", as found {CalibrationText.Signed(error, 3)} mg/L" : "")}, from {past.File} line {Number.Print(past.Line)}",
+            VisitRecord visit => VisitText.Errors(visit).TrimStart(':', ' '),
             _ => "",
         };
     }
@@ -176,6 +182,16 @@ internal static class LogText
                 break;
             case PastCalibrationRecord past:
                 WritePast(past, Add);
+                break;
+            case VisitRecord visit:
+                (string fouling, string drift) = VisitText.Columns(visit);
+                Add("from (UTC)", CalibrationText.Time(visit.BeforeUtc));
+                Add("to (UTC)", CalibrationText.Time(visit.AfterUtc));
+                Add("site", visit.Site);
+                Add("fouling error mg/L", fouling == "-" ? null : fouling);
+                Add("drift error mg/L", drift == "-" ? null : drift);
+                Add("field meter", visit.FieldMeter);
+                Add("remarks", visit.Remarks);
                 break;
             case AmendmentRecord amendment:
                 Add("withdraws", amendment.Of);

@@ -160,19 +160,19 @@ public sealed record CalibrationSetup
     public required double ReferenceStateRelative { get; init; }
 
     /// <summary>What is done about the zero: <see cref="CalibrationIds.ZeroKeep"/> … <see cref="CalibrationIds.ZeroAdjust"/>.</summary>
-    public string ZeroPlan { get; init; } = CalibrationIds.ZeroKeep;
+    public string ZeroPlan { get; init => field = value ?? CalibrationIds.ZeroKeep; } = CalibrationIds.ZeroKeep;
 
     /// <summary>What else is known about the bath or the chamber, for the guards; none when nothing was stated.</summary>
     public Surroundings? Surroundings { get; init; }
 
     /// <summary>Limits that decide.</summary>
-    public CalibrationLimits Limits { get; init; } = new();
+    public CalibrationLimits Limits { get; init => field = value ?? new(); } = new();
 
     /// <summary>When a window counts as steady, and how long it is waited for.</summary>
-    public WaitingRules Waiting { get; init; } = new();
+    public WaitingRules Waiting { get; init => field = value ?? new(); } = new();
 
     /// <summary>Reasons given for going on past a guard, by the guard's name.</summary>
-    public Dictionary<string, string> Reasons { get; init; } = [];
+    public Dictionary<string, string> Reasons { get; init => field = value ?? []; } = [];
 
     /// <summary>Who calibrates; none when not stated.</summary>
     public string? By { get; init; }

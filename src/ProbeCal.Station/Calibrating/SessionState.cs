@@ -33,7 +33,7 @@ public sealed record SessionState
     public required DateTimeOffset SavedUtc { get; init; }
 
     /// <summary>The points taken so far, in their order.</summary>
-    public IReadOnlyList<RecordedPoint> Points { get; init; } = [];
+    public IReadOnlyList<RecordedPoint> Points { get; init => field = value ?? []; } = [];
 
     /// <summary>The steps done so far, in their order, points among them.</summary>
     public IReadOnlyList<RecordedStep> Steps { get => field ?? []; init; }
@@ -42,7 +42,7 @@ public sealed record SessionState
     public TakenReading? Waiting { get; init; }
 
     /// <summary>What the guards saw so far.</summary>
-    public IReadOnlyList<RecordedFinding> Findings { get; init; } = [];
+    public IReadOnlyList<RecordedFinding> Findings { get; init => field = value ?? []; } = [];
 
     /// <summary>What the look for droplets gave; none before it was made.</summary>
     public string? DropletCheck { get; init; }

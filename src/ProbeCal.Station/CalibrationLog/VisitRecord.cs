@@ -33,7 +33,7 @@ public sealed record VisitRecord : LogEntry
     public required DateTimeOffset AfterUtc { get; init; }
 
     /// <summary>Readings around the cleaning, one for each level at which it was compared; empty when it was not cleaned.</summary>
-    public VisitCleaning[] Cleaning { get; init; } = [];
+    public VisitCleaning[] Cleaning { get; init => field = value ?? []; } = [];
 
     /// <summary>
     /// Id of the field meter; none when none was there. It tells how the water changed between two readings, and never what the probe should have read.
@@ -44,7 +44,7 @@ public sealed record VisitRecord : LogEntry
     public bool InBucket { get; init; }
 
     /// <summary>What the cleaned probe read in standards, one for each level; empty when it was not checked.</summary>
-    public VisitStandard[] Standards { get; init; } = [];
+    public VisitStandard[] Standards { get; init => field = value ?? []; } = [];
 
     /// <summary>When the standards were read, UTC; none where it was at <see cref="AfterUtc"/>.</summary>
     public DateTimeOffset? StandardsUtc { get; init; }

@@ -70,19 +70,19 @@ public sealed record CorrectionRequest
     public string? SalinityUncertainty { get; init; }
 
     /// <summary>Which columns are written and with how many decimals: <c>mg/L:3</c>, <c>u(mg/L):shortest</c>; empty for the usual ones.</summary>
-    public IReadOnlyList<string> Write { get; init; } = [];
+    public IReadOnlyList<string> Write { get; init => field = value ?? []; } = [];
 
     /// <summary>Form of the drift correction: <c>slope-and-zero</c>, <c>percent</c>, <c>constant</c> or <c>none</c>.</summary>
-    public string Drift { get; init; } = CorrectionForms.SlopeAndZero;
+    public string Drift { get; init => field = value ?? CorrectionForms.SlopeAndZero; } = CorrectionForms.SlopeAndZero;
 
     /// <summary>What drift is told from: <c>visits</c> or <c>calibrations</c>.</summary>
-    public string DriftFrom { get; init; } = CorrectionForms.Visits;
+    public string DriftFrom { get; init => field = value ?? CorrectionForms.Visits; } = CorrectionForms.Visits;
 
     /// <summary>Form of the fouling correction.</summary>
-    public string Fouling { get; init; } = CorrectionForms.SlopeAndZero;
+    public string Fouling { get; init => field = value ?? CorrectionForms.SlopeAndZero; } = CorrectionForms.SlopeAndZero;
 
     /// <summary>Limits of the record's corrections.</summary>
-    public ServiceLimits Limits { get; init; } = new();
+    public ServiceLimits Limits { get; init => field = value ?? new(); } = new();
 }
 
 /// <summary>The forms in which drift and fouling are taken back, by the names that options and revisions write.</summary>

@@ -31,7 +31,7 @@ internal sealed record Revision
     public RevisionFile? Previous { get; init; }
 
     /// <summary>Why it was made; none for one that a person asked for.</summary>
-    public string[] Because { get; init; } = [];
+    public string[] Because { get; init => field = value ?? []; } = [];
 
     public required DateTimeOffset MadeUtc { get; init; }
 

@@ -38,7 +38,7 @@ public static class HistoryReport
             Sections =
             [
                 .. Quantities(history).Select(quantity => new ReportSection(quantity.Title, [.. Sentences(history, quantity), Plot(history, quantity)])),
-                new ReportSection("Calibrations and checks", [Table(history)]),
+                new ReportSection("Calibrations and checks", [Table(history), .. Past(history)]),
                 new ReportSection("How the trends are made",
                 [
                     new ReportSentence("history-how", "A straight line for each membrane, weighted by the uncertainties of the values; where they scatter more than their uncertainties say, its covariance is widened by chi-squared over the degrees of freedom. Intervals are 95 % by Student's t; the date of leaving is given with the days between which a new calibration will first find the value outside. Failed and withdrawn calibrations are shown by crosses and left out."),
@@ -209,6 +209,14 @@ public static class HistoryReport
         string description = $"{Number.Print(history.Entries.Count(entry => quantity.Value(entry) is not null))} values from {Date(first)} to {Date(last)} on {Number.Print(history.Membranes.Count)} {(history.Membranes.Count == 1 ? "membrane" : "membranes")}. "
             + string.Join(" ", Sentences(history, quantity).Select(static sentence => sentence.Text)) + " Each value stands in the table.";
         return new ReportPlot(quantity.Id, $"{quantity.Title} of probe {history.Probe} over time", description, new PlotAxis("date", true), new PlotAxis(quantity.Title, false), series, lines);
+    }
+
+    private static IEnumerable<ReportSentence> Past(ProbeHistory history)
+    {
+        if (history.Past != 0)
+        {
+            yield return new ReportSentence("history-past", $"{Number.Print(history.Past)} {(history.Past == 1 ? "calibration" : "calibrations")} of this probe more {(history.Past == 1 ? "was" : "were")} imported from tables: judged elsewhere, and in no trend here. 'probecal calibrations list --all' shows them.");
+        }
     }
 
     private static ReportTable Table(ProbeHistory history)

@@ -60,6 +60,9 @@ public sealed partial class ProbeHistory
 
     internal List<HistoryEntry> Entries { get; } = [];
 
+    /// <summary>How many calibrations of it were taken over from tables; they were judged elsewhere and stand in no trend.</summary>
+    internal int Past { get; private set; }
+
     internal HistoryWindow? SlopeWindow { get; private set; }
 
     internal HistoryWindow? ZeroWindow { get; private set; }
@@ -98,6 +101,7 @@ public sealed partial class ProbeHistory
             before = record;
         }
 
+        history.Past = log.Entries.Count(stored => stored.Entry is PastCalibrationRecord past && past.Probe == probe && !log.IsWithdrawn(past.Id));
         history.SlopeWindow = slopeWindow ?? WindowOfRecord(records);
         history.ZeroWindow = zeroWindow;
         history.ErrorWindow = ErrorScale.IsHectopascal(newest) ? null : PublishedError(records);

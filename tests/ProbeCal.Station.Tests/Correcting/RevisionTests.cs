@@ -23,6 +23,23 @@ public class RevisionTests
     }
 
     [Fact]
+    public void What_an_older_revision_does_not_say_is_what_was_usual()
+    {
+        using Deployment deployment = new();
+        deployment.Write("raw.csv", Deployment.Header, Deployment.Row(SampleRecords.Noon.AddDays(1), 80));
+        deployment.Correct();
+        System.Text.Json.Nodes.JsonObject json = System.Text.Json.Nodes.JsonNode.Parse(System.IO.File.ReadAllText(Revision.PathFor(deployment.Path("out.csv"))))!.AsObject();
+        System.Text.Json.Nodes.JsonObject request = json["request"]!.AsObject();
+        Assert.True(json.Remove("because") & request.Remove("write") & request.Remove("drift") & request.Remove("driftFrom") & request.Remove("fouling") & request.Remove("limits"));
+        Revision revision = RevisionJson.TryRead(System.Text.Encoding.UTF8.GetBytes(json.ToJsonString()), out string problem)!;
+        Assert.True(revision != null, problem);
+        CorrectionRequest usual = Deployment.Asked;
+        Assert.Empty(revision!.Because);
+        Assert.Empty(revision.Request.Write);
+        Assert.Equal((usual.Drift, usual.DriftFrom, usual.Fouling, usual.Limits), (revision.Request.Drift, revision.Request.DriftFrom, revision.Request.Fouling, revision.Request.Limits));
+    }
+
+    [Fact]
     public void Revision_says_what_was_done_and_to_which_bytes()
     {
         using Deployment deployment = new();

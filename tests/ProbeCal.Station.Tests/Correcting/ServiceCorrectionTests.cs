@@ -348,7 +348,7 @@ public class ServiceCorrectionTests
             "unit" => cleaned with { MonitorBefore = ["8"] },
             _ => entry,
         };
-        InputException refused = Assert.Throws<InputException>(wrong.Read);
+        InputException refused = Assert.Throws<InputException>(() => wrong.Read(DateTimeOffset.MaxValue));
         Assert.Contains(expected, refused.Message, StringComparison.Ordinal);
     }
 

@@ -174,7 +174,9 @@ public class CertificateTests
             Software = "probecal",
         });
         DateTimeOffset later = ReportSamples.Noon.AddDays(1);
-        foreach (CalibrationRecord record in new[] { ReportSamples.Usual(completed: later), ReportSamples.Fitted(6), ReportSamples.MeterCheck() })
+        CalibrationRecord other = ReportSamples.Usual(completed: later);
+        other = other with { Gas = "CO2", Points = [.. other.Points.Select(static point => point with { ReadingHectopascal = 47.1, ErrorHectopascal = 0.1 })] };
+        foreach (CalibrationRecord record in new[] { ReportSamples.Usual(completed: later), ReportSamples.Fitted(6), ReportSamples.MeterCheck(), other })
         {
             Report report = Certificate.Of(log, log.Append(record), _signature);
             printed.UnionWith(Ids(report));
