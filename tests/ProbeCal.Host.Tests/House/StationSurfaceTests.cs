@@ -17,9 +17,9 @@ public class StationSurfaceTests
 
     private static readonly Assembly _station = typeof(RawSample).Assembly;
 
-    // What ISampleSource delivers goes together: whoever reads a source has to tell them apart. The other two are used by
+    // What ISampleSource delivers goes together: whoever reads a source has to tell them apart. The others are used by
     // their constants, which leave no trace in the host.
-    private static readonly string[] _also = ["RejectedLine", "SourceState", "SourceStateChanged", "CalibrationIds", "Droplets"];
+    private static readonly string[] _also = ["RejectedLine", "SourceState", "SourceStateChanged", "CalibrationIds", "Droplets", "CorrectionForms"];
 
     [Fact]
     public void Public_types_of_Station_are_those_that_Host_uses()
