@@ -1,3 +1,4 @@
+using System;
 using System.IO;
 using System.Text;
 
@@ -5,7 +6,8 @@ namespace ProbeCal.Host;
 
 /// <summary>
 /// Folds lines that are longer than a narrow terminal is wide, between words, under the start of their own text: a phone
-/// shows every screen without words cut in two. A page ends every line, so nothing is left in it; what a program reads goes past it.
+/// shows every screen without words cut in two. A question has no end of line: flushing shows it. A command to be copied, and
+/// a line that is drawn over itself, stay as they are; what a program reads goes past it.
 /// </summary>
 internal sealed class FoldingWriter(TextWriter inner, int width) : TextWriter
 {
@@ -14,6 +16,9 @@ internal sealed class FoldingWriter(TextWriter inner, int width) : TextWriter
 
     /// <summary>Further lines start at most so far in.</summary>
     private const int DeepestIndent = 8;
+
+    /// <summary>How a line begins that a person copies back to the prompt: a break in it would end the command there.</summary>
+    private const string Command = "probecal ";
 
     private readonly StringBuilder _line = new();
 
@@ -29,12 +34,26 @@ internal sealed class FoldingWriter(TextWriter inner, int width) : TextWriter
             return;
         }
 
-        Fold(_line.ToString().TrimEnd('\r'));
+        inner.WriteLine(Fold(_line.ToString().TrimEnd('\r')));
         _line.Clear();
     }
 
-    private void Fold(string line)
+    /// <inheritdoc/>
+    public override void Flush()
     {
+        inner.Write(Fold(_line.ToString()));
+        _line.Clear();
+        inner.Flush();
+    }
+
+    /// <summary>Writes all but the last of the lines that a line is folded into, and gives that one back.</summary>
+    private string Fold(string line)
+    {
+        if (line.Contains('\r', StringComparison.Ordinal) || line.StartsWith(Command, StringComparison.Ordinal))
+        {
+            return line;
+        }
+
         int indent = 0;
         while (indent < line.Length && line[indent] == ' ')
         {
@@ -61,6 +80,6 @@ internal sealed class FoldingWriter(TextWriter inner, int width) : TextWriter
             rest = further + rest[at..].TrimStart();
         }
 
-        inner.WriteLine(rest);
+        return rest;
     }
 }

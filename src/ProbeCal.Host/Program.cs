@@ -36,7 +36,7 @@ internal static class Program
     /// <summary>Runs one command line against a given terminal and clock: what the tests call.</summary>
     internal static async Task<int> RunAsync(string[] args, Terminal terminal)
     {
-        RootCommand root = new("ProbeCal: what the water holds at equilibrium, the probe calibrated in it, and corrected readings sent home.")
+        RootCommand root = new("ProbeCal: what water holds at equilibrium, a probe calibrated in it, corrected readings sent home.")
         {
             EquilibriumCommand.Create(terminal),
             TablesCommand.Create(terminal),

@@ -49,7 +49,7 @@ internal sealed class Terminal
             InputBytes = Console.OpenStandardInput,
             OutputBytes = Console.OpenStandardOutput,
             Output = Console.Out,
-            Error = Console.Error,
+            Error = Console.IsErrorRedirected || Console.WindowWidth < FoldingWriter.Narrowest ? Console.Error : TextWriter.Synchronized(new FoldingWriter(Console.Error, Console.WindowWidth)),
             Time = TimeProvider.System,
             IsInteractive = !Console.IsInputRedirected && !Console.IsOutputRedirected,
             Width = Console.IsOutputRedirected ? null : Console.WindowWidth,

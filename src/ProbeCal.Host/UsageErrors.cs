@@ -4,6 +4,7 @@ using System.CommandLine;
 using System.CommandLine.Parsing;
 using System.IO;
 using System.Linq;
+using ProbeCal.Host.Commands;
 using ProbeCal.Station.Entry;
 
 namespace ProbeCal.Host;
@@ -21,16 +22,19 @@ internal static class UsageErrors
     /// <summary>One line a command: what a bare <c>probecal</c> shows, and its <c>--help</c>.</summary>
     internal static void Overview(RootCommand root, TextWriter output)
     {
-        output.WriteLine(root.Description);
+        TextTable.WriteWrapped(output, "", "", root.Description!);
         output.WriteLine();
-        foreach (Command command in root.Subcommands)
-        {
-            output.WriteLine($"  probecal {command.Name,-13} {(command.Description ?? "").Split('\n')[0].TrimEnd()}");
-        }
+        TextTable.Write(output, [.. root.Subcommands.Select(static command => new[] { "probecal " + command.Name, Shortest(command.Description ?? "") })], "  ");
+        output.WriteLine();
+        TextTable.WriteWrapped(output, "", "", "'probecal demo' shows the whole job without hardware. 'probecal equilibrium --help' and the like show options and examples; 'probecal --version' the version.");
+    }
 
-        output.WriteLine();
-        output.WriteLine("'probecal demo' shows the whole job without hardware. 'probecal equilibrium --help' and the like show options");
-        output.WriteLine("and examples; 'probecal --version' the version.");
+    /// <summary>What a command is for, without the list behind the colon and the sentences that follow: one line in the overview.</summary>
+    private static string Shortest(string description)
+    {
+        string first = description.Split('\n')[0].TrimEnd();
+        int end = first.AsSpan().IndexOfAny(':', '.');
+        return end < 0 ? first : first[..end] + ".";
     }
 
     private static string What(ParseResult parsed, Command command)

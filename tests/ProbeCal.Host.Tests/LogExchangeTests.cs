@@ -221,7 +221,7 @@ public sealed class LogExchangeTests : LogFolder
             2025-07-01 08:30;P-9;18,0;;-;;
 
             """);
-        string[] import = ["calibrations", "import", table, "--decimal-comma", "--utc-offset", "+01:00", "--column", "date=Datum", "--column", "probe=Sonde", "--column", "temperature=#3 [C]",
+        string[] import = ["calibrations", "import", table, "--decimal-comma", "--time-offset", "+01:00", "--column", "date=Datum", "--column", "probe=Sonde", "--column", "temperature=#3 [C]",
             "--column", "reference=Winkler [mg/L]", "--column", "before=vorher [mg/L]", "--column", "after=nachher [mg/L]", "--column", "verdict=ok?"];
         Assert.Contains("3 past calibrations imported; none is in force", (await Ok(import)).Output, StringComparison.Ordinal);
         Assert.Contains("0 past calibrations imported, 3 were there already", (await Ok(import)).Output, StringComparison.Ordinal);

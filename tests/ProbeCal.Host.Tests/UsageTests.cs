@@ -1,4 +1,5 @@
 using System;
+using System.IO;
 using System.Threading.Tasks;
 using Xunit;
 
@@ -44,6 +45,7 @@ public sealed class UsageTests
         Assert.Equal((0, ""), (run.ExitCode, run.Error));
         Assert.Contains("probecal total-gas ", run.Output, StringComparison.Ordinal);
         Assert.InRange(run.Output.Split('\n').Length, 10, 25);
+        Assert.All(run.Output.Split('\n'), static line => Assert.True(line.TrimEnd('\r').Length <= 100, line));
     }
 
     [Theory]
@@ -71,6 +73,38 @@ public sealed class UsageTests
 
         Run measured = await Run.OfAsync("equilibrium", "--concentration", "8.1mg/L", "--temperature", "20", "--salinity", "0", "--pressure", "1atm");
         Assert.Contains("at the local pressure, measured 8.1 mg/L", measured.Output.Split('\n')[0], StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void NarrowWindow_FoldsAQuestionWhenItIsShown_AndLeavesACommandWhole()
+    {
+        using StringWriter screen = new() { NewLine = "\n" };
+        using FoldingWriter folding = new(screen, 30) { NewLine = "\n" };
+        folding.Write("The water at the probe: 1 stirred, 2 still? ");
+        Assert.Equal("", screen.ToString());
+        folding.Flush();
+        Assert.Equal("The water at the probe: 1\n  stirred, 2 still? ", screen.ToString());
+        folding.WriteLine("probecal calibrate --probe P-17 --method titration");
+        folding.Write("\r[#####.....] 50 %, 1000 rows, 500 rows/s");
+        folding.Flush();
+        Assert.EndsWith("still? probecal calibrate --probe P-17 --method titration\n\r[#####.....] 50 %, 1000 rows, 500 rows/s", screen.ToString(), StringComparison.Ordinal);
+    }
+
+    [Theory]
+    [InlineData("calibrate")]
+    [InlineData("check")]
+    public async Task HelpOfCalibrating_FitsAHundredColumns(string command)
+    {
+        Run run = await Run.OfAsync(command, "--help");
+        Assert.All(run.Output.Split('\n'), static line => Assert.True(line.TrimEnd('\r').Length <= 100, line));
+    }
+
+    [Fact]
+    public async Task Steps_WriteACautionOutOnce()
+    {
+        Run run = await Run.OfAsync("calibrate", "--method", "zero-solution", "--steps");
+        Assert.Equal(2, run.Output.Split("Sulfite irritates").Length);
+        Assert.Contains("Caution: as in step 2", run.Output, StringComparison.Ordinal);
     }
 
     [Theory]

@@ -15,9 +15,9 @@ internal sealed class CalibrateHelp(string name, string description, CalibrateOp
 {
     internal const string OfCalibrate =
         """
-        Calibrate a probe by any method, from a live source or a meter's display, into the calibration log.
-        Asks for what is missing, guides through the steps, waits for steady readings. An interrupted calibration goes on
-        with the same command within 4 h.
+        Calibrate a probe by any method, live or by a meter's display, into the log.
+        Asks for what is missing, guides through the steps, waits for steady readings. An interrupted
+        calibration goes on with the same command within 4 h.
         """;
 
     internal const string OfCheck =
@@ -25,8 +25,6 @@ internal sealed class CalibrateHelp(string name, string description, CalibrateOp
         Check a probe by any method: judged by the calibration in force, recorded, and nothing adjusted.
         A check takes the options, guards and steps of a calibration. One that fails exits with 1.
         """;
-
-    private const string Live = "--source serial:/dev/ttyUSB0 --line \"{time},{signal:nA},{temperature}\" --probe P-17";
 
     public override int Invoke(ParseResult parseResult)
     {
@@ -44,16 +42,21 @@ internal sealed class CalibrateHelp(string name, string description, CalibrateOp
         output.WriteLine("What every run needs (asked for where it is missing):");
         Write(output, Essentials(options));
         output.WriteLine();
-        output.WriteLine($"Examples (COMMON stands for: {Live} --pressure 706mmHg");
-        output.WriteLine("  --pressure-source barometer:B-12 --altitude 640m --coefficient \"exponential 0.03/K at 25C fitted 5..35C\"):");
+        output.WriteLine("Examples:");
         foreach (string example in Examples(name))
         {
             output.WriteLine("  " + example);
         }
 
         output.WriteLine();
-        output.WriteLine($"'probecal {name} --method NAME --steps' prints the guided procedure of a method; 'probecal {name} --options' lists all");
-        output.WriteLine("options: zero, several points, limits, waiting, uncertainties, reasons, meters.");
+        output.WriteLine("The same with another last line (to practise without a probe: --source simulated and no --line):");
+        foreach (string ending in Endings(name))
+        {
+            output.WriteLine("    " + ending);
+        }
+
+        output.WriteLine();
+        TextTable.WriteWrapped(output, "", "", $"'probecal {name} --method NAME --steps' prints the guided procedure of a method; 'probecal {name} --options' lists all options: zero, several points, limits, waiting, uncertainties, reasons, meters.");
         return ExitCode.Done;
     }
 
@@ -92,17 +95,23 @@ internal sealed class CalibrateHelp(string name, string description, CalibrateOp
 
     private static IEnumerable<string> Examples(string name)
     {
-        string command = "probecal " + name;
-        yield return $"{command} COMMON --method air-saturated-water --salinity 0 --stirring stirred";
-        yield return $"{command} COMMON --method water-saturated-air --zero check --zero-method zero-solution";
-        yield return $"{command} COMMON --method titration --salinity 0 --stirring stirred   (the titration may follow within 24 h)";
-        yield return $"{command} COMMON --method transfer-standard --transfer \"STD-3 8.41mg/L u 0.05mg/L\" --salinity 0 --stirring stirred";
-        yield return $"{command} COMMON --method gas-mixture --mixture \"CYL-21 20.95% u 0.02% dry\" --level \"gas-mixture: CYL-22 5.01% u 0.02% dry\"";
+        yield return $"probecal {name} --source serial:/dev/ttyUSB0 --line \"{{time}},{{signal:nA}},{{temperature}}\" \\";
+        yield return "  --probe P-17 --coefficient \"exponential 0.03/K at 25C fitted 5..35C\" \\";
+        yield return "  --pressure 706mmHg --pressure-source barometer:B-12 --altitude 640m --salinity 0 --stirring stirred \\";
+        yield return "  --method air-saturated-water";
+        yield return $"probecal {name} --manual --probe M-3 --meter-shows mg/L --temperature 20.1C --pressure 706mmHg \\";
+        yield return "  --pressure-source barometer:B-12 --altitude 640m --method water-saturated-air";
+    }
+
+    private static IEnumerable<string> Endings(string name)
+    {
+        yield return "--method water-saturated-air --zero check --zero-method zero-solution";
+        yield return "--method titration   (the titration may follow within 24 h)";
+        yield return "--method transfer-standard --transfer \"STD-3 8.41mg/L u 0.05mg/L\"";
+        yield return "--method gas-mixture --mixture \"CYL-21 20.95% u 0.02% dry\"";
         yield return name == "check"
-            ? $"{command} COMMON --method zero-solution --as end-of-day"
-            : $"{command} COMMON --method air-saturated-water --salinity 0 --stirring stirred --zero adjust --zero-method zero-gas";
-        yield return $"{command} --manual --probe M-3 --meter-shows mg/L --method water-saturated-air --temperature 20.1C \\";
-        yield return "  --pressure 706mmHg --pressure-source barometer:B-12 --altitude 640m";
+            ? "--method zero-solution --as end-of-day"
+            : "--method air-saturated-water --zero adjust --zero-method zero-gas";
     }
 
     private static void Write(TextWriter output, IEnumerable<Option> group)

@@ -19,7 +19,7 @@ internal static class CalibrationsBrackets
         Option<string> probe = new("--probe") { Description = "Id of the probe.", HelpName = "ID", Required = true };
         Option<string> input = new("--input") { Description = "A table of readings; the station's journal in the data folder when left out.", HelpName = "FILE" };
         Option<string[]> columns = new("--column") { Description = "For a table: time=Column and \"concentration=Column [mg/L]\".", HelpName = "Q=COLUMN [UNIT]" };
-        Option<string> offset = new("--utc-offset") { Description = "For a table: offset from UTC of times that state none, as +02:00.", HelpName = "OFFSET" };
+        Option<string> offset = new("--time-offset") { Description = "For a table: offset from UTC of times that state none, as +02:00.", HelpName = "OFFSET" };
         Option<string> data = CalibrationsCommand.DataOption();
         Option<string> format = new("--format") { Description = "text (default) or json.", HelpName = "text|json" };
         Command command = new(
@@ -29,7 +29,8 @@ internal static class CalibrationsBrackets
 
             Examples:
               probecal calibrations brackets --probe P-17 --data north-pier
-              probecal calibrations brackets --probe P-17 --input readings.csv --column time=Time --column "concentration=DO [mg/L]"
+              probecal calibrations brackets --probe P-17 --input readings.csv --column time=Time \
+                --column "concentration=DO [mg/L]"
             """)
         {
             probe, input, columns, offset, data, format,
@@ -50,7 +51,7 @@ internal static class CalibrationsBrackets
 
             if (parsed.GetValue(input) == null && (mapped.Length != 0 || parsed.GetValue(offset) != null))
             {
-                throw new InputException("--input is missing: --column and --utc-offset describe a table, and none is named");
+                throw new InputException("--input is missing: --column and --time-offset describe a table, and none is named");
             }
 
             BracketList found = parsed.GetValue(input) is string path

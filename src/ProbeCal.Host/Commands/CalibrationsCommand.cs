@@ -111,7 +111,8 @@ internal static class CalibrationsCommand
             A withdrawal made in error is itself withdrawn by its own id.
 
             Examples:
-              probecal calibrations withdraw c3a41f09b2e7-0004 --reason "barometer read in inHg taken for kPa"
+              probecal calibrations withdraw c3a41f09b2e7-0004 \
+                --reason "barometer read in inHg taken for kPa"
             """)
         {
             id, reason, by, data, format,

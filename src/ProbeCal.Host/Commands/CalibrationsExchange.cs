@@ -66,7 +66,7 @@ internal static class CalibrationsExchange
         Option<string[]> columns = new("--column") { Description = "For a table: which quantity is which column, in which unit: date=Date, \"before=Before [mg/L]\". Once for each.", HelpName = "Q=COLUMN [UNIT]" };
         Option<string> probe = new("--probe") { Description = "For a table without a column for the probe: its id.", HelpName = "ID" };
         Option<string> signal = new("--signal-unit") { Description = "For a table: unit of the signal, as a label.", HelpName = "UNIT" };
-        Option<string> offset = new("--utc-offset") { Description = "For a table: offset from UTC of times that state none, as +02:00.", HelpName = "OFFSET" };
+        Option<string> offset = new("--time-offset") { Description = "For a table: offset from UTC of times that state none, as +02:00.", HelpName = "OFFSET" };
         Option<string> separator = new("--separator") { Description = "For a table: comma, semicolon or tab; told from the header when left out.", HelpName = "NAME" };
         Option<bool> comma = new("--decimal-comma") { Description = "For a table: commas are the decimal marks." };
         Option<string> data = CalibrationsCommand.DataOption();

@@ -24,15 +24,19 @@ internal static class CharacteriseCommand
         Command command = new(
             "characterise",
             """
-            Temperature coefficient, linearity, time constant, residual current and stirring ratio from a laboratory run.
+            A probe's coefficients from a laboratory run: temperature, linearity, time constant, residual current, stirring.
 
             temperature and linearity need a signal and its reference: a partial-pressure column, or the station pressure of air-saturated
             water (or water-saturated air) with its temperature. Rows that share a level are averaged first. A step begins with its file.
 
             Examples:
-              probecal characterise --input zero=zero.csv --input temperature=temps.csv --column "signal=I [nA]" --column "temperature=T [C]" --column "pressure=Baro [hPa]" --output p17.json
-              probecal characterise --input step-up=up.csv --input step-down=down.csv --column "signal=I [nA]" --column "time=t [s]" --firmware p17.h
-              probecal characterise --input linearity=gas.csv --input stirring=stir.csv --zero "0.4 u 0.1" --column signal=mV --column "partial-pressure=pO2 [hPa]" --column stirring=Stirrer
+              probecal characterise --input zero=zero.csv --input temperature=temps.csv \
+                --column "signal=I [nA]" --column "temperature=T [C]" --column "pressure=Baro [hPa]" \
+                --output p17.json
+              probecal characterise --input step-up=up.csv --input step-down=down.csv \
+                --column "signal=I [nA]" --column "time=t [s]" --firmware p17.h
+              probecal characterise --input linearity=gas.csv --input stirring=stir.csv --zero "0.4 u 0.1" \
+                --column signal=mV --column "partial-pressure=pO2 [hPa]" --column stirring=Stirrer
             """)
         {
             input, columns, form, reference, coefficient, zero, stepAfter, separator, decimalComma, probe, output, firmware, force,

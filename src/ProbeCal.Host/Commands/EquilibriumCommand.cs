@@ -34,14 +34,20 @@ internal static class EquilibriumCommand
 
             Examples:
               probecal equilibrium --temperature 20 --salinity 0 --pressure 760mmHg
-              probecal equilibrium --temperature 68F --salinity 35 --pressure 1009hPa --temperature-uncertainty 0.1K
+              probecal equilibrium --temperature 68F --salinity 35 --pressure 1009hPa \
+                --temperature-uncertainty 0.1K
               probecal equilibrium --temperature 8.4 --salinity 0 --altitude 640m --format json
-              probecal equilibrium --gas CO2 --mole-fraction 425ppm --temperature 12 --salinity 35 --pressure 1013hPa
+              probecal equilibrium --gas CO2 --mole-fraction 425ppm --temperature 12 --salinity 35 \
+                --pressure 1013hPa
               probecal equilibrium --mixture "O2=5%, N2=95%" --temperature 25 --salinity 0 --pressure 1000hPa
-              probecal equilibrium --concentration 8.1mg/L --concentration-uncertainty 0.1mg/L --temperature 18 --salinity 0 --pressure 938hPa
-              probecal equilibrium --temperature 20 --temperature-within 0.2K --salinity 0 --pressure 938hPa --monte-carlo
-              probecal equilibrium --temperature 8.4 --salinity 0 --sea-level-pressure 1021hPa --altitude 640m --air-temperature 12C
-              probecal equilibrium --input june.csv --output june-o2.csv --column "temperature=Water temp [C]" --column "pressure=Baro [mmHg]" --salinity 0
+              probecal equilibrium --concentration 8.1mg/L --concentration-uncertainty 0.1mg/L \
+                --temperature 18 --salinity 0 --pressure 938hPa
+              probecal equilibrium --temperature 20 --temperature-within 0.2K --salinity 0 \
+                --pressure 938hPa --monte-carlo
+              probecal equilibrium --temperature 8.4 --salinity 0 --sea-level-pressure 1021hPa \
+                --altitude 640m --air-temperature 12C
+              probecal equilibrium --input june.csv --output june-o2.csv \
+                --column "temperature=Water temp [C]" --column "pressure=Baro [mmHg]" --salinity 0
             """);
         options.AddTo(command);
         command.Options.Add(monteCarlo);

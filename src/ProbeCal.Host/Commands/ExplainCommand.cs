@@ -21,7 +21,8 @@ internal static class ExplainCommand
             Examples:
               probecal explain --temperature 20 --salinity 0 --pressure 760mmHg
               probecal explain --gas N2 --temperature 12 --salinity 30 --pressure 1009hPa
-              probecal explain --gas CO2 --mole-fraction 420ppm --temperature 25 --salinity 35 --pressure 1013hPa --format json
+              probecal explain --gas CO2 --mole-fraction 420ppm --temperature 25 --salinity 35 \
+                --pressure 1013hPa --format json
               probecal explain --temperature 14.2 --salinity 0 --pressure 961hPa --concentration 8.1mg/L
             """);
         options.AddTo(command);

@@ -18,11 +18,12 @@ internal static class HenryCommand
         Command command = new(
             "henry",
             """
-            The Henry's-law constant of a gas, or a given one, in every form it is written in.
+            The Henry's-law constant of a gas in every form it is written in: the gas's own, or a given one.
 
             Examples:
               probecal henry --gas CO2 --temperature 20 --salinity 35
-              probecal henry --gas CH4 --equation sander-2023 --temperature 77F --salinity 0 --temperature-uncertainty 0.1K
+              probecal henry --gas CH4 --equation sander-2023 --temperature 77F --salinity 0 \
+                --temperature-uncertainty 0.1K
               probecal henry --given Bunsen=0.0283 --temperature 25 --salinity 0 --format json
             """)
         {

@@ -165,8 +165,8 @@ internal static class LogText
                 Add("kind", equipment.EquipmentKind);
                 Add("description", equipment.Description);
                 Add("certificate", equipment.Certificate);
-                Add("certificate value", Quantity(equipment.CertificateValue));
-                Add("correction", Quantity(equipment.Correction));
+                Add("certificate value", Quantity(equipment.CertificateValue, equipment.EquipmentKind));
+                Add("correction", Quantity(equipment.Correction, equipment.EquipmentKind));
                 Add("calibrated on", Day(equipment.CalibratedOn));
                 Add("made or opened on", Day(equipment.MadeOn));
                 Add("due on", Day(equipment.DueOn));
@@ -243,6 +243,18 @@ internal static class LogText
     internal static string? Quantity(RecordedQuantity? quantity)
     {
         return quantity == null ? null : $"{Number.Print(quantity.Value)}{Unit(quantity)}, u {Number.Print(quantity.StandardUncertainty)}{Unit(quantity)}";
+    }
+
+    /// <summary>The same as a person wrote it on the bottle: what a cylinder holds, in %.</summary>
+    internal static string? Quantity(RecordedQuantity? quantity, string equipmentKind)
+    {
+        return quantity == null || equipmentKind != "cylinder" || quantity.Unit != "1" ? Quantity(quantity) : $"{Percent(quantity.Value)}, u {Percent(quantity.StandardUncertainty)}";
+    }
+
+    private static string Percent(double fraction)
+    {
+        // Twelve digits: what was entered in % comes back without the rounding of the division by 100.
+        return Number.Significant(100 * fraction, 12) + " %";
     }
 
     /// <summary>A day; null for none.</summary>

@@ -12,9 +12,18 @@ internal static class ProcedureText
     /// <summary>Writes a whole procedure, numbered, with where waits and order come from.</summary>
     internal static void Write(TextWriter output, IReadOnlyList<ProcedureStep> steps)
     {
+        Dictionary<string, int> cautioned = [];
         for (int i = 0; i < steps.Count; i++)
         {
-            Write(output, steps[i], withSource: true, Number.Print(i + 1) + ". ");
+            // A caution is written out in the first step that meets its hazard; read as a whole, the plan points back to it.
+            int step = i + 1;
+            string[] before = [.. steps[i].Cautions.Where(cautioned.ContainsKey)];
+            string[] back = [.. before.Select(caution => $"as in step {Number.Print(cautioned[caution])}").Distinct()];
+            Write(output, steps[i] with { Cautions = [.. steps[i].Cautions.Except(before), .. back] }, withSource: true, Number.Print(step) + ". ");
+            foreach (string caution in steps[i].Cautions)
+            {
+                cautioned.TryAdd(caution, step);
+            }
         }
 
         string[] sources = [.. steps.Select(static step => step.Source).OfType<string>().SelectMany(static source => source.Split("; ")).Distinct()];

@@ -47,6 +47,7 @@ internal sealed class ProgressBar
         {
             int full = (int)Math.Round(share * Width);
             _terminal.Error.Write("\r[" + new string('#', full) + new string('.', Width - full) + "] " + figures.PadRight(60));
+            _terminal.Error.Flush();
             _drawn = true;
         }
         else if (_nextLine <= progress.Elapsed)
@@ -61,6 +62,7 @@ internal sealed class ProgressBar
         if (_drawn)
         {
             _terminal.Error.Write("\r" + new string(' ', Width + 62) + "\r");
+            _terminal.Error.Flush();
             _drawn = false;
         }
     }

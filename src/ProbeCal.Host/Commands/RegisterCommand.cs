@@ -31,7 +31,7 @@ internal static class RegisterCommand
         Option<string> certificate = Of("--certificate", "NUMBER", "Number of its certificate.");
         Option<string> value = Of("--value", "VALUE", "What the certificate states, with its uncertainty: \"10.02% u 0.05%\" (standard) or \"10.02% U 0.10% k 2\" (expanded).");
         Option<string> correction = Of("--correction", "VALUE", "What is added to what it shows, with its uncertainty: \"-0.4hPa u 0.3hPa\".");
-        Option<string> calibrated = Of("--calibrated", "DAY", "Day of its calibration, as 2026-05-01.");
+        Option<string> calibrated = Of("--calibrated", "DAY", "Day it was calibrated or checked against a reference (of a probe: its thermometer), as 2026-05-01.");
         Option<string> made = Of("--made", "DAY", "Day it was made, opened or put into service.");
         Option<string> due = Of("--due", "DAY", "Last day of its certificate.");
         Option<string> life = Of("--life", "TIME", "How long it lasts from --made: 180d.");
@@ -47,7 +47,10 @@ internal static class RegisterCommand
             everything that holds from now on; what is left out is no longer stated.
 
             Examples:
-              probecal register add B-12 --kind barometer --certificate K-1182 --correction "-0.4hPa u 0.3hPa" --due 2027-03-01
+              probecal register add B-12 --kind barometer --correction "-0.4hPa u 0.3hPa" \
+                --calibrated 2026-11-02
+              probecal register add P-17 --kind probe --calibrated 2026-11-02 \
+                --remarks "its thermometer, at 5 and 25 C"
               probecal register add CYL-4 --kind cylinder --value "10.02% U 0.10% k 2" --due 2028-02-03
               probecal register add M-17 --kind membrane --belongs-to P-17 --made 2026-05-01 --life 180d
             """)
@@ -212,8 +215,8 @@ internal static class RegisterCommand
                 each.Equipment,
                 each.EquipmentKind,
                 each.Certificate ?? "-",
-                LogText.Quantity(each.CertificateValue) ?? "-",
-                LogText.Quantity(each.Correction) ?? "-",
+                LogText.Quantity(each.CertificateValue, each.EquipmentKind) ?? "-",
+                LogText.Quantity(each.Correction, each.EquipmentKind) ?? "-",
                 each.LastDay is DateOnly last ? LogText.Day(last) + (last < today ? " OVERDUE" : "") : "-",
                 each.Description ?? "",
             ]);

@@ -41,11 +41,16 @@ internal static class TablesCommand
             The largest distance from the equation over a dense grid, read as the reader will read it, stands in the header.
 
             Examples:
-              probecal tables --temperature 0..40C --pressure 600..1100hPa --salinity 0 --error 0.01mg/L --format c-float --name oxygen-fresh
-              probecal tables --temperature 0..40C --salinity 0..40 --pressure 1atm --error 0.05% --format csv --output tables
-              probecal tables --quantity salinity-factor --temperature 0..35C --salinity 0..40 --error 0.0005 --format json
-              probecal tables --quantity vapour-pressure --temperature 0..50C --temperature-step 1K --format csv
-              probecal tables --temperature 0..30C --salinity 0 --site-altitude 640m --site "North pond" --format card --output cards
+              probecal tables --temperature 0..40C --pressure 600..1100hPa --salinity 0 --error 0.01mg/L \
+                --format c-float --name oxygen-fresh
+              probecal tables --temperature 0..40C --salinity 0..40 --pressure 1atm --error 0.05% \
+                --format csv --output tables
+              probecal tables --quantity salinity-factor --temperature 0..35C --salinity 0..40 \
+                --error 0.0005 --format json
+              probecal tables --quantity vapour-pressure --temperature 0..50C --temperature-step 1K \
+                --format csv
+              probecal tables --temperature 0..30C --salinity 0 --site-altitude 640m --site "North pond" \
+                --format card --output cards
             """)
         {
             format, output, quantity, gas, equation, temperature, temperatureStep, pressure, pressureStep, salinity, salinityStep, moleFraction,

@@ -8,7 +8,7 @@ namespace ProbeCal.Host.Commands;
 internal static class TextTable
 {
     /// <summary>Widest line, characters: two windows beside each other on a field laptop still show it whole.</summary>
-    internal const int Widest = 110;
+    internal const int Widest = 100;
 
     /// <summary>Least room that the last column is wrapped in; a narrower one would be a ribbon.</summary>
     private const int Narrowest = 24;

@@ -32,8 +32,10 @@ internal static class TotalGasCommand
 
             Examples:
               probecal total-gas --total-pressure 780mmHg --pressure 745mmHg --temperature 12 --salinity 0
-              probecal total-gas --delta-p 48hPa --pressure 993hPa --temperature 14.2 --salinity 0 --concentration 11.2mg/L --depth 1.5m
-              probecal total-gas --total-pressure 1058hPa --total-pressure-uncertainty 2hPa --altitude 220m --temperature 9 --salinity 0 --format json
+              probecal total-gas --delta-p 48hPa --pressure 993hPa --temperature 14.2 --salinity 0 \
+                --concentration 11.2mg/L --depth 1.5m
+              probecal total-gas --total-pressure 1058hPa --total-pressure-uncertainty 2hPa --altitude 220m \
+                --temperature 9 --salinity 0 --format json
             """)
         {
             total, delta, totalUncertainty, pressure, pressureUncertainty, seaLevel, airTemperature, altitude, temperature, temperatureUncertainty,

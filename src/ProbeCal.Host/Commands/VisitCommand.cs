@@ -47,8 +47,12 @@ internal static class VisitCommand
             Records a service visit (USGS TM 1-D3): fouling error (Ma - Mb) - (Fe - Fs), drift error standard less reading.
 
             Examples:
-              probecal visit add --probe do-1 --before 2026-06-20T09:10+02:00 --after 2026-06-20T09:40+02:00 --monitor-before 7.90mg/L --monitor-after 8.25mg/L --field-before 8.31mg/L --field-after 8.35mg/L --field-meter FM-2
-              probecal visit add --probe do-1 --before 2026-06-20T07:10Z --after 2026-06-20T07:40Z --standard "8.97mg/L read 8.61mg/L from air-saturated-water at 20.1C salinity 0" --standard "0mg/L read 0.08mg/L from zero-solution at 20.1C salinity 0"
+              probecal visit add --probe do-1 --before 2026-06-20T09:10+02:00 \
+                --after 2026-06-20T09:40+02:00 --monitor-before 7.90mg/L --monitor-after 8.25mg/L \
+                --field-before 8.31mg/L --field-after 8.35mg/L --field-meter FM-2
+              probecal visit add --probe do-1 --before 2026-06-20T07:10Z --after 2026-06-20T07:40Z \
+                --standard "8.97mg/L read 8.61mg/L from air-saturated-water at 20.1C salinity 0" \
+                --standard "0mg/L read 0.08mg/L from zero-solution at 20.1C salinity 0"
             """)
         {
             probe, before, after, monitorBefore, monitorAfter, fieldBefore, fieldAfter, fieldMeter, inBucket, standards, standardsAt, foulingOnset, driftOnset,

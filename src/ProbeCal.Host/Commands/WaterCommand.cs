@@ -24,7 +24,7 @@ internal static class WaterCommand
         Command command = new(
             "water",
             """
-            Salinity, density, freezing point and vapour pressure of a water, each by its published equation.
+            Salinity, density, freezing point and vapour pressure of a water: each by its published equation.
 
             Examples:
               probecal water --temperature 20 --salinity 35

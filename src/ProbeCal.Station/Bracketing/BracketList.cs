@@ -46,7 +46,7 @@ public sealed record BracketList(long Readings, long Bracketed, IReadOnlyList<Un
     /// <exception cref="InputException">The table, its mapping or a row is wrong.</exception>
     public static BracketList OfTable(CalibrationLogStore log, string probe, string path, IReadOnlyList<string> columns, string? utcOffset)
     {
-        TimeSpan? offset = utcOffset == null ? null : UtcTime.Offset("--utc-offset", utcOffset);
+        TimeSpan? offset = utcOffset == null ? null : UtcTime.Offset("--time-offset", utcOffset);
         Stream input;
         try
         {

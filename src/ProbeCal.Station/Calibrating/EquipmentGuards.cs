@@ -112,7 +112,7 @@ internal static class EquipmentGuards
     /// <summary>A finding when no check is on record, or the last one is too long ago.</summary>
     private static Finding? Checked(Situation now, string guard, string name, EquipmentRecord? known, int? longest, string were, PossibleError error)
     {
-        string advice = Text($"check it against a reference and enter that with the command register, then calibrate; its error goes into every reading");
+        string advice = "check it against a reference and enter the day with 'register add' and --calibrated; its error goes into every reading";
         if (known == null)
         {
             return new Finding(guard, FindingSeverity.Note, Text($"{name} is not in the register, so no check against a reference is on record; {were}"), error, advice);

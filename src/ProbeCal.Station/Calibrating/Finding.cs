@@ -26,7 +26,17 @@ public enum FindingSeverity
 public sealed record Finding(string Guard, FindingSeverity Severity, string Saw, PossibleError Error, string WhatToDo)
 {
     /// <summary>All of it for a person: what was seen, how large the error would be and in which direction, what to do.</summary>
-    public string Sentence => $"{Saw}; {Error.Words}; {WhatToDo}";
+    public string Sentence => $"{Saw}{(NamesAnError ? ", " + Error.WordsIfSo : "; " + Error.Words)}; {WhatToDo}";
+
+    /// <summary>True when what was seen ends with an error that is only taken as an example: "were it 1 hPa too high".</summary>
+    private bool NamesAnError
+    {
+        get
+        {
+            string last = Saw[(Saw.LastIndexOf("; ", StringComparison.Ordinal) is int at and not -1 ? at + 2 : 0)..];
+            return last.StartsWith("were ", StringComparison.Ordinal) || last.StartsWith("had ", StringComparison.Ordinal);
+        }
+    }
 
     /// <summary>The finding as the record keeps it.</summary>
     /// <param name="reason">The reason for going on, or null.</param>

@@ -44,9 +44,16 @@ internal sealed class GuardDesk
         }
 
         string? reason = null;
+        bool asked = false;
         if (finding.Severity == FindingSeverity.NeedsReason)
         {
-            reason = _reasons.GetValueOrDefault(finding.Guard) ?? await _dialogue.ReasonAsync(finding, cancellationToken).ConfigureAwait(false);
+            reason = _reasons.GetValueOrDefault(finding.Guard);
+            if (reason == null)
+            {
+                reason = await _dialogue.ReasonAsync(finding, cancellationToken).ConfigureAwait(false);
+                asked = true;
+            }
+
             if (string.IsNullOrWhiteSpace(reason))
             {
                 throw Stop(finding, $"{finding.Sentence}; if it is right all the same, say why: --confirm {finding.Guard}=\"REASON\"", aboutEntries);
@@ -58,7 +65,8 @@ internal sealed class GuardDesk
         _session.Keep(finding, reason);
         if (_told.Add(finding.Guard))
         {
-            _dialogue.Say(reason == null ? "note: " + finding.Sentence : $"accepted: {finding.Sentence} (reason: {reason})");
+            // Whoever was just asked has read the whole of it.
+            _dialogue.Say(reason == null ? "note: " + finding.Sentence : $"accepted: {(asked ? finding.Guard : finding.Sentence)} (reason: {reason})");
         }
     }
 

@@ -29,6 +29,11 @@ public sealed record PossibleError
         ? $"if so, the probe looks {Sized(asFound)} as found, and once adjusted here its later readings are {Sized(later)}"
         : WhyUnknown!;
 
+    /// <summary>The same behind the error that it is the size of: "were it 1 hPa too high, …".</summary>
+    public string WordsIfSo => AsFound is double asFound && Later is double later
+        ? $"the probe would look {Sized(asFound)} as found, and once adjusted here its later readings would be {Sized(later)}"
+        : WhyUnknown!;
+
     /// <summary>Size and direction as a record keeps them; null when it keeps none.</summary>
     /// <param name="finding">The finding.</param>
     public static string? WordsOf(RecordedFinding finding)
@@ -83,7 +88,7 @@ public sealed record PossibleError
         return new PossibleError { WhyUnknown = why };
     }
 
-    private const string NotYet = "how large the error would be in mg/L cannot be said here: temperature or pressure is not known, or has no oxygen value";
+    private const string NotYet = "the error in mg/L cannot be said here (temperature or pressure is not known yet, or out of range)";
 
     private static string Sized(double error)
     {

@@ -165,9 +165,17 @@ internal static class CertificateText
         });
     }
 
+    private static string ExampleOf(QuantityKind kind)
+    {
+        return kind == QuantityKind.Pressure ? "-0.4hPa u 0.3hPa"
+            : kind == QuantityKind.TemperatureDifference ? "0.1K u 0.05K"
+            : kind == QuantityKind.AmountConcentration ? "0.025mol/L u 0.0001mol/L"
+            : "10.02% u 0.05%";
+    }
+
     private static RecordedQuantity Read(string what, string text, QuantityKind[] kinds)
     {
-        string example = $"write the value, then its standard uncertainty behind u, or the expanded one behind U with its factor behind k, for example \"{kinds[0].Example.Split(" or ")[0]} u ...\"";
+        string example = $"write the value, then its standard uncertainty behind u, or the expanded one behind U with its factor behind k, for example \"{ExampleOf(kinds[0])}\"";
         List<string> words = [.. text.Split(' ', StringSplitOptions.RemoveEmptyEntries)];
         int at = words.FindIndex(static word => word is "u" or "U");
         if (at <= 0 || at == words.Count - 1)

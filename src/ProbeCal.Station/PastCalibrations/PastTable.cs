@@ -66,7 +66,7 @@ public sealed record PastTable
                 : $"--probe {Wrong.Shown(Probe)}: the table has a column for the probe; leave one of them out");
         }
 
-        TimeSpan? offset = UtcOffset == null ? null : UtcTime.Offset("--utc-offset", UtcOffset);
+        TimeSpan? offset = UtcOffset == null ? null : UtcTime.Offset("--time-offset", UtcOffset);
         string sha = Convert.ToHexStringLower(SHA256.HashData(bytes));
         PastCalibrationRecord[] read = [.. rows.Read().Select(row => Read(row, offset, now, name, sha, software))];
         return read.Length != 0 ? read : throw new InputException($"{name}: there is no row below the header; nothing was added");

@@ -97,6 +97,14 @@ public class GuardPairTests
     }
 
     [Fact]
+    public void Sentence_JoinsAnErrorTakenAsAnExampleToItsSize()
+    {
+        Finding finding = new("x", FindingSeverity.Note, "seen; were it 1 hPa too high", PossibleError.Known(-0.11, 0.11), "do");
+        Assert.Equal("seen; were it 1 hPa too high, the probe would look 0.11 mg/L too low as found, and once adjusted here its later readings would be 0.11 mg/L too high; do", finding.Sentence);
+        Assert.Equal("seen; were it 1 hPa too high", finding.ToRecord(null).Saw);
+    }
+
+    [Fact]
     public void EveryName_IsThatOfAGuard_AndReasonsAreTakenForThoseThatAskForOne()
     {
         Assert.Equal(Guards.All.Count, Guards.All.Select(static guard => guard.Name).Distinct().Count());
