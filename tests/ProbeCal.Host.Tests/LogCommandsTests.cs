@@ -20,7 +20,7 @@ public sealed class LogCommandsTests : LogFolder
         await Ok("register", "add", "CYL-4", "--kind", "cylinder", "--value", "10.02% U 0.10% k 2");
         Run list = await Ok("register", "list");
         Assert.Contains("2026-11-30 OVERDUE", list.Output, StringComparison.Ordinal);
-        Assert.Contains("0.1002, u 0.0005", list.Output, StringComparison.Ordinal);
+        Assert.Contains("10.02 %, u 0.05 %", list.Output, StringComparison.Ordinal);
 
         Time.Now += TimeSpan.FromDays(1);
         Run again = await Ok("register", "add", "B-12", "--due", "2027-11-30");

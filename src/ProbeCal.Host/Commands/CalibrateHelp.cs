@@ -15,7 +15,7 @@ internal sealed class CalibrateHelp(string name, string description, CalibrateOp
 {
     internal const string OfCalibrate =
         """
-        Calibrate a probe by any method, live or by a meter's display, into the log.
+        Calibrate a probe by any method, live or by a meter's display.
         Asks for what is missing, guides through the steps, waits for steady readings. An interrupted
         calibration goes on with the same command within 4 h.
         """;
@@ -49,10 +49,10 @@ internal sealed class CalibrateHelp(string name, string description, CalibrateOp
         }
 
         output.WriteLine();
-        output.WriteLine("The same with another last line (to practise without a probe: --source simulated and no --line):");
+        output.WriteLine("The same with another method in place of the last (to practise without a probe: --source simulated and no --line):");
         foreach (string ending in Endings(name))
         {
-            output.WriteLine("    " + ending);
+            output.WriteLine("  " + ending);
         }
 
         output.WriteLine();
@@ -97,10 +97,10 @@ internal sealed class CalibrateHelp(string name, string description, CalibrateOp
     {
         yield return $"probecal {name} --source serial:/dev/ttyUSB0 --line \"{{time}},{{signal:nA}},{{temperature}}\" \\";
         yield return "  --probe P-17 --coefficient \"exponential 0.03/K at 25C fitted 5..35C\" \\";
-        yield return "  --pressure 706mmHg --pressure-source barometer:B-12 --altitude 640m --salinity 0 --stirring stirred \\";
-        yield return "  --method air-saturated-water";
-        yield return $"probecal {name} --manual --probe M-3 --meter-shows mg/L --temperature 20.1C --pressure 706mmHg \\";
-        yield return "  --pressure-source barometer:B-12 --altitude 640m --method water-saturated-air";
+        yield return "  --pressure 706mmHg --pressure-source barometer:B-12 --altitude 640m --salinity 0 \\";
+        yield return "  --stirring stirred --method air-saturated-water";
+        yield return $"probecal {name} --manual --probe M-3 --meter-shows mg/L --temperature 20.1C \\";
+        yield return "  --pressure 706mmHg --pressure-source barometer:B-12 --altitude 640m --method water-saturated-air";
     }
 
     private static IEnumerable<string> Endings(string name)

@@ -33,7 +33,7 @@ internal sealed class Questions
             }
             catch (InputException wrong)
             {
-                _terminal.Error.WriteLine(WithoutOption(wrong.Message));
+                _terminal.Error.WriteLine(wrong.Message);
             }
         }
     }
@@ -44,13 +44,6 @@ internal sealed class Questions
         _terminal.Error.Write(prompt + " ");
         _terminal.Error.Flush();
         await LineAsync(cancellationToken).ConfigureAwait(false);
-    }
-
-    /// <summary>Whoever answers a question did not type the name of the option behind it.</summary>
-    private static string WithoutOption(string message)
-    {
-        int blank = message.StartsWith("--", StringComparison.Ordinal) ? message.IndexOf(' ', StringComparison.Ordinal) : -1;
-        return blank < 0 ? message : message[(blank + 1)..];
     }
 
     private async Task<string> LineAsync(CancellationToken cancellationToken)
