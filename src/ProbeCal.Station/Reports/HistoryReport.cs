@@ -59,7 +59,7 @@ public static class HistoryReport
         svg.Append(CultureInfo.InvariantCulture, $"<svg xmlns=\"http://www.w3.org/2000/svg\" role=\"group\" aria-label=\"History of probe {PageText.Escape(history.Probe)}\" viewBox=\"0 0 {Width} {Height * quantities.Count}\" width=\"{Width}pt\" height=\"{Height * quantities.Count}pt\">\n<rect width=\"100%\" height=\"100%\" fill=\"#fff\"/>\n");
         for (int i = 0; i < quantities.Count; i++)
         {
-            svg.Append(CultureInfo.InvariantCulture, $"<g transform=\"translate(0 {i * Height})\">\n{PlotSvg.Element(Plot(history, quantities[i]), Width, Height)}</g>\n");
+            svg.Append(CultureInfo.InvariantCulture, $"<g transform=\"translate(0 {i * Height})\">\n{PlotSvg.Element(Plot(history, quantities[i]), Width, Height, unit: "")}</g>\n");
         }
 
         return svg.Append("</svg>\n").ToString();

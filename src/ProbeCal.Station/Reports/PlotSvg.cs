@@ -16,11 +16,12 @@ internal static class PlotSvg
     /// <param name="plot">What to show.</param>
     /// <param name="width">Width, points.</param>
     /// <param name="height">Height, points.</param>
-    internal static string Element(ReportPlot plot, double width, double height)
+    /// <param name="unit">Unit of both in the element; none within another picture, whose own units would be enlarged by it.</param>
+    internal static string Element(ReportPlot plot, double width, double height, string unit = "pt")
     {
         StringBuilder svg = new();
         string id = PageText.Escape(plot.Id);
-        svg.Append(CultureInfo.InvariantCulture, $"<svg xmlns=\"http://www.w3.org/2000/svg\" role=\"img\" aria-labelledby=\"{id}-title {id}-description\" viewBox=\"0 0 {N(width)} {N(height)}\" width=\"{N(width)}pt\" height=\"{N(height)}pt\">\n");
+        svg.Append(CultureInfo.InvariantCulture, $"<svg xmlns=\"http://www.w3.org/2000/svg\" role=\"img\" aria-labelledby=\"{id}-title {id}-description\" viewBox=\"0 0 {N(width)} {N(height)}\" width=\"{N(width)}{unit}\" height=\"{N(height)}{unit}\">\n");
         svg.Append(CultureInfo.InvariantCulture, $"<title id=\"{id}-title\">{PageText.Escape(plot.Title)}</title>\n<desc id=\"{id}-description\">{PageText.Escape(plot.Description)}</desc>\n");
         svg.Append(CultureInfo.InvariantCulture, $"<g fill=\"none\" stroke=\"#000\" font-family='{Faces}'>\n");
         foreach (DrawnPart part in PlotDrawing.Of(plot, width, height))

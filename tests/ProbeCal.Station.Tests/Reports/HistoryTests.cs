@@ -1,5 +1,6 @@
 using System;
 using System.Collections.Generic;
+using System.Globalization;
 using System.Linq;
 using System.Xml.Linq;
 using ProbeCal.Station.CalibrationLog;
@@ -181,8 +182,12 @@ public class HistoryTests
         XElement svg = XDocument.Parse(HistoryReport.Svg(ProbeHistory.Of(log, "P-17", null, null))).Root!;
         XElement[] plots = [.. svg.Descendants().Where(static element => element.Name.LocalName == "svg")];
         Assert.Equal(3, plots.Length);
+        string[] whole = svg.Attribute("viewBox")!.Value.Split(' ');
         foreach (XElement plot in plots)
         {
+            // In units of the whole picture, so that the three lie one below the other and none runs over the next.
+            Assert.Equal(whole[2], plot.Attribute("width")!.Value.Split('.')[0]);
+            Assert.Equal(int.Parse(whole[3], CultureInfo.InvariantCulture), 3 * double.Parse(plot.Attribute("height")!.Value, NumberStyles.Float, CultureInfo.InvariantCulture));
             Assert.Equal("img", plot.Attribute("role")!.Value);
             foreach (string id in plot.Attribute("aria-labelledby")!.Value.Split(' '))
             {
