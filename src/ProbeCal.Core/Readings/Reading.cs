@@ -10,7 +10,7 @@ public sealed class Reading
     public const int QuantityCount = 6;
 
     /// <summary>Number of <see cref="UncertaintySource"/>.</summary>
-    public const int SourceCount = 15;
+    public const int SourceCount = 17;
 
     private readonly double[] values = new double[QuantityCount];
     private readonly Status[] statuses = new Status[QuantityCount];

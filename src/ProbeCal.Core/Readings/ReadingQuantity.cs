@@ -50,4 +50,8 @@ public enum UncertaintySource
     Stirring = 13,
     /// <summary>The parameters of a fit through several points, with their covariance.</summary>
     Fit = 14,
+    /// <summary>Drift of the probe since its calibration, see <see cref="ReadingGrowth"/>.</summary>
+    Drift = 15,
+    /// <summary>What grew on the probe since it was cleaned, see <see cref="ReadingGrowth"/>.</summary>
+    Fouling = 16,
 }

@@ -14,6 +14,9 @@ public static class ConfigurationFile
 
     private const int UsualKeepDays = 400;
     private const int UsualRejectedLines = 10_000;
+
+    /// <summary>A probe that may lose its whole reading in a day tells nothing (our choice, no source).</summary>
+    private const double HighestPercentPerDay = 100;
     private const int UsualBrokerPort = 1883;
 
     /// <summary>Reads a file.</summary>
@@ -64,6 +67,8 @@ public static class ConfigurationFile
             Pressure = InputSections.Pressure(SectionOf(root, "pressure", "{ \"source\": \"line\" }"), line, altitude),
             Salinity = InputSections.Salinity(SectionOf(root, "salinity", "{ \"source\": \"survey of May\", \"value\": \"0.2\" }"), line),
             Stirring = StirringOf(root),
+            Drift = Rate(root, "drift"),
+            Fouling = Rate(root, "fouling"),
             Calibration = Calibration(root),
             Equation = root.Find("equation") is { } equation ? EquationNames.Parse(equation.What, equation.AsText()) : EquationNames.Default,
             Broker = BrokerSection.Read(Section(root, "broker"), folder),
@@ -155,6 +160,21 @@ public static class ConfigurationFile
         // The signal's unit is a label that belongs to the line, so the bare number is in it.
         double value = Number.Parse(node.What, node.AsQuantity());
         return 0 <= value ? value : throw Wrong.Input(node.What, node.Text, "an uncertainty is not negative");
+    }
+
+    private static RateConfiguration? Rate(ConfigurationNode root, string name)
+    {
+        if (Section(root, name) is not { } section)
+        {
+            return null;
+        }
+
+        ConfigurationNode rate = section.Require("perDay", "\"0.05 %\"");
+        ConfigurationNode source = section.Require("source", "\"post-deployment checks of 2025\"");
+        double percent = Quantity.Parse(QuantityKind.Percent, rate.What, rate.AsQuantity());
+        return percent is >= 0 and <= HighestPercentPerDay
+            ? new RateConfiguration(percent / 100, source.AsText())
+            : throw Wrong.Input(rate.What, rate.Text, "a standard uncertainty per day lies between 0 % and " + Number.Print(HighestPercentPerDay) + " %, for example \"0.05 %\"");
     }
 
     private static ThermometerConfiguration Thermometer(ConfigurationNode root)

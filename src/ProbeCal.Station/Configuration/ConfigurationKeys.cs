@@ -12,7 +12,7 @@ internal static class ConfigurationKeys
     internal static readonly string[] Root =
     [
         "format", "version", "station", "site", "probe", "source", "line", "simulated", "signalStandardUncertainty", "thermometer",
-        "pressure", "salinity", "stirring", "calibration", "equation", "broker", "embeddedBroker", "journal", "gapAfter",
+        "pressure", "salinity", "stirring", "drift", "fouling", "calibration", "equation", "broker", "embeddedBroker", "journal", "gapAfter",
     ];
 
     internal static readonly Dictionary<string, string[]> Sections = new()
@@ -21,6 +21,8 @@ internal static class ConfigurationKeys
         ["thermometer"] = ["id", "standardUncertainty", "offsetStandardUncertainty"],
         ["pressure"] = ["source", "value", "standardUncertainty"],
         ["salinity"] = ["source", "value", "standardUncertainty"],
+        ["drift"] = ["perDay", "source"],
+        ["fouling"] = ["perDay", "source"],
         ["broker"] = ["address", "user", "passwordEnvironment", "passwordFile", "caFile", "checkRevocation"],
         ["embeddedBroker"] = ["port"],
         ["journal"] = ["keep", "rejectedLines"],

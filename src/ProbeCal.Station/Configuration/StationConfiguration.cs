@@ -46,6 +46,12 @@ public sealed record StationConfiguration
     /// <summary>How the water moves past the probe.</summary>
     public required Stirring Stirring { get; init; }
 
+    /// <summary>Drift since the calibration, as entered; null takes it from the probe's history, where there is one.</summary>
+    public RateConfiguration? Drift { get; init; }
+
+    /// <summary>Fouling since the last cleaning, as entered; null takes it from the probe's history, where there is one.</summary>
+    public RateConfiguration? Fouling { get; init; }
+
     /// <summary>Which calibration.</summary>
     public required CalibrationChoice Calibration { get; init; }
 
@@ -73,6 +79,11 @@ public sealed record StationConfiguration
 /// <param name="StandardUncertaintyKelvin">One temperature without the thermometer's own offset, K.</param>
 /// <param name="OffsetStandardUncertaintyKelvin">Its offset, K; of use only when it is not the calibration's.</param>
 public sealed record ThermometerConfiguration(string? Id, double StandardUncertaintyKelvin, double OffsetStandardUncertaintyKelvin);
+
+/// <summary>How fast a reading becomes less sure.</summary>
+/// <param name="RelativePerDay">Relative standard uncertainty per day.</param>
+/// <param name="Source">Where the figure comes from, in the words of the configuration.</param>
+public sealed record RateConfiguration(double RelativePerDay, string Source);
 
 /// <summary>Where pressure or salinity comes from.</summary>
 /// <param name="FromLine">True when every line carries it.</param>

@@ -114,7 +114,7 @@ internal sealed class CalibrationInUse
 
     private static CalibrationInUse Of(StoredCalibration stored, CalibrationLogStore log, CorrectionRequest request, long fromTicks)
     {
-        LoadedCalibration loaded = new(stored.Record, stored.Sha256, log.BytesOf(stored));
+        LoadedCalibration loaded = new(stored.Record, stored.Sha256, log.BytesOf(stored)) { Growth = UncertaintyGrowth.Of(log, stored.Record, null, null) };
         Stirring stirring = request.Stirring is string name ? StirringOf(name) : loaded.Core.Stirring;
         ReadingConditions conditions = ReadingCircumstances.Of(
             loaded,

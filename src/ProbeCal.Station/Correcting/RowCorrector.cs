@@ -98,6 +98,8 @@ internal sealed class RowCorrector
         CalibrationInUse calibration = Calibration;
         Status status = Correction.Correct(
             calibration.Core, calibration.Conditions, signal, temperature, pressure, salinity, depthDecibar, RangeRule.NearEdge, Reading);
+        calibration.Loaded.Growth.Add(
+            new DateTimeOffset(utcTicks, TimeSpan.Zero), ErrorRamp.At(_plan.Drift, utcTicks) is not null, ErrorRamp.At(_plan.Fouling, utcTicks) is not null, Reading);
         if (!_plan.IsEmpty)
         {
             TakeBack(calibration, utcTicks, temperature, pressure, salinity);

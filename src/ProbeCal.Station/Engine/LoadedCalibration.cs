@@ -35,6 +35,9 @@ internal sealed class LoadedCalibration
     /// <summary>Count and hash of the log when it was loaded, as <c>COUNT:HASH</c>; null when it was not taken from a log.</summary>
     public string? LogHead { get; init; }
 
+    /// <summary>What time adds to the uncertainty of readings.</summary>
+    public UncertaintyGrowth Growth { get; init; } = UncertaintyGrowth.Unknown;
+
     /// <summary>What Core corrects with.</summary>
     public ProbeCalibration Core { get; }
 
@@ -80,7 +83,11 @@ internal sealed class LoadedCalibration
             : log.LatestFor(configuration.Probe, now) ?? throw None(logFile, configuration);
         Check(stored.Record, configuration);
         RefuseWhatNoLongerHolds(stored.Record, log);
-        return new LoadedCalibration(stored.Record, stored.Sha256, log.BytesOf(stored)) { LogHead = log.Chain.Head };
+        return new LoadedCalibration(stored.Record, stored.Sha256, log.BytesOf(stored))
+        {
+            LogHead = log.Chain.Head,
+            Growth = UncertaintyGrowth.Of(log, stored.Record, configuration.Drift, configuration.Fouling),
+        };
     }
 
     private static InputException None(string logFile, StationConfiguration configuration)

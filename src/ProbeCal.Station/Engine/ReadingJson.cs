@@ -28,9 +28,6 @@ internal sealed class ReadingJson
         (ReadingQuantity.PercentOneAtmosphere, "percentOneAtmosphere"),
     ];
 
-    // Not modelled: nothing here knows how the membrane aged or what grew on it since the calibration.
-    private static readonly string[] _excluded = ["drift", "fouling"];
-
     private readonly StationConfiguration _configuration;
     private readonly LoadedCalibration? _calibration;
     private readonly string _software;
@@ -85,17 +82,49 @@ internal sealed class ReadingJson
             WriteQuantity(writer, quantity, name, inputs, reading, doubt);
         }
 
-        writer.WriteStartArray("uncertaintyExcludes");
-        foreach (string excluded in _excluded)
-        {
-            writer.WriteStringValue(excluded);
-        }
-
-        writer.WriteEndArray();
+        WriteGrowth(writer, raw.TimeUtc);
         writer.WriteString("noReadingReason", noReading);
         writer.WriteEndObject();
         writer.Flush();
         return _buffer.WrittenSpan.ToArray();
+    }
+
+    /// <summary>What time adds is in the uncertainty and told with its days, or is left out and told so.</summary>
+    private void WriteGrowth(Utf8JsonWriter writer, DateTimeOffset at)
+    {
+        UncertaintyGrowth growth = _calibration?.Growth ?? UncertaintyGrowth.Unknown;
+        double? drift = growth.DriftDays(at);
+        double? fouling = growth.FoulingDays(at);
+        writer.WriteStartArray("uncertaintyExcludes");
+        if (drift == null)
+        {
+            writer.WriteStringValue("drift");
+        }
+
+        if (fouling == null)
+        {
+            writer.WriteStringValue("fouling");
+        }
+
+        writer.WriteEndArray();
+        if (drift is double driftDays && growth.Drift is { } driftRate)
+        {
+            WriteRate(writer, "drift", driftRate, driftDays);
+        }
+
+        if (fouling is double foulingDays && growth.Fouling is { } foulingRate)
+        {
+            WriteRate(writer, "fouling", foulingRate, foulingDays);
+        }
+    }
+
+    private static void WriteRate(Utf8JsonWriter writer, string name, (double RelativePerDay, string Source) rate, double days)
+    {
+        writer.WriteStartObject(name);
+        Json.Number(writer, "days", days);
+        Json.Number(writer, "percentPerDay", rate.RelativePerDay * 100);
+        writer.WriteString("source", rate.Source);
+        writer.WriteEndObject();
     }
 
     private void WriteRaw(Utf8JsonWriter writer, RawSample raw)

@@ -83,6 +83,7 @@ internal sealed class ReadingMaker
             0.0,
             RangeRule.NearEdge,
             _reading);
+        _calibration.Growth.Add(raw.TimeUtc, driftIsCorrected: false, foulingIsCorrected: false, _reading);
         return double.IsNaN(_reading.Value(ReadingQuantity.PartialPressure))
             ? ReadingFlags.Of(ReadingQuantity.PartialPressure, inputs, _reading, "").Reason
             : null;
