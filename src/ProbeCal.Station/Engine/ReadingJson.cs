@@ -1,4 +1,3 @@
-using System;
 using System.Buffers;
 using System.Text.Json;
 using ProbeCal.Station.Configuration;
