@@ -1,3 +1,4 @@
+using System;
 using System.Buffers;
 using System.Text.Json;
 using ProbeCal.Station.Configuration;

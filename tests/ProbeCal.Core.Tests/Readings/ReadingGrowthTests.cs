@@ -9,7 +9,7 @@ public class ReadingGrowthTests
     private static Reading Corrected()
     {
         Reading reading = new();
-        Assert.Equal(Status.Ok, Correction.Correct(Bench.Calibrate(Bench.Probe(), Bench.WaterPoint(Bench.Probe()), new ZeroPoint(true, 0.4, 0.1, 20.0, 1000.0), 0.05, 0.0002), Bench.Conditions(0.05), 50.0, 15.0, 1000.0, 0.0, 0.0, RangeRule.Refuse, reading));
+        Assert.Equal(Status.Ok, Correction.Correct(Bench.Calibrate(Bench.Probe(), Bench.WaterPoint(60.0, 20.0, 1013.25, 0.05, 0.03, 0.8, 0.0075), new ZeroPoint(true, Bench.Zero, 0.02, 20.0, 1013.25), 0.1, 0.00024), Bench.Conditions(0.05), 50.0, 15.0, 1000.0, 0.0, 0.0, RangeRule.Refuse, reading));
         return reading;
     }
 

@@ -36,7 +36,7 @@ public class UncertaintyGrowthTests
         {
             store.Append(SampleRecords.Of("do-1", SampleRecords.Noon));
             log.Time.SetUtcNow(SampleRecords.Noon.AddDays(10));
-            store.Append(new ServiceRecord { Probe = "do-1", Event = ServiceRecord.Cleaned, At = SampleRecords.Noon.AddDays(8) });
+            store.Append(new ServiceRecord { Software = "probecal 9.9.9", Probe = "do-1", Event = ServiceRecord.Cleaned, At = SampleRecords.Noon.AddDays(8) });
         }
 
         DateTimeOffset at = SampleRecords.Noon.AddDays(20);
@@ -122,7 +122,7 @@ public class UncertaintyGrowthTests
             withdrawn.Time.SetUtcNow(SampleRecords.Noon.AddDays(90));
             store.Append(SampleRecords.Of("do-1", SampleRecords.Noon.AddDays(30)));
             store.Append(SampleRecords.Of("do-1", SampleRecords.Noon.AddDays(60), slope: 0.6));
-            store.Append(new AmendmentRecord { Of = first.Record.Id, Action = "withdrawn", Reason = "wrong probe" });
+            store.Append(new AmendmentRecord { Software = "probecal 9.9.9", Of = first.Record.Id, Action = "withdrawn", Reason = "wrong probe" });
         }
 
         Assert.Contains("drift", Excluded(Read(withdrawn, StationParts.Configuration(), SampleRecords.Noon.AddDays(91), [])));
@@ -179,7 +179,7 @@ public class UncertaintyGrowthTests
 
     private static VisitRecord Visit(DateTimeOffset at, VisitCleaning cleaning)
     {
-        return new VisitRecord { Probe = "do-1", BeforeUtc = at, AfterUtc = at.AddMinutes(1), Cleaning = [cleaning] };
+        return new VisitRecord { Software = "probecal 9.9.9", Probe = "do-1", BeforeUtc = at, AfterUtc = at.AddMinutes(1), Cleaning = [cleaning] };
     }
 
     private static string[] Excluded(JsonNode json)
