@@ -27,16 +27,27 @@ internal static class GrowthHistory
             return null;
         }
 
+        // A membrane without an id is told from the next by the service event alone.
+        DateTimeOffset newMembrane = log.ServiceFor(record.Probe.Id)
+            .Where(each => each.Event == ServiceRecord.MembraneChanged && each.At <= record.CompletedUtc)
+            .Select(static each => each.At).DefaultIfEmpty(DateTimeOffset.MinValue).Max();
         CalibrationRecord[] same =
         [
             .. log.Records.Select(static stored => stored.Record)
-                .Where(other => log.MayBeInForce(other) && other.Probe.Id == record.Probe.Id && other.CompletedUtc <= record.CompletedUtc && IsComparable(other.Probe, record.Probe))
+                .Where(other => log.MayBeInForce(other) && other.Probe.Id == record.Probe.Id && newMembrane <= other.CompletedUtc && other.CompletedUtc <= record.CompletedUtc && IsComparable(other.Probe, record.Probe))
                 .OrderBy(static other => other.CompletedUtc),
         ];
         List<(double Relative, double Days)> changes = [];
         for (int i = 1; i < same.Length; i++)
         {
-            changes.Add((Math.Log(same[i].Result.Slope / same[i - 1].Result.Slope), (same[i].CompletedUtc - same[i - 1].CompletedUtc).TotalDays));
+            double ratio = same[i].Result.Slope / same[i - 1].Result.Slope;
+            if (!(0 < ratio) || double.IsInfinity(ratio))
+            {
+                // A slope that turned its sign was no drift: the wires were changed, or the unit.
+                return null;
+            }
+
+            changes.Add((Math.Log(ratio), (same[i].CompletedUtc - same[i - 1].CompletedUtc).TotalDays));
         }
 
         return Rate(changes) is double rate

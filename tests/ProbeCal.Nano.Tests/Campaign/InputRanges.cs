@@ -82,6 +82,8 @@ internal static class InputRanges
         ("^constant$", 1e-6, 1e3),
         ("^coefficient$", 0.005, 0.06),
         ("^ratePerKelvin$", 0.005, 0.06),
+        ("^ratePerDay$", 0.0, 0.01),
+        ("^days$", 0.0, 400.0),
         ("^gain$", 0.3, 3.0),
         ("^flow|^airToWaterRatio$", 0.8, 1.2),
         ("^slope$", 0.05, 5.0),

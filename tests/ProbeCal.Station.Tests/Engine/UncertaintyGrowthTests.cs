@@ -1,11 +1,12 @@
 using System;
+using System.Collections.Generic;
 using System.Linq;
 using System.Text;
 using System.Text.Json;
 using System.Text.Json.Nodes;
-using Json.Schema;
 using ProbeCal.Station.CalibrationLog;
 using ProbeCal.Station.Configuration;
+using ProbeCal.Station.Correcting;
 using ProbeCal.Station.Engine;
 using ProbeCal.Station.Entry;
 using ProbeCal.Station.Tests.CalibrationLog;
@@ -16,6 +17,7 @@ namespace ProbeCal.Station.Tests.Engine;
 /// <summary>Where the rate of growth comes from, and what a reading says about it. All figures are made up.</summary>
 public class UncertaintyGrowthTests
 {
+    private const string Program = "probecal 9.9.9";
     private const string Entered = """{ "perDay": "0.05 %", "source": "checks of last season" }""";
 
     [Fact]
@@ -36,7 +38,7 @@ public class UncertaintyGrowthTests
         {
             store.Append(SampleRecords.Of("do-1", SampleRecords.Noon));
             log.Time.SetUtcNow(SampleRecords.Noon.AddDays(10));
-            store.Append(new ServiceRecord { Software = "probecal 9.9.9", Probe = "do-1", Event = ServiceRecord.Cleaned, At = SampleRecords.Noon.AddDays(8) });
+            store.Append(new ServiceRecord { Probe = "do-1", Event = ServiceRecord.Cleaned, At = SampleRecords.Noon.AddDays(8), Software = Program });
         }
 
         DateTimeOffset at = SampleRecords.Noon.AddDays(20);
@@ -122,7 +124,7 @@ public class UncertaintyGrowthTests
             withdrawn.Time.SetUtcNow(SampleRecords.Noon.AddDays(90));
             store.Append(SampleRecords.Of("do-1", SampleRecords.Noon.AddDays(30)));
             store.Append(SampleRecords.Of("do-1", SampleRecords.Noon.AddDays(60), slope: 0.6));
-            store.Append(new AmendmentRecord { Software = "probecal 9.9.9", Of = first.Record.Id, Action = "withdrawn", Reason = "wrong probe" });
+            store.Append(new AmendmentRecord { Of = first.Record.Id, Action = "withdrawn", Reason = "wrong probe", Software = Program });
         }
 
         Assert.Contains("drift", Excluded(Read(withdrawn, StationParts.Configuration(), SampleRecords.Noon.AddDays(91), [])));
@@ -139,6 +141,70 @@ public class UncertaintyGrowthTests
         }
 
         Assert.Contains("drift", Excluded(Read(membrane, StationParts.Configuration(), SampleRecords.Noon.AddDays(91), [])));
+    }
+
+    /// <summary>Membranes without ids: the service event between the calibrations tells them apart; one before all of them does not matter.</summary>
+    [Theory]
+    [InlineData(15, true)]
+    [InlineData(-15, false)]
+    public void NewMembraneBetween_BeginsTheHistoryAnew(int day, bool excluded)
+    {
+        using TemporaryLog log = new();
+        using (CalibrationLogStore store = log.Write())
+        {
+            log.Time.SetUtcNow(SampleRecords.Noon.AddDays(90));
+            store.Append(new ServiceRecord { Probe = "do-1", Event = ServiceRecord.MembraneChanged, At = SampleRecords.Noon.AddDays(day), Software = Program });
+            for (int i = 0; i < 3; i++)
+            {
+                store.Append(SampleRecords.Of("do-1", SampleRecords.Noon.AddDays(30 * i), slope: 0.62 - (0.01 * i)));
+            }
+        }
+
+        Assert.Equal(excluded, Excluded(Read(log, StationParts.Configuration(), SampleRecords.Noon.AddDays(91), [])).Contains("drift"));
+    }
+
+    [Fact]
+    public void SlopeThatTurnedItsSign_IsNoDrift()
+    {
+        using TemporaryLog log = new();
+        using CalibrationLogStore store = log.Write();
+        log.Time.SetUtcNow(SampleRecords.Noon.AddDays(90));
+        CalibrationRecord last = SampleRecords.Of("do-1", SampleRecords.Noon);
+        foreach (double slope in new[] { -0.62, 0.62, 0.61 })
+        {
+            last = store.Append(SampleRecords.Of("do-1", SampleRecords.Noon.AddDays(10 * store.Records.Count), slope: slope)).Record;
+        }
+
+        Assert.Null(GrowthHistory.Drift(store, last));
+    }
+
+    /// <summary>A recorded reading takes the same uncertainty as a live one, unless drift and fouling are taken back there.</summary>
+    [Fact]
+    public void RecordedReading_IsAsSureAsTheLiveOne()
+    {
+        using TemporaryLog log = new();
+        DateTimeOffset at = SampleRecords.Noon.AddDays(70);
+        StationConfiguration configuration = StationParts.Configuration();
+        JsonNode live = Read(log, configuration, at, [0.62, 0.61, 0.63]);
+        using CalibrationLogStore store = log.Read();
+        CorrectionRequest request = new()
+        {
+            Input = "raw.csv",
+            Output = "out.csv",
+            Columns = [],
+            Probe = "do-1",
+            TemperatureUncertainty = "0.03 K",
+            PressureUncertainty = "0.8 hPa",
+            SalinityUncertainty = "0.1",
+        };
+        IReadOnlyList<CalibrationInUse> calibrations = CalibrationInUse.Find(store, request);
+        RowCorrector corrector = new(calibrations, ServicePlanner.Plan(store, calibrations, request));
+        Assert.True(corrector.Find(at.UtcTicks));
+        RawSample sample = StationParts.Sample;
+        corrector.Correct(at.UtcTicks, sample.Signal, sample.TemperatureCelsius!.Value, sample.PressureHectopascal!.Value, sample.Salinity!.Value, 0);
+        Assert.NotEqual(0, corrector.Reading.Contribution(UncertaintySource.Drift, ReadingQuantity.MilligramsPerLitre));
+        Assert.Equal((double)live["mgPerL"]!["value"]!, corrector.Reading.Value(ReadingQuantity.MilligramsPerLitre));
+        Assert.Equal((double)live["mgPerL"]!["standardUncertainty"]!, corrector.Reading.StandardUncertainty(ReadingQuantity.MilligramsPerLitre));
     }
 
     /// <summary>Two visits, 20 and 10 days after a cleaning; fouling of −5 % and +2 % of the reading, the water's own change taken off.</summary>
@@ -179,7 +245,7 @@ public class UncertaintyGrowthTests
 
     private static VisitRecord Visit(DateTimeOffset at, VisitCleaning cleaning)
     {
-        return new VisitRecord { Software = "probecal 9.9.9", Probe = "do-1", BeforeUtc = at, AfterUtc = at.AddMinutes(1), Cleaning = [cleaning] };
+        return new VisitRecord { Probe = "do-1", BeforeUtc = at, AfterUtc = at.AddMinutes(1), Cleaning = [cleaning], Software = Program };
     }
 
     private static string[] Excluded(JsonNode json)
@@ -202,8 +268,8 @@ public class UncertaintyGrowthTests
 
         LoadedCalibration calibration = LoadedCalibration.Find(log.Path, configuration, DateTimeOffset.MaxValue)!;
         RawSample sample = StationParts.Sample with { TimeUtc = at };
-        byte[] bytes = new ReadingMaker(configuration, calibration, "probecal 9.9.9").Make(sample, 7).Message.Payload.ToArray();
-        Assert.Equal(bytes, new ReadingMaker(configuration, calibration, "probecal 9.9.9").Make(sample, 7).Message.Payload.ToArray());
+        byte[] bytes = new ReadingMaker(configuration, calibration, Program).Make(sample, 7).Message.Payload.ToArray();
+        Assert.Equal(bytes, new ReadingMaker(configuration, calibration, Program).Make(sample, 7).Message.Payload.ToArray());
         JsonNode json = JsonNode.Parse(Encoding.UTF8.GetString(bytes))!;
         Assert.True(Schemas.Of("reading").Evaluate(JsonSerializer.Deserialize<JsonElement>(bytes)).IsValid, Encoding.UTF8.GetString(bytes));
         return json;
