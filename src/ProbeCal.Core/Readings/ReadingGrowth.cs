@@ -10,18 +10,31 @@ namespace ProbeCal;
 /// </remarks>
 public static class ReadingGrowth
 {
-    /// <summary>Adds one such contribution to a corrected reading. Of one source the last call counts.</summary>
-    /// <param name="source"><see cref="UncertaintySource.Drift"/> or <see cref="UncertaintySource.Fouling"/>.</param>
+    /// <summary>Adds the drift since the calibration to a corrected reading. The last call counts.</summary>
     /// <param name="ratePerDay">Standard uncertainty per day, relative (0.001 is 0.1 % a day), not negative.</param>
-    /// <param name="days">Days since the calibration or the cleaning, not negative.</param>
+    /// <param name="days">Days since the calibration, not negative.</param>
     /// <param name="reading">The reading as <see cref="Correction.Correct"/> filled it.</param>
     /// <returns>
-    /// Ok; <see cref="Status.CoefficientUnknown"/> for another source; a status of the coefficient for the rate, of the uncertainty
-    /// for the days or where the product is too large. Unless Ok the reading is left as it was.
+    /// Ok; a status of the coefficient for the rate, of the uncertainty for the days or where the product is too large; the reading's own
+    /// where it has no uncertainty. Unless Ok the reading is left as it was.
     /// </returns>
-    public static Status Add(UncertaintySource source, double ratePerDay, double days, Reading reading)
+    public static Status AddDrift(double ratePerDay, double days, Reading reading)
     {
-        if (source != UncertaintySource.Drift && source != UncertaintySource.Fouling) { return Status.CoefficientUnknown; }
+        return Add(UncertaintySource.Drift, ratePerDay, days, reading);
+    }
+
+    /// <summary>Adds the fouling since the last cleaning to a corrected reading. The last call counts.</summary>
+    /// <param name="ratePerDay">Standard uncertainty per day, relative (0.001 is 0.1 % a day), not negative.</param>
+    /// <param name="days">Days since the cleaning, not negative.</param>
+    /// <param name="reading">The reading as <see cref="Correction.Correct"/> filled it.</param>
+    /// <returns>As <see cref="AddDrift"/>.</returns>
+    public static Status AddFouling(double ratePerDay, double days, Reading reading)
+    {
+        return Add(UncertaintySource.Fouling, ratePerDay, days, reading);
+    }
+
+    private static Status Add(UncertaintySource source, double ratePerDay, double days, Reading reading)
+    {
         if (InputCheck.NotFinite(ratePerDay)) { return Status.CoefficientNotFinite; }
         if (ratePerDay < 0.0) { return Status.CoefficientBelowRange; }
         Status status = InputCheck.Uncertainty(days);

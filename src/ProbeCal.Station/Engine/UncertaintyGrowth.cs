@@ -76,12 +76,12 @@ internal sealed class UncertaintyGrowth
     {
         if (!driftIsCorrected && Drift is { } drift && DriftDays(at) is double days)
         {
-            ReadingGrowth.Add(UncertaintySource.Drift, drift.RelativePerDay, days, reading);
+            ReadingGrowth.AddDrift(drift.RelativePerDay, days, reading);
         }
 
         if (!foulingIsCorrected && Fouling is { } fouling && FoulingDays(at) is double since)
         {
-            ReadingGrowth.Add(UncertaintySource.Fouling, fouling.RelativePerDay, since, reading);
+            ReadingGrowth.AddFouling(fouling.RelativePerDay, since, reading);
         }
     }
 }

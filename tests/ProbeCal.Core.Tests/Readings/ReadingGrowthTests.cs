@@ -13,6 +13,11 @@ public class ReadingGrowthTests
         return reading;
     }
 
+    private static Status Add(UncertaintySource source, double rate, double days, Reading reading)
+    {
+        return source == UncertaintySource.Drift ? ReadingGrowth.AddDrift(rate, days, reading) : ReadingGrowth.AddFouling(rate, days, reading);
+    }
+
     /// <summary>Root of the sum of squares, by the test's own arithmetic, for every quantity; values stay to the bit.</summary>
     [Theory]
     [InlineData(UncertaintySource.Drift, 0.0005, 30.0)]
@@ -21,7 +26,7 @@ public class ReadingGrowthTests
     {
         Reading before = Corrected();
         Reading after = Corrected();
-        Assert.Equal(Status.Ok, ReadingGrowth.Add(source, rate, days, after));
+        Assert.Equal(Status.Ok, Add(source, rate, days, after));
         for (int i = 0; i < Reading.QuantityCount; i++)
         {
             ReadingQuantity quantity = (ReadingQuantity)i;
@@ -38,7 +43,7 @@ public class ReadingGrowthTests
     {
         Reading before = Corrected();
         Reading after = Corrected();
-        Assert.Equal(Status.Ok, ReadingGrowth.Add(UncertaintySource.Drift, 0.01, 0.0, after));
+        Assert.Equal(Status.Ok, ReadingGrowth.AddDrift(0.01, 0.0, after));
         for (int i = 0; i < Reading.QuantityCount; i++)
         {
             Assert.Equal(before.StandardUncertainty((ReadingQuantity)i), after.StandardUncertainty((ReadingQuantity)i));
@@ -53,13 +58,12 @@ public class ReadingGrowthTests
     public void PublishedDrift_OfAMonth()
     {
         Reading reading = Corrected();
-        Assert.Equal(Status.Ok, ReadingGrowth.Add(UncertaintySource.Drift, 0.0079 / 8.95, 30, reading));
+        Assert.Equal(Status.Ok, ReadingGrowth.AddDrift(0.0079 / 8.95, 30, reading));
         double share = reading.Contribution(UncertaintySource.Drift, ReadingQuantity.MilligramsPerLitre) / reading.Value(ReadingQuantity.MilligramsPerLitre);
         Assert.Equal(0.237, share * 8.95, 9);
     }
 
     [Theory]
-    [InlineData(UncertaintySource.Zero, 0.001, 1.0, Status.CoefficientUnknown)]
     [InlineData(UncertaintySource.Drift, -0.001, 1.0, Status.CoefficientBelowRange)]
     [InlineData(UncertaintySource.Drift, double.NaN, 1.0, Status.CoefficientNotFinite)]
     [InlineData(UncertaintySource.Drift, double.PositiveInfinity, 1.0, Status.CoefficientNotFinite)]
@@ -70,7 +74,7 @@ public class ReadingGrowthTests
     {
         Reading before = Corrected();
         Reading after = Corrected();
-        Assert.Equal(expected, ReadingGrowth.Add(source, rate, days, after));
+        Assert.Equal(expected, Add(source, rate, days, after));
         Assert.Equal(before.StandardUncertainty(ReadingQuantity.MilligramsPerLitre), after.StandardUncertainty(ReadingQuantity.MilligramsPerLitre));
     }
 
@@ -78,7 +82,7 @@ public class ReadingGrowthTests
     public void NoReading_NoGrowth()
     {
         Reading reading = new();
-        Assert.NotEqual(Status.Ok, ReadingGrowth.Add(UncertaintySource.Drift, 0.001, 1.0, reading));
+        Assert.NotEqual(Status.Ok, ReadingGrowth.AddDrift(0.001, 1.0, reading));
         Assert.True(double.IsNaN(reading.StandardUncertainty(ReadingQuantity.PartialPressure)));
     }
 
@@ -86,11 +90,11 @@ public class ReadingGrowthTests
     public void Allocates_Nothing()
     {
         Reading reading = Corrected();
-        ReadingGrowth.Add(UncertaintySource.Drift, 0.001, 1.0, reading);
+        ReadingGrowth.AddDrift(0.001, 1.0, reading);
         long before = GC.GetAllocatedBytesForCurrentThread();
         for (int i = 0; i < 1000; i++)
         {
-            ReadingGrowth.Add(UncertaintySource.Fouling, 0.001, i, reading);
+            ReadingGrowth.AddFouling(0.001, i, reading);
         }
 
         Assert.Equal(0, GC.GetAllocatedBytesForCurrentThread() - before);
