@@ -1,6 +1,7 @@
 using System;
 using System.IO;
 using System.Linq;
+using System.Text.RegularExpressions;
 using System.Threading;
 using System.Threading.Tasks;
 using Xunit;
@@ -147,7 +148,8 @@ public sealed class TablesTests : IDisposable
     public async Task Every_example_of_the_help_works()
     {
         Run help = await Run.OfAsync("tables", "--help");
-        string[] examples = [.. help.Output.Split('\n').Select(static line => line.Trim()).Where(static line => line.StartsWith("probecal tables --", StringComparison.Ordinal))];
+        // A backslash at the end of a line takes the next one into the command, as at the prompt.
+        string[] examples = [.. Regex.Replace(help.Output, @"\\\r?\n\s*", "").Split('\n').Select(static line => line.Trim()).Where(static line => line.StartsWith("probecal tables --", StringComparison.Ordinal))];
         Assert.Equal(5, examples.Length);
         foreach (string example in examples)
         {

@@ -49,7 +49,7 @@ internal sealed class CalibrateHelp(string name, string description, CalibrateOp
         }
 
         output.WriteLine();
-        output.WriteLine("The same with another method in place of the last (to practise without a probe: --source simulated and no --line):");
+        output.WriteLine("The same with another method (to practise without a probe: --source simulated, no --line):");
         foreach (string ending in Endings(name))
         {
             output.WriteLine("  " + ending);
