@@ -60,7 +60,7 @@ public class DocumentationTests
     [Fact]
     public void EveryDouble_CarriesItsUnit()
     {
-        const string InName = "(?i)celsius|hectopascal|kilopascal|atmospheres?$|bar$|mercury|psi$|kelvin|metres?$|seconds|percent|milli(litres|grams)$|per(litre|kilogram|millilitre|mole)|siemens|kilograms?percubicmetre|relative|factor|ratio|salinity|^[xy]$|its90|ipts68";
+        const string InName = "(?i)celsius|hectopascal|kilopascal|atmospheres?$|bar$|mercury|psi$|kelvin|metres?$|seconds|^days|percent|milli(litres|grams)$|per(litre|kilogram|millilitre|mole)|siemens|kilograms?percubicmetre|relative|factor|ratio|salinity|^[xy]$|its90|ipts68";
         const string InText = "°C|\\bK\\b|hPa|mg/L|%|mol|kg|unit|1/K|[rR]esponse|[sS]ignal|[rR]elative|percent|fraction|times|same|positive";
         string[] nameless = [.. from type in typeof(Status).Assembly.GetExportedTypes()
                                 where type.IsAbstract && type.IsSealed
