@@ -44,10 +44,9 @@ public sealed class Uchida2008Probe : IProbeModel
         double lowestCelsius,
         double highestCelsius)
     {
-        form = new UchidaForm(c0, c1, c2, c3, c4, c5, c6, 0.0);
+        form = new UchidaForm(c0, c1, c2, c3, c4, c5, c6, 0.0, phasePerThousandDecibar);
         Equation = equation;
         Correction = correction;
-        PhasePerThousandDecibar = phasePerThousandDecibar;
         LowestCelsius = lowestCelsius;
         HighestCelsius = highestCelsius;
     }
@@ -59,7 +58,10 @@ public sealed class Uchida2008Probe : IProbeModel
     public OptodePressureCorrection Correction { get; }
 
     /// <summary>Degrees that the phase loses per 1000 dbar.</summary>
-    public double PhasePerThousandDecibar { get; }
+    public double PhasePerThousandDecibar
+    {
+        get { return form.PhasePerThousandDecibar; }
+    }
 
     /// <summary>Lower end of the range of temperatures that the coefficients hold for, °C.</summary>
     public double LowestCelsius { get; }
@@ -89,49 +91,31 @@ public sealed class Uchida2008Probe : IProbeModel
     public Status Response(
         double signal, double temperatureCelsius, double pressureHectopascal, double hydrostaticDecibar, RangeRule rule, out double response)
     {
-        response = double.NaN;
         Status status = Scale(temperatureCelsius, hydrostaticDecibar, rule, out double scale, out _);
-        if (double.IsNaN(scale)) { return status; }
-        Status ofForm = form.Value(AtSurface(signal, hydrostaticDecibar), temperatureCelsius, out double value, out _, out _);
-        return ofForm != Status.Ok ? ofForm : InputCheck.Deliver(value * scale, status, Status.SignalAboveRange, out response);
+        return form.Response(signal, temperatureCelsius, hydrostaticDecibar, status, scale, out response);
     }
 
     /// <inheritdoc/>
     public Status Signal(
         double response, double temperatureCelsius, double pressureHectopascal, double hydrostaticDecibar, RangeRule rule, out double signal)
     {
-        signal = double.NaN;
         Status status = Scale(temperatureCelsius, hydrostaticDecibar, rule, out double scale, out _);
-        if (double.IsNaN(scale)) { return status; }
-        // A product of positive factors; the test keeps an underflow out.
-        if (scale <= 0.0) { return Status.CoefficientBelowRange; }
-        Status ofForm = form.Phase(response / scale, temperatureCelsius, out double phase);
-        return ofForm != Status.Ok
-            ? ofForm
-            : InputCheck.Deliver(phase - (PhasePerThousandDecibar * hydrostaticDecibar / 1000.0), status, Status.CoefficientNotFinite, out signal);
+        return form.Signal(response, temperatureCelsius, hydrostaticDecibar, status, scale, out signal);
     }
 
     /// <inheritdoc/>
     public Status ResponsePerSignal(
         double signal, double temperatureCelsius, double pressureHectopascal, double hydrostaticDecibar, RangeRule rule, out double responsePerSignal)
     {
-        responsePerSignal = double.NaN;
         Status status = Scale(temperatureCelsius, hydrostaticDecibar, rule, out double scale, out _);
-        if (double.IsNaN(scale)) { return status; }
-        Status ofForm = form.Value(AtSurface(signal, hydrostaticDecibar), temperatureCelsius, out _, out double perPhase, out _);
-        return ofForm != Status.Ok ? ofForm : InputCheck.Deliver(perPhase * scale, status, Status.SignalAboveRange, out responsePerSignal);
+        return form.ResponsePerSignal(signal, temperatureCelsius, hydrostaticDecibar, status, scale, out responsePerSignal);
     }
 
     /// <inheritdoc/>
     public Status ResponsePerKelvin(double signal, double temperatureCelsius, double hydrostaticDecibar, out double perKelvin)
     {
-        perKelvin = double.NaN;
         Status status = Scale(temperatureCelsius, hydrostaticDecibar, RangeRule.Extrapolate, out double scale, out double scalePerKelvin);
-        if (double.IsNaN(scale)) { return status; }
-        Status ofForm = form.Value(AtSurface(signal, hydrostaticDecibar), temperatureCelsius, out double value, out _, out double valuePerKelvin);
-        return ofForm != Status.Ok
-            ? ofForm
-            : InputCheck.Deliver((valuePerKelvin * scale) + (value * scalePerKelvin), Status.Ok, Status.SignalAboveRange, out perKelvin);
+        return form.ResponsePerKelvin(signal, temperatureCelsius, hydrostaticDecibar, status, scale, scalePerKelvin, out perKelvin);
     }
 
     /// <inheritdoc/>
@@ -152,11 +136,6 @@ public sealed class Uchida2008Probe : IProbeModel
     {
         perCoefficient = 0.0;
         return Status.Ok;
-    }
-
-    private double AtSurface(double signal, double hydrostaticDecibar)
-    {
-        return hydrostaticDecibar == 0.0 ? signal : signal + (PhasePerThousandDecibar * hydrostaticDecibar / 1000.0);
     }
 
     /// <summary>hPa at the probe for one µmol/L of the form, with its slope.</summary>

@@ -2,7 +2,8 @@ namespace ProbeCal;
 
 /// <summary>
 /// The form that the calibrations of luminescence sensors share: x = (P0/Pc − 1)/Ksv, Ksv = c0 + c1·t + c2·t², P0 = c3 + c4·t,
-/// Pc = c5 + c6·φ + c7·φ². Immutable.
+/// Pc = c5 + c6·φ + c7·φ². The probes give the hPa that one unit of x stands for; what follows from signal, depth and scale is here for all of
+/// them. Immutable.
 /// </summary>
 internal sealed class UchidaForm
 {
@@ -15,7 +16,7 @@ internal sealed class UchidaForm
     private readonly double c6;
     private readonly double c7;
 
-    internal UchidaForm(double c0, double c1, double c2, double c3, double c4, double c5, double c6, double c7)
+    internal UchidaForm(double c0, double c1, double c2, double c3, double c4, double c5, double c6, double c7, double phasePerThousandDecibar)
     {
         this.c0 = c0;
         this.c1 = c1;
@@ -25,10 +26,62 @@ internal sealed class UchidaForm
         this.c5 = c5;
         this.c6 = c6;
         this.c7 = c7;
+        PhasePerThousandDecibar = phasePerThousandDecibar;
+    }
+
+    /// <summary>Degrees that the phase loses per 1000 dbar.</summary>
+    internal double PhasePerThousandDecibar { get; }
+
+    /// <summary>hPa of a signal: x times the scale, whose status comes with it.</summary>
+    internal Status Response(double signal, double celsius, double hydrostaticDecibar, Status ofScale, double scale, out double response)
+    {
+        response = double.NaN;
+        if (double.IsNaN(scale)) { return ofScale; }
+        Status status = Value(AtSurface(signal, hydrostaticDecibar), celsius, out double value, out _, out _);
+        return status != Status.Ok ? status : InputCheck.Deliver(value * scale, ofScale, Status.SignalAboveRange, out response);
+    }
+
+    /// <summary>The signal of so many hPa: the inverse of <see cref="Response"/>.</summary>
+    internal Status Signal(double response, double celsius, double hydrostaticDecibar, Status ofScale, double scale, out double signal)
+    {
+        signal = double.NaN;
+        if (double.IsNaN(scale)) { return ofScale; }
+        // A product of positive factors; the test keeps an underflow out.
+        if (scale <= 0.0) { return Status.CoefficientBelowRange; }
+        Status status = Phase(response / scale, celsius, out double phase);
+        return status != Status.Ok
+            ? status
+            : InputCheck.Deliver(phase - (PhasePerThousandDecibar * hydrostaticDecibar / 1000.0), ofScale, Status.CoefficientNotFinite, out signal);
+    }
+
+    /// <summary>d response/d signal.</summary>
+    internal Status ResponsePerSignal(double signal, double celsius, double hydrostaticDecibar, Status ofScale, double scale, out double responsePerSignal)
+    {
+        responsePerSignal = double.NaN;
+        if (double.IsNaN(scale)) { return ofScale; }
+        Status status = Value(AtSurface(signal, hydrostaticDecibar), celsius, out _, out double perPhase, out _);
+        return status != Status.Ok ? status : InputCheck.Deliver(perPhase * scale, ofScale, Status.SignalAboveRange, out responsePerSignal);
+    }
+
+    /// <summary>d response/d temperature, of x and of the scale together.</summary>
+    internal Status ResponsePerKelvin(
+        double signal, double celsius, double hydrostaticDecibar, Status ofScale, double scale, double scalePerKelvin, out double perKelvin)
+    {
+        perKelvin = double.NaN;
+        if (double.IsNaN(scale)) { return ofScale; }
+        Status status = Value(AtSurface(signal, hydrostaticDecibar), celsius, out double value, out _, out double valuePerKelvin);
+        return status != Status.Ok
+            ? status
+            : InputCheck.Deliver((valuePerKelvin * scale) + (value * scalePerKelvin), Status.Ok, Status.SignalAboveRange, out perKelvin);
+    }
+
+    private double AtSurface(double signal, double hydrostaticDecibar)
+    {
+        return hydrostaticDecibar == 0.0 ? signal : signal + (PhasePerThousandDecibar * hydrostaticDecibar / 1000.0);
     }
 
     /// <summary>x of a phase with its slopes.</summary>
-    internal Status Value(double phase, double celsius, out double value, out double perPhase, out double perKelvin)
+    private Status Value(double phase, double celsius, out double value, out double perPhase, out double perKelvin)
     {
         value = double.NaN;
         perPhase = double.NaN;
@@ -51,7 +104,7 @@ internal sealed class UchidaForm
     }
 
     /// <summary>The phase of x: of the two that a curved Pc allows, the one on the branch through the line.</summary>
-    internal Status Phase(double value, double celsius, out double phase)
+    private Status Phase(double value, double celsius, out double phase)
     {
         phase = double.NaN;
         if (InputCheck.NotFinite(value)) { return Status.PartialPressureNotFinite; }
