@@ -1,6 +1,7 @@
 using System.Collections.Generic;
 using System.CommandLine;
 using ProbeCal.Station.Calibrating;
+using ProbeCal.Station.CalibrationLog;
 
 namespace ProbeCal.Host.Commands;
 

@@ -87,7 +87,7 @@ internal static class CalibrationText
     {
         RecordedPoint[] points = record.Points;
         string unit = record.Probe.SignalUnit.Length == 0 ? "" : " " + record.Probe.SignalUnit;
-        bool total = record.Probe.Model == "total-gas";
+        bool total = ModelNames.IsTotalPressure(record.Probe.Model);
         bool inHectopascal = ErrorScale.IsHectopascal(record);
         List<string[]> rows =
         [
@@ -117,7 +117,7 @@ internal static class CalibrationText
         string unit = " " + (record.Probe.SignalUnit.Length == 0 ? "signal" : record.Probe.SignalUnit);
         RecordedResult result = record.Result;
         double percent = 100 * result.SlopeStandardUncertainty / Math.Abs(result.Slope);
-        output.WriteLine($"  slope {Number.Significant(result.Slope, Digits)}{(record.Probe.MeterSettings == null ? unit + (record.Probe.Model == "severinghaus" ? "/decade" : "/hPa") : " (1 is a meter that shows the truth)")}, u {Number.Significant(result.SlopeStandardUncertainty, Digits)} ({Number.Fixed(percent, 2)} %)");
+        output.WriteLine($"  slope {Number.Significant(result.Slope, Digits)}{(record.Probe.MeterSettings == null ? unit + (ModelNames.IsLogarithmic(record.Probe.Model) ? "/decade" : "/hPa") : " (1 is a meter that shows the truth)")}, u {Number.Significant(result.SlopeStandardUncertainty, Digits)} ({Number.Fixed(percent, 2)} %)");
         output.WriteLine($"  zero  {Number.Significant(result.Zero, Digits)}{(record.Probe.MeterSettings == null ? unit : " hPa")}, u {Number.Significant(result.ZeroStandardUncertainty, Digits)} ({record.Zero.Source})");
         output.WriteLine();
     }

@@ -60,7 +60,7 @@ internal static class CalibrationsList
                 CalibrationText.Time(record.CompletedUtc),
                 record.Probe.Id,
                 Method(record.Method),
-                Number.Significant(record.Result.Slope, CalibrationText.Digits) + Unit(record, record.Probe.Model == "severinghaus" ? "/decade" : "/hPa"),
+                Number.Significant(record.Result.Slope, CalibrationText.Digits) + Unit(record, ModelNames.IsLogarithmic(record.Probe.Model) ? "/decade" : "/hPa"),
                 Number.Significant(record.Result.Zero, CalibrationText.Digits) + (record.Probe.MeterSettings == null ? Unit(record, "") : " hPa"),
                 Error(record, "span"),
                 Error(record, "as-left"),

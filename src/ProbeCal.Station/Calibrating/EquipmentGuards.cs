@@ -34,8 +34,6 @@ internal static class EquipmentGuards
     private const double ShownPercent = 1;
     private const double ShownZeroMilligramsPerLitre = AcceptanceLimit.ZeroMilligramsPerLitre;
 
-    private const string Amperometric = "amperometric";
-
     /// <summary>All of them.</summary>
     public static IReadOnlyList<Guard> All { get; } =
     [
@@ -202,7 +200,7 @@ internal static class EquipmentGuards
 
     private static Finding? Polarisation(Situation now)
     {
-        bool polarised = now.Setup.Probe.Model == Amperometric || now.Setup.Probe.MeterSettings != null;
+        bool polarised = now.Setup.Probe.Model == ModelNames.Amperometric || now.Setup.Probe.MeterSettings != null;
         ServiceRecord? last = !polarised ? null : now.Service.LastOrDefault(done => done.At <= now.NowUtc
             && done.Event is ServiceRecord.PolarisationStarted or ServiceRecord.MembraneChanged or ServiceRecord.ElectrolyteChanged);
         double minutes = last == null ? double.NaN : (now.NowUtc - last.At).TotalMinutes;

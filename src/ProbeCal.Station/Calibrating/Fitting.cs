@@ -275,7 +275,7 @@ internal static class Fitting
             return point.ReferenceMilligramsPerLitre == 0 ? null : point.ReferenceMilligramsPerLitre / point.ReferencePartialPressureHectopascal;
         }
 
-        if (PlanCheck.IsTotalPressure(setup.Probe))
+        if (ModelNames.IsTotalPressure(setup.Probe.Model))
         {
             return null;
         }

@@ -23,13 +23,13 @@ internal static class ModelText
         string[] words = text.Split(' ', StringSplitOptions.RemoveEmptyEntries | StringSplitOptions.TrimEntries);
         if (words.Length == 0)
         {
-            throw Wrong.Input(what, text, "the model is missing; there are " + string.Join(", ", ModelCoefficients.ModelNames));
+            throw Wrong.Input(what, text, "the model is missing; there are " + string.Join(", ", ModelNames.All));
         }
 
         string model = words[0].ToLowerInvariant();
-        if (!ModelCoefficients.ModelNames.Contains(model))
+        if (!ModelNames.All.Contains(model))
         {
-            throw Wrong.Input(what, text, $"there is no model '{Wrong.Shown(words[0])}'{NearestName.DidYouMean(model, ModelCoefficients.ModelNames)}; there are {string.Join(", ", ModelCoefficients.ModelNames)}");
+            throw Wrong.Input(what, text, $"there is no model '{Wrong.Shown(words[0])}'{NearestName.DidYouMean(model, ModelNames.All)}; there are {string.Join(", ", ModelNames.All)}");
         }
 
         ModelCoefficient[] known = ModelCoefficients.Of(model);
@@ -148,7 +148,7 @@ internal static class ModelText
         {
             Status status = model.Gain(end, RangeRule.Refuse, out _);
             Status inverse = Status.Ok;
-            if (probe.Model is "uchida-2008" or "bittig-2018")
+            if (probe.Model is ModelNames.Uchida2008 or ModelNames.Bittig2018)
             {
                 // Saturated water at both ends must have a phase.
                 inverse = model.Signal(200, end, double.NaN, 0, RangeRule.NearEdge, out _);

@@ -45,7 +45,7 @@ internal static class PlanCheck
         return setup.Gas == Gas.Oxygen
             && setup.FitForm == "line"
             && setup.Method is MethodIds.AirSaturatedWater or MethodIds.WaterSaturatedAir
-            && !IsLogarithmic(setup.Probe) && !IsTotalPressure(setup.Probe)
+            && !ModelNames.IsLogarithmic(setup.Probe.Model) && !ModelNames.IsTotalPressure(setup.Probe.Model)
             && setup.Plan.All(static point => point.Role is CalibrationIds.SpanPoint or CalibrationIds.ZeroPoint);
     }
 
@@ -53,7 +53,7 @@ internal static class PlanCheck
     internal static bool NeedsAZero(CalibrationSetup setup)
     {
         // A film with its maker's coefficients gives a partial pressure already, whose zero is 0 as well.
-        bool hasZero = IsProportional(setup.Probe) || setup.Probe.Model is "uchida-2008" or "bittig-2018";
+        bool hasZero = IsProportional(setup.Probe) || setup.Probe.Model is ModelNames.Uchida2008 or ModelNames.Bittig2018;
         return hasZero && setup.FitForm == "line"
             && setup.Plan.Count(static point => !MethodIds.IsZero(point.Method)) == 1
             && !(setup.ZeroPlan == CalibrationIds.ZeroAdjust && HasZero(setup));
@@ -65,22 +65,10 @@ internal static class PlanCheck
         return probe.Model is ModelNames.Amperometric or ModelNames.MeterDisplay;
     }
 
-    /// <summary>True for a probe whose signal follows the logarithm of the partial pressure.</summary>
-    internal static bool IsLogarithmic(RecordedProbe probe)
-    {
-        return probe.Model == "severinghaus";
-    }
-
     /// <summary>True for dissolved oxygen, which the published limits speak of; false for another gas and for total gas pressure, which are judged in hPa.</summary>
     internal static bool IsOxygen(CalibrationSetup setup)
     {
         return !ErrorScale.IsHectopascal(GasNames.NameOf(setup.Gas), setup.Probe.Model);
-    }
-
-    /// <summary>True for a probe of the total gas pressure.</summary>
-    internal static bool IsTotalPressure(RecordedProbe probe)
-    {
-        return probe.Model == "total-gas";
     }
 
     /// <summary>True when nobody has said yet what the truth of a point rests on.</summary>
@@ -115,7 +103,7 @@ internal static class PlanCheck
         foreach (PlannedPoint point in setup.Plan)
         {
             bool zero = point.Role == CalibrationIds.ZeroPoint;
-            bool impossible = IsLogarithmic(setup.Probe) && MethodIds.IsZero(point.Method);
+            bool impossible = ModelNames.IsLogarithmic(setup.Probe.Model) && MethodIds.IsZero(point.Method);
             if (impossible)
             {
                 throw new InputException($"{point.Role} by {point.Method}: the signal of this probe follows the logarithm of the partial pressure, and there is none of zero; use two gas mixtures");
@@ -136,7 +124,7 @@ internal static class PlanCheck
             return;
         }
 
-        string what = IsTotalPressure(setup.Probe) ? "total gas pressure" : GasNames.NameOf(setup.Gas);
+        string what = ModelNames.IsTotalPressure(setup.Probe.Model) ? "total gas pressure" : GasNames.NameOf(setup.Gas);
         PressureLimits limits = setup.Limits.Pressure ?? new PressureLimits();
         if (limits.Hectopascal == null && limits.Percent == null && setup.Plan.Any(static point => point.Role != CalibrationIds.ZeroPoint))
         {

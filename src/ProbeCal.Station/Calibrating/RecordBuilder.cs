@@ -42,7 +42,7 @@ internal static class RecordBuilder
             Equipment = Equipment(setup, state.Points),
             Steps = [.. state.Steps],
             Fit = fit.Several,
-            Gas = PlanCheck.IsTotalPressure(setup.Probe) ? "total" : GasNames.NameOf(setup.Gas),
+            Gas = ModelNames.IsTotalPressure(setup.Probe.Model) ? "total" : GasNames.NameOf(setup.Gas),
             Probe = setup.Probe,
             Method = setup.Method,
             Readings = setup.Readings,

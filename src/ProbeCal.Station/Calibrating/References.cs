@@ -12,7 +12,6 @@ namespace ProbeCal.Station.Calibrating;
 internal static class References
 {
     private const string BarometerPrefix = "barometer:";
-    private const string TotalGas = "total-gas";
 
     /// <summary>Gases of which air holds everywhere the same.</summary>
     private static readonly Gas[] SettledInAir = [Gas.Oxygen, Gas.Nitrogen, Gas.Argon, Gas.Neon, Gas.Helium, Gas.Krypton, Gas.Xenon];
@@ -39,7 +38,7 @@ internal static class References
     internal static ReferenceSum Sum(PlannedPoint plan, CalibrationSetup setup, Conditions conditions, double temperatureUncertaintyKelvin)
     {
         Place at = new(plan, setup, conditions, temperatureUncertaintyKelvin);
-        bool total = setup.Probe.Model == TotalGas;
+        bool total = ModelNames.IsTotalPressure(setup.Probe.Model);
         switch (plan.Method)
         {
             case MethodIds.AirSaturatedWater:
@@ -223,7 +222,7 @@ internal static class References
 
         internal double Salinity => setup.Salinity.Value;
 
-        internal bool IsTotalPressure => setup.Probe.Model == TotalGas;
+        internal bool IsTotalPressure => ModelNames.IsTotalPressure(setup.Probe.Model);
 
         /// <summary>The state of saturation: as entered for the main method, else the usual one of this method.</summary>
         internal double StateRelative(out string source)

@@ -30,7 +30,7 @@ internal static class SeveralPoints
     private const double LnTen = 2.302585092994046;
 
     /// <summary>Models whose response may fall as the partial pressure rises.</summary>
-    private static readonly string[] EitherSign = ["severinghaus", "linear", "quadratic"];
+    private static readonly string[] EitherSign = [ModelNames.Severinghaus, ModelNames.Linear, ModelNames.Quadratic];
 
     /// <summary>Fits, or says in one line why not.</summary>
     /// <param name="probe">The probe.</param>

@@ -63,7 +63,7 @@ internal sealed class SignalScale
 
         double? target = _role == CalibrationIds.AsLeftPoint ? _span?.ReferencePartialPressureHectopascal : truth?.Hectopascal;
         double from = _last.ReferencePartialPressureHectopascal;
-        if (target is not double to || Math.Abs(to - from) <= (PlanCheck.IsTotalPressure(_setup.Probe) ? SameTotalPressure : SameReference) * Math.Max(Math.Abs(to), Math.Abs(from)))
+        if (target is not double to || Math.Abs(to - from) <= (ModelNames.IsTotalPressure(_setup.Probe.Model) ? SameTotalPressure : SameReference) * Math.Max(Math.Abs(to), Math.Abs(from)))
         {
             return null;
         }
@@ -87,11 +87,11 @@ internal sealed class SignalScale
         }
 
         double reference = truth is { MilligramsPerLitre: double milligrams } && milligrams != 0 && IsOxygen ? milligrams : Saturation(celsius, hectopascal);
-        if (_proportional || PlanCheck.IsTotalPressure(_setup.Probe))
+        if (_proportional || ModelNames.IsTotalPressure(_setup.Probe.Model))
         {
             double above = meanSignal - _zeroGuess;
             double size = above == 0 ? double.NaN : reference / above;
-            return PlanCheck.IsTotalPressure(_setup.Probe) ? MilligramsPerTotalHectopascal : size;
+            return ModelNames.IsTotalPressure(_setup.Probe.Model) ? MilligramsPerTotalHectopascal : size;
         }
 
         if (_before != null && truth != null && truth.Hectopascal != 0 && Slope(meanSignal, celsius, hectopascal) is double perSignal)
@@ -99,7 +99,7 @@ internal sealed class SignalScale
             return reference * perSignal / truth.Hectopascal;
         }
 
-        if (PlanCheck.IsLogarithmic(_setup.Probe))
+        if (ModelNames.IsLogarithmic(_setup.Probe.Model))
         {
             double millivolts = _setup.Probe.SignalUnit == "V" ? 1000 : 1;
             return reference * Math.Log(10) * millivolts / IdealMillivoltsPerDecade;

@@ -11,7 +11,7 @@ public static class ErrorScale
     /// <param name="model">Name of the response model.</param>
     public static bool IsHectopascal(string gas, string model)
     {
-        return gas != "O2" || model == "total-gas";
+        return gas != "O2" || ModelNames.IsTotalPressure(model);
     }
 
     /// <summary>True when the errors of a record are those of a pressure.</summary>

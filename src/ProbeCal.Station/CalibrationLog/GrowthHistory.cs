@@ -22,7 +22,7 @@ internal static class GrowthHistory
     /// <returns>Relative standard uncertainty per day, and what it rests on.</returns>
     internal static (double RelativePerDay, string Source)? Drift(CalibrationLogStore log, CalibrationRecord record)
     {
-        if (record.Probe.Model == "severinghaus")
+        if (ModelNames.IsLogarithmic(record.Probe.Model))
         {
             return null;
         }

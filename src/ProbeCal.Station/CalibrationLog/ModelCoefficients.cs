@@ -60,22 +60,22 @@ internal static class ModelCoefficients
 
     private static readonly Dictionary<string, ModelCoefficient[]> Models = new()
     {
-        ["amperometric"] =
+        [ModelNames.Amperometric] =
         [
             .. Membrane,
             new(Residual, "signal", 0, "signal without gas at the reference temperature"),
             new(ResidualPerKelvin, "1/K", 0, "relative change of the residual signal per kelvin"),
             new(Flow, "1", 1, "signal in still water over signal in stirred water"),
         ],
-        ["meter-display"] = [],
-        ["stern-volmer"] =
+        [ModelNames.MeterDisplay] = [],
+        [ModelNames.SternVolmer] =
         [
             new(SignalKind, "phase, lifetime or intensity", null, "what the signal is", ["phase", "lifetime", "intensity"]),
             new(LifetimePerKelvin, "1/K", null, "relative change of the unquenched lifetime per kelvin"),
             new(LifetimePerSquareKelvin, "1/K2", 0, "its curvature"),
             .. Membrane,
         ],
-        ["uchida-2008"] =
+        [ModelNames.Uchida2008] =
         [
             .. Phases(7),
             new(Solubility, "benson-krause-1984 or garcia-gordon-1992", 2, "equation by which the maker's µmol/L became a partial pressure", ["benson-krause-1984", "garcia-gordon-1992"]),
@@ -83,7 +83,7 @@ internal static class ModelCoefficients
             new(PhasePerDepth, "degree", 0, "degrees that the phase loses per 1000 dbar"),
             .. Range,
         ],
-        ["bittig-2018"] =
+        [ModelNames.Bittig2018] =
         [
             .. Phases(7),
             new("c7", "", 0, "eighth coefficient"),
@@ -91,14 +91,14 @@ internal static class ModelCoefficients
             new(PhasePerDepth, "degree", 0, "degrees that the phase loses per 1000 dbar"),
             .. Range,
         ],
-        ["severinghaus"] = [new(ZeroPerKelvin, "mV/K", 0, "change of E0 per kelvin"), new(Reference, "degC", 25, "temperature of E0 and slope"), .. Range],
-        ["total-gas"] = Range,
-        ["linear"] = [new(PerKelvin, "1/K", 0, "relative change of the slope per kelvin"), new(Reference, "degC", 25, "temperature of the slope"), .. Range],
-        ["quadratic"] = [new(PerKelvin, "1/K", 0, "relative change of the slope per kelvin"), new(Reference, "degC", 25, "temperature of the slope"), .. Range],
+        [ModelNames.Severinghaus] = [new(ZeroPerKelvin, "mV/K", 0, "change of E0 per kelvin"), new(Reference, "degC", 25, "temperature of E0 and slope"), .. Range],
+        [ModelNames.TotalGas] = Range,
+        [ModelNames.Linear] = [new(PerKelvin, "1/K", 0, "relative change of the slope per kelvin"), new(Reference, "degC", 25, "temperature of the slope"), .. Range],
+        [ModelNames.Quadratic] = [new(PerKelvin, "1/K", 0, "relative change of the slope per kelvin"), new(Reference, "degC", 25, "temperature of the slope"), .. Range],
     };
 
-    /// <summary>The names of all models.</summary>
-    internal static IEnumerable<string> ModelNames => Models.Keys;
+    /// <summary>The models whose coefficients are described here.</summary>
+    internal static IEnumerable<string> Described => Models.Keys;
 
     /// <summary>The coefficients of a model.</summary>
     /// <exception cref="InputException">There is no such model.</exception>
@@ -112,7 +112,7 @@ internal static class ModelCoefficients
     /// <summary>True when the model takes its temperature coefficient from a text of its own, as a membrane does.</summary>
     internal static bool HasTemperatureCoefficient(string model)
     {
-        return model is "amperometric" or "meter-display" or "stern-volmer";
+        return model is ModelNames.Amperometric or ModelNames.MeterDisplay or ModelNames.SternVolmer;
     }
 
     /// <summary>A coefficient of a probe, or what stands where it is not given.</summary>

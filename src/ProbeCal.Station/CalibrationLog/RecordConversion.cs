@@ -57,38 +57,38 @@ internal static class RecordConversion
         double high = coefficient.FittedHighCelsius;
         switch (probe.Model)
         {
-            case "amperometric":
+            case ModelNames.Amperometric:
                 return new AmperometricProbe(
                     form, coefficient.Value, Given(ModelCoefficients.Second), Given(ModelCoefficients.Third), coefficient.ReferenceCelsius, low, high,
                     Given(ModelCoefficients.Pressure), Given(ModelCoefficients.Residual), Given(ModelCoefficients.ResidualPerKelvin), Given(ModelCoefficients.Flow));
-            case "stern-volmer":
+            case ModelNames.SternVolmer:
                 return new SternVolmerProbe(
                     (LuminescenceSignal)Given(ModelCoefficients.SignalKind), form, coefficient.Value, Given(ModelCoefficients.Second), Given(ModelCoefficients.Third),
                     Given(ModelCoefficients.LifetimePerKelvin), Given(ModelCoefficients.LifetimePerSquareKelvin), Given(ModelCoefficients.Pressure),
                     coefficient.ReferenceCelsius, low, high);
-            case "uchida-2008":
+            case ModelNames.Uchida2008:
                 return new Uchida2008Probe(
                     Given("c0"), Given("c1"), Given("c2"), Given("c3"), Given("c4"), Given("c5"), Given("c6"),
                     Given(ModelCoefficients.Solubility) == 1 ? SolubilityEquation.BensonKrause1984 : SolubilityEquation.GarciaGordon1992,
                     (OptodePressureCorrection)Given(ModelCoefficients.DepthCorrection), Given(ModelCoefficients.PhasePerDepth),
                     Given(ModelCoefficients.Lowest), Given(ModelCoefficients.Highest));
-            case "bittig-2018":
+            case ModelNames.Bittig2018:
                 return new Bittig2018Probe(
                     Given("c0"), Given("c1"), Given("c2"), Given("c3"), Given("c4"), Given("c5"), Given("c6"), Given("c7"),
                     (OptodePressureCorrection)Given(ModelCoefficients.DepthCorrection), Given(ModelCoefficients.PhasePerDepth),
                     Given(ModelCoefficients.Lowest), Given(ModelCoefficients.Highest));
-            case "severinghaus":
+            case ModelNames.Severinghaus:
                 return new SeveringhausProbe(
                     Given(ModelCoefficients.ZeroPerKelvin), Given(ModelCoefficients.Reference), Given(ModelCoefficients.Lowest), Given(ModelCoefficients.Highest));
-            case "total-gas":
+            case ModelNames.TotalGas:
                 return new TotalGasProbe(Given(ModelCoefficients.Lowest), Given(ModelCoefficients.Highest));
-            case "linear":
-            case "quadratic":
+            case ModelNames.Linear:
+            case ModelNames.Quadratic:
                 return new GenericProbe(
                     Given(ModelCoefficients.PerKelvin), Given(ModelCoefficients.Reference), Given(ModelCoefficients.Lowest), Given(ModelCoefficients.Highest));
             default:
                 throw new InputException(
-                    $"calibration record: the model '{Wrong.Shown(probe.Model)}' is not known to this program{NearestName.DidYouMean(probe.Model, ModelCoefficients.ModelNames)}; use a newer probecal");
+                    $"calibration record: the model '{Wrong.Shown(probe.Model)}' is not known to this program{NearestName.DidYouMean(probe.Model, ModelNames.All)}; use a newer probecal");
         }
     }
 

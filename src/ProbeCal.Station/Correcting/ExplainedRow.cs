@@ -156,7 +156,7 @@ public sealed class ExplainedRow
     {
         CalibrationInUse calibration = corrector.Calibration;
         double pressure = corrector.Reading.Value(ReadingQuantity.PartialPressure);
-        bool isLine = calibration.Record.Fit is not { Curvature: not 0 } && calibration.Record.Probe.Model != "severinghaus";
+        bool isLine = calibration.Record.Fit is not { Curvature: not 0 } && !ModelNames.IsLogarithmic(calibration.Record.Probe.Model);
         _steps.Add(new CorrectionStep(
             "partial pressure",
             isLine ? "(response - zero)/(slope * flow factor * gain)" : "where the fitted response has this value",

@@ -230,7 +230,7 @@ internal sealed class ServicePlanner
 
     private static void RequireLine(CalibrationInUse calibration)
     {
-        if (calibration.Record.Fit is { Curvature: not 0 } || calibration.Record.Probe.Model == "severinghaus")
+        if (calibration.Record.Fit is { Curvature: not 0 } || ModelNames.IsLogarithmic(calibration.Record.Probe.Model))
         {
             throw new InputException($"calibration {calibration.Record.Id}: its response is no straight line, so drift in slope and zero has no meaning; use --drift constant or percent");
         }

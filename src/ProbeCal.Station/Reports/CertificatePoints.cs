@@ -54,7 +54,7 @@ internal static class CertificatePoints
         bool meter = record.Probe.MeterSettings != null;
         string signal = record.Probe.SignalUnit.Length == 0 ? "signal" : record.Probe.SignalUnit;
         double percent = 100 * result.SlopeStandardUncertainty / Math.Abs(result.Slope);
-        Add("slope", $"{ReportText.Few(result.Slope)}{(meter ? " (1 is a meter that shows the truth)" : $" {signal}/{(record.Probe.Model == "severinghaus" ? "decade" : "hPa")}")}, u {ReportText.Uncertainty(result.SlopeStandardUncertainty)}{(double.IsFinite(percent) ? $" ({Number.Fixed(percent, 2)} %)" : "")}");
+        Add("slope", $"{ReportText.Few(result.Slope)}{(meter ? " (1 is a meter that shows the truth)" : $" {signal}/{(ModelNames.IsLogarithmic(record.Probe.Model) ? "decade" : "hPa")}")}, u {ReportText.Uncertainty(result.SlopeStandardUncertainty)}{(double.IsFinite(percent) ? $" ({Number.Fixed(percent, 2)} %)" : "")}");
         Add("zero", $"{ReportText.Few(result.Zero)} {(meter ? "hPa" : signal)}, u {ReportText.Uncertainty(result.ZeroStandardUncertainty)} ({record.Zero.Source})");
         Add("as-found", Error(record, "span"));
         Add("as-left", Error(record, "as-left"));

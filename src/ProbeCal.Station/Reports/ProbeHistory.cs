@@ -40,7 +40,7 @@ public sealed partial class ProbeHistory
         Probe = newest.Probe.Id;
         SignalUnit = newest.Probe.SignalUnit;
         IsMeter = newest.Probe.MeterSettings != null;
-        IsLogarithmic = newest.Probe.Model == "severinghaus";
+        IsLogarithmic = ModelNames.IsLogarithmic(newest.Probe.Model);
         ErrorUnit = ErrorScale.Unit(newest);
     }
 

@@ -79,7 +79,7 @@ public class ModelTextTests
     [Fact]
     public void Every_model_that_is_offered_has_its_coefficients()
     {
-        Assert.Equal(ModelNames.All.Order(StringComparer.Ordinal), ModelCoefficients.ModelNames.Order(StringComparer.Ordinal));
+        Assert.Equal(ModelNames.All.Order(StringComparer.Ordinal), ModelCoefficients.Described.Order(StringComparer.Ordinal));
         Assert.Throws<InputException>(() => RecordConversion.Model(Bench.Setup.Probe with { Model = "unheard-of" }));
     }
 }
