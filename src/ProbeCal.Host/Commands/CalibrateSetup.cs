@@ -16,14 +16,10 @@ namespace ProbeCal.Host.Commands;
 /// <summary>From options, and answers where options are missing, to a set-up.</summary>
 internal sealed class CalibrateSetup
 {
-    private const double LongestWaitSeconds = 7 * 86_400;
-
     private const string UnnamedThermometer = "not named";
 
-    private static readonly string[] ZeroMethods = [MethodIds.ZeroSolution, MethodIds.ZeroGas];
     private static readonly string[] Forms = ["line", "quadratic"];
     private static readonly string[] CheckKinds = [CalibrationIds.Initial, CalibrationIds.Continuing, CalibrationIds.EndOfDay];
-    private static readonly string[] ZeroPlans = [CalibrationIds.ZeroKeep, CalibrationIds.ZeroAssume, CalibrationIds.ZeroCheck, CalibrationIds.ZeroAdjust];
     private static readonly string[] Stirrings = ["stirred", "still", "flow-insensitive"];
     private static readonly string[] Scales = ["mg/L", "%local", "%1atm"];
 
@@ -81,15 +77,17 @@ internal sealed class CalibrateSetup
         Stirring stirring = _reader.Given(_options.StirringOption) == null && inGas
             ? Stirring.Stirred
             : StirringOf(await _reader.NeedChoiceAsync(_options.StirringOption, "The water at the probe:", Stirrings, cancellationToken).ConfigureAwait(false));
-        IReadOnlyList<PlannedPoint> plan = await PlanAsync(method, gas, cancellationToken).ConfigureAwait(false);
+        CalibratePlan plan = new(_options, _purpose, _register, _reader);
+        IReadOnlyList<PlannedPoint> points = await plan.PointsAsync(method, gas, cancellationToken).ConfigureAwait(false);
         RecordedProbe recorded = await ProbeAsync(probe, line, manual, temperature != null, cancellationToken).ConfigureAwait(false);
-        CalibrationLimits limits = Limits(ErrorScale.IsHectopascal(GasNames.NameOf(gas), recorded.Model));
+        CalibrateLimits judged = new(_options, _reader);
+        CalibrationLimits limits = judged.Limits(ErrorScale.IsHectopascal(GasNames.NameOf(gas), recorded.Model));
         return new CalibrationSetup
         {
             Purpose = _purpose,
             CheckKind = _reader.Given(_options.As) is string kind ? OptionReader.Choice(_options.As, CheckKinds)(kind) : null,
             Gas = gas,
-            Plan = plan,
+            Plan = points,
             FitForm = _reader.Given(_options.Form) is string form ? OptionReader.Choice(_options.Form, Forms)(form) : "line",
             Equipment = [.. _reader.Many(_options.Equipment).Select(static id => PlainText.Id("--equipment", id))],
             Probe = recorded,
@@ -107,10 +105,10 @@ internal sealed class CalibrateSetup
             AirToWaterRatio = air ? Ratio() : null,
             ReferenceStateRelative = (_reader.NotNegative(_options.ReferenceUncertainty, QuantityKind.Percent) / 100)
                 ?? UncertaintyDefaults.ReferenceStateRelative(air ? CalibrationMethod.WaterSaturatedAir : CalibrationMethod.AirSaturatedWater),
-            ZeroPlan = ZeroPlan(manual, method),
+            ZeroPlan = plan.Zero(manual, method),
             Limits = limits,
             Surroundings = Surroundings(),
-            Waiting = Waiting(limits),
+            Waiting = judged.Waiting(limits),
             Reasons = Reasons(),
             By = _reader.Given(_options.By),
             Site = _reader.Given(_options.Site),
@@ -288,71 +286,6 @@ internal sealed class CalibrateSetup
         return around == new Surroundings() ? null : around;
     }
 
-    /// <param name="inHectopascal">True where the published limits, which are those of dissolved oxygen, do not apply.</param>
-    private CalibrationLimits Limits(bool inHectopascal)
-    {
-        double? absolute = ErrorLimit(_options.Limit, inHectopascal);
-        double? percent = _reader.NotNegative(_options.LimitPercent, QuantityKind.Percent);
-        double? zero = ErrorLimit(_options.ZeroLimit, inHectopascal);
-        (double Low, double High)? window = _reader.Range(_options.SlopeWindow);
-        (double Low, double High)? zeroWindow = _reader.Range(_options.ZeroWindow);
-        bool entered = absolute != null || percent != null;
-        CalibrationLimits limits = new()
-        {
-            GuardBand = _reader.IsSet(_options.GuardBand),
-            SlopeLow = window?.Low,
-            SlopeHigh = window?.High,
-            ZeroSignalLow = zeroWindow?.Low,
-            ZeroSignalHigh = zeroWindow?.High,
-        };
-        return inHectopascal ? limits with { Pressure = new PressureLimits { Hectopascal = absolute, Percent = percent, ZeroHectopascal = zero } } : limits with
-        {
-            // Whoever enters one of the two means it: the other published one would soften it.
-            SaturationMilligramsPerLitre = absolute ?? (entered ? 0 : AcceptanceLimit.SaturationMilligramsPerLitre),
-            SaturationPercent = percent ?? (entered ? 0 : AcceptanceLimit.SaturationPercent),
-            SaturationSource = entered ? CalibrationLimits.Entered : CalibrationLimits.FieldManual,
-            ZeroMilligramsPerLitre = zero ?? AcceptanceLimit.ZeroMilligramsPerLitre,
-            ZeroSource = zero == null ? CalibrationLimits.FieldManual : CalibrationLimits.Entered,
-        };
-    }
-
-    private double? ErrorLimit(Option<string> option, bool inHectopascal)
-    {
-        QuantityKind kind = inHectopascal ? QuantityKind.Pressure : QuantityKind.MassConcentration;
-        return _reader.Given(option) is string given && !Quantity.TryParse(kind, given, out _, out string? problem)
-            ? throw Wrong.Input(option.Name, given, inHectopascal
-                ? "errors of this gas are judged as a pressure; write for example 5hPa"
-                : $"{problem}; errors of dissolved oxygen are judged in mg/L")
-            : _reader.NotNegative(option, kind);
-    }
-
-    private WaitingRules Waiting(CalibrationLimits limits)
-    {
-        WaitingRules usual = new();
-        WaitingRules waiting = new()
-        {
-            WindowSeconds = _reader.Given(_options.Window) is string window ? Quantity.Duration("--window", window).TotalSeconds : usual.WindowSeconds,
-            LeastCount = _reader.Given(_options.Samples) is string samples ? (int)Number.ParseWhole("--samples", samples, 3, 1_000_000) : usual.LeastCount,
-            MilligramsPerLitre = _reader.AboveZero(_options.StableWithin, QuantityKind.MassConcentration) ?? QuarterOf(limits) ?? usual.MilligramsPerLitre,
-            Kelvin = _reader.AboveZero(_options.StableTemperature, QuantityKind.TemperatureDifference) ?? usual.Kelvin,
-            GiveUpAfterSeconds = _reader.Given(_options.GiveUpAfter) is string longest ? Quantity.Duration("--give-up-after", longest).TotalSeconds : usual.GiveUpAfterSeconds,
-        };
-        if (LongestWaitSeconds < waiting.GiveUpAfterSeconds)
-        {
-            throw Wrong.Input("--give-up-after", _reader.Given(_options.GiveUpAfter)!, "a point is waited for 7d at most");
-        }
-
-        return waiting.WindowSeconds < waiting.GiveUpAfterSeconds
-            ? waiting
-            : throw new InputException($"--window {Number.Print(waiting.WindowSeconds)} s does not fit into --give-up-after {Number.Print(waiting.GiveUpAfterSeconds)} s; make the wait longer than the window");
-    }
-
-    /// <summary>What may move follows the limit that the point is judged by; null where none in mg/L decides.</summary>
-    private static double? QuarterOf(CalibrationLimits limits)
-    {
-        return limits.Pressure == null && 0 < limits.SaturationMilligramsPerLitre ? limits.SaturationMilligramsPerLitre / 4 : null;
-    }
-
     private Dictionary<string, string> Reasons()
     {
         Dictionary<string, string> reasons = [];
@@ -379,84 +312,6 @@ internal sealed class CalibrateSetup
         }
 
         return reasons;
-    }
-
-    private string ZeroPlan(bool manual, string method)
-    {
-        if (MethodIds.IsZero(method))
-        {
-            return CalibrationIds.ZeroCheck;
-        }
-
-        string plan = _reader.Given(_options.Zero) is string given ? OptionReader.Choice(_options.Zero, ZeroPlans)(given) : CalibrationIds.ZeroKeep;
-        if (plan == CalibrationIds.ZeroAdjust && _purpose == CalibrationRecord.CheckPurpose)
-        {
-            throw new InputException("--zero adjust: a check changes nothing; use check to read and judge the zero");
-        }
-
-        return manual && plan == CalibrationIds.ZeroAdjust
-            ? throw new InputException("--zero adjust: the zero of a meter is adjusted in the meter; use check to read and judge it")
-            : plan;
-    }
-
-    /// <summary>The points in the order of the options: the main one, further levels, a zero. One point by one of the two usual methods is the usual plan.</summary>
-    private async Task<IReadOnlyList<PlannedPoint>> PlanAsync(string method, Gas gas, CancellationToken cancellationToken)
-    {
-        bool zeroAlone = MethodIds.IsZero(method);
-        PlannedPoint main = new() { Role = zeroAlone ? CalibrationIds.ZeroPoint : CalibrationIds.SpanPoint, Method = method };
-        (Option<string>? option, string question) = method switch
-        {
-            MethodIds.GasMixture => (_options.Mixture, "The mixture (for example CYL-21 20.95% u 0.02% dry)?"),
-            MethodIds.TransferStandard => (_options.Transfer, ""),
-            MethodIds.Titration => (_options.Titration, ""),
-            MethodIds.ZeroGas => (_options.ZeroMixture, ""),
-            MethodIds.WaterSaturatedAir => (_options.Mixture, ""),
-            _ => ((Option<string>?)null, ""),
-        };
-        RefuseOthers(method, option);
-        if (question.Length != 0 && _reader.CanAsk)
-        {
-            main = await _reader.NeedAsync(option!, question, text => PlanText.Read(option!.Name, main, text, gas, _register), cancellationToken).ConfigureAwait(false);
-        }
-        else if (option != null)
-        {
-            main = PlanText.Read(option.Name, main, _reader.Given(option), gas, _register);
-        }
-
-        List<PlannedPoint> plan = [main];
-        string[] levels = _reader.Many(_options.Level);
-        for (int i = 0; i < levels.Length; i++)
-        {
-            plan.Add(PlanText.Level("--level", CalibrationIds.LevelPrefix + Number.Print(i + 1), levels[i], gas, _register));
-        }
-
-        string? zeroMethod = _reader.Given(_options.ZeroMethod) is string given ? OptionReader.Choice(_options.ZeroMethod, ZeroMethods)(given) : null;
-        bool readsZero = !zeroAlone && _reader.Given(_options.Zero) is CalibrationIds.ZeroCheck or CalibrationIds.ZeroAdjust;
-        if (readsZero && (zeroMethod != null || plan.Count != 1 || !IsUsual(method)))
-        {
-            PlannedPoint zero = new() { Role = CalibrationIds.ZeroPoint, Method = zeroMethod ?? MethodIds.ZeroSolution };
-            plan.Add(PlanText.Read("--zero-mixture", zero, zero.Method == MethodIds.ZeroGas ? _reader.Given(_options.ZeroMixture) : null, gas, _register));
-        }
-
-        // The usual plan is left to the set-up, so that a state saved by an older program is taken up again.
-        return plan.Count == 1 && IsUsual(method) && main.Mixture == null ? [] : plan;
-    }
-
-    private static bool IsUsual(string method)
-    {
-        return method is MethodIds.AirSaturatedWater or MethodIds.WaterSaturatedAir;
-    }
-
-    /// <summary>An option of another method would be passed over in silence.</summary>
-    private void RefuseOthers(string method, Option<string>? own)
-    {
-        foreach (Option<string> other in new[] { _options.Mixture, _options.Transfer, _options.Titration })
-        {
-            if (other != own && _reader.Given(other) is string given)
-            {
-                throw Wrong.Input(other.Name, given, $"the method {method} has no use for it; leave it out, or take the method it belongs to");
-            }
-        }
     }
 
     private static Stirring StirringOf(string text)
