@@ -1,7 +1,5 @@
 using System;
-using System.Diagnostics;
 using System.Globalization;
-using System.IO;
 using System.Linq;
 using System.Text;
 using Xunit;
@@ -14,9 +12,7 @@ namespace ProbeCal.Peers.Tests;
 /// </summary>
 internal static class GswPeer
 {
-    // The distribution's Python first: a second interpreter earlier in the path does not see distribution packages.
-    private static readonly string[] Pythons = ["/usr/bin/python3", "python3"];
-    private static readonly Lazy<string?> Found = new(Find);
+    private static readonly Lazy<string?> Found = new(static () => PythonPeer.With("gsw"));
 
     /// <summary>Skips the test, saying why, when no Python here has gsw.</summary>
     internal static void Require()
@@ -27,7 +23,7 @@ internal static class GswPeer
     /// <summary>Version of the toolbox.</summary>
     internal static string Version()
     {
-        return Run(Found.Value!, "import gsw; print(gsw.__version__)", "").Trim();
+        return PythonPeer.Run(Found.Value!, "import gsw; print(gsw.__version__)", "").Trim();
     }
 
     /// <summary>Evaluates an expression over columns of numbers, called a, b, c (numpy arrays), with gsw imported.</summary>
@@ -42,59 +38,10 @@ internal static class GswPeer
         string program = "import sys, numpy, gsw\n"
             + string.Join(", ", "abc"[..columns.Length].AsEnumerable()) + " = numpy.loadtxt(sys.stdin, ndmin=2).T\n"
             + "for v in " + expression + ": print(repr(float(v)))\n";
-        double[] values = Run(Found.Value!, program, input.ToString())
+        double[] values = PythonPeer.Run(Found.Value!, program, input.ToString())
             .Split('\n', StringSplitOptions.RemoveEmptyEntries)
             .Select(v => double.Parse(v, NumberStyles.Float, CultureInfo.InvariantCulture)).ToArray();
         Assert.Equal(columns[0].Length, values.Length);
         return values;
-    }
-
-    private static string? Find()
-    {
-        return Array.Find(Pythons, HasGsw);
-    }
-
-    private static bool HasGsw(string python)
-    {
-        try
-        {
-            using Process process = Start(python, "import gsw");
-            process.StandardInput.Close();
-            process.StandardOutput.ReadToEnd();
-            process.WaitForExit();
-            return process.ExitCode == 0;
-        }
-        catch (System.ComponentModel.Win32Exception)
-        {
-            // No such interpreter: the same as one without the toolbox.
-            return false;
-        }
-    }
-
-    private static string Run(string python, string program, string input)
-    {
-        using Process process = Start(python, program);
-        // Read while writing: a long answer would otherwise fill its pipe and stop both sides.
-        System.Threading.Tasks.Task<string> output = process.StandardOutput.ReadToEndAsync();
-        System.Threading.Tasks.Task<string> errors = process.StandardError.ReadToEndAsync();
-        using (StreamWriter writer = process.StandardInput) { writer.Write(input); }
-        string answer = output.GetAwaiter().GetResult();
-        process.WaitForExit();
-        Assert.True(process.ExitCode == 0, errors.GetAwaiter().GetResult());
-        return answer;
-    }
-
-    private static Process Start(string python, string program)
-    {
-        ProcessStartInfo start = new(python)
-        {
-            RedirectStandardInput = true,
-            RedirectStandardOutput = true,
-            RedirectStandardError = true,
-            UseShellExecute = false,
-        };
-        start.ArgumentList.Add("-c");
-        start.ArgumentList.Add(program);
-        return Process.Start(start) ?? throw new InvalidOperationException("cannot start " + python);
     }
 }

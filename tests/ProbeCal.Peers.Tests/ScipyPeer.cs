@@ -1,8 +1,6 @@
 using System;
 using System.Collections.Generic;
-using System.Diagnostics;
 using System.Globalization;
-using System.IO;
 using System.Linq;
 using System.Text;
 using Xunit;
@@ -14,9 +12,7 @@ namespace ProbeCal.Peers.Tests;
 /// </summary>
 internal static class ScipyPeer
 {
-    // The distribution's Python first: a second interpreter earlier in the path does not see distribution packages.
-    private static readonly string[] Pythons = ["/usr/bin/python3", "python3"];
-    private static readonly Lazy<string?> Found = new(() => Array.Find(Pythons, Has));
+    private static readonly Lazy<string?> Found = new(static () => PythonPeer.With("scipy.odr"));
 
     /// <summary>The Python that has scipy; of use after <see cref="Require"/>.</summary>
     internal static string Python => Found.Value!;
@@ -38,47 +34,9 @@ internal static class ScipyPeer
 
         string program = "import sys, warnings, numpy as np\nfrom scipy import odr, stats\nwarnings.simplefilter('ignore')\nfor line in sys.stdin:\n    v = np.array([float(x) for x in line.split()])\n"
             + string.Concat(body.Split('\n').Select(static line => "    " + line + "\n")) + "    print(' '.join(repr(float(x)) for x in r))\n";
-        double[][] answers = [.. Run(Found.Value!, program, input.ToString()).Split('\n', StringSplitOptions.RemoveEmptyEntries)
+        double[][] answers = [.. PythonPeer.Run(Found.Value!, program, input.ToString()).Split('\n', StringSplitOptions.RemoveEmptyEntries)
             .Select(static line => line.Split(' ').Select(static word => double.Parse(word, NumberStyles.Float, CultureInfo.InvariantCulture)).ToArray())];
         Assert.Equal(cases.Count, answers.Length);
         return answers;
-    }
-
-    private static bool Has(string python)
-    {
-        try
-        {
-            using Process process = Start(python, "import scipy.odr");
-            process.StandardInput.Close();
-            process.StandardOutput.ReadToEnd();
-            process.WaitForExit();
-            return process.ExitCode == 0;
-        }
-        catch (System.ComponentModel.Win32Exception)
-        {
-            // No such interpreter: the same as one without scipy.
-            return false;
-        }
-    }
-
-    private static string Run(string python, string program, string input)
-    {
-        using Process process = Start(python, program);
-        // Read while writing: a long answer would otherwise fill its pipe and stop both sides.
-        System.Threading.Tasks.Task<string> output = process.StandardOutput.ReadToEndAsync();
-        System.Threading.Tasks.Task<string> errors = process.StandardError.ReadToEndAsync();
-        using (StreamWriter writer = process.StandardInput) { writer.Write(input); }
-        string answer = output.GetAwaiter().GetResult();
-        process.WaitForExit();
-        Assert.True(process.ExitCode == 0, errors.GetAwaiter().GetResult());
-        return answer;
-    }
-
-    private static Process Start(string python, string program)
-    {
-        ProcessStartInfo start = new(python) { RedirectStandardInput = true, RedirectStandardOutput = true, RedirectStandardError = true, UseShellExecute = false };
-        start.ArgumentList.Add("-c");
-        start.ArgumentList.Add(program);
-        return Process.Start(start) ?? throw new InvalidOperationException("cannot start " + python);
     }
 }
