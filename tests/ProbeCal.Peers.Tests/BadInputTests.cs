@@ -40,11 +40,23 @@ public class BadInputTests(CalibratedFolder calibrated) : IClassFixture<Calibrat
     [InlineData(2, "--site x\\x0Ay: this is one line", "--site", "x\ny")]
     [InlineData(2, "--membrane-installed", "--membrane-installed", "2026-05-01")]
     [InlineData(2, "--data ''", "--data", "")]
-    [InlineData(1, "there is no such port", "--source", "serial:/dev/no-such-port")]
-    [InlineData(1, "Connection refused", "--source", "tcp:127.0.0.1:1")]
     public async Task A_wrong_value_of_calibrate_leaves_the_log_as_it_was(int exitCode, string said, params string[] arguments)
     {
         await UnchangedAsync(CalibratedFolder.Calibrate(calibrated.Data, arguments), exitCode, said);
+    }
+
+    /// <summary>The steps before the first point are done when the source is opened; they are kept to go on with, and nothing else is left.</summary>
+    [Theory]
+    [InlineData("there is no such port", "--source", "serial:/dev/no-such-port")]
+    [InlineData("Connection refused", "--source", "tcp:127.0.0.1:1")]
+    public async Task A_source_that_does_not_open_leaves_the_log_as_it_was_and_the_steps_that_were_done(string said, params string[] arguments)
+    {
+        string before = CalibratedFolder.Fingerprint(calibrated.Data);
+        string line = await CalibratedFolder.RefusedAsync(CalibratedFolder.Calibrate(calibrated.Data, arguments), 1);
+        Assert.Contains(said, line, StringComparison.Ordinal);
+        string state = Assert.Single(Directory.GetFiles(calibrated.Data, "*", SearchOption.AllDirectories), static file => Path.GetFileName(Path.GetDirectoryName(file)) == "sessions");
+        File.Delete(state);
+        Assert.Equal(before, CalibratedFolder.Fingerprint(calibrated.Data));
     }
 
     [Theory]

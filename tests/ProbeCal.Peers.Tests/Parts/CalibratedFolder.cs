@@ -41,14 +41,8 @@ public sealed class CalibratedFolder : IAsyncLifetime
     /// <summary>Every file in the folder with the hash of its bytes, but for the empty one that only serves as a lock.</summary>
     internal static string Fingerprint(string folder)
     {
-        IEnumerable<string> files = Directory.GetFiles(folder, "*", SearchOption.AllDirectories).Where(static file => Path.GetFileName(file) != "lock" && !IsIdle(file) && !IsUnfinished(file)).Order(StringComparer.Ordinal);
+        IEnumerable<string> files = Directory.GetFiles(folder, "*", SearchOption.AllDirectories).Where(static file => Path.GetFileName(file) != "lock" && !IsIdle(file)).Order(StringComparer.Ordinal);
         return string.Join('\n', files.Select(static file => file + " " + Convert.ToHexString(SHA256.HashData(File.ReadAllBytes(file)))));
-    }
-
-    /// <summary>The saved state of a calibration whose steps were begun: it is there to be taken up again, and no part of the log.</summary>
-    private static bool IsUnfinished(string file)
-    {
-        return Path.GetFileName(Path.GetDirectoryName(file)) == "sessions";
     }
 
     /// <summary>

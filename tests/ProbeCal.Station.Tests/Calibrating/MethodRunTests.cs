@@ -35,7 +35,9 @@ public class MethodRunTests
 
         Assert.True(record.Result.Pass, string.Join("; ", record.Result.Reasons));
         AssertTruth(record);
-        Assert.All(record.Points, point => Assert.NotNull(point.TemperatureStatistics));
+        // The raw statistics of both, so that the fit can be made again.
+        Assert.All(record.Points, point => Assert.Equal(point.Signal.Count, point.TemperatureStatistics?.Count));
+        Assert.All(record.Points, point => Assert.InRange(point.Signal.Count, setup.Waiting.LeastCount, int.MaxValue));
         Assert.Equal(Procedures.For(setup).Select(step => step.Id), record.Steps.Select(step => step.Step));
         Assert.Equal("written", record.Steps.First(step => step.Note != null && step.Note != Droplets.NoneSeen).Note);
         bool onePoint = levels == 0 && method is MethodIds.AirSaturatedWater or MethodIds.WaterSaturatedAir;
