@@ -76,6 +76,19 @@ public class CalibrationFitTests
         Assert.Equal(reference * 4.0 / Bench.Air(18.0, 1013.25), milligrams, 10);
     }
 
+    /// <summary>A lifetime falls where oxygen rises: 1/τ = zero + slope·p, so that one unit of τ is 1/(τ²·slope) hPa, without a sign.</summary>
+    [Fact]
+    public void SignalSize_OfAFallingSignal_HasNoSign()
+    {
+        const double Lifetime = 40.0;
+        const double Slope = 2e-4;
+        var probe = new SternVolmerProbe(LuminescenceSignal.Lifetime, TemperatureCoefficientForm.Exponential, 0.01, 0, 0, -0.003, 0, 0, 20, 0, 40);
+        Assert.Equal(Status.Ok, OxygenEquilibrium.MilligramsPerLitre(Equation, 20.0, 0.0, 1000.0, RangeRule.Refuse, out double milligrams));
+        Assert.Equal(Status.Ok, OxygenEquilibrium.PartialPressure(20.0, 1000.0, RangeRule.Refuse, out double hectopascal));
+        Assert.Equal(Status.Ok, CalibrationFit.SignalSize(probe, Slope, Lifetime, Equation, 20.0, 1000.0, 0.0, out double size));
+        Assert.Equal(1.0 / (Lifetime * Lifetime * Slope) * milligrams / hectopascal, size, 1e-12);
+    }
+
     [Fact]
     public void SignalSize_IsTheReferenceOverTheSpan()
     {
